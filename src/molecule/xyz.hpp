@@ -1,0 +1,31 @@
+// Reading and writing coordinates in the XYZ format.
+#pragma once
+
+#include <iosfwd>
+#include <optional>
+#include <string>
+#include <string_view>
+
+#include "molecule/molecule.hpp"
+
+namespace irrepwise {
+
+/// What an XYZ file says. The comment becomes the title unless it consists of key=value pairs
+/// (extended XYZ), of which `charge=` is honoured and others are read over.
+struct XyzFile {
+  Molecule molecule;
+  std::optional<int> charge;  // as stated by charge=, already in the molecule (0 where absent)
+};
+
+/// @param path    first frame of the file is read; text after it is an error
+/// @throws Error  with file, line and column: unreadable, empty, count and lines disagree, not a
+///                number, unknown element …
+[[nodiscard]] XyzFile read_xyz(const std::string& path);
+
+/// @param name  how messages call the text
+[[nodiscard]] XyzFile parse_xyz(std::string_view text, const std::string& name);
+
+/// @returns  the text of an extended XYZ file, positions to 10 decimals
+[[nodiscard]] std::string xyz_text(const Molecule& molecule, const std::string& comment);
+
+}  // namespace irrepwise
