@@ -1,0 +1,33 @@
+// A job: everything the user says about one molecule, from a YAML file, an XYZ file and options.
+#pragma once
+
+#include <optional>
+#include <string>
+#include <string_view>
+#include <vector>
+
+#include "basis/basis.hpp"
+#include "basis/parameter_set.hpp"
+#include "hueckel/options.hpp"
+#include "molecule/molecule.hpp"
+#include "symmetry/options.hpp"
+
+namespace irrepwise {
+
+struct Job {
+  std::string title;
+  Molecule molecule;  // with the charge
+  ParameterSet parameters = published_parameters();
+  std::vector<ParameterOverride> overrides;
+  SymmetryOptions symmetry;
+  HueckelOptions hueckel;
+  std::vector<std::string> source_files;  // the job file and every file it read, for overwriting checks
+};
+
+/// Reads a job: a name that ends in .yaml or .yml is a job file, any other an XYZ file.
+/// Files named in a job file are looked for beside it.
+///
+/// @throws Error  with file, line and column, what is wrong and what to do
+[[nodiscard]] Job read_job(const std::string& path);
+
+}  // namespace irrepwise

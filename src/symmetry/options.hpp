@@ -1,0 +1,24 @@
+// What a user may say about symmetry: tolerance, axes, the group to work in.
+#pragma once
+
+#include <optional>
+#include <string>
+#include <variant>
+#include <vector>
+
+#include <Eigen/Core>
+
+namespace irrepwise {
+
+/// A direction in the input frame: a vector, or given by atoms (indices from 0): from the origin to
+/// one atom, from the first to the second of two, or the normal of the plane of three.
+using AxisDirection = std::variant<Eigen::Vector3d, std::vector<int>>;
+
+struct SymmetryOptions {
+  double tolerance_angstrom = 0.01;  // points closer than this count as images of each other
+  std::optional<AxisDirection> z;    // must lie along a possible principal axis of the group
+  std::optional<AxisDirection> x;
+  std::optional<std::string> subgroup;  // Schoenflies symbol of a subgroup to work in
+};
+
+}  // namespace irrepwise
