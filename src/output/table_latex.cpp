@@ -1,0 +1,159 @@
+#include "output/table_latex.hpp"
+
+#include <algorithm>
+#include <array>
+#include <utility>
+
+namespace irrepwise {
+namespace {
+
+using Replacement = std::pair<std::string_view, std::string_view>;
+
+constexpr std::array<Replacement, 22> replacements = {{
+    {"\\", "\\textbackslash{}"},
+    {"{", "\\{"},
+    {"}", "\\}"},
+    {"$", "\\$"},
+    {"&", "\\&"},
+    {"%", "\\%"},
+    {"#", "\\#"},
+    {"_", "\\_"},
+    {"^", "\\textasciicircum{}"},
+    {"~", "\\textasciitilde{}"},
+    {"Å", "\\AA{}"},
+    {"×", "$\\times$"},
+    {"−", "$-$"},
+    {"–", "--"},
+    {"ζ", "$\\zeta$"},
+    {"σ", "$\\sigma$"},
+    {"π", "$\\pi$"},
+    {"δ", "$\\delta$"},
+    {"φ", "$\\phi$"},
+    {"Σ", "$\\Sigma$"},
+    {"<", "\\textless{}"},
+    {">", "\\textgreater{}"},
+}};
+
+constexpr std::array<std::string_view, 6> greek = {"sigma", "pi", "delta", "phi", "gamma", "eta"};
+
+std::string latex_cell(const Cell& cell, int digits_after) {
+  if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return latex_label(label->ascii);
+  if (!std::holds_alternative<Number>(cell)) return latex_text(cell_text(cell));
+  const DecimalParts parts = decimal_parts(cell);
+  std::string text = "$" + parts.before + parts.after + "$";
+  const int missing = digits_after - static_cast<int>(parts.after.size());
+  if (missing > 0) {  // an invisible stretch of the same width keeps the points below each other
+    std::string stretch = parts.after.empty() ? "." : "";
+    stretch.resize(static_cast<std::size_t>(missing), '0');
+    text += "\\phantom{$" + stretch + "$}";
+  }
+  return text;
+}
+
+std::string column_kind(const Column& column) {
+  if (column.wraps) return "p{0.45\\linewidth}";
+  return column.align == Align::Left ? "l" : "r";
+}
+
+}  // namespace
+
+std::string latex_text(std::string_view text) {
+  std::string out;
+  while (!text.empty()) {
+    const auto* found =
+        std::find_if(replacements.begin(), replacements.end(),
+                     [&](const Replacement& r) { return text.starts_with(r.first); });
+    if (found == replacements.end()) {
+      out += text.front();
+      text.remove_prefix(1);
+    } else {
+      out += found->second;
+      text.remove_prefix(found->first.size());
+    }
+  }
+  return out;
+}
+
+std::string latex_label(std::string_view ascii) {
+  std::string out = "$";
+  while (!ascii.empty() && ascii.front() >= '0' && ascii.front() <= '9') {
+    out += ascii.front();
+    ascii.remove_prefix(1);
+  }
+  bool is_greek = false;
+  for (const std::string_view name : greek) {
+    if (ascii.size() >= name.size() && (ascii.front() | 0x20) == name.front() &&
+        ascii.substr(1).starts_with(name.substr(1))) {
+      out += "\\" + std::string(ascii.substr(0, name.size()));
+      ascii.remove_prefix(name.size());
+      is_greek = true;
+      break;
+    }
+  }
+  if (!is_greek && !ascii.empty()) {
+    out += ascii.front();
+    ascii.remove_prefix(1);
+  }
+  std::string below;
+  std::string above;
+  std::string primes;
+  for (const char c : ascii) {
+    if (c == '\'') {
+      primes += "'";
+    } else if (c == '"') {
+      primes += "''";
+    } else if (c == '+' || c == '-') {
+      above += c;
+    } else {
+      below += c;
+    }
+  }
+  if (!below.empty()) out += "_{" + below + "}";
+  if (!above.empty()) out += "^{" + above + "}";
+  return out + primes + "$";
+}
+
+std::string table_latex(const Table& table) {
+  std::vector<int> digits_after(table.columns.size(), 0);
+  for (const auto& line : table.lines) {
+    const Row* row = std::get_if<Row>(&line);
+    if (row == nullptr) continue;
+    for (std::size_t i = 0; i < row->cells.size(); ++i) {
+      if (table.columns[i].align != Align::Decimal) continue;
+      const auto after = static_cast<int>(decimal_parts(row->cells[i]).after.size());
+      digits_after[i] = std::max(digits_after[i], after);
+    }
+  }
+
+  std::string kinds;
+  std::string titles;
+  for (const Column& column : table.columns) {
+    titles += (kinds.empty() ? "" : " & ") + latex_text(column_title(column));
+    kinds += column_kind(column);
+  }
+  std::string out = "\\begin{table}\n\\centering\n";
+  if (!table.caption.empty()) out += "\\caption{" + latex_text(table.caption) + "}\n";
+  out += "\\begin{tabular}{" + kinds + "}\n\\toprule\n" + titles + " \\\\\n\\midrule\n";
+  for (const auto& line : table.lines) {
+    if (const auto* separator = std::get_if<Separator>(&line)) {
+      out += "\\midrule\n";
+      if (!separator->words.empty()) {
+        out += "\\multicolumn{" + std::to_string(table.columns.size()) + "}{c}{\\textit{" +
+               latex_text(separator->words) + "}} \\\\\n\\midrule\n";
+      }
+      continue;
+    }
+    const Row& row = std::get<Row>(line);
+    for (std::size_t i = 0; i < row.cells.size(); ++i) {
+      out += (i > 0 ? " & " : "") + latex_cell(row.cells[i], digits_after[i]);
+    }
+    out += " \\\\\n";
+  }
+  out += "\\bottomrule\n\\end{tabular}\n";
+  for (const std::string& note : table.notes) {
+    out += "\\par\\smallskip\\footnotesize " + latex_text(note) + "\n";
+  }
+  return out + "\\end{table}\n";
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,165 @@
+#include "output/table_text.hpp"
+
+#include <algorithm>
+#include <numeric>
+
+#include "core/text.hpp"
+#include "output/display_width.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr int indent = 2;
+constexpr int gap = 2;
+constexpr int narrowest_wrap = 22;  // a wrapping column below this is worse than one column fewer
+
+// One column as it will be printed: its cells' texts and how wide it is.
+struct Printed {
+  const Column* column;
+  std::vector<std::string> texts;  // one per row, aligned at the decimal point where that applies
+  int width = 0;
+};
+
+Printed print_column(const Table& table, std::size_t index) {
+  const Column& column = table.columns[index];
+  Printed printed{&column, {}, display_width(column_title(column))};
+  std::vector<DecimalParts> parts;
+  int before = 0;
+  int after = 0;
+  for (const auto& line : table.lines) {
+    if (const Row* row = std::get_if<Row>(&line)) {
+      parts.push_back(decimal_parts(row->cells[index]));
+      before = std::max(before, display_width(parts.back().before));
+      after = std::max(after, display_width(parts.back().after));
+    }
+  }
+  for (const DecimalParts& part : parts) {
+    printed.texts.push_back(column.align == Align::Decimal
+                                ? padded_left(part.before, before) + padded_right(part.after, after)
+                                : part.before + part.after);
+    printed.width = std::max(printed.width, display_width(printed.texts.back()));
+  }
+  return printed;
+}
+
+int total_width(const std::vector<Printed>& columns) {
+  return std::accumulate(columns.begin(), columns.end(), indent - gap,
+                         [](int sum, const Printed& c) { return sum + gap + c.width; });
+}
+
+void narrow_wrapping(std::vector<Printed>& columns, int width, int narrowest) {
+  for (Printed& column : columns) {
+    const int excess = total_width(columns) - width;
+    if (excess > 0 && column.column->wraps) {
+      column.width = std::min(column.width, std::max(narrowest, column.width - excess));
+    }
+  }
+}
+
+/// @returns  the headers of the columns that had to go
+std::vector<std::string> fit(std::vector<Printed>& columns, int width) {
+  std::vector<std::string> dropped;
+  const std::vector<Printed> natural = columns;
+  std::vector<bool> kept(columns.size(), true);
+  for (;;) {
+    columns.clear();
+    for (std::size_t i = 0; i < natural.size(); ++i) {
+      if (kept[i]) columns.push_back(natural[i]);
+    }
+    narrow_wrapping(columns, width, narrowest_wrap);
+    if (total_width(columns) <= width) return dropped;
+    std::size_t least = natural.size();
+    for (std::size_t i = 0; i < natural.size(); ++i) {
+      if (!kept[i] || natural[i].column->priority == 0) continue;
+      if (least == natural.size() ||
+          natural[i].column->priority >= natural[least].column->priority) {
+        least = i;
+      }
+    }
+    if (least == natural.size()) {
+      narrow_wrapping(columns, width, 1);
+      return dropped;
+    }
+    kept[least] = false;
+    dropped.push_back(natural[least].column->header);
+  }
+}
+
+std::string aligned(const Printed& column, const std::string& text) {
+  return column.column->align == Align::Left ? padded_right(text, column.width)
+                                             : padded_left(text, column.width);
+}
+
+void add_line(std::string& out, std::string line) {
+  line.erase(line.find_last_not_of(' ') + 1);
+  out += line + '\n';
+}
+
+void add_row(std::string& out, const std::vector<Printed>& columns,
+             const std::vector<std::string>& texts) {
+  std::vector<std::vector<std::string>> pieces;
+  std::size_t height = 1;
+  for (std::size_t i = 0; i < columns.size(); ++i) {
+    pieces.push_back(columns[i].column->wraps ? wrapped(texts[i], columns[i].width)
+                                              : std::vector<std::string>{texts[i]});
+    height = std::max(height, pieces.back().size());
+  }
+  for (std::size_t part = 0; part < height; ++part) {
+    std::string line(indent - gap, ' ');
+    for (std::size_t i = 0; i < columns.size(); ++i) {
+      line += std::string(gap, ' ');
+      line += aligned(columns[i], part < pieces[i].size() ? pieces[i][part] : "");
+    }
+    add_line(out, line);
+  }
+}
+
+std::string rule(int width, const std::string& words) {
+  std::string line(indent, ' ');
+  int filled = indent;
+  if (!words.empty()) {
+    line += "── " + words + " ";
+    filled += 4 + display_width(words);
+  }
+  for (; filled < width; ++filled) line += "─";
+  return line;
+}
+
+}  // namespace
+
+std::string table_text(const Table& table, int width) {
+  std::vector<Printed> columns;
+  for (std::size_t i = 0; i < table.columns.size(); ++i) columns.push_back(print_column(table, i));
+  const std::vector<std::string> dropped = fit(columns, width);
+  const int rule_width = total_width(columns);
+
+  std::string out;
+  if (!table.caption.empty()) {
+    for (const std::string& line : wrapped(table.caption, width)) add_line(out, line);
+  }
+  std::vector<std::string> titles;
+  for (const Printed& column : columns) titles.push_back(column_title(*column.column));
+  add_row(out, columns, titles);
+  add_line(out, rule(rule_width, ""));
+  std::size_t row = 0;
+  for (const auto& line : table.lines) {
+    if (const auto* separator = std::get_if<Separator>(&line)) {
+      add_line(out, rule(rule_width, separator->words));
+      continue;
+    }
+    std::vector<std::string> texts;
+    for (const Printed& column : columns) texts.push_back(column.texts[row]);
+    add_row(out, columns, texts);
+    ++row;
+  }
+  std::vector<std::string> notes = table.notes;
+  if (!dropped.empty()) notes.push_back("Left out for want of width: " + joined(dropped) + ".");
+  for (const std::string& note : notes) {
+    for (const std::string& line : wrapped(note, width - indent)) {
+      add_line(out, std::string(indent, ' ') + line);
+    }
+  }
+  return out;
+}
+
+}  // namespace irrepwise
