@@ -1,0 +1,24 @@
+// The report of `levels` for people.
+#pragma once
+
+#include <optional>
+
+#include "output/levels_result.hpp"
+#include "output/report.hpp"
+
+namespace irrepwise {
+
+/// Which levels to show. By default those around the frontier.
+struct LevelWindow {
+  bool all = false;
+  std::optional<double> from_ev;  // either turns the default window off
+  std::optional<double> to_ev;
+};
+
+/// Levels from high to low with the frontier marked; charges, gross populations and the overlap
+/// populations of bonds, equivalent ones once (with `all`: every atom and every pair of atoms).
+///
+/// @throws Error  where no level lies in the range asked for: names the lowest and the highest
+[[nodiscard]] Report levels_report(const LevelsResult& result, const LevelWindow& window = {});
+
+}  // namespace irrepwise
