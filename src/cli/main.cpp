@@ -1,1 +1,84 @@
-int main() { return 0; }
+// The program: parses the command line, runs one command, turns errors into messages and codes.
+#include <csignal>
+#include <cstdio>
+#include <exception>
+#include <sstream>
+#include <string>
+#include <vector>
+
+#include <CLI/CLI.hpp>
+
+#include <unistd.h>
+
+#include "cli/commands.hpp"
+#include "core/error.hpp"
+#include "core/output_file.hpp"
+
+namespace {
+
+using namespace irrepwise;
+
+constexpr int failed = 1;       // input or computation
+constexpr int wrong_usage = 2;  // command line
+
+int report(const std::string& message, int code) {
+  std::fprintf(stderr, "irrepwise: %s\n", message.c_str());
+  return code;
+}
+
+int answer_parse_error(const CLI::App& program, const CLI::ParseError& error) {
+  if (error.get_exit_code() == 0) {  // --help or --version
+    std::ostringstream out;
+    std::ostringstream unused;
+    static_cast<void>(program.exit(error, out, unused));
+    write_descriptor(STDOUT_FILENO, out.str(), "standard output");
+    return 0;
+  }
+  std::string help = "irrepwise";
+  for (const CLI::App* chosen : program.get_subcommands()) help += " " + chosen->get_name();
+  return report(std::string(error.what()) + "; see " + help + " --help", wrong_usage);
+}
+
+int run(int argc, char** argv) {
+  CLI::App program(
+      "Extended Hückel orbitals of molecules, labelled by symmetry.\n"
+      "Takes a geometry, finds its point group, and answers with the orbital energies, each with\n"
+      "its irreducible representation, what it is made of, and the charges and bonds that follow.",
+      "irrepwise");
+  program.set_help_flag("-h,--help", "Show this help");
+  program.set_version_flag("--version", "irrepwise " IRREPWISE_VERSION, "Show the version");
+  program.require_subcommand(1);
+  program.footer(
+      "Examples:\n"
+      "  irrepwise levels complex.xyz --charge -2\n"
+      "  irrepwise levels job.yaml --format json --output levels.json\n"
+      "  irrepwise parameters Pt Cl\n"
+      "Each command has its own help: irrepwise levels --help");
+  const std::vector<cli::Command> commands = {cli::add_levels(program),
+                                              cli::add_parameters(program)};
+  try {
+    program.parse(argc, argv);
+    for (const cli::Command& command : commands) {
+      if (command.app->parsed()) command.run();
+    }
+    return 0;
+  } catch (const CLI::ParseError& error) {
+    return answer_parse_error(program, error);
+  }
+}
+
+}  // namespace
+
+int main(int argc, char** argv) {
+  // A file-size limit then fails a write instead of killing us with half a file beside.
+  static_cast<void>(std::signal(SIGXFSZ, SIG_IGN));
+  try {
+    return run(argc, argv);
+  } catch (const Error& error) {
+    return report(error.what(), failed);
+  } catch (const std::bad_alloc&) {
+    return report("not enough memory for a molecule of this size", failed);
+  } catch (const std::exception& error) {
+    return report(std::string("internal error: ") + error.what(), failed);
+  }
+}

@@ -1,0 +1,18 @@
+// The commands of the program: each is added to the parser and, once chosen, run.
+#pragma once
+
+#include <functional>
+
+#include <CLI/CLI.hpp>
+
+namespace irrepwise::cli {
+
+struct Command {
+  CLI::App* app;              // parsed() tells whether the user chose it
+  std::function<void()> run;  // throws Error, or CLI::ParseError for options that contradict
+};
+
+[[nodiscard]] Command add_levels(CLI::App& program);
+[[nodiscard]] Command add_parameters(CLI::App& program);
+
+}  // namespace irrepwise::cli

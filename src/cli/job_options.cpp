@@ -1,0 +1,94 @@
+#include "cli/job_options.hpp"
+
+#include <cmath>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "cli/axis.hpp"
+#include "core/error.hpp"
+
+namespace irrepwise::cli {
+namespace {
+
+// Adds the option's name as the place of any error.
+template <typename Action>
+auto named(const char* option, Action action) {
+  try {
+    return action();
+  } catch (const Error& error) {
+    throw error_at(option, error);
+  }
+}
+
+double positive(const char* option, double value) {
+  if (!(std::isfinite(value) && value > 0.0)) {
+    throw Error(fmt::format("{}: found {}, expected a number above zero", option, value));
+  }
+  return value;
+}
+
+}  // namespace
+
+void add_job_options(CLI::App& command, JobOptions& options) {
+  command
+      .add_option("file", options.file,
+                  "Coordinates in XYZ format (Å), or a job file that ends in .yaml or .yml")
+      ->required()
+      ->option_text("FILE");
+  const auto add = [&](const char* name, auto& value, const char* text, const char* help,
+                       const char* group) {
+    command.add_option(name, value, help)->option_text(text)->group(group);
+  };
+  add("-c,--charge", options.charge, "N", "Charge of the molecule", "Electrons");
+  add("-m,--multiplicity", options.multiplicity, "N",
+      "2S + 1; without it levels are filled from below", "Electrons");
+  add("-p,--parameters", options.parameters, "FILE",
+      "Parameter file (YAML) that replaces or extends the set in the program", "Method");
+  add("--rule", options.rule, "RULE",
+      "weighted (default), wolfsberg-helmholz, geometric-mean or cusachs", "Method");
+  add("--k", options.k, "K", "Constant of the rule: 1.75 by default, 2 for geometric-mean",
+      "Method");
+  add("--tolerance", options.tolerance, "Å",
+      "How near atoms must come to each other's images; 0.01 by default", "Symmetry");
+  add("--z", options.z, "AXIS",
+      "z axis: a vector (0,0,1), an atom (Pt1), two atoms (C1,C2) or the normal of three",
+      "Symmetry");
+  add("--x", options.x, "AXIS", "x axis, in the same way", "Symmetry");
+  add("--subgroup", options.subgroup, "GROUP", "Work in this subgroup: D2h, C2v …", "Symmetry");
+}
+
+Job read_job_with(const JobOptions& options) {
+  Job job = read_job(options.file);
+  if (options.charge) job.molecule = job.molecule.with_charge(*options.charge);
+  if (options.multiplicity) {
+    if (*options.multiplicity < 1) {
+      throw Error(
+          fmt::format("--multiplicity: found {}, expected 1 or more", *options.multiplicity));
+    }
+    job.hueckel.multiplicity = options.multiplicity;
+    job.hueckel.electrons_by_irrep.clear();
+  }
+  if (!options.parameters.empty()) {
+    job.parameters = read_parameters(options.parameters);
+    job.source_files.push_back(options.parameters);
+  }
+  if (!options.rule.empty()) {
+    const Rule rule = named("--rule", [&] { return parse_rule(options.rule); });
+    if (rule != job.hueckel.rule) job.hueckel.k.reset();  // the job's K was meant for its rule
+    job.hueckel.rule = rule;
+  }
+  if (options.k) job.hueckel.k = positive("--k", *options.k);
+  if (options.tolerance)
+    job.symmetry.tolerance_angstrom = positive("--tolerance", *options.tolerance);
+  if (!options.z.empty()) {
+    job.symmetry.z = named("--z", [&] { return parse_axis(options.z, job.molecule); });
+  }
+  if (!options.x.empty()) {
+    job.symmetry.x = named("--x", [&] { return parse_axis(options.x, job.molecule); });
+  }
+  if (!options.subgroup.empty()) job.symmetry.subgroup = options.subgroup;
+  return job;
+}
+
+}  // namespace irrepwise::cli

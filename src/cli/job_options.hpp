@@ -1,0 +1,32 @@
+// The options that change a job: charge, method, symmetry. They win over what the job file says.
+#pragma once
+
+#include <optional>
+#include <string>
+
+#include <CLI/CLI.hpp>
+
+#include "job/job.hpp"
+
+namespace irrepwise::cli {
+
+struct JobOptions {
+  std::string file;
+  std::optional<int> charge;
+  std::optional<int> multiplicity;
+  std::string parameters;
+  std::string rule;
+  std::optional<double> k;
+  std::optional<double> tolerance;
+  std::string z;
+  std::string x;
+  std::string subgroup;
+};
+
+void add_job_options(CLI::App& command, JobOptions& options);
+
+/// Reads the file and applies the options.
+/// @throws Error  as read_job; for an option, with its name as the place
+[[nodiscard]] Job read_job_with(const JobOptions& options);
+
+}  // namespace irrepwise::cli

@@ -1,0 +1,118 @@
+// irrepwise levels: from a geometry to orbital energies labelled by symmetry.
+#include <cmath>
+#include <memory>
+
+#include <fmt/format.h>
+
+#include "cli/commands.hpp"
+#include "cli/job_options.hpp"
+#include "cli/output_options.hpp"
+#include "core/error.hpp"
+#include "output/levels_json.hpp"
+#include "output/levels_report.hpp"
+
+namespace irrepwise::cli {
+namespace {
+
+struct LevelsOptions {
+  JobOptions job;
+  OutputOptions output;
+  LevelWindow window;
+  LevelsJsonParts parts;
+};
+
+LevelsResult compute(const Job& job) {
+  MolecularSymmetry symmetry = find_symmetry(job.molecule, job.symmetry);
+  Basis basis = make_basis(job.molecule, job.parameters, job.overrides);
+  Levels levels = solve_levels(symmetry, basis, job.hueckel);
+  Populations populations = mulliken_populations(symmetry, basis, levels);
+  std::vector<std::string> warnings = geometry_warnings(job.molecule);
+  warnings.insert(warnings.end(), levels.warnings.begin(), levels.warnings.end());
+  return {job.title,        job.parameters.name(), job.molecule,           std::move(symmetry),
+          std::move(basis), std::move(levels),     std::move(populations), std::move(warnings)};
+}
+
+LevelsResult compute_named(const Job& job, const std::string& file) {
+  try {
+    return compute(job);
+  } catch (const Error& error) {
+    throw error_at(file, error);
+  }
+}
+
+void check_usage(const LevelsOptions& options) {
+  const Format format = chosen_format(options.output);
+  const bool needs_json = options.parts.matrices || options.parts.coefficients;
+  if (needs_json && format != Format::Json) {
+    throw CLI::ValidationError("--matrices and --coefficients need --format json");
+  }
+  const bool has_range = options.window.from_ev || options.window.to_ev;
+  if (has_range && (format == Format::Json || format == Format::Csv)) {
+    throw CLI::ValidationError(
+        "--from and --to are for text, markdown and latex; json and csv "
+        "always hold every level");
+  }
+}
+
+std::string written(const LevelsResult& result, const LevelsOptions& options) {
+  switch (chosen_format(options.output)) {
+    case Format::Json:
+      return levels_json(result, options.parts);
+    case Format::Csv:
+      return levels_csv(result);
+    case Format::Markdown:
+      return report_markdown(levels_report(result, options.window));
+    case Format::Latex:
+      return report_latex(levels_report(result, options.window));
+    case Format::Text:
+    case Format::Yaml:
+      break;
+  }
+  return report_text(levels_report(result, options.window), text_width(options.output));
+}
+
+void run(const LevelsOptions& options) {
+  check_usage(options);
+  const Job job = read_job_with(options.job);
+  refuse_to_overwrite(options.output, job.source_files);
+  const LevelsResult result = compute_named(job, options.job.file);
+  const std::string text = written(result, options);
+  print_warnings(options.output, result.warnings);
+  emit(options.output, text);
+}
+
+}  // namespace
+
+Command add_levels(CLI::App& program) {
+  CLI::App* app = program.add_subcommand(
+      "levels", "Orbital energies with symmetry labels, compositions, charges and bonds");
+  const auto options = std::make_shared<LevelsOptions>();
+  app->set_help_flag("-h,--help", "Show this help");
+  add_job_options(*app, options->job);
+  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex"});
+  app->add_flag("-a,--all", options->window.all, "Every level, every atom and every pair of atoms")
+      ->group("Output");
+  app->add_option("--from", options->window.from_ev, "Show levels from this energy on")
+      ->option_text("eV")
+      ->group("Output");
+  app->add_option("--to", options->window.to_ev, "Show levels up to this energy")
+      ->option_text("eV")
+      ->group("Output");
+  app->add_flag("--matrices", options->parts.matrices,
+                "Add overlap and Hamiltonian over atomic orbitals (json)")
+      ->group("Output");
+  app->add_flag("--coefficients", options->parts.coefficients,
+                "Add orbital coefficients over atomic orbitals (json)")
+      ->group("Output");
+  app->footer(
+      "Options win over what a job file says.\n"
+      "Exit code: 0 done, 1 something is wrong with input or computation, 2 with the options.\n\n"
+      "Examples:\n"
+      "  irrepwise levels complex.xyz --charge -2\n"
+      "  irrepwise levels complex.xyz --from -14 --to -8 --width 80\n"
+      "  irrepwise levels complex.xyz --z Pt1,Cl2 --subgroup C2v\n"
+      "  irrepwise levels job.yaml --format json --matrices --output levels.json");
+  return {app, [options] { run(*options); }};
+}
+
+}  // namespace irrepwise::cli
