@@ -38,7 +38,7 @@ void write(std::string& out, const Json& value, int depth) {
 
 }  // namespace
 
-double finite(double value) {
+double finite_number(double value) {
   if (!std::isfinite(value)) {
     throw Error("a result is not a finite number; check the geometry and the parameters");
   }

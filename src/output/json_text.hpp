@@ -11,7 +11,7 @@ using Json = nlohmann::ordered_json;
 
 /// @returns       the value, a negative zero as zero
 /// @throws Error  for NaN and infinity, which JSON cannot say and no result may be
-[[nodiscard]] double finite(double value);
+[[nodiscard]] double finite_number(double value);
 
 /// A line for each key of the document, each element of a list of lists or objects; what is inside
 /// those stands on one line, so that a person can find things and a matrix has a line for each row.

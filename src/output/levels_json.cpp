@@ -14,7 +14,7 @@ constexpr double smallest_share = 1e-4;
 
 Json vector_json(const Eigen::Ref<const Eigen::VectorXd>& values) {
   Json list = Json::array();
-  for (const double value : values) list.push_back(finite(value));
+  for (const double value : values) list.push_back(finite_number(value));
   return list;
 }
 
@@ -27,9 +27,9 @@ Json matrix_json(const Eigen::Ref<const Eigen::MatrixXd>& matrix) {
 }
 
 Json symmetry_json(const MolecularSymmetry& symmetry) {
-  return {{"tolerance_angstrom", finite(symmetry.tolerance_angstrom)},
-          {"largest_shift_angstrom", finite(symmetry.largest_shift_angstrom)},
-          {"rms_shift_angstrom", finite(symmetry.rms_shift_angstrom)},
+  return {{"tolerance_angstrom", finite_number(symmetry.tolerance_angstrom)},
+          {"largest_shift_angstrom", finite_number(symmetry.largest_shift_angstrom)},
+          {"rms_shift_angstrom", finite_number(symmetry.rms_shift_angstrom)},
           {"rotation", matrix_json(symmetry.rotation)},
           {"origin", vector_json(symmetry.origin)},
           {"axes", symmetry.axes},
@@ -39,7 +39,7 @@ Json symmetry_json(const MolecularSymmetry& symmetry) {
 
 Json method_json(const LevelsResult& result) {
   return {{"rule", rule_name(result.levels.rule)},
-          {"k", result.levels.k ? Json(finite(*result.levels.k)) : Json(nullptr)},
+          {"k", result.levels.k ? Json(finite_number(*result.levels.k)) : Json(nullptr)},
           {"parameter_set", result.parameter_set}};
 }
 
@@ -51,7 +51,7 @@ Json composition_json(const LevelsResult& result, int level) {
     list.push_back({{"atom", shell.atom + 1},
                     {"element", element_symbol(atom.atomic_number)},
                     {"orbital", shell_orbital_name(shell, share.orbital - shell.first_orbital)},
-                    {"share", finite(share.share)}});
+                    {"share", finite_number(share.share)}});
   }
   return list;
 }
@@ -66,8 +66,8 @@ Json orbitals_json(const LevelsResult& result, bool coefficients) {
                   {"irrep", level_label(irrep.label)},
                   {"number", level.number},
                   {"degeneracy", level.degeneracy},
-                  {"energy_ev", finite(level.energy_ev)},
-                  {"occupation", finite(level.occupation)},
+                  {"energy_ev", finite_number(level.energy_ev)},
+                  {"occupation", finite_number(level.occupation)},
                   {"composition", composition_json(result, static_cast<int>(i))}};
     if (coefficients) {
       entry["coefficients"] =
@@ -89,14 +89,16 @@ Json frontier_json(const LevelsResult& result) {
   const auto label = [&](const Level* l) {
     return l ? Json(level_name(group, *l)) : Json(nullptr);
   };
-  const auto energy = [](const Level* l) { return l ? Json(finite(l->energy_ev)) : Json(nullptr); };
-  return {
-      {"homo", label(homo)},
-      {"lumo", label(lumo)},
-      {"homo_ev", energy(homo)},
-      {"lumo_ev", energy(lumo)},
-      {"gap_ev", homo && lumo ? Json(finite(lumo->energy_ev - homo->energy_ev)) : Json(nullptr)},
-      {"open_shell", frontier.open_shell}};
+  const auto energy = [](const Level* l) {
+    return l ? Json(finite_number(l->energy_ev)) : Json(nullptr);
+  };
+  return {{"homo", label(homo)},
+          {"lumo", label(lumo)},
+          {"homo_ev", energy(homo)},
+          {"lumo_ev", energy(lumo)},
+          {"gap_ev",
+           homo && lumo ? Json(finite_number(lumo->energy_ev - homo->energy_ev)) : Json(nullptr)},
+          {"open_shell", frontier.open_shell}};
 }
 
 Json gross_by_orbital_json(const LevelsResult& result, int atom) {
@@ -106,7 +108,7 @@ Json gross_by_orbital_json(const LevelsResult& result, int atom) {
     const Shell& shell = result.basis.shells[static_cast<std::size_t>(s)];
     for (int m = 0; m < shell.size(); ++m) {
       gross[shell_orbital_name(shell, m)] =
-          finite(result.populations.gross_by_orbital[shell.first_orbital + m]);
+          finite_number(result.populations.gross_by_orbital[shell.first_orbital + m]);
     }
   }
   return gross;
@@ -118,11 +120,11 @@ Json atoms_json(const LevelsResult& result, const Molecule& computed) {
     const Atom& atom = computed.atoms()[static_cast<std::size_t>(i)];
     list.push_back({{"index", i + 1},
                     {"element", element_symbol(atom.atomic_number)},
-                    {"x", finite(atom.position.x())},
-                    {"y", finite(atom.position.y())},
-                    {"z", finite(atom.position.z())},
-                    {"charge", finite(result.populations.charge[i])},
-                    {"gross_population", finite(result.populations.gross_by_atom[i])},
+                    {"x", finite_number(atom.position.x())},
+                    {"y", finite_number(atom.position.y())},
+                    {"z", finite_number(atom.position.z())},
+                    {"charge", finite_number(result.populations.charge[i])},
+                    {"gross_population", finite_number(result.populations.gross_by_atom[i])},
                     {"gross_by_orbital", gross_by_orbital_json(result, i)}});
   }
   return list;
@@ -132,8 +134,8 @@ Json overlap_populations_json(const Populations& populations) {
   Json list = Json::array();
   for (const OverlapPopulation& pair : populations.overlap_populations) {
     list.push_back({{"atoms", {pair.atom_a + 1, pair.atom_b + 1}},
-                    {"distance_angstrom", finite(pair.distance_angstrom)},
-                    {"value", finite(pair.value)},
+                    {"distance_angstrom", finite_number(pair.distance_angstrom)},
+                    {"value", finite_number(pair.value)},
                     {"bonded", pair.bonded}});
   }
   return list;
@@ -170,7 +172,7 @@ std::string levels_json(const LevelsResult& result, const LevelsJsonParts& parts
                    {"frontier", frontier_json(result)},
                    {"atoms", atoms_json(result, computed)},
                    {"overlap_populations", overlap_populations_json(result.populations)},
-                   {"sum_of_occupied_ev", finite(result.levels.sum_of_occupied_ev)},
+                   {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
                    {"warnings", result.warnings}};
   if (parts.matrices || parts.coefficients) {
     document["matrices"] = Json{{"orbitals", orbital_titles_json(result)}};

@@ -86,13 +86,13 @@ std::string parameters_json(const ParameterSet& parameters, const std::vector<in
     for (const ShellParameters& shell : found.shells) {
       Json terms = Json::array();
       for (const ContractedRadial::Term& term : shell.radial.terms()) {
-        terms.push_back({{"exponent", finite(term.function.zeta())},
-                         {"coefficient", finite(term.coefficient)}});
+        terms.push_back({{"exponent", finite_number(term.function.zeta())},
+                         {"coefficient", finite_number(term.coefficient)}});
       }
       shells.push_back({{"shell", shell_name(shell)},
                         {"n", shell.n},
                         {"l", shell.l},
-                        {"h_ii_ev", finite(shell.h_ii_ev)},
+                        {"h_ii_ev", finite_number(shell.h_ii_ev)},
                         {"terms", terms},
                         {"source", shell.source}});
     }
