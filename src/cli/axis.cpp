@@ -1,14 +1,13 @@
 #include "cli/axis.hpp"
 
 #include <algorithm>
-#include <charconv>
-#include <cmath>
 #include <optional>
 #include <vector>
 
 #include <fmt/format.h>
 
 #include "core/error.hpp"
+#include "core/parse.hpp"
 #include "core/text.hpp"
 
 namespace irrepwise::cli {
@@ -25,14 +24,6 @@ std::vector<std::string> split_at_commas(const std::string& text) {
   }
 }
 
-std::optional<double> parse_number(const std::string& text) {
-  double value = 0.0;
-  const char* end = text.data() + text.size();
-  const auto [stop, problem] = std::from_chars(text.data(), end, value);
-  if (problem != std::errc() || stop != end || !std::isfinite(value)) return {};
-  return value;
-}
-
 int find_atom(const std::string& name, const Molecule& molecule) {
   std::vector<std::string> names;
   for (int atom = 0; atom < molecule.size(); ++atom) {
@@ -41,10 +32,10 @@ int find_atom(const std::string& name, const Molecule& molecule) {
   }
   const std::string nearest = nearest_word(name, names);
   throw Error(
-      fmt::format("no atom is called '{}'{}; atoms are named by symbol and number in the "
+      fmt::format("no atom is called {}{}; atoms are named by symbol and number in the "
                   "order of the input, {} to {}",
-                  name, nearest.empty() ? "" : ", did you mean '" + nearest + "'?", names.front(),
-                  names.back()));
+                  quoted(name), nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
+                  names.front(), names.back()));
 }
 
 }  // namespace
@@ -60,15 +51,15 @@ AxisDirection parse_axis(const std::string& text, const Molecule& molecule) {
   }
   if (!numbers.empty() || parts.size() > 3) {
     throw Error(
-        fmt::format("'{}' is no axis; expected a vector such as 0,0,1 or one to three atoms "
+        fmt::format("{} is no axis; expected a vector such as 0,0,1 or one to three atoms "
                     "such as {}",
-                    text, atom_name(molecule, 0)));
+                    quoted(text), atom_name(molecule, 0)));
   }
   std::vector<int> atoms;
   for (const std::string& part : parts) {
     const int atom = find_atom(part, molecule);
     if (std::find(atoms.begin(), atoms.end(), atom) != atoms.end()) {
-      throw Error(fmt::format("'{}' names {} twice; give different atoms", text, part));
+      throw Error(fmt::format("{} names {} twice; give different atoms", quoted(text), part));
     }
     atoms.push_back(atom);
   }

@@ -45,7 +45,7 @@ Table parameter_table(const ParameterSet& parameters, const std::vector<int>& el
   return table;
 }
 
-std::string quoted(const std::string& text) {
+std::string quoted_yaml(const std::string& text) {
   std::string out = "\"";
   for (const char c : text) {
     if (c == '"' || c == '\\') out += '\\';
@@ -107,7 +107,7 @@ std::string parameters_json(const ParameterSet& parameters, const std::vector<in
 }
 
 std::string parameters_yaml(const ParameterSet& parameters, const std::vector<int>& elements) {
-  std::string out = fmt::format("name: {}\n\nelements:\n", quoted(parameters.name()));
+  std::string out = fmt::format("name: {}\n\nelements:\n", quoted_yaml(parameters.name()));
   for (const int element : elements) {
     const ElementParameters& found = parameters.at(element);
     out += fmt::format("  {}:\n    valence_electrons: {}\n    shells:\n", element_symbol(element),
@@ -115,7 +115,7 @@ std::string parameters_yaml(const ParameterSet& parameters, const std::vector<in
     for (const ShellParameters& shell : found.shells) {
       out += fmt::format("      - {{shell: {}, h_ii: {}, {},\n         source: {}}}\n",
                          shell_name(shell), shell.h_ii_ev, yaml_radial(shell.radial),
-                         quoted(shell.source));
+                         quoted_yaml(shell.source));
     }
   }
   return out;
