@@ -11,8 +11,8 @@ namespace irrepwise {
 /// Which levels to show. By default those around the frontier.
 struct LevelWindow {
   bool all = false;
-  std::optional<double> from_ev;  // either turns the default window off
-  std::optional<double> to_ev;
+  std::optional<double> from_ev = {};  // either turns the default window off
+  std::optional<double> to_ev = {};
 };
 
 /// Levels from high to low with the frontier marked; charges, gross populations and the overlap

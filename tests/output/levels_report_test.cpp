@@ -1,0 +1,122 @@
+#include "output/levels_report.hpp"
+
+#include <sstream>
+
+#include <doctest/doctest.h>
+
+#include "core/error.hpp"
+#include "output/composition.hpp"
+#include "output/display_width.hpp"
+#include "output/example.hpp"
+#include "output/levels_json.hpp"
+
+using namespace irrepwise;
+
+namespace {
+
+int rows_of(const Table& table) {
+  int rows = 0;
+  for (const auto& line : table.lines) rows += std::holds_alternative<Row>(line) ? 1 : 0;
+  return rows;
+}
+
+}  // namespace
+
+TEST_CASE("equivalent atoms form sets, named by element where that is enough") {
+  const LevelsResult result = result_of(benzene());
+  const std::vector<AtomSet> sets = atom_sets(result.symmetry);
+  REQUIRE(sets.size() == 2);
+  CHECK(sets[0].name == "C");
+  CHECK(sets[0].atoms == std::vector<int>{0, 1, 2, 3, 4, 5});
+  CHECK(sets[1].name == "H");
+  CHECK(set_of_atom(sets, 12)[11] == 1);
+}
+
+TEST_CASE("pairs of benzene's carbon atoms fall into ortho, meta and para") {
+  const MolecularSymmetry symmetry = result_of(benzene()).symmetry;
+  CHECK(first_equivalent_pair(symmetry, 4, 5) == std::pair{0, 1});
+  CHECK(first_equivalent_pair(symmetry, 5, 3) == std::pair{0, 2});
+  CHECK(first_equivalent_pair(symmetry, 2, 5) == std::pair{0, 3});
+}
+
+TEST_CASE("shares of shell groups sum to one in every level") {
+  const LevelsResult result = result_of(skew_square());
+  const std::vector<ShellGroup> groups = shell_groups(result, atom_sets(result.symmetry));
+  REQUIRE(groups.size() == 5);
+  CHECK(groups[2].name == "Pt 5d");
+  for (int level = 0; level < static_cast<int>(result.levels.levels.size()); ++level) {
+    double sum = 0.0;
+    for (const ShellGroup& group : groups) sum += group_share(result, group, level);
+    CHECK(std::abs(sum - 1.0) < 1e-10);
+  }
+}
+
+TEST_CASE("a square d8 complex has an empty b1g level of dx2-y2 as its LUMO") {
+  // Common practice: ligand-field theory of square planar d8 complexes.
+  const LevelsResult result = result_of(skew_square());
+  const Report report = levels_report(result);
+  const std::vector<AtomSet> sets = atom_sets(result.symmetry);
+  const int lumo = result.levels.frontier.lumo.value();
+  const std::string words = composition_words(result, sets, shell_groups(result, sets), lumo);
+  CHECK(words.find("% Pt 5dx2-y2") != std::string::npos);
+  CHECK(words.find("% Cl 3p") != std::string::npos);
+  const std::string text = report_text(report, 80);
+  CHECK(text.find("LUMO") != std::string::npos);
+  CHECK(text.find("HOMO") > text.find("LUMO"));  // from high to low
+  CHECK(text.find("Open shell") == std::string::npos);
+}
+
+TEST_CASE("equivalent charges and bonds stand once, and each by itself with all") {
+  const LevelsResult result = result_of(benzene());
+  const Report few = levels_report(result);
+  REQUIRE(few.tables.size() == 3);
+  CHECK(rows_of(few.tables[1]) == 2);  // C, H
+  CHECK(rows_of(few.tables[2]) == 2);  // C–C, C–H
+  const Report all = levels_report(result, {.all = true});
+  CHECK(rows_of(all.tables[1]) == 12);
+  CHECK(rows_of(all.tables[2]) == 66);  // 12 * 11 / 2
+}
+
+TEST_CASE("a range of energies shows just its levels, and an empty one is refused") {
+  const LevelsResult result = result_of(benzene());
+  const double homo = result.levels.levels[std::size_t(*result.levels.frontier.homo)].energy_ev;
+  const Report report = levels_report(result, {.from_ev = homo - 1e-6, .to_ev = homo + 1e-6});
+  CHECK(rows_of(report.tables[0]) == 1);
+  CHECK_THROWS_AS(static_cast<void>(levels_report(result, {.from_ev = 1e4})), Error);
+}
+
+TEST_CASE("the whole report keeps to 40 columns and more, but for the narrow tables themselves") {
+  const Report report = levels_report(result_of(benzene()));
+  for (const int width : {60, 80, 100, 200}) {
+    std::istringstream stream(report_text(report, width));
+    for (std::string line; std::getline(stream, line);) {
+      CAPTURE(line);
+      CHECK(display_width(line) <= width);
+    }
+  }
+}
+
+TEST_CASE("CSV has a row for each level and shares that sum to one") {
+  std::istringstream stream(levels_csv(result_of(benzene())));
+  std::string line;
+  std::getline(stream, line);
+  CHECK(line == "label,irrep,number,degeneracy,energy_ev,occupation,frontier,C 2s,C 2p,H 1s\r");
+  int rows = 0;
+  for (; std::getline(stream, line); ++rows) {
+    std::istringstream fields(line);
+    std::string field;
+    double sum = 0.0;
+    for (int i = 0; std::getline(fields, field, ','); ++i) {
+      if (i >= 7) sum += std::stod(field);
+    }
+    CHECK(std::abs(sum - 1.0) < 1e-10);
+  }
+  CHECK(rows == static_cast<int>(result_of(benzene()).levels.levels.size()));
+}
+
+TEST_CASE("an open shell is said so") {
+  const Molecule oxygen({{8, {0.0, 0.0, 0.0}}, {8, {0.0, 0.0, 1.21}}}, 0, "");
+  const std::string text = report_text(levels_report(result_of(oxygen)), 100);
+  CHECK(text.find("Open shell: the HOMO holds 2 of 4 electrons") != std::string::npos);
+  CHECK(text.substr(0, 2) == "O2");  // no title: the formula stands for it
+}
