@@ -17,7 +17,7 @@ namespace irrepwise {
 /// @returns              no unit, by |m|, never NaN: far apart they fall to zero
 /// @accuracy             1e-14 absolute for n <= 7, l <= 3, 0.5 <= zeta <= 20, distance >= 0.5
 /// (worst
-///                       found 4e-15), and for every zeta a SlaterRadial admits with distance >=
+///                       found 1.1e-14), and for every zeta a SlaterRadial admits with distance >=
 ///                       0.1
 /// @source               see overlap_table.hpp
 [[nodiscard]] DiatomicOverlaps diatomic_overlaps(const ContractedRadial& radial_a, int l_a,

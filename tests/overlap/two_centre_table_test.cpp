@@ -48,10 +48,10 @@ double error_of(const Row& row) {
 
 }  // namespace
 
-TEST_CASE("overlaps agree with the 40-digit table to 1e-14, and what is promised is 1e-13") {
+TEST_CASE("overlaps agree with the 40-digit table to the documented 2e-14") {
   // Source: tests/reference/two_centre_overlaps.csv, made at 250 digits by another method and
   // partly by a third (scripts/make-overlap-table.py). The limit is absolute, on the scale of 1.
-  constexpr double limit = 1e-14;  // measured 3.6e-15
+  constexpr double limit = 2e-14;  // here 3.6e-15; 1.1e-14 in 16 645 others made the same way
   double worst_ordinary = 0.0, worst_wide = 0.0;
   std::string worst_row;
   int n_ordinary = 0;
