@@ -6,12 +6,12 @@ search for axes and no tables.
 """
 import numpy as np
 
+
 def operations(symbols, positions, tolerance):
     """All orthogonal matrices about the centroid that map each atom on one of its element."""
     r = np.array(positions, float)
-
     r = r - r.mean(axis=0)
-    shells = {}
+    shells = {}  # (element, distance from the centre) -> atoms
     for i, (s, p) in enumerate(zip(symbols, r)):
         d = np.linalg.norm(p)
         if d < tolerance:
@@ -62,6 +62,7 @@ def operations(symbols, positions, tolerance):
             unique.append(m)
     return unique
 
+
 def rotation_order(m):
     """Order of a proper rotation, found as the smallest k with k times the angle whole."""
     angle = np.arccos(np.clip((np.trace(m) - 1) / 2, -1, 1)) / (2 * np.pi)
@@ -70,8 +71,10 @@ def rotation_order(m):
             return k
     raise ValueError("no rotation of finite order")
 
+
 def rotation_axis(m):
     return np.linalg.svd(m - np.eye(3))[2][2]
+
 
 def point_group(symbols, positions, tolerance):
     r = np.array(positions, float)

@@ -8,7 +8,8 @@
 
 namespace {
 
-// cos of the tetrahedral angle is -1/3; the angle to the fourth bond's other side is its supplement.
+// cos of the tetrahedral angle is -1/3; the angle to the fourth bond's other side is its
+// supplement.
 constexpr double tetrahedral_supplement_degrees = 70.528779365509308;
 
 void append(std::vector<TestMolecule>& all, std::vector<TestMolecule> part) {

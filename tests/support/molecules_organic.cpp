@@ -1,4 +1,6 @@
 // Carbon compounds.
+#include <fmt/format.h>
+
 #include "support/molecules_parts.hpp"
 #include "support/shapes.hpp"
 
@@ -82,7 +84,7 @@ std::vector<TestMolecule> open_chain() {
 // A planar ring (CH)n.
 TestMolecule annulene(const std::string& name, int n, int charge, double cc, double ch) {
   const double radius = polygon_radius(n, cc);
-  return by_orbits(name, "D" + std::to_string(n) + "h", charge,
+  return by_orbits(name, fmt::format("D{}h", n), charge,
                    {{"C", radius * x}, {"H", (radius + ch) * x}});
 }
 
@@ -107,11 +109,11 @@ TestMolecule biphenyl() {
 std::vector<TestMolecule> rings() {
   const double cyclopropane_radius = polygon_radius(3, 1.51);
   const Vector3d cyclobutane_carbon(1.09, 0, 0.13);
-  const auto [cyclobutane_h1, cyclobutane_h2] = shapes::two_bond_ends(
-      cyclobutane_carbon, {0, 1.09, -0.13}, {0, -1.09, -0.13}, 1.09, 109.0);
-  const auto [cyclopropane_h, other] = shapes::two_bond_ends(
-      cyclopropane_radius * x, ring(cyclopropane_radius, 120, 0),
-      ring(cyclopropane_radius, -120, 0), 1.08, 115.0);
+  const auto [cyclobutane_h1, cyclobutane_h2] =
+      shapes::two_bond_ends(cyclobutane_carbon, {0, 1.09, -0.13}, {0, -1.09, -0.13}, 1.09, 109.0);
+  const auto [cyclopropane_h, other] =
+      shapes::two_bond_ends(cyclopropane_radius * x, ring(cyclopropane_radius, 120, 0),
+                            ring(cyclopropane_radius, -120, 0), 1.08, 115.0);
   const Vector3d chair(1.4425, 0, 0.255);
   return {
       annulene("cyclobutadiene, square", 4, 0, 1.44, 1.08),  // two electrons in eg
@@ -127,8 +129,7 @@ std::vector<TestMolecule> rings() {
                  {"H", {1.2124, 2.485, 0}},
                  {"H", {3.3645, 1.2425, 0}}}),
       biphenyl(),
-      by_orbits("cyclopropane", "D3h", 0,
-                {{"C", cyclopropane_radius * x}, {"H", cyclopropane_h}}),
+      by_orbits("cyclopropane", "D3h", 0, {{"C", cyclopropane_radius * x}, {"H", cyclopropane_h}}),
       by_orbits("cyclobutane, puckered", "D2d", 0,
                 {{"C", cyclobutane_carbon}, {"H", cyclobutane_h1}, {"H", cyclobutane_h2}}),
       by_orbits("cyclohexane, chair", "D3d", 0,

@@ -13,7 +13,9 @@ namespace {
 using Eigen::Vector3d;
 
 // The engine is fixed by the standard, std's distributions are not: hence our own mapping.
-double uniform(std::mt19937& engine) { return (engine() + 0.5) / 4294967296.0; }  // in (0, 1)
+double uniform(std::mt19937& engine) {
+  return (static_cast<double>(engine()) + 0.5) / 4294967296.0;  // in (0, 1)
+}
 
 int uniform_below(std::mt19937& engine, int limit) {
   return static_cast<int>(uniform(engine) * limit);

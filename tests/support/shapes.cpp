@@ -1,10 +1,10 @@
 #include "support/shapes.hpp"
 
-#include <cassert>
 #include <charconv>
 #include <cmath>
 #include <numbers>
 #include <optional>
+#include <stdexcept>
 
 #include <Eigen/Geometry>
 
@@ -34,7 +34,6 @@ Generators cubic_or_icosahedral(std::string_view symbol) {
   if (symbol == "Oh") return {turn(z_axis, 90.0), threefold, inversion};
   const Matrix3d fivefold = turn(Vector3d(0.0, 1.0, std::numbers::phi), 72.0);
   if (symbol == "I") return {threefold, fivefold};
-  assert(symbol == "Ih");
   return {threefold, fivefold, inversion};
 }
 
@@ -59,7 +58,6 @@ Generators generators(std::string_view symbol) {
   int n = 0;
   const char* end = symbol.data() + symbol.size();
   const char* rest = std::from_chars(symbol.data() + 1, end, n).ptr;
-  assert(n > 1);
   const std::string_view tail(rest, static_cast<std::size_t>(end - rest));
   if (symbol.front() == 'S') return {rotation_reflection(n)};
   if (tail == "d") return {rotation_reflection(2 * n), mirror(y_axis)};
@@ -72,6 +70,7 @@ Generators generators(std::string_view symbol) {
 
 std::vector<Vector3d> orbit(const Generators& generators, const Vector3d& point) {
   constexpr double same_point_angstrom = 1e-6;
+  constexpr std::size_t largest_group = 120;  // of those here: Ih
   std::vector<Vector3d> images = {point};
   for (std::size_t done = 0; done < images.size(); ++done) {
     for (const Matrix3d& g : generators) {
@@ -81,7 +80,8 @@ std::vector<Vector3d> orbit(const Generators& generators, const Vector3d& point)
         known = known || (image - other).norm() < same_point_angstrom;
       }
       if (!known) images.push_back(image);
-      assert(images.size() <= 240);  // twice the largest group used: generators must close
+      if (images.size() > largest_group)
+        throw std::logic_error("the generators make no finite group");
     }
   }
   return images;
@@ -120,7 +120,6 @@ irrepwise::Molecule from_orbits(const Generators& generators, const std::vector<
   std::vector<irrepwise::Atom> atoms;
   for (const Seed& seed : seeds) {
     const std::optional<int> number = irrepwise::atomic_number(seed.element);
-    assert(number.has_value());
     for (const Vector3d& position : orbit(generators, seed.position)) {
       atoms.push_back({number.value(), position});
     }

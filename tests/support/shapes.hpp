@@ -1,5 +1,5 @@
-// Building blocks for test molecules: generators of the point groups, orbits of points, and bonds by
-// length and angle. Knows nothing of the library's symmetry code, which it serves to test.
+// Building blocks for test molecules: generators of the point groups, orbits of points, and bonds
+// by length and angle. Knows nothing of the library's symmetry code, which it serves to test.
 #pragma once
 
 #include <string>
@@ -18,10 +18,11 @@ using Generators = std::vector<Eigen::Matrix3d>;
 [[nodiscard]] Eigen::Matrix3d turn(const Eigen::Vector3d& axis, double degrees);
 [[nodiscard]] Eigen::Matrix3d mirror(const Eigen::Vector3d& normal);
 
-/// Matrices that generate a finite point group: principal axis z; C2' along x in Dn and Dnh, and the
-/// xz plane a mirror in Cnv, Dnh and Dnd; cubic and icosahedral groups with C2 (T, I) or C4 (O) axes
-/// along x, y, z, a C3 along (1, 1, 1) and, in I, a C5 along (0, 1, golden ratio).
-/// @param symbol  "C1", "Cs", "Ci", "C3v", "D6h", "D4d", "S8", "T", "Td", "Th", "O", "Oh", "I", "Ih"
+/// Matrices that generate a finite point group: principal axis z; C2' along x in Dn and Dnh, and
+/// the xz plane a mirror in Cnv, Dnh and Dnd; cubic and icosahedral groups with C2 (T, I) or C4 (O)
+/// axes along x, y, z, a C3 along (1, 1, 1) and, in I, a C5 along (0, 1, golden ratio).
+/// @param symbol  "C1", "Cs", "Ci", "C3v", "D6h", "D4d", "S8", "T", "Td", "Th", "O", "Oh", "I",
+/// "Ih"
 [[nodiscard]] Generators generators(std::string_view symbol);
 
 /// @returns  the different images of a point under the group generated, the point itself first
@@ -38,12 +39,14 @@ using Generators = std::vector<Eigen::Matrix3d>;
 /// @param apex     where the bond starts
 /// @param axis     direction of the other bond, away from the apex
 /// @param degrees  between the bond and `axis`
-/// @param side     the end lies towards this direction, or at `azimuth_degrees` about `axis` from it
+/// @param side     the end lies towards this direction, or at `azimuth_degrees` about `axis` from
+/// it
 [[nodiscard]] Eigen::Vector3d bond_end(const Eigen::Vector3d& apex, const Eigen::Vector3d& axis,
                                        double length, double degrees, const Eigen::Vector3d& side,
                                        double azimuth_degrees = 0.0);
 
-/// @returns  the two ends of equal bonds that complete a centre with two neighbours to a tetrahedron
+/// @returns  the two ends of equal bonds that complete a centre with two neighbours to a
+/// tetrahedron
 [[nodiscard]] std::pair<Eigen::Vector3d, Eigen::Vector3d> two_bond_ends(
     const Eigen::Vector3d& centre, const Eigen::Vector3d& neighbour_a,
     const Eigen::Vector3d& neighbour_b, double length, double degrees);
