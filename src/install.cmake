@@ -15,6 +15,7 @@ install(DIRECTORY ${CMAKE_CURRENT_SOURCE_DIR}/ DESTINATION ${CMAKE_INSTALL_INCLU
   PATTERN "cli" EXCLUDE
   PATTERN "core/yaml.hpp" EXCLUDE
   PATTERN "basis/parameter_yaml.hpp" EXCLUDE
+  PATTERN "job/job_file.hpp" EXCLUDE
   PATTERN "output/json_text.hpp" EXCLUDE)
 
 install(EXPORT irrepwiseTargets NAMESPACE irrepwise:: DESTINATION ${package_dir})

@@ -1,6 +1,5 @@
 #include "cli/job_options.hpp"
 
-#include <cmath>
 #include <utility>
 
 #include <fmt/format.h>
@@ -21,9 +20,14 @@ auto named(const char* option, Action action) {
   }
 }
 
-double positive(const char* option, double value) {
-  if (!(std::isfinite(value) && value > 0.0)) {
-    throw Error(fmt::format("{}: found {}, expected a number above zero", option, value));
+// The same limits as in a job file: beyond them the decimal point has slipped.
+constexpr double largest_k = 10.0;
+constexpr double largest_tolerance_angstrom = 1.0;
+
+double in_range(const char* option, double value, double largest) {
+  if (!(value > 0.0 && value <= largest)) {
+    throw Error(
+        fmt::format("{}: found {}, expected more than 0 and at most {}", option, value, largest));
   }
   return value;
 }
@@ -78,9 +82,16 @@ Job read_job_with(const JobOptions& options) {
     if (rule != job.hueckel.rule) job.hueckel.k.reset();  // the job's K was meant for its rule
     job.hueckel.rule = rule;
   }
-  if (options.k) job.hueckel.k = positive("--k", *options.k);
+  if (options.k) {
+    if (!default_k(job.hueckel.rule)) {
+      throw Error(
+          fmt::format("--k: the rule {} has no K; leave it out", rule_name(job.hueckel.rule)));
+    }
+    job.hueckel.k = in_range("--k", *options.k, largest_k);
+  }
   if (options.tolerance)
-    job.symmetry.tolerance_angstrom = positive("--tolerance", *options.tolerance);
+    job.symmetry.tolerance_angstrom =
+        in_range("--tolerance", *options.tolerance, largest_tolerance_angstrom);
   if (!options.z.empty()) {
     job.symmetry.z = named("--z", [&] { return parse_axis(options.z, job.molecule); });
   }

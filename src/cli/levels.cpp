@@ -46,6 +46,11 @@ void check_usage(const LevelsOptions& options) {
   if (needs_json && format != Format::Json) {
     throw CLI::ValidationError("--matrices and --coefficients need --format json");
   }
+  for (const std::optional<double>& limit : {options.window.from_ev, options.window.to_ev}) {
+    if (limit && !std::isfinite(*limit)) {
+      throw CLI::ValidationError("--from and --to need a finite energy in eV");
+    }
+  }
   const bool has_range = options.window.from_ev || options.window.to_ev;
   if (has_range && (format == Format::Json || format == Format::Csv)) {
     throw CLI::ValidationError(
