@@ -4,6 +4,7 @@
 
 #include <fmt/format.h>
 
+#include "basis/atom_kinds.hpp"
 #include "cli/commands.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
@@ -22,8 +23,10 @@ struct LevelsOptions {
 };
 
 LevelsResult compute(const Job& job) {
-  MolecularSymmetry symmetry = find_symmetry(job.molecule, job.symmetry);
   Basis basis = make_basis(job.molecule, job.parameters, job.overrides);
+  SymmetryOptions symmetry_options = job.symmetry;
+  symmetry_options.kinds = atom_kinds(basis);
+  MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
   Levels levels = solve_levels(symmetry, basis, job.hueckel);
   Populations populations = mulliken_populations(symmetry, basis, levels);
   std::vector<std::string> warnings = geometry_warnings(job.molecule);

@@ -16,7 +16,7 @@ Molecule computed_molecule(const LevelsResult& result) {
 }
 
 Eigen::MatrixXd input_frame_orbitals(const LevelsResult& result, int level) {
-  Eigen::MatrixXd orbitals = result.levels.orbitals[static_cast<std::size_t>(level)];
+  Eigen::MatrixXd orbitals = level_orbitals(result.symmetry, result.basis, result.levels, level);
   const Eigen::Matrix3d back = result.symmetry.rotation.transpose();
   std::vector<Eigen::MatrixXd> turn;
   for (int l = 0; l <= max_l; ++l) turn.push_back(harmonic_rotation(l, back));
