@@ -9,7 +9,7 @@ namespace {
 
 using Replacement = std::pair<std::string_view, std::string_view>;
 
-constexpr std::array<Replacement, 22> replacements = {{
+constexpr std::array<Replacement, 26> replacements = {{
     {"\\", "\\textbackslash{}"},
     {"{", "\\{"},
     {"}", "\\}"},
@@ -25,6 +25,10 @@ constexpr std::array<Replacement, 22> replacements = {{
     {"−", "$-$"},
     {"–", "--"},
     {"ζ", "$\\zeta$"},
+    {"χ", "$\\chi$"},
+    {"∞", "$\\infty$"},
+    {"′", "$'$"},
+    {"″", "$''$"},
     {"σ", "$\\sigma$"},
     {"π", "$\\pi$"},
     {"δ", "$\\delta$"},

@@ -3,11 +3,11 @@
 
     run.py --program DIR --inputs DIR [--rewrite] TRANSCRIPT...
 
-A transcript is text. A line that starts with "$ " is a bash command, lines after it that start
-with "> " go on with it, and every other line up to the next command is what it prints, standard
-error included. A last line "[exit 1]" states an exit code other than 0. Lines before the first
-command are comment. Each transcript runs in an empty folder of its own that holds a link `inputs`
-to the shipped inputs; the folder of the program stands first in PATH.
+A transcript is text. A line that starts with "$ " is a bash command, lines right after it that
+start with "> " go on with it, lines that start with "%%" are comment, and every other line up to
+the next command or comment is what the command prints, standard error included. A last line
+"[exit 1]" states an exit code other than 0. Each transcript runs in an empty folder of its own that
+holds a link `inputs` to the shipped inputs; the folder of the program stands first in PATH.
 
 --rewrite puts what was printed in place of what was expected. Review the difference before you
 commit it: it is the specification.
@@ -22,19 +22,30 @@ import sys
 import tempfile
 
 
+class Step:
+    def __init__(self):
+        self.comment, self.command, self.output = [], [], []
+
+
 def parse(text):
-    """Returns the comment lines and a list of (command lines, expected lines)."""
-    comment, steps = [], []
+    steps = [Step()]
     for line in text.splitlines():
-        if line.startswith("$ "):
-            steps.append(([line[2:]], []))
-        elif steps and line.startswith("> ") or line == ">":
-            steps[-1][0].append(line[2:])
-        elif steps:
-            steps[-1][1].append(line)
+        step = steps[-1]
+        if line.startswith("%%") or line.startswith("$ "):
+            if step.command:
+                step = Step()
+                steps.append(step)
+            if line.startswith("$ "):
+                step.command.append(line[2:])
+            else:
+                step.comment.append(line)
+        elif step.command and not step.output and (line == ">" or line.startswith("> ")):
+            step.command.append(line[2:])
+        elif step.command:
+            step.output.append(line)
         else:
-            comment.append(line)
-    return comment, steps
+            sys.exit(f"no command before the line: {line}")
+    return steps
 
 
 def run(command, folder, environment):
@@ -46,19 +57,21 @@ def run(command, folder, environment):
     return lines + ([f"[exit {done.returncode}]"] if done.returncode else [])
 
 
-def render(comment, steps):
-    lines = list(comment)
-    for command, output in steps:
-        lines.append("$ " + command[0])
-        lines += [("> " + line).rstrip() for line in command[1:]]
-        lines += output
+def render(steps):
+    lines = []
+    for step in steps:
+        lines += step.comment
+        if step.command:
+            lines.append("$ " + step.command[0])
+            lines += [("> " + line).rstrip() for line in step.command[1:]]
+        lines += step.output
     return "\n".join(lines) + "\n"
 
 
 def replay(path, options):
     """Runs one transcript; returns whether it came out as written."""
     expected = path.read_text(encoding="utf-8")
-    comment, steps = parse(expected)
+    steps = parse(expected)
     environment = {"PATH": f"{options.program.resolve()}:{os.environ['PATH']}",
                    "LC_ALL": "C.UTF-8", "HOME": "/nonexistent"}
     for name in ("ASAN_OPTIONS", "UBSAN_OPTIONS"):
@@ -66,9 +79,10 @@ def replay(path, options):
             environment[name] = os.environ[name]
     with tempfile.TemporaryDirectory() as folder:
         os.symlink(options.inputs.resolve(), os.path.join(folder, "inputs"))
-        steps = [(command, run("\n".join(command), folder, environment))
-                 for command, _ in steps]
-    found = render(comment, steps)
+        for step in steps:
+            if step.command:
+                step.output = run("\n".join(step.command), folder, environment)
+    found = render(steps)
     if found == expected:
         return True
     if options.rewrite:
