@@ -6,7 +6,7 @@
 #include <fmt/format.h>
 
 #include "basis/parameter_yaml.hpp"
-#include "core/error.hpp"
+#include "core/parse.hpp"
 #include "job/job_file.hpp"
 #include "molecule/element.hpp"
 #include "molecule/label.hpp"
@@ -31,7 +31,7 @@ void read_target(const YamlNode& node, const Molecule& molecule, ParameterOverri
   const std::string& symbol = element->word("the symbol of an element");
   change.atomic_number = atomic_number(symbol);
   if (!change.atomic_number) {
-    element->fail(fmt::format("'{}' is not an element{}", symbol, symbol_hint(symbol)));
+    element->fail(fmt::format("{} is not an element{}", quoted(symbol), symbol_hint(symbol)));
   }
   const bool there =
       std::any_of(molecule.atoms().begin(), molecule.atoms().end(),
