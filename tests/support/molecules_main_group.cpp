@@ -8,7 +8,7 @@
 namespace {
 
 using Eigen::Vector3d;
-using shapes::bond_end, shapes::polygon_radius, shapes::ring;
+using shapes::bond_end;
 
 const Vector3d origin = Vector3d::Zero();
 const Vector3d x = Vector3d::UnitX();
