@@ -13,7 +13,8 @@ namespace irrepwise {
 inline constexpr int max_l = 3;  // s, p, d, f
 
 /// One or two Slater functions of the same n with coefficients. Always normalised: the constructor
-/// scales the coefficients, and refuses a contraction whose norm is further than 0.01 from 1.
+/// scales the coefficients, and refuses a contraction whose norm, the integral of R^2 r^2, is
+/// further than 0.01 from 1.
 class ContractedRadial {
  public:
   struct Term {
@@ -24,7 +25,8 @@ class ContractedRadial {
   static constexpr double max_norm_error = 0.01;  // published pairs are rounded to four figures
 
   /// @param terms   one or two, of the same n
-  /// @throws Error  with the norm found and what is expected
+  /// @throws Error  for another number of terms, unequal n, a coefficient that is not finite, or a
+  ///                norm that is not 1; with what was found and what is expected
   explicit ContractedRadial(std::vector<Term> terms);
 
   [[nodiscard]] std::span<const Term> terms() const noexcept { return terms_; }
@@ -45,7 +47,7 @@ struct ShellParameters {
 
 /// One shell on one atom of a molecule: 2l + 1 orbitals in the order of the conventions.
 struct Shell {
-  int atom = 0;           // index from 0
+  int atom = 0;  // index from 0
   int l = 0;
   double h_ii_ev = 0.0;
   ContractedRadial radial;
