@@ -25,8 +25,8 @@ struct ParameterOverride {
 /// conventions.
 struct Basis {
   std::vector<Shell> shells;
-  std::vector<int> first_shell;         // per atom, and one past the end: n_atoms + 1
-  std::vector<int> valence_electrons;   // per atom
+  std::vector<int> first_shell;        // per atom, and one past the end: n_atoms + 1
+  std::vector<int> valence_electrons;  // per atom
   int n_orbitals = 0;
 
   /// @returns  the electrons of the neutral molecule minus its charge

@@ -46,7 +46,11 @@ std::string nearest_word(std::string_view word, std::span<const std::string> kno
 std::string joined(std::span<const std::string> words, std::string_view last) {
   std::string text;
   for (std::size_t i = 0; i < words.size(); ++i) {
-    if (i > 0) text += i + 1 == words.size() ? " " + std::string(last) + " " : ", ";
+    if (i > 0 && i + 1 == words.size()) {
+      text.append(" ").append(last).append(" ");
+    } else if (i > 0) {
+      text += ", ";
+    }
     text += words[i];
   }
   return text;

@@ -21,7 +21,8 @@ struct Job {
   std::vector<ParameterOverride> overrides;
   SymmetryOptions symmetry;
   HueckelOptions hueckel;
-  std::vector<std::string> source_files;  // the job file and every file it read, for overwriting checks
+  // The job file and every file it read, so that no output overwrites an input.
+  std::vector<std::string> source_files;
 };
 
 /// Reads a job: a name that ends in .yaml or .yml is a job file, any other an XYZ file.

@@ -6,25 +6,11 @@
 
 #include <Eigen/Core>
 
+#include "symmetry/classes.hpp"
+#include "symmetry/irrep.hpp"
 #include "symmetry/schoenflies.hpp"
 
 namespace irrepwise {
-
-/// One irreducible representation over the real numbers. A pair of complex conjugate irreps is one
-/// real irrep of dimension 2 with `complex_pair` set: its matrices are then rotations by the phase
-/// of the character, D(g) = [cos a, -sin a; sin a, cos a].
-struct Irrep {
-  std::string label;  // "A1g", "E1\"", "T2", "Sigmag+": ASCII, capital
-  int dimension = 1;
-  bool complex_pair = false;
-  std::vector<Eigen::MatrixXd> matrices;  // by operation, real orthogonal, `dimension x dimension`
-  std::vector<double> characters;         // by operation: traces of the matrices
-};
-
-struct ConjugacyClass {
-  std::string symbol;           // "2C4", "3C2'", "σh" as "sigmah": ASCII; the size is part of it
-  std::vector<int> operations;  // indices, ascending
-};
 
 /// Always valid: the operations are closed and in the standard frame of the conventions, the first
 /// is the identity, and the irreps obey the orthogonality theorem.
@@ -38,7 +24,9 @@ class PointGroup {
   explicit PointGroup(const Schoenflies& symbol);
 
   [[nodiscard]] const Schoenflies& symbol() const noexcept { return symbol_; }
-  [[nodiscard]] const std::vector<Eigen::Matrix3d>& operations() const noexcept;
+  [[nodiscard]] const std::vector<Eigen::Matrix3d>& operations() const noexcept {
+    return operations_;
+  }
   [[nodiscard]] int order() const noexcept { return static_cast<int>(operations_.size()); }
   [[nodiscard]] int product(int g, int h) const { return products_[g * order() + h]; }  // g after h
   [[nodiscard]] int inverse(int g) const { return inverses_[g]; }
@@ -57,11 +45,5 @@ class PointGroup {
   std::vector<ConjugacyClass> classes_;
   std::vector<Irrep> irreps_;
 };
-
-/// "A1g" -> "a1g": the label of a level of that irrep, ASCII as in JSON ("e1\"", "sigmag+").
-[[nodiscard]] std::string level_label(const std::string& irrep_label);
-
-/// ASCII label, capital or level, for people: "sigmag+" -> "σg+", "E1\"" stays.
-[[nodiscard]] std::string readable_label(const std::string& ascii_label);
 
 }  // namespace irrepwise

@@ -1,0 +1,107 @@
+#include "job/job.hpp"
+
+#include <algorithm>
+#include <filesystem>
+#include <system_error>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "basis/parameter_yaml.hpp"
+#include "core/error.hpp"
+#include "core/file.hpp"
+#include "core/yaml.hpp"
+#include "job/job_file.hpp"
+#include "molecule/xyz.hpp"
+
+namespace irrepwise {
+namespace {
+
+// One spelling for one file, so that ./a.yaml and a.yaml are seen to be the same.
+std::string canonical(const std::string& path) {
+  std::error_code code;
+  const std::filesystem::path found = std::filesystem::weakly_canonical(path, code);
+  return code ? path : found.string();
+}
+
+// Reads a file that another names; where it cannot be read, the naming value is to blame.
+std::string read_named(const YamlNode& from, const std::string& path) {
+  try {
+    return read_text_file(path);
+  } catch (const Error& error) {
+    throw error_at(from.place(), error);
+  }
+}
+
+// The molecule with its own title, and defaults for all else.
+Job job_of(Molecule molecule) {
+  std::string title = molecule.title();
+  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}};
+}
+
+Job parse_job(const std::string& text, const std::string& path, FileChain& files) {
+  files.open.push_back(path);
+  files.read.push_back(path);
+  const YamlNode node = YamlNode::parse(text, path);
+  node.expect_keys("a job", {"title", "geometry", "charge", "multiplicity", "occupations",
+                             "parameters", "overrides", "rule", "k", "symmetry"});
+  Job job = job_of(read_geometry(node.at("geometry"), path, files));
+  if (const YamlNode* const title = node.find("title")) job.title = title->word("a title");
+  if (const YamlNode* const charge = node.find("charge")) {
+    job.molecule = job.molecule.with_charge(charge->whole_number("a whole number of charges"));
+  }
+  if (const YamlNode* const parameters = node.find("parameters")) {
+    job.parameters = read_job_parameters(*parameters, path, files);
+  }
+  if (const YamlNode* const overrides = node.find("overrides")) {
+    job.overrides = read_overrides(*overrides, job.molecule, job.parameters);
+  }
+  if (const YamlNode* const symmetry = node.find("symmetry")) {
+    job.symmetry = read_symmetry(*symmetry, job.molecule);
+  }
+  job.hueckel = read_hueckel(node);
+  files.open.pop_back();
+  job.source_files = files.read;
+  return job;
+}
+
+}  // namespace
+
+Molecule read_geometry_file(const YamlNode& from, const std::string& path, FileChain& files) {
+  if (!is_job_file(path)) {
+    const std::string text = read_named(from, path);
+    files.read.push_back(path);
+    return parse_xyz(text, path).molecule;
+  }
+  for (const std::string& open : files.open) {
+    if (canonical(open) != canonical(path)) continue;
+    std::string chain;
+    for (const std::string& file : files.open) chain += file + " → ";
+    from.fail(fmt::format("the geometry leads back to this file: {}{}; name a file with atoms",
+                          chain, path));
+  }
+  return parse_job(read_named(from, path), path, files).molecule;
+}
+
+ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
+                                 FileChain& files) {
+  if (node.kind() == YamlNode::Kind::Map) return read_parameter_set(node, "in place");
+  const std::string& name = node.word("`published`, the name of a file, or a parameter set");
+  if (name == "published") return published_parameters();
+  const std::string path = path_beside(beside, name);
+  const std::string text = read_named(node, path);
+  files.read.push_back(path);
+  return parse_parameters(text, path);
+}
+
+Job read_job(const std::string& path) {
+  if (is_job_file(path)) {
+    FileChain files;
+    return parse_job(read_text_file(path), path, files);
+  }
+  Job job = job_of(read_xyz(path).molecule);
+  job.source_files = {path};
+  return job;
+}
+
+}  // namespace irrepwise

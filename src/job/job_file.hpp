@@ -1,0 +1,56 @@
+// The parts of a job file, each read by a function of its own.
+//
+// Private: not installed, since YAML stays out of public headers.
+#pragma once
+
+#include <map>
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "basis/basis.hpp"
+#include "basis/parameter_set.hpp"
+#include "core/yaml.hpp"
+#include "hueckel/options.hpp"
+#include "molecule/molecule.hpp"
+#include "symmetry/options.hpp"
+
+namespace irrepwise {
+
+/// The files that lead to the one being read, each named by the one before: a file that comes up
+/// twice includes itself.
+struct FileChain {
+  std::vector<std::string> open;  // from the outermost
+  std::vector<std::string> read;  // every file read so far
+};
+
+/// `geometry`: the name of a file, or `file`, or `atoms` with an optional `unit`.
+/// @param beside  the job file
+/// @returns       a molecule with the charge that its file states, otherwise 0
+[[nodiscard]] Molecule read_geometry(const YamlNode& node, const std::string& beside,
+                                     FileChain& files);
+
+/// `parameters`: `published`, the name of a file, or a parameter set in place.
+[[nodiscard]] ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
+                                               FileChain& files);
+
+/// `overrides`: a list, each for an `element` or an `atom`.
+[[nodiscard]] std::vector<ParameterOverride> read_overrides(const YamlNode& node,
+                                                            const Molecule& molecule,
+                                                            const ParameterSet& parameters);
+
+/// `symmetry`: `tolerance`, `axes`, `subgroup`.
+[[nodiscard]] SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule);
+
+/// `rule`, `k`, `multiplicity` and `occupations` of the job itself.
+[[nodiscard]] HueckelOptions read_hueckel(const YamlNode& job);
+
+/// The atoms of a job or an XYZ file, through a chain of files.
+/// @param from  the value that names the file; its place is blamed where the file cannot be read
+[[nodiscard]] Molecule read_geometry_file(const YamlNode& from, const std::string& path,
+                                          FileChain& files);
+
+/// Whether a name ends as those of job files do: .yaml or .yml.
+[[nodiscard]] bool is_job_file(const std::string& path);
+
+}  // namespace irrepwise

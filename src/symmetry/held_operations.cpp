@@ -1,0 +1,271 @@
+#include "symmetry/held_operations.hpp"
+
+#include <algorithm>
+#include <array>
+#include <cmath>
+#include <map>
+#include <optional>
+#include <set>
+
+#include <Eigen/Eigenvalues>
+#include <Eigen/Geometry>
+#include <Eigen/SVD>
+
+#include "symmetry/operation.hpp"
+
+namespace irrepwise {
+namespace {
+
+Eigen::Matrix3Xd centred(const Molecule& molecule) {
+  Eigen::Matrix3Xd positions = molecule.positions();
+  positions.colwise() -= positions.rowwise().mean().eval();
+  return positions;
+}
+
+// Atoms that may be images of each other: same element, same distance from the centroid. Distances
+// are chained, so that no true image is lost where many lie close together.
+std::vector<std::vector<int>> candidate_sets(const Molecule& molecule,
+                                             const Eigen::Matrix3Xd& positions, double tolerance) {
+  std::vector<int> order(molecule.size());
+  for (int i = 0; i < molecule.size(); ++i) order[i] = i;
+  const auto element = [&](int i) { return molecule.atoms()[i].atomic_number; };
+  const Eigen::VectorXd radius = positions.colwise().norm();
+  std::sort(order.begin(), order.end(), [&](int a, int b) {
+    if (element(a) != element(b)) return element(a) < element(b);
+    return radius[a] != radius[b] ? radius[a] < radius[b] : a < b;
+  });
+  std::vector<std::vector<int>> sets;
+  for (int atom : order) {
+    const bool joins = !sets.empty() && element(sets.back().back()) == element(atom) &&
+                       radius[atom] - radius[sets.back().back()] <= tolerance;
+    if (joins) {
+      sets.back().push_back(atom);
+    } else {
+      sets.push_back({atom});
+    }
+  }
+  return sets;
+}
+
+// sin of the angle at the centroid between two atoms, or 0 for an atom at the centroid.
+double sine_between(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
+  const double product = a.norm() * b.norm();
+  return product < 1e-6 ? 0.0 : a.cross(b).norm() / product;
+}
+
+struct ReferencePair {
+  int a = 0;
+  int b = 0;
+  std::size_t set_a = 0;
+  std::size_t set_b = 0;
+};
+
+// The pair whose sets give fewest candidates; within the two sets, the pair nearest to a right
+// angle, so that the frame it spans is as sharp as can be.
+std::optional<ReferencePair> reference_pair(const std::vector<std::vector<int>>& sets,
+                                            const Eigen::Matrix3Xd& positions) {
+  std::optional<ReferencePair> best;
+  double best_cost = 0.0, best_sine = 0.0;
+  for (std::size_t i = 0; i < sets.size(); ++i) {
+    for (std::size_t j = 0; j < sets.size(); ++j) {
+      const double cost = static_cast<double>(sets[i].size()) * static_cast<double>(sets[j].size());
+      if (best && cost > best_cost) continue;
+      for (int b : sets[j]) {
+        const int a = sets[i].front();
+        const double sine = sine_between(positions.col(a), positions.col(b));
+        if (sine < 0.1) continue;
+        if (!best || cost < best_cost || sine > best_sine + 1e-6) {
+          best = {a, b, i, j};
+          best_cost = cost;
+          best_sine = sine;
+        }
+      }
+    }
+  }
+  return best;
+}
+
+// Right-handed frame with x along a and b in the xy plane.
+Eigen::Matrix3d pair_frame(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
+  Eigen::Matrix3d frame;
+  frame.col(0) = a.normalized();
+  frame.col(2) = a.cross(b).normalized();
+  frame.col(1) = frame.col(2).cross(frame.col(0));
+  return frame;
+}
+
+// The orthogonal matrix of given handedness that takes the positions nearest to their images
+// (Kabsch's solution by singular values).
+Eigen::Matrix3d best_fit(const Eigen::Matrix3Xd& positions, const std::vector<int>& images,
+                         int handedness) {
+  Eigen::Matrix3d covariance = Eigen::Matrix3d::Zero();
+  for (Eigen::Index i = 0; i < positions.cols(); ++i) {
+    covariance += positions.col(images[static_cast<std::size_t>(i)]) * positions.col(i).transpose();
+  }
+  const Eigen::JacobiSVD<Eigen::Matrix3d> svd(covariance, Eigen::ComputeFullU | Eigen::ComputeFullV);
+  Eigen::Vector3d signs(1, 1, 1);
+  const double natural = (svd.matrixU() * svd.matrixV().transpose()).determinant();
+  if (natural * handedness < 0) signs[2] = -1;
+  return svd.matrixU() * signs.asDiagonal() * svd.matrixV().transpose();
+}
+
+class Matcher {
+ public:
+  Matcher(const Eigen::Matrix3Xd& positions, const std::vector<std::vector<int>>& sets,
+          double tolerance)
+      : positions_(positions), sets_(sets), tolerance_(tolerance) {}
+
+  // The operation fitted to the atoms, or nothing where it does not hold.
+  [[nodiscard]] std::optional<HeldOperation> held(const Eigen::Matrix3d& rough) const {
+    const int handedness = determinant_sign(rough);
+    // The rough matrix rests on two atoms and carries their errors to all others; the reach
+    // allows for that, the tolerance itself is applied to the fitted operation.
+    std::optional<std::vector<int>> images = match(rough, 4.0 * tolerance_ + 1e-6);
+    HeldOperation operation{rough, {}, 0.0};
+    for (int pass = 0; pass < 3 && images; ++pass) {
+      const bool settled = operation.images == *images;
+      operation.images = *images;
+      operation.matrix = best_fit(positions_, operation.images, handedness);
+      if (settled) break;
+      images = match(operation.matrix, 2.0 * tolerance_ + 1e-6);
+    }
+    if (!images) return std::nullopt;
+    for (Eigen::Index i = 0; i < positions_.cols(); ++i) {
+      const double distance = (operation.matrix * positions_.col(i) -
+                               positions_.col(operation.images[static_cast<std::size_t>(i)]))
+                                  .norm();
+      operation.displacement = std::max(operation.displacement, distance);
+    }
+    if (operation.displacement > tolerance_) return std::nullopt;
+    return operation;
+  }
+
+ private:
+  // One-to-one, each to the nearest atom of its candidate set within reach.
+  [[nodiscard]] std::optional<std::vector<int>> match(const Eigen::Matrix3d& matrix,
+                                                      double reach) const {
+    std::vector<int> images(static_cast<std::size_t>(positions_.cols()), -1);
+    std::vector<bool> taken(images.size(), false);
+    for (const std::vector<int>& set : sets_) {
+      for (int atom : set) {
+        const Eigen::Vector3d target = matrix * positions_.col(atom);
+        int nearest = -1;
+        double nearest_squared = reach * reach;
+        for (int other : set) {
+          const double squared = (positions_.col(other) - target).squaredNorm();
+          if (squared <= nearest_squared) {
+            nearest = other;
+            nearest_squared = squared;
+          }
+        }
+        if (nearest < 0 || taken[nearest]) return std::nullopt;
+        taken[nearest] = true;
+        images[atom] = nearest;
+      }
+    }
+    return images;
+  }
+
+  const Eigen::Matrix3Xd& positions_;
+  const std::vector<std::vector<int>>& sets_;
+  double tolerance_;
+};
+
+}  // namespace
+
+Eigen::Vector3d best_line(const Molecule& molecule) {
+  const Eigen::Matrix3Xd positions = centred(molecule);
+  const Eigen::SelfAdjointEigenSolver<Eigen::Matrix3d> solver(positions * positions.transpose());
+  return solver.eigenvectors().col(2);
+}
+
+Shape molecular_shape(const Molecule& molecule, double tolerance_angstrom) {
+  if (molecule.size() == 1) return Shape::SingleAtom;
+  const Eigen::Matrix3Xd positions = centred(molecule);
+  const Eigen::Vector3d line = best_line(molecule);
+  for (Eigen::Index i = 0; i < positions.cols(); ++i) {
+    const Eigen::Vector3d position = positions.col(i);
+    if ((position - line.dot(position) * line).norm() > tolerance_angstrom) return Shape::General;
+  }
+  return Shape::Linear;
+}
+
+std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
+                                                double tolerance_angstrom) {
+  const Eigen::Matrix3Xd positions = centred(molecule);
+  const auto sets = candidate_sets(molecule, positions, tolerance_angstrom);
+  const Matcher matcher(positions, sets, tolerance_angstrom);
+
+  HeldOperation identity{Eigen::Matrix3d::Identity(), {}, 0.0};
+  for (int i = 0; i < molecule.size(); ++i) identity.images.push_back(i);
+  std::vector<HeldOperation> operations = {identity};
+
+  const auto pair = reference_pair(sets, positions);
+  if (!pair) return operations;
+  const Eigen::Vector3d a = positions.col(pair->a), b = positions.col(pair->b);
+  const Eigen::Matrix3d from = pair_frame(a, b);
+  const double length = (a - b).norm();
+  const double slack = 2.0 * tolerance_angstrom + 1e-9;
+
+  std::set<std::pair<std::vector<int>, int>> known = {{identity.images, 1}};
+  for (int image_a : sets[pair->set_a]) {
+    for (int image_b : sets[pair->set_b]) {
+      const Eigen::Vector3d to_a = positions.col(image_a), to_b = positions.col(image_b);
+      if (std::abs((to_a - to_b).norm() - length) > slack) continue;
+      if (sine_between(to_a, to_b) < 0.02) continue;
+      const Eigen::Matrix3d to = pair_frame(to_a, to_b);
+      for (int handedness : {1, -1}) {
+        const Eigen::Matrix3d rough =
+            to * Eigen::Vector3d(1, 1, handedness).asDiagonal() * from.transpose();
+        auto operation = matcher.held(rough);
+        if (operation && known.insert({operation->images, handedness}).second) {
+          operations.push_back(std::move(*operation));
+        }
+      }
+    }
+  }
+  return operations;
+}
+
+std::vector<int> partial_products(const Molecule& molecule,
+                                  const std::vector<HeldOperation>& operations) {
+  // Two atoms not on one line with the centroid tell operations apart; which two does not matter.
+  const Eigen::Matrix3Xd positions = centred(molecule);
+  int atom_a = 0, atom_b = 0;
+  double best = -1.0;
+  for (int i = 0; i < molecule.size(); ++i) {
+    const int far = [&] {
+      Eigen::Index index = 0;
+      positions.colwise().norm().maxCoeff(&index);
+      return static_cast<int>(index);
+    }();
+    const double area = positions.col(far).cross(positions.col(i)).norm();
+    if (area > best) {
+      best = area;
+      atom_a = far;
+      atom_b = i;
+    }
+  }
+  using Key = std::array<int, 3>;
+  std::map<Key, int> index;
+  std::vector<int> handedness;
+  for (std::size_t g = 0; g < operations.size(); ++g) {
+    handedness.push_back(determinant_sign(operations[g].matrix));
+    index[{operations[g].images[atom_a], operations[g].images[atom_b], handedness.back()}] =
+        static_cast<int>(g);
+  }
+  const std::size_t size = operations.size();
+  std::vector<int> products(size * size, -1);
+  for (std::size_t g = 0; g < size; ++g) {
+    for (std::size_t h = 0; h < size; ++h) {
+      const Key key = {operations[g].images[operations[h].images[atom_a]],
+                       operations[g].images[operations[h].images[atom_b]],
+                       handedness[g] * handedness[h]};
+      const auto found = index.find(key);
+      if (found != index.end()) products[g * size + h] = found->second;
+    }
+  }
+  return products;
+}
+
+}  // namespace irrepwise
