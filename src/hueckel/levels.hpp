@@ -3,12 +3,14 @@
 
 #include <optional>
 #include <string>
+#include <variant>
 #include <vector>
 
 #include <Eigen/Core>
 
 #include "basis/basis.hpp"
 #include "hueckel/options.hpp"
+#include "salc/salc_basis.hpp"
 #include "symmetry/molecular_symmetry.hpp"
 
 namespace irrepwise {
@@ -22,6 +24,13 @@ struct Level {
   int column = 0;           // index within the block of its irrep
 };
 
+/// Orbitals of one irrep in the SALC basis, a column per level, `n_salcs x n_levels`: real, or
+/// complex for a pair of complex conjugate irreps. Normalised (C^H S C = 1), phases fixed.
+struct LevelVectors {
+  std::variant<Eigen::MatrixXd, Eigen::MatrixXcd> coefficients;
+  std::variant<Eigen::MatrixXd, Eigen::MatrixXcd> times_overlap;  // S times the same
+};
+
 struct Frontier {
   std::optional<int> homo;  // index of the highest level that holds electrons
   std::optional<int> lumo;  // index of the lowest level that holds none
@@ -30,7 +39,8 @@ struct Frontier {
 
 struct Levels {
   std::vector<Level> levels;  // ascending energy; ties in the order of the irreps
-  std::vector<Eigen::MatrixXd> orbitals;  // per level: `n_orbitals x degeneracy`, standard frame
+  SalcBasis salcs;
+  std::vector<LevelVectors> vectors;  // per irrep
   int electrons = 0;
   Rule rule = Rule::Weighted;
   std::optional<double> k;
@@ -38,6 +48,11 @@ struct Levels {
   double sum_of_occupied_ev = 0.0;
   std::vector<std::string> warnings;
 };
+
+/// The orbitals of one level, one column per partner, phases by the conventions.
+/// @returns  `n_orbitals x degeneracy`, standard frame, orbitals in the order of the basis
+[[nodiscard]] Eigen::MatrixXd level_orbitals(const MolecularSymmetry& symmetry, const Basis& basis,
+                                             const Levels& levels, int level);
 
 /// @returns  "2e1g" in ASCII, as in JSON
 [[nodiscard]] std::string level_name(const PointGroup& group, const Level& level);

@@ -48,7 +48,12 @@ Job parse_job(const std::string& text, const std::string& path, FileChain& files
   Job job = job_of(read_geometry(node.at("geometry"), path, files));
   if (const YamlNode* const title = node.find("title")) job.title = title->word("a title");
   if (const YamlNode* const charge = node.find("charge")) {
-    job.molecule = job.molecule.with_charge(charge->whole_number("a whole number of charges"));
+    const int value = charge->whole_number("a whole number of charges");
+    try {
+      job.molecule = job.molecule.with_charge(value);
+    } catch (const Error& error) {
+      throw error_at(charge->place(), error);
+    }
   }
   if (const YamlNode* const parameters = node.find("parameters")) {
     job.parameters = read_job_parameters(*parameters, path, files);

@@ -20,10 +20,17 @@ std::string numbered(const std::vector<Atom>& atoms, int index) {
                      element_symbol(atoms[static_cast<std::size_t>(index)].atomic_number));
 }
 
+// So that counting electrons cannot overflow; what charge makes sense depends on the parameters.
+int checked_charge(int charge) {
+  constexpr int largest = 100000;
+  if (charge >= -largest && charge <= largest) return charge;
+  throw Error(fmt::format("found a charge of {}, expected {} to {}", charge, -largest, largest));
+}
+
 }  // namespace
 
 Molecule::Molecule(std::vector<Atom> atoms, int charge, std::string title)
-    : atoms_(std::move(atoms)), charge_(charge), title_(std::move(title)) {
+    : atoms_(std::move(atoms)), charge_(checked_charge(charge)), title_(std::move(title)) {
   if (atoms_.empty()) throw Error("a molecule needs at least one atom");
   for (std::size_t i = 0; i < atoms_.size(); ++i) {
     const int z = atoms_[i].atomic_number;
@@ -58,7 +65,7 @@ Molecule Molecule::with_positions(const Eigen::Ref<const Eigen::Matrix3Xd>& posi
 
 Molecule Molecule::with_charge(int charge) const {
   Molecule changed = *this;
-  changed.charge_ = charge;
+  changed.charge_ = checked_charge(charge);
   return changed;
 }
 

@@ -14,7 +14,7 @@ struct Atom {
 };
 
 /// Atoms in the order of the input, with a charge. Always valid: at least one atom, known elements,
-/// finite positions, no two atoms closer than `min_distance_angstrom`.
+/// finite positions, no two atoms closer than `min_distance_angstrom`, a charge of at most 100 000.
 class Molecule {
  public:
   static constexpr double min_distance_angstrom = 0.3;  // nearer atoms are a slip in the input

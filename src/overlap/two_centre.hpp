@@ -15,10 +15,9 @@ namespace irrepwise {
 /// @param l_a, l_b       0 to 3, smaller than the n of their radial function
 /// @param distance_bohr  positive and finite
 /// @returns              no unit, by |m|, never NaN: far apart they fall to zero
-/// @accuracy             1e-14 absolute for n <= 7, l <= 3, 0.5 <= zeta <= 20, distance >= 0.5
-/// (worst
-///                       found 1.1e-14), and for every zeta a SlaterRadial admits with distance >=
-///                       0.1
+/// @accuracy             2e-14 absolute for n <= 7, l <= 3, 0.5 <= zeta <= 20, distance >= 0.5;
+///                       worst found 1.1e-14. The same for every zeta that a SlaterRadial admits,
+///                       distance >= 0.1
 /// @source               see overlap_table.hpp
 [[nodiscard]] DiatomicOverlaps diatomic_overlaps(const ContractedRadial& radial_a, int l_a,
                                                  const ContractedRadial& radial_b, int l_b,

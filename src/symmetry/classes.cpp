@@ -61,7 +61,8 @@ std::tuple<int, int, int, std::string> sort_key(const SymmetryOperation& op, con
   static constexpr int order_of_kind[] = {0, 1, 2, 4, 3};  // as OperationKind: mirrors last
   const int kind = order_of_kind[static_cast<int>(op.kind)];
   const bool mirror = op.kind == OperationKind::Reflection;
-  return {kind, mirror ? 0 : -op.n, op.k, mark};
+  // Mirrors in the order h, v, d; other marks (primes, axes in brackets) sort as they are.
+  return {kind, mirror ? 0 : -op.n, op.k, mirror && mark == "d" ? "w" : mark};
 }
 
 std::vector<ConjugacyClass> linear_classes(const std::vector<Eigen::Matrix3d>& operations,

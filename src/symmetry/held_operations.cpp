@@ -9,6 +9,7 @@
 
 #include <Eigen/Eigenvalues>
 #include <Eigen/Geometry>
+#include <Eigen/LU>
 #include <Eigen/SVD>
 
 #include "symmetry/operation.hpp"
@@ -25,18 +26,21 @@ Eigen::Matrix3Xd centred(const Molecule& molecule) {
 // Atoms that may be images of each other: same element, same distance from the centroid. Distances
 // are chained, so that no true image is lost where many lie close together.
 std::vector<std::vector<int>> candidate_sets(const Molecule& molecule,
+                                             const std::vector<int>& kinds,
                                              const Eigen::Matrix3Xd& positions, double tolerance) {
   std::vector<int> order(molecule.size());
   for (int i = 0; i < molecule.size(); ++i) order[i] = i;
-  const auto element = [&](int i) { return molecule.atoms()[i].atomic_number; };
+  const auto sort_of = [&](int i) {
+    return std::pair(molecule.atoms()[i].atomic_number, kinds.empty() ? 0 : kinds[i]);
+  };
   const Eigen::VectorXd radius = positions.colwise().norm();
   std::sort(order.begin(), order.end(), [&](int a, int b) {
-    if (element(a) != element(b)) return element(a) < element(b);
+    if (sort_of(a) != sort_of(b)) return sort_of(a) < sort_of(b);
     return radius[a] != radius[b] ? radius[a] < radius[b] : a < b;
   });
   std::vector<std::vector<int>> sets;
   for (int atom : order) {
-    const bool joins = !sets.empty() && element(sets.back().back()) == element(atom) &&
+    const bool joins = !sets.empty() && are_alike(molecule, kinds, sets.back().back(), atom) &&
                        radius[atom] - radius[sets.back().back()] <= tolerance;
     if (joins) {
       sets.back().push_back(atom);
@@ -47,10 +51,11 @@ std::vector<std::vector<int>> candidate_sets(const Molecule& molecule,
   return sets;
 }
 
-// sin of the angle at the centroid between two atoms, or 0 for an atom at the centroid.
-double sine_between(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
-  const double product = a.norm() * b.norm();
-  return product < 1e-6 ? 0.0 : a.cross(b).norm() / product;
+// How sharply two atoms set a frame about the centroid, Å: the smaller of their distances from it
+// times the sine of the angle between them.
+double sharpness(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
+  const double longer = std::max(a.norm(), b.norm());
+  return longer < 1e-6 ? 0.0 : a.cross(b).norm() / longer;
 }
 
 struct ReferencePair {
@@ -60,26 +65,34 @@ struct ReferencePair {
   std::size_t set_b = 0;
 };
 
-// The pair whose sets give fewest candidates; within the two sets, the pair nearest to a right
-// angle, so that the frame it spans is as sharp as can be.
+// The pair whose sets give fewest candidates among those that set a frame sharply, as errors of
+// the two atoms grow with the distance of the others over the sharpness.
 std::optional<ReferencePair> reference_pair(const std::vector<std::vector<int>>& sets,
                                             const Eigen::Matrix3Xd& positions) {
-  std::optional<ReferencePair> best;
-  double best_cost = 0.0, best_sine = 0.0;
+  std::vector<std::pair<double, ReferencePair>> pairs;
+  double sharpest = 0.0;
   for (std::size_t i = 0; i < sets.size(); ++i) {
     for (std::size_t j = 0; j < sets.size(); ++j) {
-      const double cost = static_cast<double>(sets[i].size()) * static_cast<double>(sets[j].size());
-      if (best && cost > best_cost) continue;
       for (int b : sets[j]) {
         const int a = sets[i].front();
-        const double sine = sine_between(positions.col(a), positions.col(b));
-        if (sine < 0.1) continue;
-        if (!best || cost < best_cost || sine > best_sine + 1e-6) {
-          best = {a, b, i, j};
-          best_cost = cost;
-          best_sine = sine;
-        }
+        const double sharp = sharpness(positions.col(a), positions.col(b));
+        sharpest = std::max(sharpest, sharp);
+        pairs.push_back({sharp, {a, b, i, j}});
       }
+    }
+  }
+  const auto cost = [&](const ReferencePair& pair) {
+    return sets[pair.set_a].size() * sets[pair.set_b].size();
+  };
+  std::optional<ReferencePair> best;
+  double best_sharp = 0.0;
+  for (const auto& [sharp, pair] : pairs) {
+    if (sharp < 1e-3 || sharp < 0.4 * sharpest) continue;
+    const bool better = !best || cost(pair) < cost(*best) ||
+                        (cost(pair) == cost(*best) && sharp > best_sharp + 1e-6);
+    if (better) {
+      best = pair;
+      best_sharp = sharp;
     }
   }
   return best;
@@ -120,7 +133,7 @@ class Matcher {
     const int handedness = determinant_sign(rough);
     // The rough matrix rests on two atoms and carries their errors to all others; the reach
     // allows for that, the tolerance itself is applied to the fitted operation.
-    std::optional<std::vector<int>> images = match(rough, 4.0 * tolerance_ + 1e-6);
+    std::optional<std::vector<int>> images = match(rough, 6.0 * tolerance_ + 1e-6);
     HeldOperation operation{rough, {}, 0.0};
     for (int pass = 0; pass < 3 && images; ++pass) {
       const bool settled = operation.images == *images;
@@ -190,10 +203,16 @@ Shape molecular_shape(const Molecule& molecule, double tolerance_angstrom) {
   return Shape::Linear;
 }
 
+bool are_alike(const Molecule& molecule, const std::vector<int>& kinds, int atom_a, int atom_b) {
+  return molecule.atoms()[atom_a].atomic_number == molecule.atoms()[atom_b].atomic_number &&
+         (kinds.empty() || kinds[atom_a] == kinds[atom_b]);
+}
+
 std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
+                                                const std::vector<int>& kinds,
                                                 double tolerance_angstrom) {
   const Eigen::Matrix3Xd positions = centred(molecule);
-  const auto sets = candidate_sets(molecule, positions, tolerance_angstrom);
+  const auto sets = candidate_sets(molecule, kinds, positions, tolerance_angstrom);
   const Matcher matcher(positions, sets, tolerance_angstrom);
 
   HeldOperation identity{Eigen::Matrix3d::Identity(), {}, 0.0};
@@ -212,7 +231,7 @@ std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
     for (int image_b : sets[pair->set_b]) {
       const Eigen::Vector3d to_a = positions.col(image_a), to_b = positions.col(image_b);
       if (std::abs((to_a - to_b).norm() - length) > slack) continue;
-      if (sine_between(to_a, to_b) < 0.02) continue;
+      if (sharpness(to_a, to_b) < 0.2 * sharpness(a, b)) continue;
       const Eigen::Matrix3d to = pair_frame(to_a, to_b);
       for (int handedness : {1, -1}) {
         const Eigen::Matrix3d rough =

@@ -31,9 +31,15 @@ struct HeldOperation {
 /// every finite group, without special cases for axes. The set need not be closed.
 ///
 /// @param molecule  of Shape::General
+/// @param kinds     as in `SymmetryOptions`
 /// @source          derived by us
 [[nodiscard]] std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
+                                                              const std::vector<int>& kinds,
                                                               double tolerance_angstrom);
+
+/// @returns  whether the two may be images of each other: same element, same kind
+[[nodiscard]] bool are_alike(const Molecule& molecule, const std::vector<int>& kinds, int atom_a,
+                             int atom_b);
 
 /// Products of operations by what they do to one pair of atoms and their handedness, which tells
 /// operations of a non-linear molecule apart exactly.

@@ -85,7 +85,9 @@ std::vector<Candidate> candidates_of(const AxialShape& shape) {
                        bool complex_pair = false) {
     found.push_back({k, matrix, complex_pair});
     if (shape.doubled) {
-      found.push_back({k, [matrix](const PlaneAction& a) { return a.z_sign * matrix(a); },
+      found.push_back({k, [matrix](const PlaneAction& a) -> Eigen::MatrixXd {
+                         return a.z_sign * matrix(a);
+                       },
                        complex_pair});
     }
   };

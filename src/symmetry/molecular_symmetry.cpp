@@ -36,14 +36,15 @@ Eigen::Matrix3d without_rounding(const Eigen::Matrix3d& rotation) {
   return (rotation - rounded).cwiseAbs().maxCoeff() < 1e-10 ? rounded : rotation;
 }
 
-std::vector<int> nearest_images(const Molecule& molecule, const Eigen::Matrix3Xd& positions,
+std::vector<int> nearest_images(const Molecule& molecule, const std::vector<int>& kinds,
+                                const Eigen::Matrix3Xd& positions,
                                 const Eigen::Matrix3d& operation) {
   std::vector<int> images;
   for (int i = 0; i < molecule.size(); ++i) {
     const Eigen::Vector3d target = operation * positions.col(i);
     int nearest = -1;
     for (int j = 0; j < molecule.size(); ++j) {
-      if (molecule.atoms()[j].atomic_number != molecule.atoms()[i].atomic_number) continue;
+      if (!are_alike(molecule, kinds, i, j)) continue;
       if (nearest < 0 || (positions.col(j) - target).squaredNorm() <
                              (positions.col(nearest) - target).squaredNorm()) {
         nearest = j;
@@ -72,19 +73,23 @@ void turn_to_conventions(Found& found, const Molecule& molecule, const WantedAxe
       choose_frame(found.group.symbol(), molecule.with_positions(found.positions), found.rotation,
                    wanted);
   const Eigen::Matrix3d turn = choice.rotation * found.rotation.transpose();
-  found.images = turned_images(found.group, found.images, turn);
+  // A linear molecule may turn about its axis by any angle, and its images do not depend on it.
+  if (found.group.symbol().is_finite()) {
+    found.images = turned_images(found.group, found.images, turn);
+  }
   found.positions = turn * found.positions;
   found.rotation = choice.rotation;
 }
 
-Found linear(const Molecule& molecule, const Eigen::Matrix3Xd& positions, double tolerance) {
+Found linear(const Molecule& molecule, const std::vector<int>& kinds,
+             const Eigen::Matrix3Xd& positions, double tolerance) {
   const Eigen::Matrix3d rotation =
       Eigen::Quaterniond::FromTwoVectors(best_line(molecule), Eigen::Vector3d::UnitZ())
           .toRotationMatrix();
   Eigen::Matrix3Xd on_axis = rotation * positions;
   on_axis.topRows<2>().setZero();
   const std::vector<int> reversed =
-      nearest_images(molecule, on_axis, -Eigen::Matrix3d::Identity());
+      nearest_images(molecule, kinds, on_axis, -Eigen::Matrix3d::Identity());
   bool centred = true;
   for (int i = 0; i < molecule.size(); ++i) {
     centred = centred && reversed[reversed[i]] == i &&
@@ -151,8 +156,9 @@ Subset largest_group(const PartialTable& table, const std::vector<HeldOperation>
   return best;
 }
 
-Found general(const Molecule& molecule, const Eigen::Matrix3Xd& positions, double tolerance) {
-  const std::vector<HeldOperation> held = find_held_operations(molecule, tolerance);
+Found general(const Molecule& molecule, const std::vector<int>& kinds,
+              const Eigen::Matrix3Xd& positions, double tolerance) {
+  const std::vector<HeldOperation> held = find_held_operations(molecule, kinds, tolerance);
   OperationList list;
   list.table = {static_cast<int>(held.size()), partial_products(molecule, held)};
   for (const HeldOperation& operation : held) {
@@ -165,7 +171,7 @@ Found general(const Molecule& molecule, const Eigen::Matrix3Xd& positions, doubl
 // A finite subgroup of the group of a single atom or a linear molecule, laid with its z along the
 // molecular axis or else across it.
 std::optional<Found> finite_part(const Found& whole, const Molecule& molecule,
-                                 const Schoenflies& wanted) {
+                                 const std::vector<int>& kinds, const Schoenflies& wanted) {
   PointGroup group(wanted);
   Eigen::Matrix3d cyclic;
   cyclic << 0, 0, 1, 1, 0, 0, 0, 1, 0;  // z -> x -> y -> z
@@ -175,7 +181,7 @@ std::optional<Found> finite_part(const Found& whole, const Molecule& molecule,
     std::vector<std::vector<int>> images;
     bool holds = true;
     for (const Eigen::Matrix3d& g : group.operations()) {
-      images.push_back(nearest_images(molecule, positions, g));
+      images.push_back(nearest_images(molecule, kinds, positions, g));
       for (int i = 0; i < molecule.size() && holds; ++i) {
         holds = (g * positions.col(i) - positions.col(images.back()[i])).norm() < 1e-6;
       }
@@ -197,7 +203,8 @@ std::string subgroup_names(const PartialTable& table, const std::vector<Eigen::M
 
 // Of all subgroups with the wanted symbol, the one whose z stays the whole group's z where it can;
 // then by the conventions' rules for axes; then the one turned least.
-Found inside_subgroup(const Found& whole, const Molecule& molecule, const std::string& text,
+Found inside_subgroup(const Found& whole, const Molecule& molecule,
+                      const std::vector<int>& kinds, const std::string& text,
                       const WantedAxes& wanted) {
   const Schoenflies symbol = parse_schoenflies(text);
   const auto refuse = [&](const std::string& hint) {
@@ -209,7 +216,7 @@ Found inside_subgroup(const Found& whole, const Molecule& molecule, const std::s
       if (symbol == whole.group.symbol()) return whole;
       throw refuse("choose a finite group");
     }
-    auto found = finite_part(whole, molecule, symbol);
+    auto found = finite_part(whole, molecule, kinds, symbol);
     if (!found) throw refuse("a linear molecule allows Cn and Cnv, with a centre also Cnh, Dn, Dnh, "
                              "Dnd and S2n");
     turn_to_conventions(*found, molecule, wanted);
@@ -293,16 +300,16 @@ MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions&
   Found found = [&] {
     switch (molecular_shape(molecule, tolerance)) {
       case Shape::SingleAtom: return single_atom();
-      case Shape::Linear: return linear(molecule, centred, tolerance);
+      case Shape::Linear: return linear(molecule, options.kinds, centred, tolerance);
       case Shape::General: break;
     }
-    return general(molecule, centred, tolerance);
+    return general(molecule, options.kinds, centred, tolerance);
   }();
   std::string full_group;
   if (options.subgroup) {
     full_group = found.group.symbol().name();
     turn_to_conventions(found, molecule, {});
-    found = inside_subgroup(found, molecule, *options.subgroup, wanted);
+    found = inside_subgroup(found, molecule, options.kinds, *options.subgroup, wanted);
   } else {
     turn_to_conventions(found, molecule, wanted);
   }

@@ -19,6 +19,9 @@ struct SymmetryOptions {
   std::optional<AxisDirection> z;    // must lie along a possible principal axis of the group
   std::optional<AxisDirection> x;
   std::optional<std::string> subgroup;  // Schoenflies symbol of a subgroup to work in
+  // Per atom: atoms of different kinds are never images of each other, though of one element (they
+  // have other parameters, say). Empty: the element alone decides.
+  std::vector<int> kinds;
 };
 
 }  // namespace irrepwise

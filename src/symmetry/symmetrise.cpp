@@ -2,6 +2,7 @@
 
 #include <limits>
 
+#include <Eigen/LU>
 #include <Eigen/SVD>
 
 namespace irrepwise {

@@ -12,6 +12,7 @@
 #include "core/file.hpp"
 #include "core/yaml.hpp"
 #include "support/eps.hpp"
+#include "support/paths.hpp"
 
 using namespace irrepwise;
 
@@ -63,7 +64,7 @@ TEST_CASE("every published pair is normalised to 0.001 before it is made exact")
   // The identity <R(n,a)|R(n,b)> = (2 sqrt(ab) / (a + b))^(2n+1), on the numbers as they stand in
   // the file: the library's own reading has already scaled them.
   const YamlNode file =
-      YamlNode::parse(read_text_file(IRREPWISE_SOURCE "/params/published.yaml"), "published");
+      YamlNode::parse(read_text_file(source_path("params/published.yaml")), "published");
   int n_pairs = 0;
   double worst = 0.0;
   for (const YamlNode::Entry& element : file.at("elements").map()) {
@@ -88,7 +89,7 @@ TEST_CASE("every published pair is normalised to 0.001 before it is made exact")
 }
 
 TEST_CASE("the set compiled in is the set in the file") {
-  const ParameterSet from_file = read_parameters(IRREPWISE_SOURCE "/params/published.yaml");
+  const ParameterSet from_file = read_parameters(source_path("params/published.yaml"));
   const ParameterSet& built_in = published_parameters();
   REQUIRE(from_file.elements().size() == built_in.elements().size());
   for (const auto& [z, element] : from_file.elements()) {

@@ -8,12 +8,13 @@
 #include <doctest/doctest.h>
 
 #include "job/job.hpp"
+#include "support/paths.hpp"
 
 using namespace irrepwise;
 
 namespace {
 
-Job shipped(const std::string& name) { return read_job(IRREPWISE_SOURCE "/inputs/" + name); }
+Job shipped(const std::string& name) { return read_job(source_path("inputs/" + name)); }
 
 double distance(const Molecule& molecule, int a, int b) {
   return (molecule.positions().col(a) - molecule.positions().col(b)).norm();
@@ -38,7 +39,7 @@ void check_bonds(const Molecule& molecule, double longest, const std::vector<dou
 
 TEST_CASE("every shipped input is read without a warning and has parameters and electrons") {
   int n_files = 0;
-  for (const auto& entry : std::filesystem::directory_iterator(IRREPWISE_SOURCE "/inputs")) {
+  for (const auto& entry : std::filesystem::directory_iterator(source_path("inputs"))) {
     const std::string name = entry.path().filename().string();
     CAPTURE(name);
     if (entry.path().extension() != ".xyz" && entry.path().extension() != ".yaml") continue;

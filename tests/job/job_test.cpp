@@ -6,6 +6,8 @@
 #include <variant>
 #include <vector>
 
+#include <unistd.h>
+
 #include <doctest/doctest.h>
 
 #include "core/constants.hpp"
@@ -18,7 +20,9 @@ namespace {
 // A folder of files that goes with the test; the current folder stays as it is.
 class Folder {
  public:
-  Folder() : path_(std::filesystem::temp_directory_path() / "irrepwise_job_test") {
+  Folder()
+      : path_(std::filesystem::temp_directory_path() /
+              ("irrepwise_job_test_" + std::to_string(getpid()))) {
     std::filesystem::remove_all(path_);
     std::filesystem::create_directories(path_);
     write(
@@ -198,6 +202,8 @@ TEST_CASE("values of a wrong type or out of range are refused where they stand")
   const auto refusal = [&](const std::string& rest) { return folder.refusal_after_geometry(rest); };
   CHECK(refusal("charge: 0.5\n") ==
         "job.yaml:2:9: found '0.5', expected a whole number of charges");
+  CHECK(refusal("charge: 123456\n") ==
+        "job.yaml:2:9: found a charge of 123456, expected -100000 to 100000");
   CHECK(refusal("charge: [1]\n") ==
         "job.yaml:2:9: found a list, expected a whole number of charges");
   CHECK(refusal("multiplicity: 0\n") ==

@@ -9,11 +9,12 @@
 
 #include "core/error.hpp"
 #include "molecule/label.hpp"
+#include "support/paths.hpp"
 
 using namespace irrepwise;
 
 TEST_CASE("covalent radii agree with another transcription of the published table") {
-  std::ifstream file(IRREPWISE_TEST_DATA "/covalent_radii.csv");
+  std::ifstream file(reference_path("covalent_radii.csv"));
   REQUIRE(file);
   std::string line;
   int n_rows = 0;

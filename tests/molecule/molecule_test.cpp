@@ -38,6 +38,15 @@ TEST_CASE("a molecule without atoms, or with atoms that cannot be, is refused") 
   }
 }
 
+TEST_CASE("a charge that could overflow a count of electrons is refused") {
+  constexpr int lowest = std::numeric_limits<int>::min();
+  CHECK_THROWS_WITH_AS(Molecule({{1, {0, 0, 0}}}, lowest),
+                       "found a charge of -2147483648, expected -100000 to 100000", Error);
+  CHECK_THROWS_WITH_AS((void)water().with_charge(100001),
+                       "found a charge of 100001, expected -100000 to 100000", Error);
+  CHECK(water().with_charge(2).charge() == 2);
+}
+
 TEST_CASE("two atoms nearer than 0.3 Å are refused by number and symbol") {
   CHECK_THROWS_WITH_AS(
       Molecule({{78, {0, 0, 0}}, {17, {0, 0, 2.3}}, {17, {0.1, 0, 2.3}}}, 0),

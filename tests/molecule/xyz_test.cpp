@@ -4,6 +4,8 @@
 #include <fstream>
 #include <string>
 
+#include <unistd.h>
+
 #include <doctest/doctest.h>
 
 #include "core/error.hpp"
@@ -147,7 +149,7 @@ TEST_CASE("a Properties entry without usable columns is refused") {
 
 TEST_CASE("files that cannot be read are refused by name") {
   const std::filesystem::path folder =
-      std::filesystem::temp_directory_path() / "irrepwise_xyz_test";
+      std::filesystem::temp_directory_path() / ("irrepwise_xyz_test_" + std::to_string(getpid()));
   std::filesystem::create_directories(folder);
   const std::string missing = (folder / "missing.xyz").string();
   const std::string empty = (folder / "empty.xyz").string();

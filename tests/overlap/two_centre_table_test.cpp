@@ -1,4 +1,5 @@
 #include "overlap/two_centre.hpp"
+#include "support/paths.hpp"
 
 #include <algorithm>
 #include <cmath>
@@ -24,7 +25,7 @@ struct Row {
 };
 
 std::vector<Row> reference_rows() {
-  std::ifstream file(IRREPWISE_TEST_DATA "/two_centre_overlaps.csv");
+  std::ifstream file(reference_path("two_centre_overlaps.csv"));
   std::vector<Row> rows;
   for (std::string line; std::getline(file, line);) {
     if (line.starts_with('#') || line.starts_with("range")) continue;

@@ -12,6 +12,7 @@
 
 #include <doctest/doctest.h>
 
+#include "basis/parameter_set.hpp"
 #include "support/molecules.hpp"
 #include "support/shapes.hpp"
 
@@ -189,6 +190,22 @@ TEST_CASE("all molecules but the radicals named have an even number of electrons
     CAPTURE(entry.name);
     CHECK(electrons > 0);
     CHECK((electrons % 2 != 0) == radicals.contains(entry.name));
+  }
+}
+
+TEST_CASE("the published parameters cover the corpus, and the electrons fit the orbitals") {
+  const irrepwise::ParameterSet& parameters = irrepwise::published_parameters();
+  for (const TestMolecule& entry : test_molecules()) {
+    CAPTURE(entry.name);
+    int electrons = -entry.molecule.charge();
+    int orbitals = 0;
+    for (const Atom& atom : entry.molecule.atoms()) {
+      const irrepwise::ElementParameters& element = parameters.at(atom.atomic_number);
+      electrons += element.valence_electrons;
+      for (const irrepwise::ShellParameters& shell : element.shells) orbitals += 2 * shell.l + 1;
+    }
+    CHECK(electrons > 0);
+    CHECK(electrons <= 2 * orbitals);
   }
 }
 

@@ -7,6 +7,7 @@
 
 #include "core/error.hpp"
 #include "molecule/element.hpp"
+#include "support/paths.hpp"
 
 namespace {
 
@@ -85,7 +86,7 @@ class Lines {
 }  // namespace
 
 std::vector<G2Molecule> read_g2() {
-  Lines lines(IRREPWISE_TEST_DATA "/g2.txt");
+  Lines lines(reference_path("g2.txt"));
   std::vector<G2Molecule> all;
   while (!lines.at_end()) {
     std::string name = lines.take("molecule");

@@ -5,6 +5,7 @@
 #include <sstream>
 
 #include "core/error.hpp"
+#include "support/paths.hpp"
 
 namespace {
 
@@ -45,7 +46,7 @@ void add_irrep(GapTable& table, const std::vector<double>& parts, const std::str
 }  // namespace
 
 std::map<std::string, GapTable> read_gap_tables() {
-  const std::string path = IRREPWISE_TEST_DATA "/gap_character_tables.csv";
+  const std::string path = reference_path("gap_character_tables.csv");
   std::ifstream file(path);
   if (!file) throw irrepwise::error_at(path, Error("cannot be read"));
 

@@ -8,7 +8,7 @@
 namespace {
 
 using Eigen::Vector3d;
-using shapes::bond_end, shapes::polygon_radius, shapes::ring;
+using shapes::bond_end;
 
 const Vector3d origin = Vector3d::Zero();
 const Vector3d x = Vector3d::UnitX();
@@ -21,7 +21,7 @@ std::vector<TestMolecule> atoms_and_linear() {
       by_atoms("helium atom", "Kh", 0, {{"He", {1, 2, 3}}}),
       by_atoms("carbon atom", "Kh", 0, {{"C", origin}}),  // open shell
       by_atoms("iron(II) ion", "Kh", 2, {{"Fe", origin}}),
-      by_atoms("uranium(VI) ion", "Kh", 6, {{"U", origin}}),  // no electrons left but the core
+      by_atoms("uranium(IV) ion", "Kh", 4, {{"U", origin}}),  // two electrons
       by_atoms("hydrogen fluoride", "Cinfv", 0, {{"H", origin}, {"F", 0.917 * x}}),
       by_atoms("carbon monoxide", "Cinfv", 0, {{"C", origin}, {"O", 1.128 * y}}),
       by_atoms("nitric oxide", "Cinfv", 0,
