@@ -106,7 +106,7 @@ std::string composition_words(const LevelsResult& result, const std::vector<Atom
   for (const Part& part : parts) {
     if (!text.empty() && std::abs(part.share) < threshold) continue;
     if (!text.empty()) text += ", ";
-    text += fmt::format("{:.0f} % {} {}", 100.0 * part.share,
+    text += fmt::format("{:.0f}\u00A0%\u00A0{}\u00A0{}", 100.0 * part.share,
                         sets[static_cast<std::size_t>(part.group->set)].name,
                         orbitals_in_words(result, *part.group, level, part.share));
   }

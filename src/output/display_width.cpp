@@ -8,6 +8,8 @@
 namespace irrepwise {
 namespace {
 
+constexpr std::string_view no_break_space = "\u00A0";
+
 struct CodePoint {
   std::uint32_t value;
   std::size_t bytes;
@@ -80,6 +82,12 @@ std::vector<std::string> wrapped(std::string_view text, int width) {
       line.append(" ").append(word);
     } else {
       lines.emplace_back(word);
+    }
+  }
+  for (std::string& line : lines) {
+    for (std::size_t at = line.find(no_break_space); at != std::string::npos;
+         at = line.find(no_break_space, at)) {
+      line.replace(at, no_break_space.size(), " ");
     }
   }
   return lines;

@@ -16,7 +16,8 @@ namespace irrepwise {
 [[nodiscard]] std::string padded_right(std::string_view text, int width);
 [[nodiscard]] std::string padded_left(std::string_view text, int width);
 
-/// Breaks at spaces; a word wider than the line stands alone and stays whole. At least one line.
+/// Breaks at spaces, but not at no-break ones, which become plain; a word wider than the line
+/// stands alone and stays whole. At least one line.
 [[nodiscard]] std::vector<std::string> wrapped(std::string_view text, int width);
 
 }  // namespace irrepwise

@@ -9,7 +9,7 @@ namespace {
 
 using Replacement = std::pair<std::string_view, std::string_view>;
 
-constexpr std::array<Replacement, 26> replacements = {{
+constexpr std::array<Replacement, 27> replacements = {{
     {"\\", "\\textbackslash{}"},
     {"{", "\\{"},
     {"}", "\\}"},
@@ -20,6 +20,7 @@ constexpr std::array<Replacement, 26> replacements = {{
     {"_", "\\_"},
     {"^", "\\textasciicircum{}"},
     {"~", "\\textasciitilde{}"},
+    {"\u00A0", "~"},
     {"Å", "\\AA{}"},
     {"×", "$\\times$"},
     {"−", "$-$"},

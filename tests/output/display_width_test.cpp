@@ -28,6 +28,8 @@ TEST_CASE("padding fills up to the width and never cuts") {
 TEST_CASE("wrapping breaks at spaces only and loses no word") {
   CHECK(wrapped("62 % Pt 5d, 38 % Cl 3p", 12) ==
         std::vector<std::string>{"62 % Pt 5d,", "38 % Cl 3p"});
+  CHECK(wrapped("62\u00A0%\u00A0Pt 38\u00A0%\u00A0Cl", 9) ==
+        std::vector<std::string>{"62 % Pt", "38 % Cl"});
   CHECK(wrapped("unbreakable x", 4) == std::vector<std::string>{"unbreakable", "x"});
   CHECK(wrapped("", 10) == std::vector<std::string>{""});
 }

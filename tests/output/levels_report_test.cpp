@@ -58,8 +58,8 @@ TEST_CASE("a square d8 complex has an empty b1g level of dx2-y2 as its LUMO") {
   const std::vector<AtomSet> sets = atom_sets(result.symmetry);
   const int lumo = result.levels.frontier.lumo.value();
   const std::string words = composition_words(result, sets, shell_groups(result, sets), lumo);
-  CHECK(words.find("% Pt 5dx2-y2") != std::string::npos);
-  CHECK(words.find("% Cl 3p") != std::string::npos);
+  CHECK(words.find("%\u00A0Pt\u00A05dx2-y2") != std::string::npos);
+  CHECK(words.find("%\u00A0Cl\u00A03p") != std::string::npos);
   const std::string text = report_text(report, 80);
   CHECK(text.find("LUMO") != std::string::npos);
   CHECK(text.find("HOMO") > text.find("LUMO"));  // from high to low
