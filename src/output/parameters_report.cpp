@@ -94,7 +94,7 @@ Report parameters_report(const ParameterSet& parameters, const std::vector<int>&
   report.title = fmt::format("Parameter set: {}", parameters.name());
   report.facts = {{"radial part",
                    {"N r^(n−1) (c1 e^(−ζ1 r) + c2 e^(−ζ2 r)), ζ in 1/bohr; each term "
-                    "and the whole of norm 1"}}};
+                    "and the whole of norm\u00A01"}}};
   report.tables.push_back(parameter_table(parameters, elements));
   return report;
 }
