@@ -24,19 +24,17 @@ Printed print_column(const Table& table, std::size_t index) {
   const Column& column = table.columns[index];
   Printed printed{&column, {}, display_width(column_title(column))};
   std::vector<DecimalParts> parts;
-  int before = 0;
   int after = 0;
   for (const auto& line : table.lines) {
     if (const Row* row = std::get_if<Row>(&line)) {
       parts.push_back(decimal_parts(row->cells[index]));
-      before = std::max(before, display_width(parts.back().before));
       after = std::max(after, display_width(parts.back().after));
     }
   }
   for (const DecimalParts& part : parts) {
-    printed.texts.push_back(column.align == Align::Decimal
-                                ? padded_left(part.before, before) + padded_right(part.after, after)
-                                : part.before + part.after);
+    // Filled up behind the point, and set to the right as a whole, the points meet.
+    const bool decimal = column.align == Align::Decimal;
+    printed.texts.push_back(part.before + padded_right(part.after, decimal ? after : 0));
     printed.width = std::max(printed.width, display_width(printed.texts.back()));
   }
   return printed;
