@@ -157,6 +157,9 @@ std::vector<std::string> remarks(const LevelsResult& result) {
       "Extended Hückel ranks levels by symmetry, overlap and electronegativity. Do not read bond "
       "lengths, reaction energies, spin states or excitation energies from it; charges of ions and "
       "of very polar molecules come out too large.");
+  words.push_back(
+      "Orbital energies say nothing about toxicity, stability or how to handle a compound: there, "
+      "safety data, local codes and licensed practice decide.");
   return words;
 }
 
