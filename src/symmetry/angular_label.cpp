@@ -44,6 +44,10 @@ std::optional<int> take_linear_name(std::string_view& text) {
       return static_cast<int>(m);
     }
   }
+  if (text.starts_with('h')) {  // a capital eta looks like it
+    text.remove_prefix(1);
+    return 5;
+  }
   return std::nullopt;
 }
 

@@ -32,6 +32,7 @@ class CharacterTable {
   explicit CharacterTable(const PointGroup& group, int largest_m = 3);
 
   [[nodiscard]] int size() const noexcept { return static_cast<int>(weights_.size()); }
+  [[nodiscard]] const std::vector<double>& weights() const noexcept { return weights_; }
   [[nodiscard]] const std::vector<TableIrrep>& irreps() const noexcept { return irreps_; }
   [[nodiscard]] int power(int node, int exponent) const;  // node of g^exponent, exponent >= 0
 
