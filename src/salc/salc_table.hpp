@@ -8,7 +8,7 @@
 #include <Eigen/Core>
 
 #include "basis/basis.hpp"
-#include "salc/reductions.hpp"
+#include "salc/orbital_reductions.hpp"
 
 namespace irrepwise {
 

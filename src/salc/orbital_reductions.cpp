@@ -1,4 +1,4 @@
-#include "salc/reductions.hpp"
+#include "salc/orbital_reductions.hpp"
 
 #include <stdexcept>
 
@@ -18,9 +18,9 @@ std::vector<int> times_of(const PointGroup& group, const EquivalentAtoms& set,
   return times;
 }
 
-Reduction reduction(const MolecularSymmetry& symmetry, const std::vector<EquivalentAtoms>& sets,
+OrbitalReduction reduction(const MolecularSymmetry& symmetry, const std::vector<EquivalentAtoms>& sets,
                     int set, Part part, const SiteFunctions& functions) {
-  Reduction result{set, part, {}, 0, times_of(symmetry.group, sets[set], functions)};
+  OrbitalReduction result{set, part, {}, 0, times_of(symmetry.group, sets[set], functions)};
   result.orbitals = static_cast<int>(functions.span.cols()) * sets[set].size();
   int spanned = 0;
   for (std::size_t i = 0; i < result.times.size(); ++i) {
@@ -109,10 +109,10 @@ std::vector<std::optional<LocalFrames>> frames_of_sets(const MolecularSymmetry& 
   return frames;
 }
 
-std::vector<Reduction> reductions(const MolecularSymmetry& symmetry, const Basis& basis,
+std::vector<OrbitalReduction> orbital_reductions(const MolecularSymmetry& symmetry, const Basis& basis,
                                   const std::vector<EquivalentAtoms>& sets,
                                   const std::vector<std::optional<LocalFrames>>& frames) {
-  std::vector<Reduction> list;
+  std::vector<OrbitalReduction> list;
   for (int s = 0; s < static_cast<int>(sets.size()); ++s) {
     const int first = basis.first_shell[sets[s].representative()];
     const int end = basis.first_shell[sets[s].representative() + 1];

@@ -14,7 +14,7 @@ namespace irrepwise {
 /// Part of a set's orbitals: a whole shell, or functions that look alike from the centre.
 enum class Part { Shell, Sigma, Pi, PiInPlane, PiOutOfPlane, Delta, Phi };
 
-struct Reduction {
+struct OrbitalReduction {
   int set = 0;  // index in the sets
   Part part = Part::Shell;
   std::vector<int> shells;  // of the representative, in the basis: the shell, or all that hold the
@@ -28,7 +28,7 @@ struct Reduction {
 ///
 /// @param frames  by set, see `local_frames`
 /// @returns       in the order of the sets; the number of orbitals is checked for each
-[[nodiscard]] std::vector<Reduction> reductions(
+[[nodiscard]] std::vector<OrbitalReduction> orbital_reductions(
     const MolecularSymmetry& symmetry, const Basis& basis, const std::vector<EquivalentAtoms>& sets,
     const std::vector<std::optional<LocalFrames>>& frames);
 
