@@ -99,7 +99,8 @@ Eigen::Vector3d first_y(const MolecularSymmetry& symmetry, const EquivalentAtoms
     }
   }
   if (best) return *best;
-  for (const Eigen::Vector3d& wish : {Eigen::Vector3d::UnitZ(), Eigen::Vector3d::UnitY()}) {
+  for (const int i : {2, 1}) {
+    const Eigen::Vector3d wish = Eigen::Vector3d::Unit(i);
     const Eigen::Vector3d across = wish - wish.dot(z) * z;
     if (across.norm() > 1e-3) return across.normalized();
   }
