@@ -17,18 +17,18 @@ struct AngularIrrep {
   friend bool operator==(const AngularIrrep&, const AngularIrrep&) = default;
 };
 
-/// "Sigmag+", "Pi", "Eta" (m = 5), "Kappau" (m = 7); Kh: "Sg", "Pu" ... "Vu" without J, P and S twice.
-/// The letters follow those of atoms: S P D F G H I K L M N O ...; beyond them our own "m12g",
-/// "l17u".
+/// "Sigmag+", "Pi", "Eta" (m = 5), "Lambdau" (m = 8), from m = 9 on our own "m9u"; Kh: "Sg", "Pu",
+/// and so on through D F G H I K L M N O Q R T U V, then "l17u".
 [[nodiscard]] std::string angular_label(Family family, const AngularIrrep& irrep);
 
-/// @param text     any case; without a sign sigma means sigma+; in Kh without g or u the parity of an
+/// @param text     any case; without a sign sigma means sigma+; in Kh without g or u the parity of
+/// an
 ///                 orbital of that l is meant
 /// @throws Error   with what is expected
 [[nodiscard]] AngularIrrep parse_angular_label(const Schoenflies& group, std::string_view text);
 
-/// What people write, in ASCII: greek letters by name, primes as ' and ", sub- and superscript
-/// digits as digits, superscript signs as signs.
+/// What people write, in ASCII: greek letters by name, primes as ' and ", subscripts and
+/// superscript signs as they are, superscript digits as powers: "πu²" -> "piu^2".
 [[nodiscard]] std::string ascii_label(std::string_view text);
 
 }  // namespace irrepwise

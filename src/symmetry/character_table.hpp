@@ -21,8 +21,9 @@ struct TableIrrep {
 
 /// Finite groups: a node is a conjugacy class, its weight the share of the operations in it. Linear
 /// molecules: equidistant turns about the axis and one mirror; single atoms: turns with the weight
-/// 1 - cos φ of the rotation group; both times {1, i} where there is an inversion. The means over the
-/// nodes equal those over the group exactly as long as no |m| or l exceeds the largest asked for.
+/// 1 - cos φ of the rotation group; both times {1, i} where there is an inversion. The means over
+/// the nodes equal those over the group exactly as long as no |m| or l exceeds the largest asked
+/// for.
 ///
 /// @source  measure on SO(3): Wigner, Group Theory (from memory); the rest derived by us
 class CharacterTable {
@@ -31,11 +32,11 @@ class CharacterTable {
   explicit CharacterTable(const PointGroup& group, int largest_m = 3);
 
   [[nodiscard]] int size() const noexcept { return static_cast<int>(weights_.size()); }
+  [[nodiscard]] const std::vector<double>& weights() const noexcept { return weights_; }
   [[nodiscard]] const std::vector<TableIrrep>& irreps() const noexcept { return irreps_; }
   [[nodiscard]] int power(int node, int exponent) const;  // node of g^exponent, exponent >= 0
 
-  /// @param label    as `irrep_number` takes it
-  /// @throws Error   for an unknown irrep, with the nearest label
+  /// @param label  as it stands in the table
   [[nodiscard]] const TableIrrep& irrep(std::string_view label) const;
 
   /// How often each irrep occurs; whole numbers of complex pairs.
@@ -48,7 +49,7 @@ class CharacterTable {
   void add_finite(const PointGroup& group);
   void add_linear(int largest_m, bool inversion);
   void add_spherical(int largest_l);
-  void double_by_inversion(const std::vector<int>& parities);
+  void double_by_inversion();
 
   Schoenflies symbol_;
   std::vector<double> weights_;
@@ -56,12 +57,16 @@ class CharacterTable {
   std::vector<TableIrrep> irreps_;
 };
 
-/// @returns  largest |m| or l of an irrep of an infinite group; 0 for finite groups
-/// @throws Error  for an unknown irrep
+/// The label as it stands in the table, for what a user writes ("a1g", "e''", "πu", "sigmag").
+/// @throws Error  for an unknown irrep, with the nearest or the expected ones
+[[nodiscard]] std::string table_label(const PointGroup& group, std::string_view text);
+
+/// @param label  as from `table_label`
+/// @returns      |m| or l of an irrep of an infinite group; 0 for finite groups
 [[nodiscard]] int angular_number(const PointGroup& group, std::string_view label);
 
-/// Characters of the symmetric or antisymmetric part of the powers of a representation, by node, for
-/// exponents 0 to `last`: Newton's identities on the characters of g, g^2, g^3 ...
+/// Characters of the symmetric or antisymmetric part of the powers of a representation, by node,
+/// for exponents 0 to `last`: Newton's identities on the characters of g, g^2, g^3 ...
 ///
 /// @returns  [exponent][node]
 [[nodiscard]] std::vector<std::vector<double>> symmetric_powers(const CharacterTable& table,

@@ -19,9 +19,9 @@ struct FunctionSet {
 };
 
 /// x, y, z, Rx, Ry, Rz, all six quadratic and all ten cubic functions, by irrep: the sets are those
-/// that handbooks print, and each is assigned by how the operations transform it. Among alternatives
-/// the simplest comes first, "x2, y2, z2" before "x2-y2". Kh: the rotations belong to Pg, which is
-/// none of the irreps listed, and are left out.
+/// that handbooks print, and each is assigned by how the operations transform it. Among
+/// alternatives the simplest comes first, "x2, y2, z2" before "x2-y2". Kh: the rotations belong to
+/// Pg, which is none of the irreps listed, and are left out.
 ///
 /// @returns  [irrep of the group], sets in the order of FunctionKind
 [[nodiscard]] std::vector<std::vector<FunctionSet>> assign_functions(const PointGroup& group);

@@ -33,13 +33,15 @@ struct Factor {
 
 /// Parts of the n-th power of one irrep. The antisymmetric one is empty for n above the dimension.
 [[nodiscard]] Reduction symmetric_power(const PointGroup& group, const std::string& label, int n);
-[[nodiscard]] Reduction antisymmetric_power(const PointGroup& group, const std::string& label, int n);
+[[nodiscard]] Reduction antisymmetric_power(const PointGroup& group, const std::string& label,
+                                            int n);
 
 /// One question, answered as far as it goes.
 struct ProductAnswer {
   std::vector<Factor> factors;
   Reduction product;
-  // For one irrep to a power, or one irrep twice: the parts. For squares they add up to the product.
+  // For one irrep to a power, or one irrep twice: the parts. For squares they add up to the
+  // product.
   bool has_parts = false;
   Reduction symmetric;
   Reduction antisymmetric;

@@ -18,7 +18,7 @@ struct Term {
   int multiplicity = 1;  // 2S + 1
   std::string irrep;     // as in the character table
   int dimension = 1;
-  int count = 1;         // how many terms of this kind
+  int count = 1;  // how many terms of this kind
 
   friend bool operator==(const Term&, const Term&) = default;
 };
@@ -33,7 +33,8 @@ struct Term {
 /// terms of spin S are what M_S = S has more than M_S = S + 1.
 ///
 /// @returns  by falling multiplicity, then falling dimension (Kh, linear: falling l, |m|), then in
-///           the order of the character table; sum of (2S+1) dimension count = number of determinants
+///           the order of the character table; sum of (2S+1) dimension count = number of
+///           determinants
 /// @throws Error   for an unknown irrep, or more electrons than a level holds
 /// @source         derived by us from the Slater determinants
 [[nodiscard]] std::vector<Term> find_terms(const PointGroup& group,
