@@ -17,7 +17,7 @@ namespace irrepwise {
 struct Binding {
   // For each tooth its donor atoms, indices from 0; several in one tooth bind side by side.
   std::vector<std::vector<int>> teeth;
-  int electrons = 0;                        // the metal counts from it, closed shells
+  int electrons = 0;                         // the metal counts from it, closed shells
   Eigen::Vector3d metal = {0.0, 0.0, -2.0};  // about where the metal is, Å, ligand's frame
 
   [[nodiscard]] int denticity() const { return static_cast<int>(teeth.size()); }
@@ -29,11 +29,11 @@ struct Ligand {
   std::vector<std::string> names;  // other names: "ammine"
   int charge = 0;                  // of the free ligand with closed shells
   std::vector<Atom> atoms;
-  std::vector<Binding> bindings;           // the usual one first; at least one
-  std::optional<int> bridging_electrons;   // for each of two metals that it bridges
-  double shortening_angstrom = 0.0;        // of the bond to the metal, below the sum of radii
+  std::vector<Binding> bindings;          // the usual one first; at least one
+  std::optional<int> bridging_electrons;  // for each of two metals that it bridges
+  double shortening_angstrom = 0.0;       // of the bond to the metal, below the sum of radii
   std::string shortening_source;
-  std::string geometry;                    // lengths and angles in words
+  std::string geometry;  // lengths and angles in words
   std::string source;
   std::map<std::string, std::vector<double>> lengths;  // "C-O" -> Å, where no sum of radii
 };

@@ -56,8 +56,8 @@ Binding read_binding(const YamlNode& node, const std::vector<Atom>& atoms) {
     binding.teeth.push_back(std::move(tooth));
   }
   if (binding.teeth.empty() || binding.denticity() > most_teeth) {
-    node.at("donors").fail(fmt::format("found {} teeth, expected 1 or {}", binding.teeth.size(),
-                                       most_teeth));
+    node.at("donors").fail(
+        fmt::format("found {} teeth, expected 1 or {}", binding.teeth.size(), most_teeth));
   }
   if (binding.denticity() > 1 && (binding.teeth[0].size() > 1 || binding.teeth[1].size() > 1)) {
     node.at("donors").fail("each tooth of a chelate is one atom");
@@ -99,9 +99,8 @@ std::vector<Atom> read_atoms(const YamlNode& node) {
 }
 
 Ligand read_ligand(const std::string& name, const YamlNode& node, const Sources& sources) {
-  node.expect_keys("a ligand",
-                   {"names", "charge", "binding", "bridging", "shortening", "shortening_source",
-                    "geometry", "source", "lengths", "atoms"});
+  node.expect_keys("a ligand", {"names", "charge", "binding", "bridging", "shortening",
+                                "shortening_source", "geometry", "source", "lengths", "atoms"});
   Ligand ligand;
   ligand.name = name;
   if (const YamlNode* const names = node.find("names")) {
