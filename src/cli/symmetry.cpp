@@ -95,9 +95,29 @@ SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
   if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
   result.displacements = displacement_irreps(result.symmetry);
   if (basis) compute_orbitals(result, job, *basis, options);
-  result.answers = answer_group(result.symmetry.group, options.products, options.terms,
-                                options.descents);
   return result;
+}
+
+SymmetryResult compute_named(const Job& job, const SymmetryCommandOptions& options) {
+  try {
+    return compute(job, options);
+  } catch (const Error& error) {
+    throw error_at(options.job.file, error);
+  }
+}
+
+// The questions of the command line, each with its option as the place of any error.
+GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
+  const auto ask = [](const char* option, auto&& question) {
+    try {
+      return question();
+    } catch (const Error& error) {
+      throw error_at(option, error);
+    }
+  };
+  return {ask("--product", [&] { return answer_products(group, options.products); }),
+          ask("--terms", [&] { return answer_terms(group, options.terms); }),
+          ask("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -127,22 +147,22 @@ std::string written(const SymmetryResult& result, const SymmetryCommandOptions& 
   return report_text(symmetry_report(result, options.sections, width), width);
 }
 
-std::string written(const PointGroup& group, const GroupAnswers& answers,
+std::string written(const PointGroup& group, const GroupAnswers& asked,
                     const SymmetryCommandOptions& options) {
   switch (chosen_format(options.output)) {
     case Format::Json:
-      return group_json(group, answers);
+      return group_json(group, asked);
     case Format::Csv:
-      return group_csv(group, answers);
+      return group_csv(group, asked);
     case Format::Markdown:
-      return report_markdown(group_report(group, answers, 1000));
+      return report_markdown(group_report(group, asked, 1000));
     case Format::Text:
     case Format::Latex:
     case Format::Yaml:
       break;
   }
   const int width = text_width(options.output);
-  return report_text(group_report(group, answers, width), width);
+  return report_text(group_report(group, asked, width), width);
 }
 
 void run_group(const SymmetryCommandOptions& options) {
@@ -153,9 +173,7 @@ void run_group(const SymmetryCommandOptions& options) {
       throw error_at("--group", error);
     }
   }();
-  const GroupAnswers answers =
-      answer_group(group, options.products, options.terms, options.descents);
-  emit(options.output, written(group, answers, options));
+  emit(options.output, written(group, answers(group, options), options));
 }
 
 void check_usage(const SymmetryCommandOptions& options) {
@@ -185,13 +203,14 @@ void run(SymmetryCommandOptions options) {
   refuse_to_overwrite(options.output, job.source_files);
   try {
     if (!options.symmetrise.empty()) return emit(options.output, symmetrised_xyz(job, options));
-    const SymmetryResult result = compute(job, options);
-    const std::string text = written(result, options);
-    print_warnings(options.output, result.warnings);
-    emit(options.output, text);
   } catch (const Error& error) {
     throw error_at(options.job.file, error);
   }
+  SymmetryResult result = compute_named(job, options);
+  result.answers = answers(result.symmetry.group, options);
+  const std::string text = written(result, options);
+  print_warnings(options.output, result.warnings);
+  emit(options.output, text);
 }
 
 }  // namespace

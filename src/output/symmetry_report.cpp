@@ -37,8 +37,11 @@ std::vector<std::string> effect_words(const AxisEffect& effect) {
         counted = counted || (back && j < i);
       }
       if (counted) continue;
-      words += (words.empty() ? "" : ", ") + readable(changes[i].before) +
-               (swapped ? " ↔ " : " → ") + readable(changes[i].after);
+      const bool turn_over = swapped && changes[i].after < changes[i].before;
+      words += (words.empty() ? "" : ", ") +
+               readable(turn_over ? changes[i].after : changes[i].before) +
+               (swapped ? " ↔ " : " → ") +
+               readable(turn_over ? changes[i].before : changes[i].after);
     }
     return words;
   };
@@ -74,6 +77,14 @@ std::vector<Fact> header(const SymmetryResult& result) {
   return facts;
 }
 
+std::string irrep_count_words(const PointGroup& group) {
+  int pairs = 0;
+  for (const Irrep& irrep : group.irreps()) pairs += irrep.complex_pair ? 1 : 0;
+  const int all = static_cast<int>(group.irreps().size()) + pairs;
+  if (pairs == 0) return std::to_string(all);
+  return fmt::format("{}, of which {} are pairs of complex conjugates", all, 2 * pairs);
+}
+
 void append(std::vector<Table>& tables, std::vector<Table> more) {
   tables.insert(tables.end(), std::make_move_iterator(more.begin()),
                 std::make_move_iterator(more.end()));
@@ -106,7 +117,9 @@ Report symmetry_report(const SymmetryResult& result, const SymmetrySections& sec
 
 Report group_report(const PointGroup& group, const GroupAnswers& answers, int width) {
   Report report;
-  report.title = group.symbol().name();
+  report.title = "Point group " + group.symbol().name();
+  report.facts = {{"order", {group.symbol().is_finite() ? std::to_string(group.order()) : "infinite"}},
+                  {"irreps", {group.symbol().is_finite() ? irrep_count_words(group) : "infinitely many"}}};
   append(report.tables, character_tables(group, width));
   report.tables.push_back(function_table(group));
   append(report.tables, answer_tables(group, answers));
