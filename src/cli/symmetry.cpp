@@ -1,6 +1,7 @@
 // irrepwise symmetry: the group of a structure and all that follows from it, or a group alone.
-#include <algorithm>
 #include <memory>
+#include <optional>
+#include <utility>
 
 #include <fmt/format.h>
 
@@ -9,7 +10,6 @@
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
-#include "core/text.hpp"
 #include "molecule/xyz.hpp"
 #include "output/symmetry_json.hpp"
 #include "output/symmetry_report.hpp"
@@ -165,17 +165,6 @@ std::string written(const PointGroup& group, const GroupAnswers& asked,
   return report_text(group_report(group, asked, width), width);
 }
 
-void run_group(const SymmetryCommandOptions& options) {
-  const PointGroup group = [&] {
-    try {
-      return PointGroup(parse_schoenflies(options.group));
-    } catch (const Error& error) {
-      throw error_at("--group", error);
-    }
-  }();
-  emit(options.output, written(group, answers(group, options), options));
-}
-
 void check_usage(const SymmetryCommandOptions& options) {
   if (options.job.file.empty() == options.group.empty()) {
     throw CLI::ValidationError("give a FILE, or --group for a group without a molecule");
@@ -183,6 +172,14 @@ void check_usage(const SymmetryCommandOptions& options) {
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
     throw CLI::ValidationError("--group has no molecule; the option needs a FILE");
+  }
+}
+
+Schoenflies named_group(const char* option, const std::string& name) {
+  try {
+    return parse_schoenflies(name);
+  } catch (const Error& error) {
+    throw error_at(option, error);
   }
 }
 
@@ -198,7 +195,13 @@ void run(SymmetryCommandOptions options) {
     options.sections.salcs = options.transitions = true;
   }
   check_usage(options);
-  if (!options.group.empty()) return run_group(options);
+  if (!options.group.empty()) {
+    const PointGroup group(named_group("--group", options.group));
+    return emit(options.output, written(group, answers(group, options), options));
+  }
+  if (!options.symmetrise.empty()) {
+    options.symmetrise = named_group("--symmetrise", options.symmetrise).name();
+  }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
   try {

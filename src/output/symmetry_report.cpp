@@ -1,6 +1,7 @@
 #include "output/symmetry_report.hpp"
 
 #include <iterator>
+#include <string_view>
 #include <utility>
 
 #include <fmt/format.h>
@@ -22,6 +23,19 @@ std::string group_words(const MolecularSymmetry& symmetry) {
     words += ", a subgroup of " + symmetry.full_group;
   }
   return words + fmt::format(" at tolerance {:.4g} Å", symmetry.tolerance_angstrom);
+}
+
+// Lines break between the rungs only, after an arrow.
+std::string unbroken_rungs(std::string words) {
+  for (const auto& [breaks, keeps] : {std::pair<std::string_view, std::string_view>{
+                                          " at ", "\u00a0at\u00a0"},
+                                      {" Å", "\u00a0Å"},
+                                      {" →", "\u00a0→"}}) {
+    for (std::size_t at = words.find(breaks); at != std::string::npos; at = words.find(breaks)) {
+      words.replace(at, breaks.size(), keeps);
+    }
+  }
+  return words;
 }
 
 // "B1g and B2g change places", or "B1g → B3g" for longer cycles.
@@ -63,7 +77,7 @@ std::vector<Fact> header(const SymmetryResult& result) {
                    {fmt::format("largest {:.4f} Å, root mean square {:.4f} Å",
                                 symmetry.largest_shift_angstrom, symmetry.rms_shift_angstrom)}});
   facts.push_back({"ladder",
-                   {ladder_words(result.ladder),
+                   {unbroken_rungs(ladder_words(result.ladder)),
                     fmt::format("searched to {} Å", result.limit_angstrom)}});
   facts.push_back({"axes", symmetry.axes});
   if (result.user_axes) {
