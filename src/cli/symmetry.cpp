@@ -64,7 +64,7 @@ SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
     // The group does not need parameters; what does is refused only where asked for.
     if (options.sections.salcs || options.transitions) throw;
     const std::string message = error.what();
-    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find('\n')));
+    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find(';')));
   }
   MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
   std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
@@ -166,8 +166,13 @@ std::string written(const PointGroup& group, const GroupAnswers& asked,
 }
 
 void check_usage(const SymmetryCommandOptions& options) {
-  if (options.job.file.empty() == options.group.empty()) {
+  if (options.job.file.empty() && options.group.empty()) {
     throw CLI::ValidationError("give a FILE, or --group for a group without a molecule");
+  }
+  if (!options.job.file.empty() && !options.group.empty()) {
+    throw CLI::ValidationError(
+        "--group is for a group without a molecule; leave it or the FILE out (--symmetry makes the "
+        "structure exact in a group)");
   }
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
