@@ -81,9 +81,8 @@ void solve_irrep(const HueckelBlock& block, const MolecularSymmetry& symmetry, c
       [&](const auto& overlap) {
         using Matrix = std::decay_t<decltype(overlap)>;
         auto pairs = solve_generalised(std::get<Matrix>(block.hamiltonian_ev), overlap);
-        // The estimate of the condition is cheap, the smallest eigenvalue itself is not; the
-        // estimate errs by a small factor only.
-        if (!pairs.positive || pairs.reciprocal_condition < 1e3 * near_singular_overlap) {
+        // The estimate is cheap, the smallest eigenvalue itself is not.
+        if (!pairs.positive || pairs.smallest_overlap < 1e3 * near_singular_overlap) {
           judge_overlap(block, symmetry, basis, irrep, pairs.positive, result);
         }
         for (Eigen::Index k = 0; k < pairs.energies.size(); ++k) {
@@ -121,7 +120,9 @@ void sort_levels(std::vector<Level>& levels) {
   }
 }
 
+// In a subgroup levels coincide because the whole group says so: that is no accident.
 void note_accidents(const MolecularSymmetry& symmetry, Levels& result) {
+  if (!symmetry.full_group.empty()) return;
   for (std::size_t i = 0; i + 1 < result.levels.size(); ++i) {
     const Level &a = result.levels[i], &b = result.levels[i + 1];
     const bool near = std::abs(b.energy_ev - a.energy_ev) < accidental_degeneracy_ev;
