@@ -64,8 +64,8 @@ std::vector<std::vector<int>> contents(const PointGroup& whole, const PointGroup
       for (std::size_t h = 0; h < operations.size(); ++h) {
         sum += character(whole, i, operations[h]) * irrep.characters[h];
       }
-      counts[i][j] = static_cast<int>(
-          std::lround(sum / common.order() / (irrep.complex_pair ? 2.0 : 1.0)));
+      counts[i][j] =
+          static_cast<int>(std::lround(sum / common.order() / (irrep.complex_pair ? 2.0 : 1.0)));
     }
   }
   return counts;
@@ -76,9 +76,7 @@ struct Placed {
   Eigen::Matrix3d from_first;  // turn from the frame of the first group to the common one's
 };
 
-Placed no_symmetry() {
-  return {PointGroup({Family::C1, 1}), Eigen::Matrix3d::Identity()};
-}
+Placed no_symmetry() { return {PointGroup({Family::C1, 1}), Eigen::Matrix3d::Identity()}; }
 
 // The operations of `listed`, in the first group's frame, that the other has too.
 Placed of_operations(const std::vector<Eigen::Matrix3d>& shared) {
@@ -107,7 +105,8 @@ Placed common_group(const PointGroup& first, const PointGroup& second,
   if (first.symbol().family == Family::Kh) return {second, turn.transpose()};
   if (is_linear(first) && is_linear(second)) {
     if (std::abs(std::abs(turn(2, 2)) - 1.0) > same_element) return no_symmetry();
-    const bool reversible = first.symbol() == second.symbol() && first.symbol().family == Family::Dinfh;
+    const bool reversible =
+        first.symbol() == second.symbol() && first.symbol().family == Family::Dinfh;
     return {PointGroup({reversible ? Family::Dinfh : Family::Cinfv, 1}),
             Eigen::Matrix3d::Identity()};
   }

@@ -76,7 +76,8 @@ const EquivalentAtoms& set_of(const Levels& levels, int atom) {
 }
 
 // How many levels of an irrep the d orbitals of the set account for.
-int d_combinations(const Basis& basis, const Levels& levels, const EquivalentAtoms& set, int irrep) {
+int d_combinations(const Basis& basis, const Levels& levels, const EquivalentAtoms& set,
+                   int irrep) {
   int count = 0;
   for (const Salc& salc : levels.salcs.by_irrep[static_cast<std::size_t>(irrep)]) {
     const Shell& shell = basis.shells[static_cast<std::size_t>(salc.shell)];
@@ -100,9 +101,8 @@ std::vector<DLevel> most_metal(const PointGroup& group, const Basis& basis, cons
       }
       candidates.push_back({k, share, {}, 0.0});
     }
-    std::stable_sort(candidates.begin(), candidates.end(), [](const DLevel& a, const DLevel& b) {
-      return a.d_share > b.d_share;
-    });
+    std::stable_sort(candidates.begin(), candidates.end(),
+                     [](const DLevel& a, const DLevel& b) { return a.d_share > b.d_share; });
     const auto wanted = static_cast<std::size_t>(d_combinations(basis, levels, set, irrep));
     candidates.resize(std::min(candidates.size(), wanted));
     chosen.insert(chosen.end(), candidates.begin(), candidates.end());
@@ -150,8 +150,8 @@ DBlock find_d_block(const MolecularSymmetry& symmetry, const Basis& basis, const
   const Eigen::MatrixXd turn = harmonic_rotation(d, parent.turn);
   const Shell& shell = *d_shell(basis, metal);
   for (DLevel& entry : block.levels) {
-    const Eigen::MatrixXd part =
-        turn * level_orbitals(symmetry, basis, levels, entry.level).middleRows(shell.first_orbital, shell.size());
+    const Eigen::MatrixXd part = turn * level_orbitals(symmetry, basis, levels, entry.level)
+                                            .middleRows(shell.first_orbital, shell.size());
     const double whole = part.squaredNorm();
     if (!(whole > 0.0)) continue;
     for (std::size_t irrep = 0; irrep < projectors.size(); ++irrep) {

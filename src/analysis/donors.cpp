@@ -8,7 +8,8 @@ namespace {
 
 // Groups 3 to 12 with the lanthanides and actinides.
 bool is_d_or_f_block(int z) {
-  return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) || (z >= 89 && z <= 112);
+  return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) ||
+         (z >= 89 && z <= 112);
 }
 
 bool has_d_shell(const Basis& basis, int atom) {
@@ -40,8 +41,9 @@ std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis,
     DonorSite site{{atom}, {}};
     std::vector<DonorSite> rest;
     for (DonorSite& other : sites) {
-      const bool touches = std::any_of(other.atoms.begin(), other.atoms.end(),
-                                       [&](int donor) { return are_bonded(molecule, donor, atom); });
+      const bool touches = std::any_of(other.atoms.begin(), other.atoms.end(), [&](int donor) {
+        return are_bonded(molecule, donor, atom);
+      });
       if (touches) {
         site.atoms.insert(site.atoms.end(), other.atoms.begin(), other.atoms.end());
       } else {

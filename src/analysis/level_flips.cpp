@@ -11,10 +11,10 @@
 namespace irrepwise {
 namespace {
 
-constexpr double worth_solving_ev = 1.0;   // larger changes are robust whatever the exact one is
-constexpr std::size_t most_solved = 3;     // of the parameters that flip soonest
+constexpr double worth_solving_ev = 1.0;  // larger changes are robust whatever the exact one is
+constexpr std::size_t most_solved = 3;    // of the parameters that flip soonest
 constexpr double change_tolerance_ev = 1e-4;
-constexpr double smallest_slope = 1e-9;    // eV per unit: below it a parameter does not matter
+constexpr double smallest_slope = 1e-9;  // eV per unit: below it a parameter does not matter
 
 const Level& at(const Levels& levels, int index) {
   return levels.levels[static_cast<std::size_t>(index)];
@@ -24,7 +24,8 @@ const Level& at(const Levels& levels, int index) {
 // another one.
 std::optional<int> other_irrep(const Levels& levels, int from, int step, bool occupied) {
   for (int i = from + step; i >= 0 && i < static_cast<int>(levels.levels.size()); i += step) {
-    if (at(levels, i).irrep != at(levels, from).irrep && (at(levels, i).occupation > 0.0) == occupied) {
+    if (at(levels, i).irrep != at(levels, from).irrep &&
+        (at(levels, i).occupation > 0.0) == occupied) {
       return i;
     }
   }
@@ -55,7 +56,8 @@ class Resolver {
   }
 
   // How far apart the two are once the parameter is changed, in the order they have now.
-  [[nodiscard]] double gap_ev(const Parameter& parameter, double change, const LevelFlip& flip) const {
+  [[nodiscard]] double gap_ev(const Parameter& parameter, double change,
+                              const LevelFlip& flip) const {
     const Basis changed = with_changed(basis_, parameter, change);
     return energy_ev(changed, at(levels_, flip.upper)) -
            energy_ev(changed, at(levels_, flip.lower));
@@ -109,7 +111,8 @@ void judge(LevelFlip& flip, const std::vector<Parameter>& parameters,
       continue;
     }
     const double relative =
-        first_order_change(flip.gap_ev, slope_of_gap[static_cast<Eigen::Index>(p)]) / parameters[p].value;
+        first_order_change(flip.gap_ev, slope_of_gap[static_cast<Eigen::Index>(p)]) /
+        parameters[p].value;
     if (std::abs(relative) < soonest_other) {
       soonest_other = std::abs(relative);
       flip.other = static_cast<int>(p);
@@ -127,7 +130,8 @@ void judge(LevelFlip& flip, const std::vector<Parameter>& parameters,
   for (std::size_t i = 0; i < std::min(most_solved, order.size()); ++i) {
     const double expected = change(order[i]);
     if (!(std::abs(expected) < worth_solving_ev)) break;
-    const std::optional<double> found = meeting_change(resolver, parameters[order[i]], expected, flip);
+    const std::optional<double> found =
+        meeting_change(resolver, parameters[order[i]], expected, flip);
     if (found && (!flip.change_ev || std::abs(*found) < std::abs(*flip.change_ev))) {
       flip.parameter = static_cast<int>(order[i]);
       flip.first_order_ev = expected;
@@ -162,7 +166,8 @@ Robustness find_robustness(const MolecularSymmetry& symmetry, const Basis& basis
   if (homo && lumo) result.slopes.col(2) = result.slopes.col(1) - result.slopes.col(0);
   if (!below && !above) return result;
   const Resolver resolver(symmetry, basis, levels);
-  const auto flip = [&](int upper, int lower, Eigen::Index upper_column, Eigen::Index lower_column) {
+  const auto flip = [&](int upper, int lower, Eigen::Index upper_column,
+                        Eigen::Index lower_column) {
     LevelFlip found;
     found.upper = upper;
     found.lower = lower;

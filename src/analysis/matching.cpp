@@ -76,8 +76,8 @@ std::vector<LevelMatch> candidates(const CommonSymmetry& common, const Levels& f
       if (overlap < least_match) continue;
       std::string irreps = shared_irreps(common, a.irrep, b.irrep);
       if (irreps.empty()) continue;
-      found.push_back({static_cast<int>(i), static_cast<int>(j), std::move(irreps),
-                       std::min(overlap, 1.0)});
+      found.push_back(
+          {static_cast<int>(i), static_cast<int>(j), std::move(irreps), std::min(overlap, 1.0)});
     }
   }
   return found;
@@ -103,9 +103,8 @@ Matching match_levels(const MatchReference& reference, const MolecularSymmetry& 
   std::vector<LevelMatch> found = candidates(common, reference.levels, levels, overlaps);
   // Rounding must not decide between levels that overlap equally.
   const auto key = [](const LevelMatch& match) { return std::llround(match.overlap * 1e8); };
-  std::stable_sort(found.begin(), found.end(), [&](const LevelMatch& a, const LevelMatch& b) {
-    return key(a) > key(b);
-  });
+  std::stable_sort(found.begin(), found.end(),
+                   [&](const LevelMatch& a, const LevelMatch& b) { return key(a) > key(b); });
   std::vector<int> free_reference, free_variant;
   for (const Level& level : reference.levels.levels) free_reference.push_back(level.degeneracy);
   for (const Level& level : levels.levels) free_variant.push_back(level.degeneracy);

@@ -39,8 +39,9 @@ struct Matching {
 inline constexpr double least_match = 0.1;
 
 /// Pairs levels, those that overlap most first; a degenerate level may meet several, as many
-/// orbitals as it has. Only levels that share an irrep of the common subgroup are paired. The overlap
-/// is that of the orbitals on the shared atoms, taken with the reference's overlap integrals.
+/// orbitals as it has. Only levels that share an irrep of the common subgroup are paired. The
+/// overlap is that of the orbitals on the shared atoms, taken with the reference's overlap
+/// integrals.
 [[nodiscard]] Matching match_levels(const MatchReference& reference,
                                     const MolecularSymmetry& symmetry, const Basis& basis,
                                     const Levels& levels);

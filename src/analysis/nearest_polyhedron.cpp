@@ -131,7 +131,8 @@ PolyhedronFit fit_polyhedron(const std::vector<Eigen::Vector3d>& directions,
   const Eigen::Matrix3Xd ideal = best.turn * picked(vertices, best.partner);
   for (int i = 0; i < n; ++i) {
     // Twice the arc sine of half the chord keeps its digits for small angles.
-    const double angle = 2.0 * std::asin(std::min(1.0, 0.5 * (columns.col(i) - ideal.col(i)).norm()));
+    const double angle =
+        2.0 * std::asin(std::min(1.0, 0.5 * (columns.col(i) - ideal.col(i)).norm()));
     sum += angle * angle;
   }
   result.deviation_degrees = std::sqrt(sum / n) * 180.0 / std::numbers::pi;

@@ -11,12 +11,12 @@ namespace irrepwise {
 
 /// A polyhedron laid over directions as well as it goes.
 struct PolyhedronFit {
-  std::string symbol;                // "OC-6"
-  std::string name;                  // "octahedron"
-  std::string group;                 // of the ideal shape: "Oh"
-  double deviation_degrees = 0.0;    // root mean square angle between directions and vertices
-  Eigen::Matrix3d turn;              // proper: direction ≈ turn · vertex
-  std::vector<int> vertices;         // per direction, the number of its vertex, from 1
+  std::string symbol;              // "OC-6"
+  std::string name;                // "octahedron"
+  std::string group;               // of the ideal shape: "Oh"
+  double deviation_degrees = 0.0;  // root mean square angle between directions and vertices
+  Eigen::Matrix3d turn;            // proper: direction ≈ turn · vertex
+  std::vector<int> vertices;       // per direction, the number of its vertex, from 1
 };
 
 /// Best fit of one polyhedron: the turn and the pairing with the least sum of squared distances

@@ -69,7 +69,7 @@ double weighted(const DiatomicOverlaps& weights, const DiatomicOverlaps& values)
 
 // All that does not depend on the level, for one pair of shells on different atoms.
 struct PairSlopes {
-  DiatomicOverlaps mapped;                       // what the rule makes of the overlaps
+  DiatomicOverlaps mapped;  // what the rule makes of the overlaps
   FactorSlopes factor;
   double factor_ev;
   std::vector<std::pair<int, DiatomicOverlaps>> exponents;  // row, dS/dζ
@@ -124,7 +124,8 @@ std::string owner_name(const Molecule& molecule, const std::vector<int>& kinds, 
   const int z = molecule.atoms()[static_cast<std::size_t>(atom)].atomic_number;
   for (int other = 0; other < molecule.size(); ++other) {
     const auto at = static_cast<std::size_t>(other);
-    if (molecule.atoms()[at].atomic_number == z && kinds[at] != kinds[static_cast<std::size_t>(atom)]) {
+    if (molecule.atoms()[at].atomic_number == z &&
+        kinds[at] != kinds[static_cast<std::size_t>(atom)]) {
       return atom_name(molecule, atom);
     }
   }
@@ -220,7 +221,8 @@ Basis with_changed(const Basis& basis, const Parameter& parameter, double change
     if (parameter.kind == ParameterKind::HIi) {
       shell.h_ii_ev += change;
       if (!(shell.h_ii_ev < 0.0)) {
-        throw Error(fmt::format("{}: a change by {} eV leaves no bound level", parameter.name, change));
+        throw Error(
+            fmt::format("{}: a change by {} eV leaves no bound level", parameter.name, change));
       }
       continue;
     }

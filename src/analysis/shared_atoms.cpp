@@ -139,7 +139,8 @@ Eigen::Matrix3d refined(const Laid& first, const Laid& second, const Best& best)
   for (Eigen::Index i = 0; i < n; ++i) {
     const auto& [of_first, of_second] = best.atoms[static_cast<std::size_t>(i)];
     a.col(i) = first.molecule->atoms()[static_cast<std::size_t>(of_first)].position - first.anchor;
-    b.col(i) = best.turn * (second.molecule->atoms()[static_cast<std::size_t>(of_second)].position - second.anchor);
+    b.col(i) = best.turn * (second.molecule->atoms()[static_cast<std::size_t>(of_second)].position -
+                            second.anchor);
   }
   const bool spans = [&] {
     for (Eigen::Index i = 0; i < n; ++i) {

@@ -56,7 +56,7 @@ int find_reference(const std::vector<VariantJob>& variants, const std::string& n
     names.push_back(variants[i].name);
   }
   const std::string nearest = nearest_word(name, names);
-  throw Error(fmt::format("--reference: there is no variant {}{}; the first is '{}'", quoted(name),
+  throw Error(fmt::format("--reference: there is no variant {}{}; the first is '{}'", irrepwise::quoted(name),
                           nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
                           names.front()));
 }
@@ -154,7 +154,8 @@ void run(CompareOptions options) {
 
 Command add_compare(CLI::App& program) {
   CLI::App* app = program.add_subcommand(
-      "compare", "Several molecules, or variants of one, side by side: frontier, d block, robustness");
+      "compare",
+      "Several molecules, or variants of one, side by side: frontier, d block, robustness");
   const auto options = std::make_shared<CompareOptions>();
   app->set_help_flag("-h,--help", "Show this help");
   app->add_option("files", options->files,

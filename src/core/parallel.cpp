@@ -42,6 +42,8 @@ void run_parallel(int count, int threads, const std::function<void(int)>& task,
   if (failure) std::rethrow_exception(failure);
 }
 
-int hardware_threads() { return std::max(1, static_cast<int>(std::thread::hardware_concurrency())); }
+int hardware_threads() {
+  return std::max(1, static_cast<int>(std::thread::hardware_concurrency()));
+}
 
 }  // namespace irrepwise

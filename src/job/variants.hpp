@@ -13,8 +13,8 @@ namespace irrepwise {
 /// it is called; it may be called from any thread.
 struct VariantJob {
   std::string name;
-  std::string place;           // "family.yaml:12:5", for messages
-  std::function<Job()> read;   // throws Error as `read_job`
+  std::string place;          // "family.yaml:12:5", for messages
+  std::function<Job()> read;  // throws Error as `read_job`
 };
 
 /// A job file with `variants:` gives one entry for each of them, in order; any other file is one

@@ -81,33 +81,40 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
        [](const V& v) { return energy_cell(v, v.levels.levels.frontier.lumo); }},
       {{"gap_ev", "gap", "eV", Align::Decimal, 0, false}, gap_cell},
       {{"metal_charge", "metal charge", "e", Align::Decimal, 2, false},
-       [](const V& v) { return v.metal ? Cell(Number{v.metal->charge, 3, true}) : Cell(); }},
-      {{"d_population", "d electrons", "", Align::Decimal, 2, false},
-       [](const V& v) { return v.metal ? Cell(Number{v.metal->d_population, 3}) : Cell(); }}};
+       [](const V& v) {
+         return v.metal ? Cell(Number{v.metal->charge, 3, true}) : Cell();
+       }},
+      {{"d_population", "d electrons", "", Align::Decimal, 2, false}, [](const V& v) {
+         return v.metal ? Cell(Number{v.metal->d_population, 3}) : Cell();
+       }}};
   for (const std::string& element : donor_elements(comparison)) {
     columns.push_back({{"bond_" + element, "M–" + element, "", Align::Decimal, 3, false},
                        [element](const V& v) { return bond_cell(v, element); }});
   }
-  columns.push_back({{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 4, false},
-                     [](const V& v) { return Cell(Number{v.levels.levels.sum_of_occupied_ev, 2}); }});
+  columns.push_back(
+      {{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 4, false}, [](const V& v) {
+         return Cell(Number{v.levels.levels.sum_of_occupied_ev, 2});
+       }});
   columns.push_back({{"fragile", "frontier", "", Align::Left, 1, false},
                      [](const V& v) { return Cell(v.robustness.fragile() ? "fragile" : ""); }});
   return columns;
 }
 
-const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns, const std::string& key) {
+const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns,
+                                 const std::string& key) {
   std::vector<std::string> known;
   for (const SummaryColumn& column : columns) {
     if (column.column.key == key) return column;
     known.push_back(column.column.key);
   }
   const std::string nearest = nearest_word(key, known);
-  throw Error(fmt::format("there is no column {}{}; columns are {}", quoted(key),
+  throw Error(fmt::format("there is no column {}{}; columns are {}", irrepwise::quoted(key),
                           nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
                           joined(known)));
 }
 
-std::vector<SummaryColumn> chosen_columns(const Comparison& comparison, const SummaryChoice& choice) {
+std::vector<SummaryColumn> chosen_columns(const Comparison& comparison,
+                                          const SummaryChoice& choice) {
   std::vector<SummaryColumn> all = all_columns(comparison);
   if (choice.columns.empty()) return all;
   std::vector<SummaryColumn> chosen;
@@ -209,7 +216,8 @@ Table difference_table(const Comparison& comparison, const SummaryChoice& choice
     if (i == at) continue;
     Row row{{comparison.variants[i].name}};
     for (const SummaryColumn* column : numbers) {
-      row.cells.push_back(difference(column->read(comparison.variants[i]), column->read(reference)));
+      row.cells.push_back(
+          difference(column->read(comparison.variants[i]), column->read(reference)));
     }
     table.lines.emplace_back(std::move(row));
   }

@@ -13,8 +13,8 @@ struct SummaryChoice {
   std::vector<std::string> columns;  // keys, in the order wanted; empty: all
   std::string sort_by;               // key; empty: in the order given
   bool descending = false;
-  bool differences = false;          // add a column of differences from the reference for each
-                                     // number, its key with `delta_` before it
+  bool differences = false;  // add a column of differences from the reference for each
+                             // number, its key with `delta_` before it
 };
 
 /// Energies in eV. Bonds are those from the metal, by the element of the donor: mean overlap

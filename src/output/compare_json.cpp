@@ -15,8 +15,7 @@ Json level_json(const VariantResult& variant, const std::optional<int>& level) {
 }
 
 double energy_ev(const VariantResult& variant, int level) {
-  return finite_number(
-      variant.levels.levels.levels[static_cast<std::size_t>(level)].energy_ev);
+  return finite_number(variant.levels.levels.levels[static_cast<std::size_t>(level)].energy_ev);
 }
 
 Json frontier_json(const VariantResult& variant) {
@@ -46,7 +45,9 @@ Json metal_levels_json(const VariantResult& variant) {
          {"energy_ev", energy_ev(variant, entry.level)},
          {"d_share", finite_number(entry.d_share)},
          {"parent_weight", finite_number(entry.parent_weight)},
-         {"occupation", finite_number(variant.levels.levels.levels[static_cast<std::size_t>(entry.level)].occupation)}});
+         {"occupation",
+          finite_number(
+              variant.levels.levels.levels[static_cast<std::size_t>(entry.level)].occupation)}});
   }
   return list;
 }
@@ -78,13 +79,14 @@ Json bonds_json(const VariantResult& variant) {
 Json flip_json(const VariantResult& variant, const std::optional<LevelFlip>& flip) {
   if (!flip) return nullptr;
   const std::vector<Parameter>& parameters = variant.robustness.parameters;
-  Json json = {{"upper", name_of_level(variant, flip->upper)},
-               {"lower", name_of_level(variant, flip->lower)},
-               {"gap_ev", finite_number(flip->gap_ev)},
-               {"parameter", parameters[static_cast<std::size_t>(flip->parameter)].name},
-               {"first_order_ev", finite_number(flip->first_order_ev)},
-               {"change_ev", flip->change_ev ? Json(finite_number(*flip->change_ev)) : Json(nullptr)},
-               {"fragile", flip->fragile}};
+  Json json = {
+      {"upper", name_of_level(variant, flip->upper)},
+      {"lower", name_of_level(variant, flip->lower)},
+      {"gap_ev", finite_number(flip->gap_ev)},
+      {"parameter", parameters[static_cast<std::size_t>(flip->parameter)].name},
+      {"first_order_ev", finite_number(flip->first_order_ev)},
+      {"change_ev", flip->change_ev ? Json(finite_number(*flip->change_ev)) : Json(nullptr)},
+      {"fragile", flip->fragile}};
   if (flip->other) {
     json["other_parameter"] = parameters[static_cast<std::size_t>(*flip->other)].name;
     json["other_relative_change"] = finite_number(flip->other_relative);
@@ -109,25 +111,27 @@ Json sensitivities_json(const Robustness& robustness) {
 
 Json variant_json(const VariantResult& variant) {
   const LevelsResult& result = variant.levels;
-  return {{"name", variant.name},
-          {"formula", hill_formula(result.molecule)},
-          {"charge", result.molecule.charge()},
-          {"point_group", result.symmetry.group.symbol().name()},
-          {"frontier", frontier_json(variant)},
-          {"metal", variant.metal ? Json(atom_name(result.molecule, variant.metal->atom)) : Json(nullptr)},
-          {"metal_charge", variant.metal ? Json(finite_number(variant.metal->charge)) : Json(nullptr)},
-          {"d_population",
-           variant.metal ? Json(finite_number(variant.metal->d_population)) : Json(nullptr)},
-          {"bonds", bonds_json(variant)},
-          {"parent", parent_json(variant)},
-          {"metal_levels", metal_levels_json(variant)},
-          {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
-          {"fragile", variant.robustness.fragile()},
-          {"robustness",
-           {{"occupied", flip_json(variant, variant.robustness.occupied)},
-            {"empty", flip_json(variant, variant.robustness.empty)}}},
-          {"sensitivities", sensitivities_json(variant.robustness)},
-          {"warnings", result.warnings}};
+  return {
+      {"name", variant.name},
+      {"formula", hill_formula(result.molecule)},
+      {"charge", result.molecule.charge()},
+      {"point_group", result.symmetry.group.symbol().name()},
+      {"frontier", frontier_json(variant)},
+      {"metal",
+       variant.metal ? Json(atom_name(result.molecule, variant.metal->atom)) : Json(nullptr)},
+      {"metal_charge", variant.metal ? Json(finite_number(variant.metal->charge)) : Json(nullptr)},
+      {"d_population",
+       variant.metal ? Json(finite_number(variant.metal->d_population)) : Json(nullptr)},
+      {"bonds", bonds_json(variant)},
+      {"parent", parent_json(variant)},
+      {"metal_levels", metal_levels_json(variant)},
+      {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
+      {"fragile", variant.robustness.fragile()},
+      {"robustness",
+       {{"occupied", flip_json(variant, variant.robustness.occupied)},
+        {"empty", flip_json(variant, variant.robustness.empty)}}},
+      {"sensitivities", sensitivities_json(variant.robustness)},
+      {"warnings", result.warnings}};
 }
 
 Json matches_json(const Comparison& comparison) {
@@ -181,7 +185,8 @@ Json splittings_json(const Comparison& comparison) {
 
 std::string compare_json(const Comparison& comparison) {
   Json variants = Json::array();
-  for (const VariantResult& variant : comparison.variants) variants.push_back(variant_json(variant));
+  for (const VariantResult& variant : comparison.variants)
+    variants.push_back(variant_json(variant));
   return json_text(
       {{"schema", "irrepwise.compare.1"},
        {"reference", comparison.variants[static_cast<std::size_t>(comparison.reference)].name},

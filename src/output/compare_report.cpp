@@ -43,8 +43,8 @@ Report compare_report(const Comparison& comparison, const CompareParts& parts) {
   report.facts.push_back({"method", methods(comparison)});
   report.tables.push_back(summary_table(comparison, parts.summary));
   if (parts.differences) report.tables.push_back(difference_table(comparison, parts.summary));
-  for (Table table :
-       {d_block_table(comparison), frontier_match_table(comparison), robustness_table(comparison)}) {
+  for (Table table : {d_block_table(comparison), frontier_match_table(comparison),
+                      robustness_table(comparison)}) {
     if (!table.lines.empty()) report.tables.push_back(std::move(table));
   }
   if (parts.slopes) {
@@ -59,7 +59,8 @@ Report compare_report(const Comparison& comparison, const CompareParts& parts) {
   }
   report.remarks = {
       "Extended Hückel ranks levels by symmetry, overlap and electronegativity. Splittings are one-"
-      "electron energies, not excitation energies; sums of occupied energies are no total energies. "
+      "electron energies, not excitation energies; sums of occupied energies are no total "
+      "energies. "
       "Charges of ions and of very polar molecules come out too large.",
       "Orbital energies say nothing about toxicity, stability or how to handle a compound: there, "
       "safety data, local codes and licensed practice decide."};

@@ -69,8 +69,7 @@ VariantResult analysed(std::string name, LevelsResult levels) {
   const std::vector<int> metals = metal_atoms(of.symmetry.molecule, of.basis);
   if (!metals.empty()) {
     result.metal = metal_facts(of, metals.front());
-    result.d_block =
-        find_d_block(of.symmetry, of.basis, of.levels, of.populations, metals.front());
+    result.d_block = find_d_block(of.symmetry, of.basis, of.levels, of.populations, metals.front());
   }
   return result;
 }
@@ -85,8 +84,7 @@ std::optional<FrontierFate> frontier_fate(const Comparison& comparison, int vari
   fate.reference_level = *level;
   fate.now = frontier_level(comparison.variants[static_cast<std::size_t>(variant)], side);
   double best_now = 0.0;
-  for (const LevelMatch& match :
-       comparison.matchings[static_cast<std::size_t>(variant)].matches) {
+  for (const LevelMatch& match : comparison.matchings[static_cast<std::size_t>(variant)].matches) {
     if (match.reference == *level) {
       if (!fate.match || match.overlap > fate.match->overlap) fate.match = match;
       if (match.variant == fate.now) fate.stays = true;
@@ -120,8 +118,9 @@ std::string crossing_words(const Comparison& comparison, int variant, FrontierSi
     words += fmt::format("nothing resembles {} of {}; the {} is {}", was, reference.name, which,
                          readable(other, *fate->now));
   }
-  return words + (fate->now_was ? fmt::format(", which was {}.", readable(reference, *fate->now_was))
-                                : ", which has no counterpart there.");
+  return words + (fate->now_was
+                      ? fmt::format(", which was {}.", readable(reference, *fate->now_was))
+                      : ", which has no counterpart there.");
 }
 
 }  // namespace irrepwise

@@ -59,10 +59,10 @@ void add_fate(const Comparison& comparison, int index, FrontierSide side, Row& r
 std::string splitting_words(const DBlock& block) {
   std::string words;
   for (std::size_t i = 0; i + 1 < block.means.size(); ++i) {
-    words += fmt::format("{}{}–{} {:.3f} eV", i == 0 ? "" : ", ",
-                         readable_label(block.means[i].label),
-                         readable_label(block.means[i + 1].label),
-                         block.means[i + 1].energy_ev - block.means[i].energy_ev);
+    words +=
+        fmt::format("{}{}–{} {:.3f} eV", i == 0 ? "" : ", ", readable_label(block.means[i].label),
+                    readable_label(block.means[i + 1].label),
+                    block.means[i + 1].energy_ev - block.means[i].energy_ev);
   }
   return words;
 }
@@ -90,8 +90,8 @@ Table d_block_table(const Comparison& comparison) {
     if (!variant.d_block) continue;
     const DBlock& block = *variant.d_block;
     const std::string splittings = splitting_words(block);
-    table.lines.emplace_back(Separator{parent_words(block) +
-                                       (splittings.empty() ? "" : "; " + splittings)});
+    table.lines.emplace_back(
+        Separator{parent_words(block) + (splittings.empty() ? "" : "; " + splittings)});
     for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
       const Level& level = level_of(variant, entry->level);
       const bool labelled = !entry->parent_label.empty();
@@ -188,9 +188,9 @@ Table slopes_table(const VariantResult& variant) {
   for (std::size_t p = 0; p < variant.robustness.parameters.size(); ++p) {
     const Parameter& parameter = variant.robustness.parameters[p];
     const auto row = variant.robustness.slopes.row(static_cast<Eigen::Index>(p));
-    table.lines.emplace_back(Row{{parameter.name, Number{parameter.value, 3}, parameter.unit,
-                                  Number{row[0], 4, true}, Number{row[1], 4, true},
-                                  Number{row[2], 4, true}}});
+    table.lines.emplace_back(
+        Row{{parameter.name, Number{parameter.value, 3}, parameter.unit, Number{row[0], 4, true},
+             Number{row[1], 4, true}, Number{row[2], 4, true}}});
   }
   return table;
 }

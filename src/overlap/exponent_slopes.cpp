@@ -13,8 +13,7 @@ double norm_slope(const ContractedRadial& radial, const ContractedRadial::Term& 
   double sum = 0.0;
   for (const ContractedRadial::Term& j : radial.terms()) {
     const double zeta_p = p.function.zeta(), zeta_j = j.function.zeta();
-    const double logarithmic =
-        (2 * radial.n() + 1) * (0.5 / zeta_p - 1.0 / (zeta_p + zeta_j));
+    const double logarithmic = (2 * radial.n() + 1) * (0.5 / zeta_p - 1.0 / (zeta_p + zeta_j));
     sum += 2.0 * p.coefficient * j.coefficient * one_centre_overlap(p.function, j.function) *
            logarithmic;
   }
