@@ -4,6 +4,8 @@
 #include <map>
 #include <utility>
 
+#include <Eigen/Geometry>
+
 #include "analysis/donors.hpp"
 #include "harmonics/real_harmonics.hpp"
 #include "molecule/polyhedra.hpp"

@@ -6,6 +6,7 @@
 #include <limits>
 #include <numbers>
 
+#include <Eigen/Geometry>
 #include <Eigen/SVD>
 
 #include "molecule/polyhedra.hpp"

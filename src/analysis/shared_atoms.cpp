@@ -5,6 +5,8 @@
 #include <cstddef>
 #include <optional>
 
+#include <Eigen/Geometry>
+
 #include "analysis/donors.hpp"
 #include "analysis/nearest_polyhedron.hpp"
 
