@@ -1,6 +1,7 @@
 // irrepwise symmetry: the group of a structure and all that follows from it, or a group alone.
-#include <algorithm>
 #include <memory>
+#include <optional>
+#include <utility>
 
 #include <fmt/format.h>
 
@@ -9,7 +10,6 @@
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
-#include "core/text.hpp"
 #include "molecule/xyz.hpp"
 #include "output/symmetry_json.hpp"
 #include "output/symmetry_report.hpp"
@@ -64,7 +64,7 @@ SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
     // The group does not need parameters; what does is refused only where asked for.
     if (options.sections.salcs || options.transitions) throw;
     const std::string message = error.what();
-    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find('\n')));
+    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find(';')));
   }
   MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
   std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
@@ -95,9 +95,29 @@ SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
   if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
   result.displacements = displacement_irreps(result.symmetry);
   if (basis) compute_orbitals(result, job, *basis, options);
-  result.answers = answer_group(result.symmetry.group, options.products, options.terms,
-                                options.descents);
   return result;
+}
+
+SymmetryResult compute_named(const Job& job, const SymmetryCommandOptions& options) {
+  try {
+    return compute(job, options);
+  } catch (const Error& error) {
+    throw error_at(options.job.file, error);
+  }
+}
+
+// The questions of the command line, each with its option as the place of any error.
+GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
+  const auto ask = [](const char* option, auto&& question) {
+    try {
+      return question();
+    } catch (const Error& error) {
+      throw error_at(option, error);
+    }
+  };
+  return {ask("--product", [&] { return answer_products(group, options.products); }),
+          ask("--terms", [&] { return answer_terms(group, options.terms); }),
+          ask("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -127,44 +147,44 @@ std::string written(const SymmetryResult& result, const SymmetryCommandOptions& 
   return report_text(symmetry_report(result, options.sections, width), width);
 }
 
-std::string written(const PointGroup& group, const GroupAnswers& answers,
+std::string written(const PointGroup& group, const GroupAnswers& asked,
                     const SymmetryCommandOptions& options) {
   switch (chosen_format(options.output)) {
     case Format::Json:
-      return group_json(group, answers);
+      return group_json(group, asked);
     case Format::Csv:
-      return group_csv(group, answers);
+      return group_csv(group, asked);
     case Format::Markdown:
-      return report_markdown(group_report(group, answers, 1000));
+      return report_markdown(group_report(group, asked, 1000));
     case Format::Text:
     case Format::Latex:
     case Format::Yaml:
       break;
   }
   const int width = text_width(options.output);
-  return report_text(group_report(group, answers, width), width);
-}
-
-void run_group(const SymmetryCommandOptions& options) {
-  const PointGroup group = [&] {
-    try {
-      return PointGroup(parse_schoenflies(options.group));
-    } catch (const Error& error) {
-      throw error_at("--group", error);
-    }
-  }();
-  const GroupAnswers answers =
-      answer_group(group, options.products, options.terms, options.descents);
-  emit(options.output, written(group, answers, options));
+  return report_text(group_report(group, asked, width), width);
 }
 
 void check_usage(const SymmetryCommandOptions& options) {
-  if (options.job.file.empty() == options.group.empty()) {
+  if (options.job.file.empty() && options.group.empty()) {
     throw CLI::ValidationError("give a FILE, or --group for a group without a molecule");
+  }
+  if (!options.job.file.empty() && !options.group.empty()) {
+    throw CLI::ValidationError(
+        "--group is for a group without a molecule; leave it or the FILE out (--symmetry makes the "
+        "structure exact in a group)");
   }
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
     throw CLI::ValidationError("--group has no molecule; the option needs a FILE");
+  }
+}
+
+Schoenflies named_group(const char* option, const std::string& name) {
+  try {
+    return parse_schoenflies(name);
+  } catch (const Error& error) {
+    throw error_at(option, error);
   }
 }
 
@@ -180,18 +200,25 @@ void run(SymmetryCommandOptions options) {
     options.sections.salcs = options.transitions = true;
   }
   check_usage(options);
-  if (!options.group.empty()) return run_group(options);
+  if (!options.group.empty()) {
+    const PointGroup group(named_group("--group", options.group));
+    return emit(options.output, written(group, answers(group, options), options));
+  }
+  if (!options.symmetrise.empty()) {
+    options.symmetrise = named_group("--symmetrise", options.symmetrise).name();
+  }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
   try {
     if (!options.symmetrise.empty()) return emit(options.output, symmetrised_xyz(job, options));
-    const SymmetryResult result = compute(job, options);
-    const std::string text = written(result, options);
-    print_warnings(options.output, result.warnings);
-    emit(options.output, text);
   } catch (const Error& error) {
     throw error_at(options.job.file, error);
   }
+  SymmetryResult result = compute_named(job, options);
+  result.answers = answers(result.symmetry.group, options);
+  const std::string text = written(result, options);
+  print_warnings(options.output, result.warnings);
+  emit(options.output, text);
 }
 
 }  // namespace

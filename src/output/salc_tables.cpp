@@ -148,7 +148,14 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
   }
   const bool local = std::any_of(salcs.begin(), salcs.end(),
                                  [](const SalcFunction& salc) { return salc.local; });
+  const bool several = std::any_of(salcs.begin(), salcs.end(), [&](const SalcFunction& salc) {
+    return salc.number > 1 && result.sets[salc.set].size() > 1;
+  });
   if (!tables.empty()) {
+    if (several) {
+      tables.back().notes.push_back(
+          "2.1: the first partner of the second SALC of that irrep; without a point the number alone.");
+    }
     tables.back().notes.push_back(
         local ? "Orbitals of each atom's own frame: z towards the centre, x and y across it; y points "
                 "along +z of the molecule where it can."

@@ -1,5 +1,7 @@
 #include "output/symmetry_json.hpp"
 
+#include <cmath>
+
 #include <nlohmann/json.hpp>
 
 #include "core/exact_number.hpp"
@@ -16,6 +18,12 @@ Json counts_json(const Reduction& reduction) {
   Json counts = Json::object();
   for (const IrrepCount& part : reduction) counts[level_label(part.label)] = part.count;
   return counts;
+}
+
+// Rounding of the matrices kept out of characters that are whole or half numbers.
+double tidy(double value) {
+  const double halves = std::round(2.0 * value) / 2.0;
+  return finite_number(std::abs(value - halves) < 1e-12 ? halves : value);
 }
 
 Json vector_json(const Eigen::Ref<const Eigen::VectorXd>& values) {
@@ -46,10 +54,10 @@ Json irreps_json(const PointGroup& group) {
     Json characters = Json::array(), complex = Json::array(), names = Json::array();
     for (const ConjugacyClass& conjugacy : group.classes()) {
       const int g = conjugacy.operations.front();
-      characters.push_back(finite_number(irrep.characters[g]));
+      characters.push_back(tidy(irrep.characters[g]));
       if (!irrep.complex_pair) continue;
       const std::complex<double> value = complex_character(irrep, g);
-      complex.push_back({finite_number(value.real()), finite_number(value.imag())});
+      complex.push_back({tidy(value.real()), tidy(value.imag())});
     }
     for (const FunctionSet& set : functions[i]) names.push_back(function_text(set));
     Json entry = {{"label", level_label(irrep.label)},

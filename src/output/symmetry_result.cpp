@@ -91,24 +91,32 @@ std::vector<BondingIrrep> bonding_by_irrep(const SymmetryResult& result) {
   return list;
 }
 
-GroupAnswers answer_group(const PointGroup& group, const std::vector<std::string>& products,
-                          const std::vector<std::string>& configurations,
-                          const std::vector<std::string>& subgroups) {
-  GroupAnswers answers;
-  for (const std::string& question : products) {
-    answers.products.push_back(answer_product(group, question));
-  }
+std::vector<ProductAnswer> answer_products(const PointGroup& group,
+                                           const std::vector<std::string>& questions) {
+  std::vector<ProductAnswer> answers;
+  for (const std::string& question : questions) answers.push_back(answer_product(group, question));
+  return answers;
+}
+
+std::vector<TermsAnswer> answer_terms(const PointGroup& group,
+                                      const std::vector<std::string>& configurations) {
+  std::vector<TermsAnswer> answers;
   for (const std::string& configuration : configurations) {
-    answers.terms.push_back(
-        {configuration, find_terms(group, parse_configuration(group, configuration))});
+    answers.push_back({configuration, find_terms(group, parse_configuration(group, configuration))});
   }
+  return answers;
+}
+
+std::vector<DescentAnswer> answer_descents(const PointGroup& group,
+                                           const std::vector<std::string>& subgroups) {
+  std::vector<DescentAnswer> answers;
   for (const std::string& name : subgroups) {
     std::vector<Embedding> ways;
     if (name.find('(') == std::string::npos) ways = embeddings(group, parse_schoenflies(name));
     if (ways.empty()) ways.push_back(find_embedding(group, name));  // or says why there is none
     for (Embedding& way : ways) {
       auto times = correlate(group, way);
-      answers.descents.push_back({std::move(way), std::move(times)});
+      answers.push_back({std::move(way), std::move(times)});
     }
   }
   return answers;

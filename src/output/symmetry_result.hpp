@@ -39,11 +39,16 @@ struct GroupAnswers {
   std::vector<DescentAnswer> descents;
 };
 
-/// @throws Error  for unknown irreps and groups, with the nearest names
-[[nodiscard]] GroupAnswers answer_group(const PointGroup& group,
-                                        const std::vector<std::string>& products,
-                                        const std::vector<std::string>& configurations,
-                                        const std::vector<std::string>& subgroups);
+/// @throws Error  for unknown irreps, with the nearest name
+[[nodiscard]] std::vector<ProductAnswer> answer_products(const PointGroup& group,
+                                                         const std::vector<std::string>& questions);
+[[nodiscard]] std::vector<TermsAnswer> answer_terms(const PointGroup& group,
+                                                    const std::vector<std::string>& configurations);
+
+/// All ways to each subgroup, or the one that is named.
+/// @throws Error  for unknown groups and ways, with the nearest name
+[[nodiscard]] std::vector<DescentAnswer> answer_descents(const PointGroup& group,
+                                                         const std::vector<std::string>& subgroups);
 
 /// What needs the valence orbitals.
 struct OrbitalSymmetry {

@@ -11,6 +11,7 @@
 namespace irrepwise {
 namespace {
 
+constexpr int least_neighbours = 2;  // fewer make no centre
 constexpr double same = 1e-6;  // of unit vectors; coordinates are exact here
 
 bool fixes_one_point(Family family) {
@@ -135,14 +136,14 @@ std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry
 std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   const Molecule& molecule = symmetry.molecule;
   std::optional<int> best;
-  std::pair<int, int> best_merit;
+  std::pair<int, int> best_merit = {least_neighbours, 0};
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
     const std::pair merit = {neighbours(molecule, atom), molecule.atoms()[atom].atomic_number};
-    if (!best || merit > best_merit) {
-      best = atom;
-      best_merit = merit;
-    }
+    if (merit == best_merit) best.reset();  // two alike: neither is the centre
+    if (merit <= best_merit) continue;
+    best = atom;
+    best_merit = merit;
   }
   if (best) return Centre{molecule.atoms()[*best].position, best};
   if (fixes_one_point(symmetry.group.symbol().family)) return Centre{};

@@ -137,6 +137,12 @@ std::vector<ConjugacyClass> find_classes(const Schoenflies& symbol,
       // C3 and C3^2 are different classes: tell them by the turn about (1, 1, 1).
       if (name_giver.n % 3 == 0 && name_giver.axis.prod() < 0) name_giver.k = name_giver.n - name_giver.k;
     }
+    // S5^7 turns as S5^3 does the other way round; where both are in the class, handbooks write the
+    // smaller power.
+    if (name_giver.kind == OperationKind::Rotoreflection && name_giver.n % 2 == 1 &&
+        name_giver.k % 2 == 0 && marked.members.operations.size() == 2) {
+      name_giver.k = name_giver.n - name_giver.k;
+    }
     const std::string mark = is_cubic(symbol.family) ? cubic_mark(name_giver, symbol.family)
                                                      : axial_mark(name_giver, symbol);
     const std::size_t size = marked.members.operations.size();
