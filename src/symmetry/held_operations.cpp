@@ -237,7 +237,13 @@ std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
   const auto pair = reference_pair(sets, positions);
   if (!pair) return operations;
   const Eigen::Vector3d a = positions.col(pair->a), b = positions.col(pair->b);
-  const Eigen::Matrix3d from = pair_frame(a, b);
+  // The longer of the two sets the x axis, as the error of a direction is that of the atom over its
+  // distance.
+  const bool swapped = b.norm() > a.norm();
+  const auto frame_of = [&](const Eigen::Vector3d& first, const Eigen::Vector3d& second) {
+    return swapped ? pair_frame(second, first) : pair_frame(first, second);
+  };
+  const Eigen::Matrix3d from = frame_of(a, b);
   const double length = (a - b).norm();
   const double slack = 2.0 * tolerance_angstrom + 1e-9;
 
@@ -247,7 +253,7 @@ std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
       const Eigen::Vector3d to_a = positions.col(image_a), to_b = positions.col(image_b);
       if (std::abs((to_a - to_b).norm() - length) > slack) continue;
       if (sharpness(to_a, to_b) < 0.2 * sharpness(a, b)) continue;
-      const Eigen::Matrix3d to = pair_frame(to_a, to_b);
+      const Eigen::Matrix3d to = frame_of(to_a, to_b);
       for (int handedness : {1, -1}) {
         const Eigen::Matrix3d rough =
             to * Eigen::Vector3d(1, 1, handedness).asDiagonal() * from.transpose();
