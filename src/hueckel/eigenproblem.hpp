@@ -12,7 +12,7 @@ struct Eigenpairs {
   using Matrix = Eigen::Matrix<Scalar, Eigen::Dynamic, Eigen::Dynamic>;
 
   bool positive = true;         // whether S is positive definite; if not, the rest is empty
-  double reciprocal_condition = 1.0;  // estimate for S
+  double smallest_overlap = 1.0;  // smallest eigenvalue of S, to within a small factor
   Eigen::VectorXd energies;     // ascending
   Matrix vectors;               // columns, C^H S C = 1
 };

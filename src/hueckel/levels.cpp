@@ -81,9 +81,8 @@ void solve_irrep(const HueckelBlock& block, const MolecularSymmetry& symmetry, c
       [&](const auto& overlap) {
         using Matrix = std::decay_t<decltype(overlap)>;
         auto pairs = solve_generalised(std::get<Matrix>(block.hamiltonian_ev), overlap);
-        // The estimate of the condition is cheap, the smallest eigenvalue itself is not; the
-        // estimate errs by a small factor only.
-        if (!pairs.positive || pairs.reciprocal_condition < 1e3 * near_singular_overlap) {
+        // The estimate is cheap, the smallest eigenvalue itself is not.
+        if (!pairs.positive || pairs.smallest_overlap < 1e3 * near_singular_overlap) {
           judge_overlap(block, symmetry, basis, irrep, pairs.positive, result);
         }
         for (Eigen::Index k = 0; k < pairs.energies.size(); ++k) {

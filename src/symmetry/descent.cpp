@@ -49,7 +49,7 @@ std::string comparable(std::string_view text) {
 std::string names_of(const std::vector<Embedding>& ways) {
   std::vector<std::string> names;
   for (const Embedding& way : ways) names.push_back(way.name);
-  return joined(names);
+  return joined(names, "or");
 }
 
 // What might be a subgroup by its order alone, by falling order.

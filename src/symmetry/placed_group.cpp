@@ -9,6 +9,7 @@
 
 #include "core/error.hpp"
 #include "core/text.hpp"
+#include "symmetry/descent.hpp"
 #include "symmetry/held_operations.hpp"
 #include "symmetry/identify.hpp"
 #include "symmetry/product_table.hpp"
@@ -30,15 +31,20 @@ std::vector<std::vector<int>> turned_images(const PointGroup& group,
   return turned;
 }
 
-// A finite subgroup of the group of a single atom or a linear molecule, laid with its z along the
-// molecular axis or else across it.
-std::optional<PlacedGroup> finite_part(const PlacedGroup& whole, const Molecule& molecule,
-                                 const std::vector<int>& kinds, const Schoenflies& wanted) {
-  PointGroup group(wanted);
+// z along the molecular axis, then across it.
+std::vector<Eigen::Matrix3d> lays() {
   Eigen::Matrix3d cyclic;
   cyclic << 0, 0, 1, 1, 0, 0, 0, 1, 0;  // z -> x -> y -> z
-  Eigen::Matrix3d turn = Eigen::Matrix3d::Identity();
-  for (int lay = 0; lay < 3; ++lay, turn = cyclic * turn) {
+  return {Eigen::Matrix3d::Identity(), cyclic, cyclic * cyclic};
+}
+
+// A finite subgroup of the group of a single atom or a linear molecule, laid in the first of the
+// turned frames in which it holds.
+std::optional<PlacedGroup> finite_part(const PlacedGroup& whole, const Molecule& molecule,
+                                       const std::vector<int>& kinds, const Schoenflies& wanted,
+                                       const std::vector<Eigen::Matrix3d>& turns) {
+  PointGroup group(wanted);
+  for (const Eigen::Matrix3d& turn : turns) {
     const Eigen::Matrix3Xd positions = turn * whole.positions;
     std::vector<std::vector<int>> images;
     bool holds = true;
@@ -48,7 +54,9 @@ std::optional<PlacedGroup> finite_part(const PlacedGroup& whole, const Molecule&
         holds = (g * positions.col(i) - positions.col(images.back()[i])).norm() < 1e-6;
       }
     }
-    if (holds) return PlacedGroup{std::move(group), turn * whole.rotation, positions, std::move(images)};
+    if (holds) {
+      return PlacedGroup{std::move(group), turn * whole.rotation, positions, std::move(images)};
+    }
   }
   return std::nullopt;
 }
@@ -150,7 +158,10 @@ std::optional<PlacedGroup> best_placed(const OperationList& list, const std::vec
 PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
                       const std::vector<int>& kinds, const std::string& text,
                       const WantedAxes& wanted) {
-  const Schoenflies symbol = parse_schoenflies(text);
+  const bool says_which = text.find('(') != std::string::npos;  // "C2v(C2')", one of several ways
+  std::optional<Embedding> way;
+  if (says_which) way = find_embedding(whole.group, text);
+  const Schoenflies symbol = way ? way->subgroup.symbol() : parse_schoenflies(text);
   const auto refuse = [&](const std::string& hint) {
     return Error(fmt::format("{} is no subgroup of {}, the group of this molecule; {}",
                              symbol.name(), whole.group.symbol().name(), hint));
@@ -160,7 +171,8 @@ PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
       if (symbol == whole.group.symbol()) return whole;
       throw refuse("choose a finite group");
     }
-    auto found = finite_part(whole, molecule, kinds, symbol);
+    auto found = finite_part(whole, molecule, kinds, symbol,
+                             way ? std::vector{way->rotation} : lays());
     if (!found) throw refuse("a linear molecule allows Cn and Cnv, with a centre also Cnh, Dn, Dnh, "
                              "Dnd and S2n");
     turn_to_conventions(*found, molecule, wanted);
@@ -177,7 +189,8 @@ PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
     }
   }
   const Eigen::Matrix3Xd in_input_frame = whole.rotation.transpose() * whole.positions;
-  const std::vector<Subset> subsets = closed_subsets(list.table);
+  const std::vector<Subset> subsets =
+      way ? conjugates(whole.group, *way) : closed_subsets(list.table);
   auto best = best_placed(list, subsets, symbol, whole.rotation.row(2), molecule, in_input_frame,
                           wanted);
   if (!best) {

@@ -59,6 +59,7 @@ void turn_to_conventions(PlacedGroup& placed, const Molecule& molecule, const Wa
 
 /// Of all subgroups with the wanted symbol, the one whose z stays the whole group's z where it can;
 /// then as `best_placed`.
+/// @param text    a symbol, or the name of one way to a subgroup as in `Embedding`: "C2v(C2')"
 /// @throws Error  where it is no subgroup (names those there are), or the wished axes suit none
 [[nodiscard]] PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
                                           const std::vector<int>& kinds, const std::string& text,
