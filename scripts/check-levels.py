@@ -81,19 +81,40 @@ def check_orbitals(checks, levels, overlap, hamiltonian):
     return columns
 
 
-def check_composition(checks, levels, columns, overlap, titles):
+def in_standard_frame(rows, titles, rotation):
+    """The rows of p orbitals turned as vectors turn; s does not change, d and f are left."""
+    turned = rows.copy()
+    for i, title in enumerate(titles):
+        if title.endswith("px"):
+            turned[i:i + 3] = rotation @ rows[i:i + 3]
+    return turned
+
+
+def check_composition(checks, levels, columns, overlap, titles, rotation):
+    """Shares refer to the standard frame, matrices and coefficients to that of the input. Shares of
+    single d and f orbitals are compared where the two frames agree, otherwise their sum over a shell,
+    which does not depend on the frame (the program leaves out shares below 1e-4)."""
+    same_frame = np.allclose(rotation, np.eye(3))
     start = 0
     for level in levels:
         partners = columns[:, start:start + level["degeneracy"]]
         start += level["degeneracy"]
-        shares = (partners * (overlap @ partners)).mean(axis=1)
+        products = [in_standard_frame(m, titles, rotation) for m in (partners, overlap @ partners)]
+        shares = (products[0] * products[1]).mean(axis=1)
+        sums = {}
         for entry in level["composition"]:
             title = f"{entry['element']}{entry['atom']} {entry['orbital']}"
             if title not in titles:
                 checks.true(f"composition of {level['label']}", False, f"no orbital {title}")
-            else:
+            elif same_frame or "s" in title.split()[1][:2] or "p" in title.split()[1][:2]:
                 checks.equal(f"share of {title} in {level['label']}", entry["share"],
                              shares[titles.index(title)])
+            else:
+                shell = title.split()[0] + " " + title.split()[1][:2]
+                sums[shell] = sums.get(shell, 0.0) + entry["share"]
+        for shell, found in sums.items():
+            expected = sum(s for s, t in zip(shares, titles) if t.startswith(shell))
+            checks.equal(f"share of {shell} in {level['label']}", found, expected, 7e-4)
 
 
 def check_populations(checks, document, columns, overlap, owners):
@@ -147,7 +168,8 @@ def check(program, path):
         check_levels(checks, levels, overlap, hamiltonian)
         columns = check_orbitals(checks, levels, overlap, hamiltonian)
         if columns is not None:
-            check_composition(checks, levels, columns, overlap, titles)
+            check_composition(checks, levels, columns, overlap, titles,
+                              np.array(document["symmetry"]["rotation"], float))
             check_populations(checks, document, columns, overlap, atoms_of_orbitals(titles))
     except (RuntimeError, OSError, ValueError, KeyError, AttributeError, np.linalg.LinAlgError) as e:
         checks.true("runs and prints what it should", False, f"{type(e).__name__}: {e}")

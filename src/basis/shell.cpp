@@ -3,6 +3,7 @@
 #include <array>
 #include <cassert>
 #include <cmath>
+#include <limits>
 #include <utility>
 
 #include <fmt/format.h>
@@ -45,6 +46,9 @@ ContractedRadial::ContractedRadial(std::vector<Term> terms) : terms_(std::move(t
         "misprint",
         found, max_norm_error));
   }
+  // What is normalised to rounding stays, so that a contraction written in full reads back the
+  // same.
+  if (std::abs(found - 1.0) <= 8.0 * std::numeric_limits<double>::epsilon()) return;
   const double scale = 1.0 / std::sqrt(found);
   for (Term& term : terms_) term.coefficient *= scale;
 }

@@ -14,5 +14,6 @@ struct Command {
 
 [[nodiscard]] Command add_levels(CLI::App& program);
 [[nodiscard]] Command add_parameters(CLI::App& program);
+[[nodiscard]] Command add_symmetry(CLI::App& program);
 
 }  // namespace irrepwise::cli

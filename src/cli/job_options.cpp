@@ -34,11 +34,11 @@ double in_range(const char* option, double value, double largest) {
 
 }  // namespace
 
-void add_job_options(CLI::App& command, JobOptions& options) {
+void add_job_options(CLI::App& command, JobOptions& options, FileOption file) {
   command
       .add_option("file", options.file,
                   "Coordinates in XYZ format (Å), or a job file that ends in .yaml or .yml")
-      ->required()
+      ->required(file == FileOption::Required)
       ->option_text("FILE");
   const auto add = [&](const char* name, auto& value, const char* text, const char* help,
                        const char* group) {
@@ -59,6 +59,10 @@ void add_job_options(CLI::App& command, JobOptions& options) {
       "z axis: a vector (0,0,1), an atom (Pt1), two atoms (C1,C2) or the normal of three",
       "Symmetry");
   add("--x", options.x, "AXIS", "x axis, in the same way", "Symmetry");
+  add("--symmetry", options.group, "GROUP",
+      "Make the structure exact in this group, though it holds only roughly", "Symmetry");
+  add("--limit", options.limit, "Å",
+      "How far off --symmetry and the ladder of groups may look; 0.5 by default", "Symmetry");
   add("--subgroup", options.subgroup, "GROUP", "Work in this subgroup: D2h, C2v …", "Symmetry");
 }
 
@@ -97,6 +101,10 @@ Job read_job_with(const JobOptions& options) {
   }
   if (!options.x.empty()) {
     job.symmetry.x = named("--x", [&] { return parse_axis(options.x, job.molecule); });
+  }
+  if (!options.group.empty()) job.symmetry.group = options.group;
+  if (options.limit) {
+    job.symmetry.limit_angstrom = in_range("--limit", *options.limit, largest_tolerance_angstrom);
   }
   if (!options.subgroup.empty()) job.symmetry.subgroup = options.subgroup;
   return job;

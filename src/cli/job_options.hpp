@@ -21,9 +21,14 @@ struct JobOptions {
   std::string z;
   std::string x;
   std::string subgroup;
+  std::string group;
+  std::optional<double> limit;
 };
 
-void add_job_options(CLI::App& command, JobOptions& options);
+enum class FileOption { Required, Optional };
+
+void add_job_options(CLI::App& command, JobOptions& options,
+                     FileOption file = FileOption::Required);
 
 /// Reads the file and applies the options.
 /// @throws Error  as read_job; for an option, with its name as the place

@@ -1,4 +1,5 @@
 // The program: parses the command line, runs one command, turns errors into messages and codes.
+#include <algorithm>
 #include <csignal>
 #include <cstdio>
 #include <exception>
@@ -13,6 +14,7 @@
 #include "cli/commands.hpp"
 #include "core/error.hpp"
 #include "core/output_file.hpp"
+#include "core/text.hpp"
 
 namespace {
 
@@ -26,7 +28,40 @@ int report(const std::string& message, int code) {
   return code;
 }
 
-int answer_parse_error(const CLI::App& program, const CLI::ParseError& error) {
+std::string did_you_mean(const std::string& word, const std::vector<std::string>& known) {
+  const std::string nearest = nearest_word(word, known);
+  return nearest.empty() ? "" : "; did you mean '" + nearest + "'?";
+}
+
+// What the parser found wrong, in our words where its own do not say what to do.
+std::string usage_message(const CLI::App& program, const CLI::ParseError& error,
+                          const std::vector<std::string>& arguments) {
+  const std::vector<CLI::App*> chosen = program.get_subcommands();
+  if (chosen.empty()) {
+    std::vector<std::string> commands;
+    for (const CLI::App* command : program.get_subcommands({})) {
+      commands.push_back(command->get_name());
+    }
+    if (arguments.empty()) return "name a command: " + joined(commands, "or");
+    return "'" + arguments.front() + "' is no command" + did_you_mean(arguments.front(), commands);
+  }
+  if (dynamic_cast<const CLI::ExtrasError*>(&error) != nullptr) {
+    std::vector<std::string> known;
+    for (const CLI::Option* option : chosen.back()->get_options()) {
+      for (const std::string& name : option->get_lnames()) known.push_back("--" + name);
+    }
+    for (const std::string& argument : arguments) {
+      if (argument.starts_with("--") &&
+          std::find(known.begin(), known.end(), argument) == known.end()) {
+        return "there is no option " + argument + did_you_mean(argument, known);
+      }
+    }
+  }
+  return error.what();
+}
+
+int answer_parse_error(const CLI::App& program, const CLI::ParseError& error,
+                       const std::vector<std::string>& arguments) {
   if (error.get_exit_code() == 0) {  // --help or --version
     std::ostringstream out;
     std::ostringstream unused;
@@ -36,7 +71,8 @@ int answer_parse_error(const CLI::App& program, const CLI::ParseError& error) {
   }
   std::string help = "irrepwise";
   for (const CLI::App* chosen : program.get_subcommands()) help += " " + chosen->get_name();
-  return report(std::string(error.what()) + "; see " + help + " --help", wrong_usage);
+  return report(usage_message(program, error, arguments) + "; see " + help + " --help",
+                wrong_usage);
 }
 
 int run(int argc, char** argv) {
@@ -52,9 +88,11 @@ int run(int argc, char** argv) {
       "Examples:\n"
       "  irrepwise levels complex.xyz --charge -2\n"
       "  irrepwise levels job.yaml --format json --output levels.json\n"
+      "  irrepwise symmetry complex.xyz --salcs --local\n"
       "  irrepwise parameters Pt Cl\n"
       "Each command has its own help: irrepwise levels --help");
   const std::vector<cli::Command> commands = {cli::add_levels(program),
+                                              cli::add_symmetry(program),
                                               cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
@@ -63,7 +101,7 @@ int run(int argc, char** argv) {
     }
     return 0;
   } catch (const CLI::ParseError& error) {
-    return answer_parse_error(program, error);
+    return answer_parse_error(program, error, {argv + 1, argv + argc});
   }
 }
 

@@ -20,11 +20,18 @@ std::string reason(int error_number) {
   return std::generic_category().message(error_number);  // strerror without its shared buffer
 }
 
+bool folder_exists(const std::string& path) {
+  std::error_code ignored;
+  const std::filesystem::path folder = std::filesystem::path(path).parent_path();
+  return folder.empty() || std::filesystem::is_directory(folder, ignored);
+}
+
 Error cannot_write(const std::string& path, int error_number) {
   const char* remedy = "give another path";
   switch (error_number) {
     case ENOENT:
-      remedy = "make the folder first, or give another path";
+      remedy = folder_exists(path) ? "choose another folder"
+                                   : "make the folder first, or give another path";
       break;
     case ENOTDIR:
       remedy = "a part of the path before the last is no folder; give another path";
@@ -37,7 +44,7 @@ Error cannot_write(const std::string& path, int error_number) {
     case ENOSPC:
     case EDQUOT:
     case EFBIG:
-      remedy = "make room on the disk; nothing was written";
+      remedy = "make room";
       break;
     default:
       break;

@@ -121,7 +121,9 @@ void sort_levels(std::vector<Level>& levels) {
   }
 }
 
+// In a subgroup levels coincide because the whole group says so: that is no accident.
 void note_accidents(const MolecularSymmetry& symmetry, Levels& result) {
+  if (!symmetry.full_group.empty()) return;
   for (std::size_t i = 0; i + 1 < result.levels.size(); ++i) {
     const Level &a = result.levels[i], &b = result.levels[i + 1];
     const bool near = std::abs(b.energy_ev - a.energy_ev) < accidental_degeneracy_ev;

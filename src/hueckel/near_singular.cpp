@@ -20,9 +20,9 @@ std::string set_name(const MolecularSymmetry& symmetry, const EquivalentAtoms& s
   for (int atom : set.atoms) names.push_back(atom_name(symmetry.molecule, atom));
   if (names.size() > most_atoms) {
     names.resize(most_atoms);
-    return joined(names, ",") + " …";
+    return fmt::format("{} …", fmt::join(names, ", "));
   }
-  return joined(names, ",");
+  return fmt::format("{}", fmt::join(names, ", "));
 }
 
 template <typename Matrix>

@@ -39,7 +39,7 @@ struct FileChain {
                                                             const Molecule& molecule,
                                                             const ParameterSet& parameters);
 
-/// `symmetry`: `tolerance`, `axes`, `subgroup`.
+/// `symmetry`: `tolerance`, `limit`, `axes`, `group`, `subgroup`.
 [[nodiscard]] SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule);
 
 /// `rule`, `k`, `multiplicity` and `occupations` of the job itself.

@@ -59,7 +59,7 @@ AxisDirection read_direction(const YamlNode& node, const Molecule& molecule) {
 }  // namespace
 
 SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule) {
-  node.expect_keys("the symmetry", {"tolerance", "axes", "subgroup"});
+  node.expect_keys("the symmetry", {"tolerance", "limit", "axes", "group", "subgroup"});
   SymmetryOptions options;
   if (const YamlNode* const tolerance = node.find("tolerance")) {
     options.tolerance_angstrom = tolerance->number("a tolerance in Å");
@@ -68,6 +68,16 @@ SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule) {
       tolerance->fail(fmt::format("found a tolerance of {} Å, expected more than 0 and at most {}",
                                   options.tolerance_angstrom, largest_tolerance_angstrom));
     }
+  }
+  if (const YamlNode* const limit = node.find("limit")) {
+    options.limit_angstrom = limit->number("a limit in Å");
+    if (!(options.limit_angstrom > 0.0 && options.limit_angstrom <= largest_tolerance_angstrom)) {
+      limit->fail(fmt::format("found a limit of {} Å, expected more than 0 and at most {}",
+                              options.limit_angstrom, largest_tolerance_angstrom));
+    }
+  }
+  if (const YamlNode* const group = node.find("group")) {
+    options.group = group->word("the symbol of a point group");
   }
   if (const YamlNode* const axes = node.find("axes")) {
     axes->expect_keys("the axes", {"z", "x"});

@@ -56,10 +56,22 @@ std::pair<int, int> first_equivalent_pair(const MolecularSymmetry& symmetry, int
 }
 
 std::string atom_list(const Molecule& molecule, const std::vector<int>& atoms) {
+  const auto element = [&](std::size_t i) {
+    return molecule.atoms()[static_cast<std::size_t>(atoms[i])].atomic_number;
+  };
   std::string text;
-  for (const int atom : atoms) {
+  for (std::size_t i = 0; i < atoms.size(); ++i) {
+    std::size_t last = i;
+    while (last + 1 < atoms.size() && atoms[last + 1] == atoms[last] + 1 &&
+           element(last + 1) == element(i)) {
+      ++last;
+    }
     if (!text.empty()) text += ", ";
-    text += atom_name(molecule, atom);
+    text += atom_name(molecule, atoms[i]);
+    if (last >= i + 2) {
+      text += "–" + atom_name(molecule, atoms[last]);
+      i = last;
+    }
   }
   return text;
 }

@@ -26,7 +26,7 @@ struct AtomSet {
 [[nodiscard]] std::pair<int, int> first_equivalent_pair(const MolecularSymmetry& symmetry, int a,
                                                         int b);
 
-/// @returns  "Cl2, Cl3, Cl4, Cl5"
+/// @returns  "H3, H7–H9, H12": runs of three and more by their ends
 [[nodiscard]] std::string atom_list(const Molecule& molecule, const std::vector<int>& atoms);
 
 }  // namespace irrepwise

@@ -24,10 +24,17 @@ std::string method_words(const Levels& levels) {
   return words;
 }
 
+// "Dinfh" -> "D∞h"
+std::string readable_group(std::string name) {
+  const std::size_t at = name.find("inf");
+  return at == std::string::npos ? name : name.replace(at, 3, "∞");
+}
+
 std::string group_words(const MolecularSymmetry& symmetry) {
-  std::string words = symmetry.group.symbol().name();
-  if (!symmetry.full_group.empty() && symmetry.full_group != words) {
-    words += ", a subgroup of " + symmetry.full_group;
+  const std::string name = symmetry.group.symbol().name();
+  std::string words = readable_group(name);
+  if (!symmetry.full_group.empty() && symmetry.full_group != name) {
+    words += ", a subgroup of " + readable_group(symmetry.full_group);
   }
   return fmt::format("{} at tolerance {} Å; largest shift of an atom {:.4f} Å", words,
                      symmetry.tolerance_angstrom, symmetry.largest_shift_angstrom);
@@ -53,6 +60,12 @@ std::vector<Fact> header(const LevelsResult& result, const std::vector<AtomSet>&
   return facts;
 }
 
+std::string range_words(const LevelWindow& window) {
+  if (!window.to_ev) return fmt::format("above {} eV", *window.from_ev);
+  if (!window.from_ev) return fmt::format("below {} eV", *window.to_ev);
+  return fmt::format("between {} and {} eV", *window.from_ev, *window.to_ev);
+}
+
 // First and one past the last level to show, in order of energy.
 struct Range {
   int first;
@@ -73,11 +86,9 @@ Range shown_levels(const Levels& levels, const LevelWindow& window) {
       range.end = i + 1;
     }
     if (range.first >= range.end) {
-      throw Error(
-          fmt::format("no level lies between {} and {} eV; they run from {:.3f} to {:.3f} eV",
-                      window.from_ev ? fmt::format("{}", *window.from_ev) : "any energy",
-                      window.to_ev ? fmt::format("{}", *window.to_ev) : "any",
-                      levels.levels.front().energy_ev, levels.levels.back().energy_ev));
+      throw Error(fmt::format("no level lies {}; they run from {:.3f} to {:.3f} eV",
+                              range_words(window), levels.levels.front().energy_ev,
+                              levels.levels.back().energy_ev));
     }
     return range;
   }
@@ -115,9 +126,9 @@ Table level_table(const LevelsResult& result, const std::vector<AtomSet>& sets,
   table.columns = {{"frontier", "", "", Align::Left, 0, false},
                    {"label", "level", "", Align::Right, 0, false},
                    {"energy_ev", "energy", "eV", Align::Decimal, 0, false},
-                   {"occupation", "electrons", "", Align::Decimal, 1, false},
+                   {"occupation", "electrons", "", Align::Decimal, 2, false},
                    {"degeneracy", "degeneracy", "", Align::Right, 3, false},
-                   {"composition", "made of", "", Align::Left, 2, true}};
+                   {"composition", "made of", "", Align::Left, 1, true}};
   const std::vector<ShellGroup> groups = shell_groups(result, sets);
   for (int i = range.end - 1; i >= range.first; --i) {
     const Level& level = levels.levels[static_cast<std::size_t>(i)];
@@ -146,6 +157,9 @@ std::vector<std::string> remarks(const LevelsResult& result) {
       "Extended Hückel ranks levels by symmetry, overlap and electronegativity. Do not read bond "
       "lengths, reaction energies, spin states or excitation energies from it; charges of ions and "
       "of very polar molecules come out too large.");
+  words.push_back(
+      "Orbital energies say nothing about toxicity, stability or how to handle a compound: there, "
+      "safety data, local codes and licensed practice decide.");
   return words;
 }
 

@@ -1,7 +1,10 @@
 #include "output/parameters_report.hpp"
 
+#include <string>
+
 #include <fmt/format.h>
 
+#include "core/error.hpp"
 #include "molecule/element.hpp"
 #include "output/json_text.hpp"
 #include "output/table_csv.hpp"
@@ -19,10 +22,10 @@ Table parameter_table(const ParameterSet& parameters, const std::vector<int>& el
                    {"valence_electrons", "electrons", "", Align::Right, 3, false},
                    {"shell", "shell", "", Align::Left, 0, false},
                    {"h_ii_ev", "H_ii", "eV", Align::Decimal, 0, false},
-                   {"exponent_1", "ζ1", "1/bohr", Align::Decimal, 0, false},
-                   {"coefficient_1", "c1", "", Align::Decimal, 1, false},
-                   {"exponent_2", "ζ2", "1/bohr", Align::Decimal, 1, false},
-                   {"coefficient_2", "c2", "", Align::Decimal, 1, false},
+                   {"exponent_1", "ζ1", "", Align::Decimal, 0, false},
+                   {"coefficient_1", "c1", "", Align::Decimal, 0, false},
+                   {"exponent_2", "ζ2", "", Align::Decimal, 0, false},
+                   {"coefficient_2", "c2", "", Align::Decimal, 0, false},
                    {"source", "source", "", Align::Left, 2, true}};
   for (const int element : elements) {
     const ElementParameters& found = parameters.at(element);
@@ -54,12 +57,34 @@ std::string quoted_yaml(const std::string& text) {
   return out + '"';
 }
 
+// The fewest digits that scale to the same coefficients on reading, as published ones do with four.
+std::string coefficients_text(const ContractedRadial& radial) {
+  const auto terms = radial.terms();
+  const auto rounded = [](double value, int digits) {
+    return std::stod(fmt::format("{:.{}f}", value, digits));
+  };
+  constexpr int all_digits = 17;
+  for (int digits = 3; digits < all_digits; ++digits) {
+    const double c0 = rounded(terms[0].coefficient, digits);
+    const double c1 = rounded(terms[1].coefficient, digits);
+    try {
+      const ContractedRadial again({{terms[0].function, c0}, {terms[1].function, c1}});
+      if (again.terms()[0].coefficient == terms[0].coefficient &&
+          again.terms()[1].coefficient == terms[1].coefficient) {
+        return fmt::format("{}, {}", c0, c1);
+      }
+    } catch (const Error&) {  // so few digits that it looks like a misprint
+    }
+  }
+  return fmt::format("{}, {}", terms[0].coefficient, terms[1].coefficient);
+}
+
 // "exponent: 1.3", or both exponents with their coefficients.
 std::string yaml_radial(const ContractedRadial& radial) {
   const auto terms = radial.terms();
   if (terms.size() == 1) return fmt::format("exponent: {}", terms[0].function.zeta());
-  return fmt::format("exponents: [{}, {}], coefficients: [{}, {}]", terms[0].function.zeta(),
-                     terms[1].function.zeta(), terms[0].coefficient, terms[1].coefficient);
+  return fmt::format("exponents: [{}, {}], coefficients: [{}]", terms[0].function.zeta(),
+                     terms[1].function.zeta(), coefficients_text(radial));
 }
 
 }  // namespace
@@ -67,9 +92,9 @@ std::string yaml_radial(const ContractedRadial& radial) {
 Report parameters_report(const ParameterSet& parameters, const std::vector<int>& elements) {
   Report report;
   report.title = fmt::format("Parameter set: {}", parameters.name());
-  report.facts = {{"shells",
-                   {"χ = N r^(n−1) (c1 e^(−ζ1 r) + c2 e^(−ζ2 r)) Y, coefficients of "
-                    "normalised functions, scaled to norm 1"}}};
+  report.facts = {{"radial part",
+                   {"N r^(n−1) (c1 e^(−ζ1 r) + c2 e^(−ζ2 r)), ζ in 1/bohr; each term "
+                    "and the whole of norm\u00A01"}}};
   report.tables.push_back(parameter_table(parameters, elements));
   return report;
 }

@@ -24,19 +24,17 @@ Printed print_column(const Table& table, std::size_t index) {
   const Column& column = table.columns[index];
   Printed printed{&column, {}, display_width(column_title(column))};
   std::vector<DecimalParts> parts;
-  int before = 0;
   int after = 0;
   for (const auto& line : table.lines) {
     if (const Row* row = std::get_if<Row>(&line)) {
       parts.push_back(decimal_parts(row->cells[index]));
-      before = std::max(before, display_width(parts.back().before));
       after = std::max(after, display_width(parts.back().after));
     }
   }
   for (const DecimalParts& part : parts) {
-    printed.texts.push_back(column.align == Align::Decimal
-                                ? padded_left(part.before, before) + padded_right(part.after, after)
-                                : part.before + part.after);
+    // Filled up behind the point, and set to the right as a whole, the points meet.
+    const bool decimal = column.align == Align::Decimal;
+    printed.texts.push_back(part.before + padded_right(part.after, decimal ? after : 0));
     printed.width = std::max(printed.width, display_width(printed.texts.back()));
   }
   return printed;
@@ -56,33 +54,38 @@ void narrow_wrapping(std::vector<Printed>& columns, int width, int narrowest) {
   }
 }
 
-/// @returns  the headers of the columns that had to go
-std::vector<std::string> fit(std::vector<Printed>& columns, int width) {
-  std::vector<std::string> dropped;
-  const std::vector<Printed> natural = columns;
-  std::vector<bool> kept(columns.size(), true);
-  for (;;) {
-    columns.clear();
-    for (std::size_t i = 0; i < natural.size(); ++i) {
-      if (kept[i]) columns.push_back(natural[i]);
-    }
-    narrow_wrapping(columns, width, narrowest_wrap);
-    if (total_width(columns) <= width) return dropped;
-    std::size_t least = natural.size();
-    for (std::size_t i = 0; i < natural.size(); ++i) {
-      if (!kept[i] || natural[i].column->priority == 0) continue;
-      if (least == natural.size() ||
-          natural[i].column->priority >= natural[least].column->priority) {
-        least = i;
-      }
-    }
-    if (least == natural.size()) {
-      narrow_wrapping(columns, width, 1);
-      return dropped;
-    }
-    kept[least] = false;
-    dropped.push_back(natural[least].column->header);
+// Those of the columns that are kept, narrowed to the width where that can be.
+std::vector<Printed> kept_columns(const std::vector<Printed>& all, const std::vector<bool>& kept,
+                                  int width, int narrowest) {
+  std::vector<Printed> columns;
+  for (std::size_t i = 0; i < all.size(); ++i) {
+    if (kept[i]) columns.push_back(all[i]);
   }
+  narrow_wrapping(columns, width, narrowest);
+  return columns;
+}
+
+/// @returns  which columns to keep: the highest priority number goes first, and what has gone comes
+///           back where there is room after all
+std::vector<bool> choose_columns(const std::vector<Printed>& all, int width) {
+  std::vector<bool> kept(all.size(), true);
+  std::vector<std::size_t> order;
+  for (std::size_t i = all.size(); i-- > 0;) {
+    if (all[i].column->priority > 0) order.push_back(i);
+  }
+  std::stable_sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) {
+    return all[a].column->priority > all[b].column->priority;
+  });
+  const auto fits = [&] {
+    return total_width(kept_columns(all, kept, width, narrowest_wrap)) <= width;
+  };
+  std::size_t gone = 0;
+  while (gone < order.size() && !fits()) kept[order[gone++]] = false;
+  while (gone-- > 0) {
+    kept[order[gone]] = true;
+    if (!fits()) kept[order[gone]] = false;
+  }
+  return kept;
 }
 
 std::string aligned(const Printed& column, const std::string& text) {
@@ -128,9 +131,15 @@ std::string rule(int width, const std::string& words) {
 }  // namespace
 
 std::string table_text(const Table& table, int width) {
-  std::vector<Printed> columns;
-  for (std::size_t i = 0; i < table.columns.size(); ++i) columns.push_back(print_column(table, i));
-  const std::vector<std::string> dropped = fit(columns, width);
+  std::vector<Printed> all;
+  for (std::size_t i = 0; i < table.columns.size(); ++i) all.push_back(print_column(table, i));
+  const std::vector<bool> kept = choose_columns(all, width);
+  std::vector<Printed> columns = kept_columns(all, kept, width, narrowest_wrap);
+  if (total_width(columns) > width) columns = kept_columns(all, kept, width, 1);
+  std::vector<std::string> dropped;
+  for (std::size_t i = 0; i < all.size(); ++i) {
+    if (!kept[i]) dropped.push_back(all[i].column->header);
+  }
   const int rule_width = total_width(columns);
 
   std::string out;

@@ -1,5 +1,7 @@
 #include "salc/equivalent_atoms.hpp"
 
+#include "symmetry/identify.hpp"
+
 namespace irrepwise {
 
 std::vector<EquivalentAtoms> equivalent_atoms(const MolecularSymmetry& symmetry) {
@@ -24,6 +26,17 @@ std::vector<EquivalentAtoms> equivalent_atoms(const MolecularSymmetry& symmetry)
     sets.push_back(std::move(set));
   }
   return sets;
+}
+
+Schoenflies site_symbol(const PointGroup& group, const EquivalentAtoms& set) {
+  if (static_cast<int>(set.site_group.size()) == group.order()) return group.symbol();
+  // An atom off the centre of a linear molecule keeps the turns and the mirrors through the axis.
+  if (!group.symbol().is_finite()) return {Family::Cinfv, 1};
+  PartialTable table{group.order(), {}};
+  for (int g = 0; g < group.order(); ++g) {
+    for (int h = 0; h < group.order(); ++h) table.products.push_back(group.product(g, h));
+  }
+  return identify_group(table, group.operations(), set.site_group);
 }
 
 }  // namespace irrepwise

@@ -4,6 +4,7 @@
 #include <vector>
 
 #include "symmetry/molecular_symmetry.hpp"
+#include "symmetry/schoenflies.hpp"
 
 namespace irrepwise {
 
@@ -18,5 +19,8 @@ struct EquivalentAtoms {
 
 /// @returns  sets in the order of their representatives
 [[nodiscard]] std::vector<EquivalentAtoms> equivalent_atoms(const MolecularSymmetry& symmetry);
+
+/// @returns  the symbol of the group that keeps the representative in place
+[[nodiscard]] Schoenflies site_symbol(const PointGroup& group, const EquivalentAtoms& set);
 
 }  // namespace irrepwise

@@ -26,7 +26,7 @@ std::string through_atoms(const Molecule& molecule, Distance distance) {
   if (names.size() > most_names) {
     const std::size_t more = names.size() - most_names;
     names.resize(most_names);
-    return fmt::format(" through {} and {} more", joined(names, ","), more);
+    return fmt::format(" through {} and {} more", fmt::join(names, ", "), more);
   }
   return " through " + joined(names);
 }

@@ -26,31 +26,8 @@ Eigen::Matrix3d smallest_turn(const Eigen::Vector3d& from, const Eigen::Vector3d
   return Eigen::Quaterniond::FromTwoVectors(from, to).toRotationMatrix();
 }
 
-bool turns_freely(Family family) {
-  return family == Family::Cs || family == Family::Cn || family == Family::Cnh ||
-         family == Family::S2n || family == Family::Cinfv || family == Family::Dinfh;
-}
 bool is_free(Family family) {
   return family == Family::C1 || family == Family::Ci || family == Family::Kh;
-}
-
-// All proper turns that keep a group with fixed axes in its standard form.
-std::vector<Eigen::Matrix3d> standard_turns(const Schoenflies& symbol) {
-  switch (symbol.family) {
-    case Family::T:
-    case Family::Td:
-    case Family::Th:
-    case Family::O:
-    case Family::Oh: return standard_operations({Family::O, 1});
-    case Family::I:
-    case Family::Ih: return standard_operations({Family::I, 1});
-    case Family::Dn:
-    case Family::Dnh:
-      if (symbol.n == 2) return standard_operations({Family::O, 1});
-      break;
-    default: break;
-  }
-  return standard_operations({Family::Dn, 2 * symbol.n});
 }
 
 // Turns about z that bring x to the nearest of the heaviest atoms off the axis.
@@ -155,6 +132,29 @@ Eigen::Vector3d direction_of(const AxisDirection& wish, const char* name, const 
 }
 
 }  // namespace
+
+bool turns_freely(Family family) {
+  return family == Family::Cs || family == Family::Cn || family == Family::Cnh ||
+         family == Family::S2n || family == Family::Cinfv || family == Family::Dinfh;
+}
+
+std::vector<Eigen::Matrix3d> standard_turns(const Schoenflies& symbol) {
+  switch (symbol.family) {
+    case Family::T:
+    case Family::Td:
+    case Family::Th:
+    case Family::O:
+    case Family::Oh: return standard_operations({Family::O, 1});
+    case Family::I:
+    case Family::Ih: return standard_operations({Family::I, 1});
+    case Family::Dn:
+    case Family::Dnh:
+      if (symbol.n == 2) return standard_operations({Family::O, 1});
+      break;
+    default: break;
+  }
+  return standard_operations({Family::Dn, 2 * symbol.n});
+}
 
 WantedAxes wanted_axes(const SymmetryOptions& options, const Molecule& molecule,
                        const Eigen::Vector3d& origin) {

@@ -40,6 +40,12 @@ struct WantedAxes {
 [[nodiscard]] FrameChoice choose_frame(const Schoenflies& symbol, const Molecule& molecule,
                                        const Eigen::Matrix3d& rotation, const WantedAxes& wanted);
 
+/// @returns  all proper turns that keep a finite group with fixed axes in its standard form
+[[nodiscard]] std::vector<Eigen::Matrix3d> standard_turns(const Schoenflies& symbol);
+
+/// @returns  whether the group leaves its x axis free: one axis or one plane and nothing else
+[[nodiscard]] bool turns_freely(Family family);
+
 /// @returns  whether the merit of a is better than that of b beyond rounding
 [[nodiscard]] bool better_merit(const std::vector<double>& a, const std::vector<double>& b);
 

@@ -10,10 +10,12 @@
 
 #include "core/error.hpp"
 #include "core/text.hpp"
+#include "symmetry/approached_groups.hpp"
 #include "symmetry/axis_words.hpp"
 #include "symmetry/frames.hpp"
 #include "symmetry/held_operations.hpp"
 #include "symmetry/identify.hpp"
+#include "symmetry/ladder.hpp"
 #include "symmetry/product_table.hpp"
 #include "symmetry/subgroups.hpp"
 #include "symmetry/symmetrise.hpp"
@@ -82,7 +84,7 @@ void turn_to_conventions(Found& found, const Molecule& molecule, const WantedAxe
 }
 
 Found linear(const Molecule& molecule, const std::vector<int>& kinds,
-             const Eigen::Matrix3Xd& positions, double tolerance) {
+             const Eigen::Matrix3Xd& positions, double tolerance, bool may_have_centre = true) {
   const Eigen::Matrix3d rotation =
       Eigen::Quaterniond::FromTwoVectors(best_line(molecule), Eigen::Vector3d::UnitZ())
           .toRotationMatrix();
@@ -90,7 +92,7 @@ Found linear(const Molecule& molecule, const std::vector<int>& kinds,
   on_axis.topRows<2>().setZero();
   const std::vector<int> reversed =
       nearest_images(molecule, kinds, on_axis, -Eigen::Matrix3d::Identity());
-  bool centred = true;
+  bool centred = may_have_centre;
   for (int i = 0; i < molecule.size(); ++i) {
     centred = centred && reversed[reversed[i]] == i &&
               std::abs(on_axis(2, i) + on_axis(2, reversed[i])) <= tolerance;
@@ -201,6 +203,44 @@ std::string subgroup_names(const PartialTable& table, const std::vector<Eigen::M
   return joined(names);
 }
 
+// Of the subsets that are groups with the symbol, the one whose z lies nearest to a given line; then
+// by the conventions' rules for axes; then the one turned least. Nothing where no subset has the
+// symbol.
+std::optional<Found> best_placed(const OperationList& list, const std::vector<Subset>& subsets,
+                                 const Schoenflies& symbol, const Eigen::Vector3d& line,
+                                 const Molecule& molecule, const Eigen::Matrix3Xd& positions,
+                                 const WantedAxes& wanted) {
+  std::optional<Found> best;
+  std::vector<double> best_merit;
+  std::optional<Error> last_error;
+  for (const Subset& subset : subsets) {
+    if (!(identify_group(list.table, list.matrices, subset) == symbol)) continue;
+    Found found = made_exact(list, subset, positions);
+    FrameChoice choice;
+    try {
+      choice = choose_frame(symbol, molecule.with_positions(found.positions), found.rotation, wanted);
+    } catch (const Error& error) {  // the wished axes may suit another subset of this symbol
+      last_error = error;
+      continue;
+    }
+    std::vector<double> merit = {std::round(std::abs(choice.rotation.row(2).dot(line)) * 1e6)};
+    merit.insert(merit.end(), choice.merit.begin(), choice.merit.end());
+    const bool better =
+        !best || better_merit(merit, best_merit) ||
+        (!better_merit(best_merit, merit) &&
+         choice.rotation.trace() > best->rotation.trace() + 1e-9);
+    if (!better) continue;
+    const Eigen::Matrix3d turn = choice.rotation * found.rotation.transpose();
+    found.images = turned_images(found.group, found.images, turn);
+    found.positions = turn * found.positions;
+    found.rotation = choice.rotation;
+    best = std::move(found);
+    best_merit = std::move(merit);
+  }
+  if (!best && last_error) throw *last_error;
+  return best;
+}
+
 // Of all subgroups with the wanted symbol, the one whose z stays the whole group's z where it can;
 // then by the conventions' rules for axes; then the one turned least.
 Found inside_subgroup(const Found& whole, const Molecule& molecule,
@@ -234,40 +274,75 @@ Found inside_subgroup(const Found& whole, const Molecule& molecule,
   }
   const Eigen::Matrix3Xd in_input_frame = whole.rotation.transpose() * whole.positions;
   const std::vector<Subset> subsets = closed_subsets(list.table);
-
-  std::optional<Found> best;
-  std::vector<double> best_merit;
-  std::optional<Error> last_error;
-  for (const Subset& subset : subsets) {
-    if (!(identify_group(list.table, list.matrices, subset) == symbol)) continue;
-    Found found = made_exact(list, subset, in_input_frame);
-    FrameChoice choice;
-    try {
-      choice = choose_frame(symbol, molecule.with_positions(found.positions), found.rotation, wanted);
-    } catch (const Error& error) {  // the wished axes may suit another subgroup of this symbol
-      last_error = error;
-      continue;
-    }
-    std::vector<double> merit = {
-        std::round(std::abs(choice.rotation.row(2).dot(whole.rotation.row(2))) * 1e6)};
-    merit.insert(merit.end(), choice.merit.begin(), choice.merit.end());
-    const bool better =
-        !best || better_merit(merit, best_merit) ||
-        (!better_merit(best_merit, merit) &&
-         choice.rotation.trace() > best->rotation.trace() + 1e-9);
-    if (!better) continue;
-    const Eigen::Matrix3d turn = choice.rotation * found.rotation.transpose();
-    found.images = turned_images(found.group, found.images, turn);
-    found.positions = turn * found.positions;
-    found.rotation = choice.rotation;
-    best = std::move(found);
-    best_merit = std::move(merit);
-  }
-  if (!best && last_error) throw *last_error;
+  auto best = best_placed(list, subsets, symbol, whole.rotation.row(2), molecule, in_input_frame,
+                          wanted);
   if (!best) {
     throw refuse("its subgroups are " + subgroup_names(list.table, list.matrices, subsets));
   }
   return *best;
+}
+
+Error nowhere_near(const Schoenflies& symbol, const Molecule& molecule,
+                   const SymmetryOptions& options) {
+  return Error(fmt::format(
+      "the structure is nowhere near {}: no set of operations of that group comes within {} Å; it "
+      "approaches {}",
+      symbol.name(), options.limit_angstrom, ladder_words(symmetry_ladder(molecule, options))));
+}
+
+// A linear group that the structure approaches; raises the tolerance to where it holds.
+Found near_linear(const Molecule& molecule, const SymmetryOptions& options,
+                  const Eigen::Matrix3Xd& positions, const Schoenflies& symbol, double& tolerance) {
+  const LinearTolerances needed = linear_tolerances(molecule, options.kinds);
+  const double reach = symbol.family == Family::Dinfh
+                           ? std::max(needed.line_angstrom, needed.centre_angstrom)
+                           : needed.line_angstrom;
+  if (symbol.family == Family::Kh || reach > options.limit_angstrom) {
+    throw nowhere_near(symbol, molecule, options);
+  }
+  tolerance = std::max(tolerance, reach * (1.0 + 1e-9));
+  return linear(molecule, options.kinds, positions, tolerance, symbol.family == Family::Dinfh);
+}
+
+struct InGroup {
+  Found found;
+  std::string largest;  // the largest group at the tolerance used
+};
+
+// The structure made exact in a group that it approaches, with a raised tolerance where need be.
+// Of several sets of operations that form the group, those that hold at the tolerance asked for
+// count alike; where none does, the one that holds first.
+InGroup near_group(const Molecule& molecule, const SymmetryOptions& options,
+                   const Eigen::Matrix3Xd& positions, const Schoenflies& symbol,
+                   const WantedAxes& wanted, double& tolerance) {
+  const ApproachedGroups approached =
+      approached_groups(molecule, options.kinds, std::max(tolerance, options.limit_angstrom));
+  OperationList list{approached.table, {}, {}};
+  for (const HeldOperation& operation : approached.operations) {
+    list.matrices.push_back(operation.matrix);
+    list.images.push_back(operation.images);
+  }
+  const std::size_t order = PointGroup(symbol).operations().size();
+  std::vector<Subset> candidates;
+  for (const ApproachedGroup& group : approached.groups) {
+    const bool holds = group.tolerance_angstrom <= tolerance;
+    if (!candidates.empty() && !holds) break;
+    if (group.operations.size() != order || !(symbol_of(approached, group) == symbol)) continue;
+    candidates.push_back(group.operations);
+    tolerance = std::max(tolerance, group.tolerance_angstrom * (1.0 + 1e-6) + 1e-9);
+  }
+  if (candidates.empty()) throw nowhere_near(symbol, molecule, options);
+
+  const ApproachedGroup* largest = &approached.groups.front();
+  for (const ApproachedGroup& group : approached.groups) {
+    const bool holds = group.tolerance_angstrom <= tolerance;
+    if (holds && group.operations.size() > largest->operations.size()) largest = &group;
+  }
+  Found whole = made_exact(list, largest->operations, positions);
+  turn_to_conventions(whole, molecule, {});
+  auto found = best_placed(list, candidates, symbol, whole.rotation.row(2), molecule, positions,
+                           wanted);
+  return {std::move(*found), whole.group.symbol().name()};
 }
 
 // From the centroid to the centroid of the atoms that every operation keeps in place, if any.
@@ -288,7 +363,7 @@ Eigen::Vector3d fixed_centre(const Found& found) {
 }  // namespace
 
 MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions& options) {
-  const double tolerance = options.tolerance_angstrom;
+  double tolerance = options.tolerance_angstrom;
   if (!(tolerance > 0.0 && tolerance <= 1.0)) {
     throw Error(fmt::format("symmetry tolerance = {} Å, expected more than 0 and at most 1", tolerance));
   }
@@ -297,19 +372,36 @@ MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions&
   const Eigen::Matrix3Xd centred = input.colwise() - centroid;
   const WantedAxes wanted = wanted_axes(options, molecule, centroid);
 
+  const Shape shape = molecular_shape(molecule, tolerance);
+  std::string full_group;
   Found found = [&] {
-    switch (molecular_shape(molecule, tolerance)) {
+    if (options.group) {
+      const Schoenflies symbol = parse_schoenflies(*options.group);
+      if (!symbol.is_finite() && shape != Shape::SingleAtom) {
+        return near_linear(molecule, options, centred, symbol, tolerance);
+      }
+      if (shape == Shape::General) {
+        InGroup in = near_group(molecule, options, centred, symbol,
+                                options.subgroup ? WantedAxes{} : wanted, tolerance);
+        if (in.largest != symbol.name()) full_group = in.largest;
+        return std::move(in.found);
+      }
+    }
+    switch (shape) {
       case Shape::SingleAtom: return single_atom();
       case Shape::Linear: return linear(molecule, options.kinds, centred, tolerance);
       case Shape::General: break;
     }
     return general(molecule, options.kinds, centred, tolerance);
   }();
-  std::string full_group;
-  if (options.subgroup) {
+  // A finite group of a linear molecule or an atom is a subgroup of what it has.
+  const bool is_group_of_linear = options.group && !(found.group.symbol() == parse_schoenflies(*options.group));
+  const std::optional<std::string> subgroup =
+      options.subgroup ? options.subgroup : is_group_of_linear ? options.group : std::nullopt;
+  if (subgroup) {
     full_group = found.group.symbol().name();
     turn_to_conventions(found, molecule, {});
-    found = inside_subgroup(found, molecule, options.kinds, *options.subgroup, wanted);
+    found = inside_subgroup(found, molecule, options.kinds, *subgroup, wanted);
   } else {
     turn_to_conventions(found, molecule, wanted);
   }

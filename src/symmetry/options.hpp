@@ -18,6 +18,10 @@ struct SymmetryOptions {
   double tolerance_angstrom = 0.01;  // points closer than this count as images of each other
   std::optional<AxisDirection> z;    // must lie along a possible principal axis of the group
   std::optional<AxisDirection> x;
+  // Schoenflies symbol of a group to make the structure exact in, though it holds only at a larger
+  // tolerance, up to the limit.
+  std::optional<std::string> group;
+  double limit_angstrom = 0.5;
   std::optional<std::string> subgroup;  // Schoenflies symbol of a subgroup to work in
   // Per atom: atoms of different kinds are never images of each other, though of one element (they
   // have other parameters, say). Empty: the element alone decides.

@@ -9,6 +9,8 @@ the next command or comment is what the command prints, standard error included.
 "[exit 1]" states an exit code other than 0. Each transcript runs in an empty folder of its own that
 holds a link `inputs` to the shipped inputs; the folder of the program stands first in PATH.
 
+Of a Markdown file, the blocks that start with "```console" are the transcript, one after another.
+
 --rewrite puts what was printed in place of what was expected. Review the difference before you
 commit it: it is the specification.
 """
@@ -17,6 +19,7 @@ import argparse
 import difflib
 import os
 import pathlib
+import re
 import subprocess
 import sys
 import tempfile
@@ -68,21 +71,32 @@ def render(steps):
     return "\n".join(lines) + "\n"
 
 
+def transcripts_in(path):
+    """Splits a file into text to keep and transcripts, in turn, starting with text."""
+    text = path.read_text(encoding="utf-8")
+    if path.suffix != ".md":
+        return ["", text]
+    return re.split(r"(?<=^```console\n)(.*?)(?=^```$)", text, flags=re.MULTILINE | re.DOTALL)
+
+
 def replay(path, options):
-    """Runs one transcript; returns whether it came out as written."""
-    expected = path.read_text(encoding="utf-8")
-    steps = parse(expected)
+    """Runs what one file holds; returns whether it came out as written."""
     environment = {"PATH": f"{options.program.resolve()}:{os.environ['PATH']}",
                    "LC_ALL": "C.UTF-8", "HOME": "/nonexistent"}
     for name in ("ASAN_OPTIONS", "UBSAN_OPTIONS"):
         if name in os.environ:
             environment[name] = os.environ[name]
+    parts = transcripts_in(path)
+    expected = "".join(parts)
     with tempfile.TemporaryDirectory() as folder:
         os.symlink(options.inputs.resolve(), os.path.join(folder, "inputs"))
-        for step in steps:
-            if step.command:
-                step.output = run("\n".join(step.command), folder, environment)
-    found = render(steps)
+        for index in range(1, len(parts), 2):
+            steps = parse(parts[index])
+            for step in steps:
+                if step.command:
+                    step.output = run("\n".join(step.command), folder, environment)
+            parts[index] = render(steps)
+    found = "".join(parts)
     if found == expected:
         return True
     if options.rewrite:

@@ -1,0 +1,160 @@
+#include "output/salc_tables.hpp"
+
+#include <algorithm>
+#include <cstddef>
+
+#include <fmt/format.h>
+
+#include "core/exact_number.hpp"
+#include "core/text.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr int most_atoms_in_columns = 8;
+
+using Functions = std::vector<const SalcFunction*>;  // of one part of one set
+
+std::string irrep_label(const SymmetryResult& result, const SalcFunction& salc) {
+  return level_label(result.symmetry.group.irreps()[salc.irrep].label);
+}
+
+std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
+  const Shell& shell = result.orbitals->basis.shells[salc.shell];
+  std::vector<std::string> names;
+  for (const int component : salc.components) {
+    names.push_back(salc_orbital_name(shell, component, salc.local));
+  }
+  return fmt::format("SALCs of {} on {}{}", joined(names), result.named_sets[salc.set].name,
+                     salc.part == Part::PiInPlane      ? " (in plane)"
+                     : salc.part == Part::PiOutOfPlane ? " (out of plane)"
+                                                       : "");
+}
+
+// Which of several SALCs of one irrep, and which partner: "1", "2·1" where there are several.
+std::string partner_words(const SymmetryResult& result, const SalcFunction& salc, bool several) {
+  const bool degenerate = result.symmetry.group.irreps()[salc.irrep].dimension > 1;
+  const std::string partner = degenerate ? std::to_string(salc.partner) : "";
+  if (!several) return partner;
+  return std::to_string(salc.number) + (degenerate ? "." + partner : "");
+}
+
+bool several_in(const Functions& functions, int irrep) {
+  return std::any_of(functions.begin(), functions.end(), [&](const SalcFunction* salc) {
+    return salc->irrep == irrep && salc->number > 1;
+  });
+}
+
+Table atoms_in_columns(const SymmetryResult& result, const Functions& functions) {
+  const SalcFunction& first = *functions.front();
+  const Shell& shell = result.orbitals->basis.shells[first.shell];
+  const bool one_orbital = first.components.size() == 1;
+  Table table;
+  table.caption = caption(result, first);
+  table.columns = {{"irrep", "irrep", "", Align::Left, 0, false},
+                   {"partner", "partner", "", Align::Left, 0, false}};
+  if (!one_orbital) table.columns.push_back({"orbital", "orbital", "", Align::Left, 0, false});
+  for (const int atom : result.sets[first.set].atoms) {
+    const std::string name = atom_name(result.symmetry.molecule, atom);
+    table.columns.push_back({name, name, "", Align::Right, 0, false});
+  }
+  for (const SalcFunction* salc : functions) {
+    std::string label = irrep_label(result, *salc);
+    std::string partner = partner_words(result, *salc, several_in(functions, salc->irrep));
+    if (salc->partner > 1) label.clear();
+    for (std::size_t i = 0; i < salc->components.size(); ++i) {
+      const Eigen::VectorXd column = salc->coefficients.col(static_cast<Eigen::Index>(i));
+      if (column.isZero(0.0)) continue;
+      Row row{{SymmetryLabel{label}, partner}};
+      if (!one_orbital) row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
+      for (const double value : column) row.cells.emplace_back(coefficient_text(value));
+      table.lines.emplace_back(std::move(row));
+      label.clear();
+      partner.clear();
+    }
+  }
+  return table;
+}
+
+Table partners_in_columns(const SymmetryResult& result, const Functions& functions, int irrep) {
+  Functions chosen;
+  for (const SalcFunction* salc : functions) {
+    if (salc->irrep == irrep) chosen.push_back(salc);
+  }
+  const SalcFunction& first = *chosen.front();
+  const Shell& shell = result.orbitals->basis.shells[first.shell];
+  const std::string label = irrep_label(result, first);
+  Table table;
+  table.caption = caption(result, first) + ": " + readable_label(label);
+  table.columns = {{"atom", "atom", "", Align::Left, 0, false},
+                   {"orbital", "orbital", "", Align::Left, 0, false}};
+  const bool several = several_in(functions, irrep);
+  for (const SalcFunction* salc : chosen) {
+    const std::string words = partner_words(result, *salc, several);
+    const std::string header = readable_label(label) + (words.empty() ? "" : " " + words);
+    table.columns.push_back({header, header, "", Align::Right, 0, false});
+  }
+  const std::vector<int>& atoms = result.sets[first.set].atoms;
+  for (std::size_t atom = 0; atom < atoms.size(); ++atom) {
+    std::string name = atom_name(result.symmetry.molecule, atoms[atom]);
+    for (std::size_t i = 0; i < first.components.size(); ++i) {
+      Row row{{name, salc_orbital_name(shell, first.components[i], first.local)}};
+      bool any = false;
+      for (const SalcFunction* salc : chosen) {
+        const double value = salc->coefficients(static_cast<Eigen::Index>(atom),
+                                                static_cast<Eigen::Index>(i));
+        any = any || value != 0.0;
+        row.cells.emplace_back(coefficient_text(value));
+      }
+      if (!any) continue;
+      table.lines.emplace_back(std::move(row));
+      name.clear();
+    }
+  }
+  return table;
+}
+
+}  // namespace
+
+std::string coefficient_text(double value) {
+  if (const auto exact = exact_form(value)) return *exact == "0" ? "·" : *exact;
+  return fmt::format("{:.4f}", value);
+}
+
+std::vector<Table> salc_tables(const SymmetryResult& result) {
+  std::vector<Table> tables;
+  if (!result.orbitals) return tables;
+  const std::vector<SalcFunction>& salcs = result.orbitals->salcs;
+  for (std::size_t next = 0; next < salcs.size();) {
+    const SalcFunction& first = salcs[next];
+    Functions functions;
+    for (; next < salcs.size() && salcs[next].set == first.set &&
+           salcs[next].shell == first.shell && salcs[next].part == first.part;
+         ++next) {
+      functions.push_back(&salcs[next]);
+    }
+    const int size = result.sets[first.set].size();
+    if (size == 1) continue;
+    if (size <= most_atoms_in_columns) {
+      tables.push_back(atoms_in_columns(result, functions));
+      continue;
+    }
+    int last = -1;
+    for (const SalcFunction* salc : functions) {
+      if (salc->irrep == last) continue;
+      last = salc->irrep;
+      tables.push_back(partners_in_columns(result, functions, last));
+    }
+  }
+  const bool local = std::any_of(salcs.begin(), salcs.end(),
+                                 [](const SalcFunction& salc) { return salc.local; });
+  if (!tables.empty()) {
+    tables.back().notes.push_back(
+        local ? "Orbitals of each atom's own frame: z towards the centre, x and y across it; y points "
+                "along +z of the molecule where it can."
+              : "Orbitals of the standard frame.");
+  }
+  return tables;
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,101 @@
+// Everything that one run of `symmetry` found, ready for the writers.
+#pragma once
+
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "analysis/transitions.hpp"
+#include "hueckel/levels.hpp"
+#include "molecule/molecule.hpp"
+#include "output/equivalence.hpp"
+#include "salc/salc_table.hpp"
+#include "symmetry/descent.hpp"
+#include "symmetry/ladder.hpp"
+#include "symmetry/molecular_symmetry.hpp"
+#include "symmetry/products.hpp"
+#include "symmetry/relabelled.hpp"
+#include "symmetry/terms.hpp"
+#include "symmetry/vibrations.hpp"
+
+namespace irrepwise {
+
+/// The terms of one configuration.
+struct TermsAnswer {
+  std::string configuration;  // "t2g^2", ASCII
+  std::vector<Term> terms;    // as from `find_terms`
+};
+
+/// Irreps in one embedding of a subgroup.
+struct DescentAnswer {
+  Embedding embedding;
+  std::vector<std::vector<int>> times;  // [irrep of the group][irrep of the subgroup]
+};
+
+/// What was asked of the group itself, with a molecule or without.
+struct GroupAnswers {
+  std::vector<ProductAnswer> products;
+  std::vector<TermsAnswer> terms;
+  std::vector<DescentAnswer> descents;
+};
+
+/// @throws Error  for unknown irreps and groups, with the nearest names
+[[nodiscard]] GroupAnswers answer_group(const PointGroup& group,
+                                        const std::vector<std::string>& products,
+                                        const std::vector<std::string>& configurations,
+                                        const std::vector<std::string>& subgroups);
+
+/// What needs the valence orbitals.
+struct OrbitalSymmetry {
+  Basis basis;
+  std::vector<OrbitalReduction> reductions;
+  std::vector<SalcFunction> salcs;  // where asked for
+};
+
+/// What needs the levels.
+struct FrontierSymmetry {
+  Levels levels;
+  std::vector<Transition> transitions;
+  std::vector<OpenLevel> open;      // empty for a closed shell
+  std::vector<Term> terms;          // of the open shell
+  std::vector<GroundTerm> ground;
+};
+
+struct SymmetryResult {
+  std::string title;
+  Molecule molecule;  // as read, in the input frame
+  MolecularSymmetry symmetry;
+  double limit_angstrom = 0.5;
+  std::vector<Rung> ladder;
+  AxisEffect axis_effect;  // against the axes of the conventions
+  bool user_axes = false;
+  std::vector<EquivalentAtoms> sets;
+  std::vector<AtomSet> named_sets;  // the same sets
+  std::vector<std::optional<LocalFrames>> frames;
+  std::optional<int> central_atom;
+  std::optional<OrbitalSymmetry> orbitals;  // nothing where parameters are lacking
+  std::optional<FrontierSymmetry> frontier;
+  DisplacementIrreps displacements;
+  GroupAnswers answers;
+  std::vector<std::string> warnings;
+};
+
+/// Which of the longer sections to print.
+struct SymmetrySections {
+  bool operations = false;
+  bool salcs = false;
+  bool vibrations = false;
+};
+
+/// @returns  counts by irrep of the group as a reduction
+[[nodiscard]] Reduction reduction_of(const PointGroup& group, const std::vector<int>& times);
+
+/// What each irrep connects: the orbitals and parts of each set in which it occurs.
+struct BondingIrrep {
+  int irrep = 0;
+  std::vector<std::vector<std::string>> parts;  // by set: "5dxz", "σ", "3s"; empty where absent
+  bool can_bond = false;  // occurs on the central atom and around it; without one, on two sets
+};
+[[nodiscard]] std::vector<BondingIrrep> bonding_by_irrep(const SymmetryResult& result);
+
+}  // namespace irrepwise

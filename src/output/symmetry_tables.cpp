@@ -1,0 +1,220 @@
+#include "output/symmetry_tables.hpp"
+
+#include <cmath>
+
+#include <fmt/format.h>
+
+#include "core/text.hpp"
+#include "output/symmetry_words.hpp"
+#include "symmetry/operation.hpp"
+
+namespace irrepwise {
+namespace {
+
+std::string direction_words(const Eigen::Vector3d& axis) {
+  static constexpr const char* names[] = {"x", "y", "z"};
+  for (int i = 0; i < 3; ++i) {
+    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9) return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
+  }
+  std::string words;
+  for (int i = 0; i < 3; ++i) {
+    const double value = std::abs(axis[i]) < 5e-4 ? 0.0 : axis[i];
+    words += fmt::format("{}{:.3f}", i == 0 ? "(" : ", ", value);
+  }
+  return words + ")";
+}
+
+const char* kind_words(const SymmetryOperation& operation) {
+  switch (operation.kind) {
+    case OperationKind::Identity: return "identity";
+    case OperationKind::Rotation: return "rotation about";
+    case OperationKind::Inversion: return "inversion";
+    case OperationKind::Reflection: return "reflection across";
+    case OperationKind::Rotoreflection: return "rotoreflection about";
+  }
+  return "";
+}
+
+// Cycles of atoms that change places: "(Cl2 Cl4) (Cl3 Cl5)".
+std::string cycle_words(const Molecule& molecule, const std::vector<int>& images) {
+  std::vector<bool> seen(images.size(), false);
+  std::string words;
+  for (std::size_t start = 0; start < images.size(); ++start) {
+    if (seen[start] || images[start] == static_cast<int>(start)) continue;
+    std::string cycle;
+    for (std::size_t atom = start; !seen[atom]; atom = static_cast<std::size_t>(images[atom])) {
+      seen[atom] = true;
+      cycle += (cycle.empty() ? "" : "\u00a0") + atom_name(molecule, static_cast<int>(atom));
+    }
+    words += (words.empty() ? "(" : " (") + cycle + ")";
+  }
+  return words.empty() ? "all stay" : words;
+}
+
+std::string class_of(const PointGroup& group, int operation) {
+  for (const ConjugacyClass& conjugacy : group.classes()) {
+    for (const int member : conjugacy.operations) {
+      if (member == operation) return readable_class(conjugacy.symbol);
+    }
+  }
+  return {};
+}
+
+std::string list_or_dash(const std::vector<std::string>& names) {
+  std::string text;
+  for (const std::string& name : names) text += (text.empty() ? "" : ", ") + name;
+  return text.empty() ? "–" : text;
+}
+
+// Whether the irrep can bond, or who holds it alone.
+std::string verdict(const SymmetryResult& result, const BondingIrrep& row) {
+  if (row.can_bond) return result.central_atom ? "can bond" : "can mix";
+  std::vector<std::string> holders;
+  for (std::size_t s = 0; s < row.parts.size(); ++s) {
+    if (!row.parts[s].empty()) holders.push_back(result.named_sets[s].name);
+  }
+  return "non-bonding: " + joined(holders) + " only";
+}
+
+}  // namespace
+
+Table operation_table(const SymmetryResult& result) {
+  const PointGroup& group = result.symmetry.group;
+  Table table;
+  table.caption = "Operations";
+  table.columns = {{"class", "class", "", Align::Left, 0, false},
+                   {"operation", "operation", "", Align::Left, 0, false},
+                   {"kind", "kind", "", Align::Left, 1, false},
+                   {"axis", "axis or normal", "", Align::Left, 0, false},
+                   {"atoms", "atoms that change places", "", Align::Left, 0, true}};
+  for (const ConjugacyClass& conjugacy : group.classes()) {
+    for (const int g : conjugacy.operations) {
+      const SymmetryOperation operation = classify_operation(group.operations()[g]);
+      const bool has_axis = operation.axis.norm() > 0.5;
+      table.lines.emplace_back(
+          Row{{class_of(group, g), readable_class(operation_symbol(operation)),
+               kind_words(operation), has_axis ? direction_words(operation.axis) : "",
+               cycle_words(result.symmetry.molecule, result.symmetry.images[g])}});
+    }
+  }
+  table.notes.push_back("Axes in the standard frame; in brackets atoms go round: each to the next.");
+  if (!group.symbol().is_finite()) {
+    table.notes.push_back("The group is infinite: turns by multiples of 45° stand for all.");
+  }
+  return table;
+}
+
+Table equivalent_atoms_table(const SymmetryResult& result) {
+  Table table;
+  table.caption = "Sets of equivalent atoms";
+  table.columns = {{"set", "set", "", Align::Left, 0, false},
+                   {"size", "atoms", "", Align::Right, 0, false},
+                   {"site_group", "site group", "", Align::Left, 0, false},
+                   {"representative", "representative", "", Align::Left, 1, false},
+                   {"atoms", "which", "", Align::Left, 0, true}};
+  for (std::size_t s = 0; s < result.sets.size(); ++s) {
+    table.lines.emplace_back(
+        Row{{result.named_sets[s].name, Number{double(result.sets[s].size()), 0},
+             site_symbol(result.symmetry.group, result.sets[s]).name(),
+             atom_name(result.symmetry.molecule, result.sets[s].representative()),
+             atom_list(result.symmetry.molecule, result.sets[s].atoms)}});
+  }
+  return table;
+}
+
+std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction) {
+  switch (reduction.part) {
+    case Part::Shell: break;
+    case Part::Sigma: return "σ";
+    case Part::Pi: return "π";
+    case Part::PiInPlane: return "π in plane";
+    case Part::PiOutOfPlane: return "π out of plane";
+    case Part::Delta: return "δ";
+    case Part::Phi: return "φ";
+  }
+  const Shell& shell = result.orbitals->basis.shells[reduction.shells.front()];
+  return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
+}
+
+Table reduction_table(const SymmetryResult& result) {
+  Table table;
+  table.caption = "What the valence orbitals span";
+  table.columns = {{"set", "set", "", Align::Left, 0, false},
+                   {"part", "orbitals", "", Align::Left, 0, false},
+                   {"from", "of shells", "", Align::Left, 1, false},
+                   {"number", "number", "", Align::Right, 0, false},
+                   {"irreps", "irreps", "", Align::Left, 0, true}};
+  const Basis& basis = result.orbitals->basis;
+  int total = 0;
+  int last_set = -1;
+  for (const OrbitalReduction& reduction : result.orbitals->reductions) {
+    std::string shells;
+    if (reduction.part == Part::Shell) {
+      total += reduction.orbitals;
+    } else {
+      for (const int shell : reduction.shells) {
+        shells += fmt::format("{}{}{}", shells.empty() ? "" : ", ", basis.shells[shell].n(),
+                              shell_letter(basis.shells[shell].l));
+      }
+    }
+    const bool first = reduction.set != last_set;
+    last_set = reduction.set;
+    table.lines.emplace_back(
+        Row{{first ? result.named_sets[reduction.set].name : "", part_words(result, reduction),
+             shells, Number{double(reduction.orbitals), 0},
+             readable_reduction(reduction_of(result.symmetry.group, reduction.times))}});
+  }
+  table.notes.push_back(
+      fmt::format("The shells add up to {} orbitals, as many as the valence orbitals.", total));
+  bool has_parts = false;
+  for (const auto& frames : result.frames) has_parts = has_parts || frames;
+  if (has_parts) {
+    table.notes.push_back(fmt::format(
+        "σ: along the line to {}; π: across it.",
+        result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
+                            : std::string("the centre")));
+  }
+  return table;
+}
+
+Table bonding_table(const SymmetryResult& result) {
+  Table table;
+  table.caption = result.central_atom
+                      ? fmt::format("What can bond with {} by symmetry",
+                                    atom_name(result.symmetry.molecule, *result.central_atom))
+                      : "What can mix by symmetry";
+  table.columns.push_back({"irrep", "irrep", "", Align::Left, 0, false});
+  for (std::size_t s = 0; s < result.sets.size(); ++s) {
+    table.columns.push_back({result.named_sets[s].name, result.named_sets[s].name, "", Align::Left,
+                             static_cast<int>(s) > 3 ? static_cast<int>(s) : 0, true});
+  }
+  table.columns.push_back({"verdict", "by symmetry", "", Align::Left, 0, true});
+  for (const BondingIrrep& row : bonding_by_irrep(result)) {
+    Row line{{SymmetryLabel{level_label(result.symmetry.group.irreps()[row.irrep].label)}}};
+    for (const auto& parts : row.parts) line.cells.emplace_back(list_or_dash(parts));
+    line.cells.emplace_back(verdict(result, row));
+    table.lines.emplace_back(std::move(line));
+  }
+  return table;
+}
+
+Table vibration_table(const SymmetryResult& result) {
+  Table table;
+  table.caption = "Vibrations";
+  table.columns = {{"irrep", "irrep", "", Align::Left, 0, false},
+                   {"times", "times", "", Align::Right, 0, false},
+                   {"infrared", "infrared", "", Align::Left, 0, false},
+                   {"raman", "Raman", "", Align::Left, 0, false}};
+  const PointGroup& group = result.symmetry.group;
+  const std::string symmetric = group.irreps().front().label;
+  for (const IrrepCount& mode : result.displacements.vibrations) {
+    const TransitionRule rule = transition_rule(group, symmetric, mode.label);
+    table.lines.emplace_back(Row{{SymmetryLabel{level_label(mode.label)},
+                                  Number{double(mode.count), 0},
+                                  list_or_dash(rule.dipole_axes), rule.two_photon ? "yes" : "–"}});
+  }
+  table.notes.push_back("Fundamentals: allowed in the infrared along the axes named, or in Raman.");
+  return table;
+}
+
+}  // namespace irrepwise

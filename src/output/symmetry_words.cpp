@@ -1,0 +1,78 @@
+#include "output/symmetry_words.hpp"
+
+#include <array>
+#include <cctype>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "symmetry/irrep.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr std::array<std::string_view, 10> superscripts = {"⁰", "¹", "²", "³", "⁴",
+                                                            "⁵", "⁶", "⁷", "⁸", "⁹"};
+
+std::string sum_words(const Reduction& reduction, bool of_levels) {
+  std::string words;
+  for (const IrrepCount& part : reduction) {
+    if (!words.empty()) words += " + ";
+    if (part.count > 1) words += std::to_string(part.count);
+    words += readable_label(of_levels ? level_label(part.label) : part.label);
+  }
+  return words.empty() ? "nothing" : words;
+}
+
+}  // namespace
+
+std::string superscript(int number) {
+  std::string text;
+  for (const char digit : std::to_string(number)) {
+    text += superscripts[static_cast<std::size_t>(digit - '0')];
+  }
+  return text;
+}
+
+std::string readable_class(std::string_view symbol) {
+  std::string text(symbol);
+  for (const auto& [ascii, letter] : {std::pair<std::string_view, std::string_view>{"sigma", "σ"},
+                                      {"phi", "(φ)"}}) {
+    if (const std::size_t at = text.find(ascii); at != std::string::npos) {
+      text.replace(at, ascii.size(), letter);
+    }
+  }
+  const std::size_t power = text.find('^');
+  if (power == std::string::npos) return text;
+  std::size_t end = power + 1;
+  while (end < text.size() && std::isdigit(static_cast<unsigned char>(text[end])) != 0) ++end;
+  const std::string exponent = superscript(std::stoi(text.substr(power + 1, end - power - 1)));
+  return text.substr(0, power) + exponent + text.substr(end);
+}
+
+std::string readable_functions(const FunctionSet& set) {
+  std::string text;
+  for (const char c : function_text(set)) {
+    if (std::isdigit(static_cast<unsigned char>(c)) != 0) {
+      // A digit behind a letter is a power, in front of one a factor.
+      const bool is_power = !text.empty() && (std::isalpha(static_cast<unsigned char>(text.back())) != 0 ||
+                                              text.back() == ')');
+      text += is_power ? std::string(superscripts[static_cast<std::size_t>(c - '0')])
+                       : std::string(1, c);
+    } else {
+      text += c == '-' ? std::string("−") : std::string(1, c);
+    }
+  }
+  return text;
+}
+
+std::string readable_reduction(const Reduction& reduction) { return sum_words(reduction, true); }
+
+std::string readable_states(const Reduction& reduction) { return sum_words(reduction, false); }
+
+std::string readable_term(const Term& term) {
+  return fmt::format("{}{}{}", term.count > 1 ? fmt::format("{} ", term.count) : "",
+                     superscript(term.multiplicity), readable_label(term.irrep));
+}
+
+}  // namespace irrepwise

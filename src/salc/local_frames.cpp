@@ -1,0 +1,187 @@
+#include "salc/local_frames.hpp"
+
+#include <algorithm>
+#include <array>
+#include <cmath>
+
+#include <Eigen/Geometry>
+
+#include "symmetry/operation.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr double same = 1e-6;  // of unit vectors; coordinates are exact here
+
+bool fixes_one_point(Family family) {
+  switch (family) {
+    case Family::C1:
+    case Family::Cs:
+    case Family::Cn:
+    case Family::Cnv:
+    case Family::Cinfv: return false;
+    case Family::Ci:
+    case Family::Cnh:
+    case Family::Dn:
+    case Family::Dnh:
+    case Family::Dnd:
+    case Family::S2n:
+    case Family::T:
+    case Family::Td:
+    case Family::Th:
+    case Family::O:
+    case Family::Oh:
+    case Family::I:
+    case Family::Ih:
+    case Family::Dinfh:
+    case Family::Kh: return true;
+  }
+  return false;
+}
+
+bool is_kept(const MolecularSymmetry& symmetry, int atom) {
+  return std::all_of(symmetry.images.begin(), symmetry.images.end(),
+                     [&](const std::vector<int>& images) { return images[atom] == atom; });
+}
+
+int neighbours(const Molecule& molecule, int atom) {
+  int count = 0;
+  for (int other = 0; other < molecule.size(); ++other) {
+    count += other != atom && are_bonded(molecule, atom, other) ? 1 : 0;
+  }
+  return count;
+}
+
+int atoms_in_plane(const Molecule& molecule, const Eigen::Vector3d& point,
+                   const Eigen::Vector3d& normal) {
+  return static_cast<int>(
+      std::count_if(molecule.atoms().begin(), molecule.atoms().end(), [&](const Atom& atom) {
+        return std::abs(normal.dot(atom.position - point)) < 1e-4;
+      }));
+}
+
+// The sign for which the first component from z over y to x that is not zero is positive.
+Eigen::Vector3d upwards(const Eigen::Vector3d& direction) {
+  for (const int i : {2, 1, 0}) {
+    if (std::abs(direction[i]) > same) return direction[i] < 0.0 ? -direction : direction;
+  }
+  return direction;
+}
+
+// More is better, compared from the first entry on.
+using Merit = std::array<double, 4>;
+bool better(const Merit& a, const Merit& b) {
+  for (std::size_t i = 0; i < a.size(); ++i) {
+    if (std::abs(a[i] - b[i]) > same) return a[i] > b[i];
+  }
+  return false;
+}
+
+// y of the representative: across the mirror that holds x and the line to the centre.
+Eigen::Vector3d first_y(const MolecularSymmetry& symmetry, const EquivalentAtoms& set,
+                        const Eigen::Vector3d& z) {
+  const Eigen::Vector3d at = symmetry.molecule.atoms()[set.representative()].position;
+  std::optional<Eigen::Vector3d> best;
+  Merit best_merit{};
+  for (const int g : set.site_group) {
+    const SymmetryOperation operation = classify_operation(symmetry.group.operations()[g]);
+    if (operation.kind != OperationKind::Reflection) continue;
+    const Eigen::Vector3d normal = operation.axis;
+    if (std::abs(normal.dot(z)) > same) continue;
+    const double across_principal = std::abs(normal[2]) > 1.0 - same ? 1.0 : 0.0;
+    const int in_plane = atoms_in_plane(symmetry.molecule, at, normal);
+    const double molecular_plane = in_plane == symmetry.molecule.size() ? 1.0 : 0.0;
+    const Merit merit = {std::max(across_principal, molecular_plane), double(in_plane),
+                         std::abs(normal[1]), std::abs(normal[0])};
+    if (!best || better(merit, best_merit)) {
+      best = upwards(normal);
+      best_merit = merit;
+    }
+  }
+  if (best) return *best;
+  for (const int i : {2, 1}) {
+    const Eigen::Vector3d wish = Eigen::Vector3d::Unit(i);
+    const Eigen::Vector3d across = wish - wish.dot(z) * z;
+    if (across.norm() > 1e-3) return across.normalized();
+  }
+  return Eigen::Vector3d::UnitX();
+}
+
+Eigen::Matrix3d frame_of(const Eigen::Vector3d& y, const Eigen::Vector3d& z) {
+  Eigen::Matrix3d frame;
+  frame << y.cross(z), y, z;
+  return frame;
+}
+
+// The mirror plane that makes "in plane" mean something: σh, or the plane of a planar molecule.
+std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry) {
+  const Family family = symmetry.group.symbol().family;
+  const bool has_sigma_h =
+      family == Family::Cs || family == Family::Cnh || family == Family::Dnh;
+  const Eigen::Vector3d point = symmetry.molecule.atoms().front().position;
+  for (const Eigen::Matrix3d& g : symmetry.group.operations()) {
+    const SymmetryOperation operation = classify_operation(g);
+    if (operation.kind != OperationKind::Reflection || !symmetry.group.symbol().is_finite()) continue;
+    if (atoms_in_plane(symmetry.molecule, point, operation.axis) == symmetry.molecule.size()) {
+      return operation.axis;
+    }
+  }
+  if (has_sigma_h) return Eigen::Vector3d(Eigen::Vector3d::UnitZ());
+  return std::nullopt;
+}
+
+}  // namespace
+
+std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
+  const Molecule& molecule = symmetry.molecule;
+  std::optional<int> best;
+  std::pair<int, int> best_merit;
+  for (int atom = 0; atom < molecule.size(); ++atom) {
+    if (!is_kept(symmetry, atom)) continue;
+    const std::pair merit = {neighbours(molecule, atom), molecule.atoms()[atom].atomic_number};
+    if (!best || merit > best_merit) {
+      best = atom;
+      best_merit = merit;
+    }
+  }
+  if (best) return Centre{molecule.atoms()[*best].position, best};
+  if (fixes_one_point(symmetry.group.symbol().family)) return Centre{};
+  return std::nullopt;
+}
+
+std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
+                                        const EquivalentAtoms& set, const Centre& centre) {
+  const Molecule& molecule = symmetry.molecule;
+  if (centre.atom == set.representative()) return std::nullopt;
+  if (centre.atom && !are_bonded(molecule, *centre.atom, set.representative())) return std::nullopt;
+  const Eigen::Vector3d at = molecule.atoms()[set.representative()].position;
+  const Eigen::Vector3d z = (centre.position - at).normalized();
+  const Eigen::Vector3d x = frame_of(first_y(symmetry, set, z), z).col(0);
+
+  LocalFrames local;
+  for (const int atom : set.atoms) {
+    const Eigen::Vector3d atom_z =
+        (centre.position - molecule.atoms()[atom].position).normalized();
+    std::optional<Eigen::Matrix3d> best;
+    Merit best_merit{};
+    for (int g = 0; g < symmetry.group.order(); ++g) {
+      if (symmetry.images[g][set.representative()] != atom) continue;
+      const Eigen::Vector3d y = atom_z.cross(symmetry.group.operations()[g] * x);
+      const Merit merit = {y[2], y[1], y[0], 0.0};
+      if (!best || better(merit, best_merit)) {
+        best = frame_of(y, atom_z);
+        best_merit = merit;
+      }
+    }
+    local.frames.push_back(*best);
+  }
+
+  const auto normal = normal_of_plane(symmetry);
+  local.in_plane = normal && std::all_of(local.frames.begin(), local.frames.end(),
+                                         [&](const Eigen::Matrix3d& frame) {
+                                           return normal->cross(frame.col(1)).norm() < same;
+                                         });
+  return local;
+}
+
+}  // namespace irrepwise
