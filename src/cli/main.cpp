@@ -93,6 +93,7 @@ int run(int argc, char** argv) {
       "Each command has its own help: irrepwise levels --help");
   const std::vector<cli::Command> commands = {cli::add_levels(program),
                                               cli::add_symmetry(program),
+                                              cli::add_draw(program),
                                               cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
