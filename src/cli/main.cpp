@@ -95,6 +95,7 @@ int run(int argc, char** argv) {
   const std::vector<cli::Command> commands = {cli::add_levels(program),
                                               cli::add_symmetry(program),
                                               cli::add_compare(program),
+                                              cli::add_draw(program),
                                               cli::add_parameters(program)};
   try {
     program.parse(argc, argv);

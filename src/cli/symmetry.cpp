@@ -29,95 +29,69 @@ struct SymmetryCommandOptions {
   std::vector<std::string> products;
   std::vector<std::string> terms;
   std::vector<std::string> descents;
+
+  [[nodiscard]] bool asks_for_salcs() const { return sections.salcs || local; }
 };
 
-void compute_orbitals(SymmetryResult& result, const Job& job, const Basis& basis,
-                      const SymmetryCommandOptions& options) {
-  const MolecularSymmetry& symmetry = result.symmetry;
-  result.orbitals =
-      OrbitalSymmetry{basis, orbital_reductions(symmetry, basis, result.sets, result.frames), {}};
-  if (options.sections.salcs) {
-    result.orbitals->salcs = options.local
-                                 ? salc_table(symmetry, basis, result.sets, result.frames)
-                                 : salc_table(symmetry, basis, result.sets);
-  }
-  if (!options.transitions) return;
-  FrontierSymmetry frontier{solve_levels(symmetry, basis, job.hueckel), {}, {}, {}, {}};
-  frontier.transitions = frontier_transitions(symmetry.group, frontier.levels);
-  frontier.open = open_levels(symmetry.group, frontier.levels);
-  if (!frontier.open.empty()) {
-    frontier.terms = find_terms(symmetry.group, frontier.open);
-    frontier.ground = ground_terms(symmetry, frontier.terms);
-  }
-  for (const std::string& warning : frontier.levels.warnings) result.warnings.push_back(warning);
-  result.frontier = std::move(frontier);
+struct Computed {
+  SymmetryResult result;
+  std::vector<std::string> warnings;
+};
+
+// The reason of an error without the long remedy.
+std::string first_words(const Error& error) {
+  const std::string message = error.what();
+  return message.substr(0, message.find(';'));
 }
 
-SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
+Computed compute(const Job& job, const SymmetryCommandOptions& options) {
+  std::vector<std::string> warnings = geometry_warnings(job.molecule);
   SymmetryOptions symmetry_options = job.symmetry;
   std::optional<Basis> basis;
-  std::vector<std::string> warnings = geometry_warnings(job.molecule);
   try {
     basis = make_basis(job.molecule, job.parameters, job.overrides);
     symmetry_options.kinds = atom_kinds(*basis);
   } catch (const Error& error) {
     // The group does not need parameters; what does is refused only where asked for.
-    if (options.sections.salcs || options.transitions) throw;
-    const std::string message = error.what();
-    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find(';')));
+    if (options.asks_for_salcs() || options.transitions) throw;
+    warnings.push_back("no reductions of orbitals: " + first_words(error));
   }
-  MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
-  std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
-  std::vector<AtomSet> named_sets = atom_sets(symmetry);
-  auto frames = frames_of_sets(symmetry, sets);
-  SymmetryResult result{job.title,
-                        job.molecule,
-                        std::move(symmetry),
-                        symmetry_options.limit_angstrom,
-                        symmetry_ladder(job.molecule, symmetry_options),
-                        {},
-                        symmetry_options.z || symmetry_options.x,
-                        std::move(sets),
-                        std::move(named_sets),
-                        std::move(frames),
-                        {},
-                        {},
-                        {},
-                        {},
-                        {},
-                        std::move(warnings)};
-  if (result.user_axes) {
-    SymmetryOptions by_convention = symmetry_options;
-    by_convention.z.reset();
-    by_convention.x.reset();
-    result.axis_effect = axis_effect(find_symmetry(job.molecule, by_convention), result.symmetry);
+  SymmetryResult result = symmetry_of(job.molecule, symmetry_options, basis);
+  const bool is_json = chosen_format(options.output) == Format::Json;
+  // A program that reads JSON picks what it needs; all that is cheap is there.
+  if (basis && (options.asks_for_salcs() || is_json)) {
+    result.orbitals->salcs = options.local
+                                 ? salc_table(result.symmetry, *basis, result.sets, result.frames)
+                                 : salc_table(result.symmetry, *basis, result.sets);
   }
-  if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
-  result.displacements = displacement_irreps(result.symmetry);
-  if (basis) compute_orbitals(result, job, *basis, options);
-  return result;
+  if (basis && (options.transitions || is_json)) {
+    try {
+      Levels levels = solve_levels(result.symmetry, *basis, job.hueckel);
+      warnings.insert(warnings.end(), levels.warnings.begin(), levels.warnings.end());
+      result.frontier = frontier_symmetry(result.symmetry, std::move(levels));
+    } catch (const Error& error) {
+      if (options.transitions) throw;
+      warnings.push_back("no transitions and terms: " + first_words(error));
+    }
+  }
+  return {std::move(result), std::move(warnings)};
 }
 
-SymmetryResult compute_named(const Job& job, const SymmetryCommandOptions& options) {
+// Adds the file or the option as the place of any error.
+template <typename Action>
+auto for_place(const std::string& place, Action action) {
   try {
-    return compute(job, options);
+    return action();
   } catch (const Error& error) {
-    throw error_at(options.job.file, error);
+    throw error_at(place, error);
   }
 }
 
 // The questions of the command line, each with its option as the place of any error.
 GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
-  const auto ask = [](const char* option, auto&& question) {
-    try {
-      return question();
-    } catch (const Error& error) {
-      throw error_at(option, error);
-    }
-  };
-  return {ask("--product", [&] { return answer_products(group, options.products); }),
-          ask("--terms", [&] { return answer_terms(group, options.terms); }),
-          ask("--descent", [&] { return answer_descents(group, options.descents); })};
+  return {for_place("--product", [&] { return answer_products(group, options.products); }),
+          for_place("--terms", [&] { return answer_terms(group, options.terms); }),
+          for_place("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -130,21 +104,22 @@ std::string symmetrised_xyz(const Job& job, const SymmetryCommandOptions& option
   return xyz_text(job.molecule.with_positions(positions), job.title);
 }
 
-std::string written(const SymmetryResult& result, const SymmetryCommandOptions& options) {
+std::string written(const SymmetryResult& result, const SymmetryHeadings& headings,
+                    const SymmetryCommandOptions& options) {
   switch (chosen_format(options.output)) {
     case Format::Json:
-      return symmetry_json(result);
+      return symmetry_json(result, headings);
     case Format::Csv:
       return symmetry_csv(result);
     case Format::Markdown:
-      return report_markdown(symmetry_report(result, options.sections, 1000));
+      return report_markdown(symmetry_report(result, headings, options.sections, 1000));
     case Format::Text:
     case Format::Latex:
     case Format::Yaml:
       break;
   }
   const int width = text_width(options.output);
-  return report_text(symmetry_report(result, options.sections, width), width);
+  return report_text(symmetry_report(result, headings, options.sections, width), width);
 }
 
 std::string written(const PointGroup& group, const GroupAnswers& asked,
@@ -180,14 +155,6 @@ void check_usage(const SymmetryCommandOptions& options) {
   }
 }
 
-Schoenflies named_group(const char* option, const std::string& name) {
-  try {
-    return parse_schoenflies(name);
-  } catch (const Error& error) {
-    throw error_at(option, error);
-  }
-}
-
 void run(SymmetryCommandOptions options) {
   if (options.all) {
     options.sections = {true, true, true};
@@ -195,29 +162,27 @@ void run(SymmetryCommandOptions options) {
   }
   if (options.local) options.sections.salcs = true;
   if (options.transitions) options.sections.vibrations = true;
-  // A program that reads JSON picks what it needs; all that is cheap is there.
-  if (chosen_format(options.output) == Format::Json && options.group.empty()) {
-    options.sections.salcs = options.transitions = true;
-  }
   check_usage(options);
   if (!options.group.empty()) {
-    const PointGroup group(named_group("--group", options.group));
+    const PointGroup group(for_place("--group", [&] { return parse_schoenflies(options.group); }));
     return emit(options.output, written(group, answers(group, options), options));
   }
   if (!options.symmetrise.empty()) {
-    options.symmetrise = named_group("--symmetrise", options.symmetrise).name();
+    options.symmetrise = for_place("--symmetrise", [&] {
+      return parse_schoenflies(options.symmetrise).name();
+    });
   }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
-  try {
-    if (!options.symmetrise.empty()) return emit(options.output, symmetrised_xyz(job, options));
-  } catch (const Error& error) {
-    throw error_at(options.job.file, error);
+  if (!options.symmetrise.empty()) {
+    return emit(options.output,
+                for_place(options.job.file, [&] { return symmetrised_xyz(job, options); }));
   }
-  SymmetryResult result = compute_named(job, options);
-  result.answers = answers(result.symmetry.group, options);
-  const std::string text = written(result, options);
-  print_warnings(options.output, result.warnings);
+  Computed computed = for_place(options.job.file, [&] { return compute(job, options); });
+  computed.result.answers = answers(computed.result.symmetry.group, options);
+  const std::string text =
+      written(computed.result, {job.title, computed.warnings}, options);
+  print_warnings(options.output, computed.warnings);
   emit(options.output, text);
 }
 

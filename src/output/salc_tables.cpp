@@ -7,6 +7,7 @@
 
 #include "core/exact_number.hpp"
 #include "core/text.hpp"
+#include "output/equivalence.hpp"
 
 namespace irrepwise {
 namespace {
@@ -25,7 +26,7 @@ std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
   for (const int component : salc.components) {
     names.push_back(salc_orbital_name(shell, component, salc.local));
   }
-  return fmt::format("SALCs of {} on {}{}", joined(names), result.named_sets[salc.set].name,
+  return fmt::format("SALCs of {} on {}{}", joined(names), atom_sets(result.symmetry)[salc.set].name,
                      salc.part == Part::PiInPlane      ? " (in plane)"
                      : salc.part == Part::PiOutOfPlane ? " (out of plane)"
                                                        : "");

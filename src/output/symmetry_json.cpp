@@ -235,11 +235,11 @@ Json changes_json(const std::vector<Relabelled>& changes, bool irreps) {
 
 }  // namespace
 
-std::string symmetry_json(const SymmetryResult& result) {
+std::string symmetry_json(const SymmetryResult& result, const SymmetryHeadings& headings) {
   const MolecularSymmetry& symmetry = result.symmetry;
   const PointGroup& group = symmetry.group;
   Json document = {{"schema", "irrepwise.symmetry.1"},
-                   {"title", result.title},
+                   {"title", headings.title},
                    {"formula", hill_formula(result.molecule)},
                    {"charge", result.molecule.charge()}};
   add_group(document, group);
@@ -274,7 +274,7 @@ std::string symmetry_json(const SymmetryResult& result) {
     document["transitions"] = document["terms"] = document["ground_terms"] = Json::array();
   }
   add_answers(document, group, result.answers);
-  document["warnings"] = result.warnings;
+  document["warnings"] = headings.warnings;
   return json_text(document);
 }
 

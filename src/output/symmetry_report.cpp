@@ -106,9 +106,10 @@ void append(std::vector<Table>& tables, std::vector<Table> more) {
 
 }  // namespace
 
-Report symmetry_report(const SymmetryResult& result, const SymmetrySections& sections, int width) {
+Report symmetry_report(const SymmetryResult& result, const SymmetryHeadings& headings,
+                       const SymmetrySections& sections, int width) {
   Report report;
-  report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+  report.title = headings.title.empty() ? charged_formula(result.molecule) : headings.title;
   report.facts = header(result);
   const PointGroup& group = result.symmetry.group;
   append(report.tables, character_tables(group, width));
@@ -125,7 +126,7 @@ Report symmetry_report(const SymmetryResult& result, const SymmetrySections& sec
   }
   if (result.frontier) append(report.tables, frontier_tables(group, *result.frontier));
   append(report.tables, answer_tables(group, result.answers));
-  report.warnings = result.warnings;
+  report.warnings = headings.warnings;
   return report;
 }
 

@@ -5,6 +5,7 @@
 #include <fmt/format.h>
 
 #include "core/text.hpp"
+#include "output/equivalence.hpp"
 #include "output/symmetry_words.hpp"
 #include "symmetry/operation.hpp"
 
@@ -67,11 +68,12 @@ std::string list_or_dash(const std::vector<std::string>& names) {
 }
 
 // Whether the irrep can bond, or who holds it alone.
-std::string verdict(const SymmetryResult& result, const BondingIrrep& row) {
+std::string verdict(const SymmetryResult& result, const std::vector<AtomSet>& names,
+                    const BondingIrrep& row) {
   if (row.can_bond) return result.central_atom ? "can bond" : "can mix";
   std::vector<std::string> holders;
   for (std::size_t s = 0; s < row.parts.size(); ++s) {
-    if (!row.parts[s].empty()) holders.push_back(result.named_sets[s].name);
+    if (!row.parts[s].empty()) holders.push_back(names[s].name);
   }
   return "non-bonding: " + joined(holders) + " only";
 }
@@ -106,6 +108,7 @@ Table operation_table(const SymmetryResult& result) {
 
 Table equivalent_atoms_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = "Sets of equivalent atoms";
   table.columns = {{"set", "set", "", Align::Left, 0, false},
                    {"size", "atoms", "", Align::Right, 0, false},
@@ -114,7 +117,7 @@ Table equivalent_atoms_table(const SymmetryResult& result) {
                    {"atoms", "which", "", Align::Left, 0, true}};
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
     table.lines.emplace_back(
-        Row{{result.named_sets[s].name, Number{double(result.sets[s].size()), 0},
+        Row{{names[s].name, Number{double(result.sets[s].size()), 0},
              site_symbol(result.symmetry.group, result.sets[s]).name(),
              atom_name(result.symmetry.molecule, result.sets[s].representative()),
              atom_list(result.symmetry.molecule, result.sets[s].atoms)}});
@@ -138,6 +141,7 @@ std::string part_words(const SymmetryResult& result, const OrbitalReduction& red
 
 Table reduction_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = "What the valence orbitals span";
   table.columns = {{"set", "set", "", Align::Left, 0, false},
                    {"part", "orbitals", "", Align::Left, 0, false},
@@ -160,7 +164,7 @@ Table reduction_table(const SymmetryResult& result) {
     const bool first = reduction.set != last_set;
     last_set = reduction.set;
     table.lines.emplace_back(
-        Row{{first ? result.named_sets[reduction.set].name : "", part_words(result, reduction),
+        Row{{first ? names[reduction.set].name : "", part_words(result, reduction),
              shells, Number{double(reduction.orbitals), 0},
              readable_reduction(reduction_of(result.symmetry.group, reduction.times))}});
   }
@@ -179,20 +183,21 @@ Table reduction_table(const SymmetryResult& result) {
 
 Table bonding_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = result.central_atom
                       ? fmt::format("What can bond with {} by symmetry",
                                     atom_name(result.symmetry.molecule, *result.central_atom))
                       : "What can mix by symmetry";
   table.columns.push_back({"irrep", "irrep", "", Align::Left, 0, false});
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
-    table.columns.push_back({result.named_sets[s].name, result.named_sets[s].name, "", Align::Left,
+    table.columns.push_back({names[s].name, names[s].name, "", Align::Left,
                              static_cast<int>(s) > 3 ? static_cast<int>(s) : 0, true});
   }
   table.columns.push_back({"verdict", "by symmetry", "", Align::Left, 0, true});
   for (const BondingIrrep& row : bonding_by_irrep(result)) {
     Row line{{SymmetryLabel{level_label(result.symmetry.group.irreps()[row.irrep].label)}}};
     for (const auto& parts : row.parts) line.cells.emplace_back(list_or_dash(parts));
-    line.cells.emplace_back(verdict(result, row));
+    line.cells.emplace_back(verdict(result, names, row));
     table.lines.emplace_back(std::move(line));
   }
   return table;

@@ -1,7 +1,7 @@
 // Tables of what the group does to the molecule: operations, sets, reductions, bonding.
 #pragma once
 
-#include "output/symmetry_result.hpp"
+#include "analysis/symmetry_result.hpp"
 #include "output/table.hpp"
 
 namespace irrepwise {

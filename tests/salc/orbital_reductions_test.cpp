@@ -3,6 +3,7 @@
 #include <map>
 #include <string>
 
+#include <Eigen/Geometry>
 #include <doctest/doctest.h>
 
 #include "basis/parameter_set.hpp"

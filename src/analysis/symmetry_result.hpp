@@ -1,4 +1,4 @@
-// Everything that one run of `symmetry` found, ready for the writers.
+// What symmetry says of a molecule: its group and ladder, sets, reductions, selection rules.
 #pragma once
 
 #include <optional>
@@ -8,7 +8,6 @@
 #include "analysis/transitions.hpp"
 #include "hueckel/levels.hpp"
 #include "molecule/molecule.hpp"
-#include "output/equivalence.hpp"
 #include "salc/salc_table.hpp"
 #include "symmetry/descent.hpp"
 #include "symmetry/ladder.hpp"
@@ -67,7 +66,6 @@ struct FrontierSymmetry {
 };
 
 struct SymmetryResult {
-  std::string title;
   Molecule molecule;  // as read, in the input frame
   MolecularSymmetry symmetry;
   double limit_angstrom = 0.5;
@@ -75,22 +73,21 @@ struct SymmetryResult {
   AxisEffect axis_effect;  // against the axes of the conventions
   bool user_axes = false;
   std::vector<EquivalentAtoms> sets;
-  std::vector<AtomSet> named_sets;  // the same sets
   std::vector<std::optional<LocalFrames>> frames;
   std::optional<int> central_atom;
   std::optional<OrbitalSymmetry> orbitals;  // nothing where parameters are lacking
   std::optional<FrontierSymmetry> frontier;
   DisplacementIrreps displacements;
   GroupAnswers answers;
-  std::vector<std::string> warnings;
 };
 
-/// Which of the longer sections to print.
-struct SymmetrySections {
-  bool operations = false;
-  bool salcs = false;
-  bool vibrations = false;
-};
+/// All but SALCs, frontier and answers, which are for those who ask.
+/// @param basis   nothing where parameters are lacking
+/// @throws Error  as `find_symmetry`
+[[nodiscard]] SymmetryResult symmetry_of(const Molecule& molecule, const SymmetryOptions& options,
+                                         const std::optional<Basis>& basis);
+
+[[nodiscard]] FrontierSymmetry frontier_symmetry(const MolecularSymmetry& symmetry, Levels levels);
 
 /// @returns  counts by irrep of the group as a reduction
 [[nodiscard]] Reduction reduction_of(const PointGroup& group, const std::vector<int>& times);

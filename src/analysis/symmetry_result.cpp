@@ -1,10 +1,10 @@
-#include "output/symmetry_result.hpp"
+#include "analysis/symmetry_result.hpp"
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 #include "harmonics/real_harmonics.hpp"
-#include "output/levels_result.hpp"
 
 namespace irrepwise {
 namespace {
@@ -40,7 +40,7 @@ std::vector<std::string> orbitals_in_irrep(const SymmetryResult& result, const B
   }
   std::vector<std::string> names;
   for (int m = 0; m < shell.size(); ++m) {
-    if (std::abs(projector(m, m)) > 1e-6) names.push_back(shell_orbital_name(shell, m));
+    if (std::abs(projector(m, m)) > 1e-6) names.push_back(salc_orbital_name(shell, m, false));
   }
   return names;
 }
@@ -89,6 +89,50 @@ std::vector<BondingIrrep> bonding_by_irrep(const SymmetryResult& result) {
     list.push_back(std::move(row));
   }
   return list;
+}
+
+SymmetryResult symmetry_of(const Molecule& molecule, const SymmetryOptions& options,
+                           const std::optional<Basis>& basis) {
+  MolecularSymmetry symmetry = find_symmetry(molecule, options);
+  std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
+  auto frames = frames_of_sets(symmetry, sets);
+  DisplacementIrreps displacements = displacement_irreps(symmetry);
+  SymmetryResult result{molecule,
+                        std::move(symmetry),
+                        options.limit_angstrom,
+                        symmetry_ladder(molecule, options),
+                        {},
+                        options.z || options.x,
+                        std::move(sets),
+                        std::move(frames),
+                        {},
+                        {},
+                        {},
+                        std::move(displacements),
+                        {}};
+  if (result.user_axes) {
+    SymmetryOptions by_convention = options;
+    by_convention.z.reset();
+    by_convention.x.reset();
+    result.axis_effect = axis_effect(find_symmetry(molecule, by_convention), result.symmetry);
+  }
+  if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
+  if (basis) {
+    result.orbitals = OrbitalSymmetry{
+        *basis, orbital_reductions(result.symmetry, *basis, result.sets, result.frames), {}};
+  }
+  return result;
+}
+
+FrontierSymmetry frontier_symmetry(const MolecularSymmetry& symmetry, Levels levels) {
+  FrontierSymmetry frontier{std::move(levels), {}, {}, {}, {}};
+  frontier.transitions = frontier_transitions(symmetry.group, frontier.levels);
+  frontier.open = open_levels(symmetry.group, frontier.levels);
+  if (!frontier.open.empty()) {
+    frontier.terms = find_terms(symmetry.group, frontier.open);
+    frontier.ground = ground_terms(symmetry, frontier.terms);
+  }
+  return frontier;
 }
 
 std::vector<ProductAnswer> answer_products(const PointGroup& group,
