@@ -34,9 +34,15 @@ struct DBlock {
   std::vector<ParentMean> means;       // ascending energy: splittings are their differences
 };
 
-/// As many levels of each irrep as the d orbitals of the metals give it, those with the largest d
-/// share. The parent is the group of the polyhedron that the donor sites are nearest to, laid over
-/// them as well as it goes; a single donor makes it C∞v. The metal d part of a level, turned to the
+/// For each irrep of the parent that d functions span, as many levels as it has orbitals, each with
+/// the largest weight in that irrep: those with the largest d share. Where σ donors span the irrep
+/// as well (eg in an octahedron) there are a bonding and an antibonding level, between which the d
+/// orbital is shared: the d block is the antibonding one, so there the highest level counts that
+/// has at least half of the largest share. No irrep of the molecule gives more levels than d
+/// combinations.
+///
+/// The parent is the group of the polyhedron that the donor sites are nearest to, laid over them as
+/// well as it goes; a single donor makes it C∞v. The metal d part of a level, turned to the
 /// parent's frame, is projected on the parent's irreps.
 ///
 /// @param metal  has a d shell

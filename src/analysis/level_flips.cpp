@@ -11,8 +11,9 @@
 namespace irrepwise {
 namespace {
 
-constexpr double worth_solving_ev = 1.0;  // larger changes are robust whatever the exact one is
-constexpr std::size_t most_solved = 3;    // of the parameters that flip soonest
+constexpr double worth_solving_ev = 1.0;     // larger changes are robust whatever the exact one is
+constexpr std::size_t most_solved = 3;       // of the parameters that flip soonest
+constexpr double undecided_below_ev = 1e-3;  // levels so near have no order worth the name
 constexpr double change_tolerance_ev = 1e-4;
 constexpr double smallest_slope = 1e-9;  // eV per unit: below it a parameter does not matter
 
@@ -138,6 +139,8 @@ void judge(LevelFlip& flip, const std::vector<Parameter>& parameters,
       flip.change_ev = found;
     }
   }
+  // Levels that coincide have no order to lose.
+  if (flip.gap_ev < undecided_below_ev) flip.change_ev = 0.0;
   flip.fragile = flip.change_ev && std::abs(*flip.change_ev) < fragile_below_ev;
 }
 

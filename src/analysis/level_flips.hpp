@@ -22,7 +22,8 @@ struct LevelFlip {
   int parameter = 0;                // the H_ii whose change does it soonest
   double first_order_ev = 0.0;      // change of that H_ii, from the slopes
   std::optional<double> change_ev;  // the same by solving again; absent where it was not tried (it
-                                    // is large) or the levels do not meet
+                                    // is large) or the levels do not meet; 0 for levels that lie
+                                    // within 1e-3 eV
   std::optional<int> other;         // the exponent or K that does it soonest
   double other_relative = 0.0;      // its change as a share of its value, first order
   bool fragile = false;

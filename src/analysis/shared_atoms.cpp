@@ -104,8 +104,19 @@ std::vector<std::pair<int, int>> atoms_met(const Laid& first, const Laid& second
   return pairs;
 }
 
-Eigen::Matrix3d turn_between(const Eigen::Vector3d& a1, const Eigen::Vector3d& a2,
-                             const Eigen::Vector3d& b1, const Eigen::Vector3d& b2) {
+bool spans_a_plane(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
+  return a.cross(b).norm() > 0.1 * a.norm() * b.norm() && a.norm() > 0.1 && b.norm() > 0.1;
+}
+
+// Takes the direction of b1 to that of a1 and the plane of b1 and b2 to that of a1 and a2; nothing
+// where the angles in them differ much, or there is no plane.
+std::optional<Eigen::Matrix3d> turn_between(const Eigen::Vector3d& a1, const Eigen::Vector3d& a2,
+                                            const Eigen::Vector3d& b1, const Eigen::Vector3d& b2) {
+  constexpr double same_cosine = 0.35;  // 20 degrees off a right angle
+  if (!spans_a_plane(a1, a2) || !spans_a_plane(b1, b2)) return {};
+  const double cosine_a = a1.normalized().dot(a2.normalized());
+  const double cosine_b = b1.normalized().dot(b2.normalized());
+  if (std::abs(cosine_a - cosine_b) > same_cosine) return {};
   const auto frame = [](const Eigen::Vector3d& x, const Eigen::Vector3d& y) {
     Eigen::Matrix3d axes;
     axes.col(0) = x.normalized();
@@ -116,22 +127,36 @@ Eigen::Matrix3d turn_between(const Eigen::Vector3d& a1, const Eigen::Vector3d& a
   return frame(a1, a2) * frame(b1, b2).transpose();
 }
 
-bool spans_a_plane(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
-  return a.cross(b).norm() > 0.1 * a.norm() * b.norm() && a.norm() > 0.1 && b.norm() > 0.1;
+// How many landmarks point where one of the other molecule does, of whatever element.
+int directions_met(const Laid& first, const Laid& second, const Eigen::Matrix3d& turn) {
+  constexpr double nearness = 0.94;  // cosine of 20 degrees
+  int count = 0;
+  for (const Landmark& a : first.landmarks) {
+    count += std::any_of(second.landmarks.begin(), second.landmarks.end(), [&](const Landmark& b) {
+      return a.position.dot(turn * b.position) >= nearness * a.position.norm() * b.position.norm();
+    });
+  }
+  return count;
 }
 
 struct Best {
   Eigen::Matrix3d turn;
   int landmarks = -1;
+  int directions = -1;
   std::vector<std::pair<int, int>> atoms;
 };
 
 void consider(const Laid& first, const Laid& second, const Eigen::Matrix3d& turn, Best& best) {
   const int landmarks = landmarks_met(first, second, turn);
   if (landmarks < best.landmarks) return;
+  const int directions = directions_met(first, second, turn);
+  if (landmarks == best.landmarks && directions < best.directions) return;
   std::vector<std::pair<int, int>> atoms = atoms_met(first, second, turn);
-  if (landmarks == best.landmarks && atoms.size() <= best.atoms.size()) return;
-  best = {turn, landmarks, std::move(atoms)};
+  if (landmarks == best.landmarks && directions == best.directions &&
+      atoms.size() <= best.atoms.size()) {
+    return;
+  }
+  best = {turn, landmarks, directions, std::move(atoms)};
 }
 
 // The turn once more, from all atoms that meet, where they span space.
@@ -170,19 +195,17 @@ SharedAtoms find_shared_atoms(const MolecularSymmetry& first, const Basis& first
   }
   Best best;
   consider(a, b, first.rotation * second.rotation.transpose(), best);
+  const std::size_t most = std::min(first.molecule.atoms().size(), second.molecule.atoms().size());
   for (std::size_t i = 0; i < a.landmarks.size(); ++i) {
     for (std::size_t j = i + 1; j < a.landmarks.size(); ++j) {
-      const Landmark &a1 = a.landmarks[i], &a2 = a.landmarks[j];
-      if (!spans_a_plane(a1.position, a2.position)) continue;
       for (std::size_t p = 0; p < b.landmarks.size(); ++p) {
         for (std::size_t q = 0; q < b.landmarks.size(); ++q) {
-          const Landmark &b1 = b.landmarks[p], &b2 = b.landmarks[q];
-          if (p == q || a1.element != b1.element || a2.element != b2.element) continue;
-          if (!spans_a_plane(b1.position, b2.position)) continue;
-          const Eigen::Matrix3d turn =
-              turn_between(a1.position, a2.position, b1.position, b2.position);
-          if (!meet(a1, b1, turn) || !meet(a2, b2, turn)) continue;
-          consider(a, b, turn, best);
+          if (best.atoms.size() == most) break;
+          if (p == q) continue;
+          const std::optional<Eigen::Matrix3d> turn =
+              turn_between(a.landmarks[i].position, a.landmarks[j].position,
+                           b.landmarks[p].position, b.landmarks[q].position);
+          if (turn) consider(a, b, *turn, best);
         }
       }
     }

@@ -21,7 +21,8 @@ struct SharedAtoms {
 };
 
 /// Lays the second molecule over the first, metal on metal (without metals: centroid on centroid),
-/// so that as many donors, then as many atoms as possible meet one of their element. The way the
+/// so that as many donors as possible meet one of their element, then as many as possible meet any,
+/// then as many atoms as possible meet one of their element. The way the
 /// input files have them is kept unless another is better.
 ///
 /// @source  derived by us

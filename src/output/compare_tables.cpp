@@ -1,5 +1,6 @@
 #include "output/compare_tables.hpp"
 
+#include <cmath>
 #include <optional>
 #include <string>
 #include <utility>
@@ -94,12 +95,13 @@ Table d_block_table(const Comparison& comparison) {
         Separator{parent_words(block) + (splittings.empty() ? "" : "; " + splittings)});
     for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
       const Level& level = level_of(variant, entry->level);
+      const bool whole = level.occupation == std::round(level.occupation);
       const bool labelled = !entry->parent_label.empty();
-      table.lines.emplace_back(
-          Row{{variant.name, SymmetryLabel{name_of_level(variant, entry->level)},
-               labelled ? Cell(SymmetryLabel{entry->parent_label}) : Cell(),
-               Number{level.energy_ev, 3}, percent(entry->d_share),
-               labelled ? percent(entry->parent_weight) : Cell(), Number{level.occupation, 1}}});
+      table.lines.emplace_back(Row{
+          {variant.name, SymmetryLabel{name_of_level(variant, entry->level)},
+           labelled ? Cell(SymmetryLabel{entry->parent_label}) : Cell(), Number{level.energy_ev, 3},
+           percent(entry->d_share), labelled ? percent(entry->parent_weight) : Cell(),
+           Number{level.occupation, whole ? 0 : 2}}});
     }
   }
   table.notes = {
@@ -150,14 +152,14 @@ Table robustness_table(const Comparison& comparison) {
   Table table;
   table.caption = "Smallest change of one parameter that turns the order of two frontier levels";
   table.columns = {{"name", "variant", "", Align::Left, 0, true},
-                   {"side", "side", "", Align::Left, 1, false},
+                   {"side", "side", "", Align::Left, 3, false},
                    {"pair", "order", "", Align::Left, 0, false},
                    {"gap_ev", "apart", "eV", Align::Decimal, 2, false},
                    {"parameter", "change", "", Align::Left, 0, false},
-                   {"first_order_ev", "by slope", "eV", Align::Decimal, 3, false},
+                   {"first_order_ev", "by slope", "eV", Align::Decimal, 1, false},
                    {"change_ev", "solved", "eV", Align::Decimal, 0, false},
                    {"other", "or", "", Align::Left, 4, false},
-                   {"other_percent", "by slope", "%", Align::Decimal, 4, false},
+                   {"other_percent", "by", "%", Align::Decimal, 4, false},
                    {"fragile", "", "", Align::Left, 0, false}};
   for (const VariantResult& variant : comparison.variants) {
     const Robustness& robustness = variant.robustness;
