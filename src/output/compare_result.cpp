@@ -12,6 +12,8 @@
 namespace irrepwise {
 namespace {
 
+constexpr double weak_match = 0.3;  // below it, "is now" would say too much
+
 MetalFacts metal_facts(const LevelsResult& result, int metal) {
   MetalFacts facts;
   facts.atom = metal;
@@ -111,8 +113,12 @@ std::string crossing_words(const Comparison& comparison, int variant, FrontierSi
   const std::string was = readable(reference, fate->reference_level);
   if (fate->match) {
     const double apart = energy_of(other, fate->match->variant) - energy_of(other, *fate->now);
-    words += fmt::format("{} of {} is now {}, {:.3f} eV {} the {} {}", was, reference.name,
-                         readable(other, fate->match->variant), std::abs(apart),
+    const std::string found = readable(other, fate->match->variant);
+    words += fate->match->overlap < weak_match
+                 ? fmt::format("what resembles {} of {} most is {} ({:.0f} %)", was, reference.name,
+                               found, 100.0 * fate->match->overlap)
+                 : fmt::format("{} of {} is now {}", was, reference.name, found);
+    words += fmt::format(", {:.3f} eV {} the {} {}", std::abs(apart),
                          apart < 0.0 ? "below" : "above", which, readable(other, *fate->now));
   } else {
     words += fmt::format("nothing resembles {} of {}; the {} is {}", was, reference.name, which,

@@ -72,7 +72,7 @@ TEST_CASE("d levels bear the labels of the textbook correlation") {
       {"fac-tricyanotrifluorocobaltate(III)", "Oh", {"a1 (t2g)", "e (eg)", "e (t2g)"}},
       {"titanium tetrachloride", "Td", {"e (e)", "t2 (t2)"}},
       {"tetrachloroplatinate(II)", "D4h", {"a1g (a1g)", "b1g (b1g)", "b2g (b2g)", "eg (eg)"}},
-      {"pentacarbonyliron", "D3h", {"a1' (a1')", "e' (e')", "e\" (e\")"}}};
+      {"pentacarbonyliron", "D3h", {"a1' (a1')", "e\" (e\")", "e' (e')"}}};
   for (const Row& row : rows) {
     CAPTURE(std::string(row.molecule));
     std::string parent;
@@ -158,10 +158,12 @@ TEST_CASE("the deviation of a bent pair is half of what each bond is off") {
 }
 
 TEST_CASE("a ring that binds side by side is one donor") {
-  const Run r = run(test_molecule("dibenzenechromium").molecule);
+  const Run r = run(test_molecule("benzenetricarbonylchromium").molecule);
   const std::vector<DonorSite> sites =
       donor_sites(r.symmetry.molecule, r.basis, metal_atoms(r.symmetry.molecule, r.basis).front());
-  REQUIRE(sites.size() == 2);
-  CHECK(sites[0].atoms.size() == 6);
-  CHECK(sites[0].direction.dot(sites[1].direction) == doctest::Approx(-1.0).epsilon(1e-9).scale(0));
+  REQUIRE(sites.size() == 4);
+  std::vector<std::size_t> sizes;
+  for (const DonorSite& site : sites) sizes.push_back(site.atoms.size());
+  std::sort(sizes.begin(), sizes.end());
+  CHECK(sizes == std::vector<std::size_t>{1, 1, 1, 6});
 }
