@@ -100,7 +100,9 @@ TEST_CASE("the change that flips two levels does so when it is made") {
   int solved = 0;
   for (const char* name :
        {"mer-tricyanotrifluorocobaltate(III)", "cis-tetracarbonyldichloromolybdate(0)",
-        "pentacarbonylchloromanganese", "hexacyanoferrate(II)", "tetrachloroplatinate(II)"}) {
+        "pentacarbonylchloromanganese", "hexacyanoferrate(II)", "tetrachloroplatinate(II)",
+        "fac-tricyanotrifluorocobaltate(III)", "cis-diamminedichloroplatinum(II)",
+        "trans-dibromodichloroplatinate(II)", "tetracarbonylhydridocobalt"}) {
     const Run r = run(test_molecule(name).molecule);
     const Robustness robustness = find_robustness(r.symmetry, r.basis, r.levels);
     bool any_fragile = false;
