@@ -43,9 +43,13 @@ std::string cycle_words(const Molecule& molecule, const std::vector<int>& images
   for (std::size_t start = 0; start < images.size(); ++start) {
     if (seen[start] || images[start] == static_cast<int>(start)) continue;
     std::string cycle;
+    int length = 0;
     for (std::size_t atom = start; !seen[atom]; atom = static_cast<std::size_t>(images[atom])) {
       seen[atom] = true;
-      cycle += (cycle.empty() ? "" : "\u00a0") + atom_name(molecule, static_cast<int>(atom));
+      // Short cycles stay on one line; long ones may break.
+      const char* space = length % 6 == 0 ? " " : "\u00a0";
+      ++length;
+      cycle += (cycle.empty() ? "" : space) + atom_name(molecule, static_cast<int>(atom));
     }
     words += (words.empty() ? "(" : " (") + cycle + ")";
   }

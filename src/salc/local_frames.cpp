@@ -156,6 +156,8 @@ std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
   if (centre.atom == set.representative()) return std::nullopt;
   if (centre.atom && !are_bonded(molecule, *centre.atom, set.representative())) return std::nullopt;
   const Eigen::Vector3d at = molecule.atoms()[set.representative()].position;
+  constexpr double at_centre_angstrom = 1e-4;  // an atom there has no line to the centre
+  if ((centre.position - at).norm() < at_centre_angstrom) return std::nullopt;
   const Eigen::Vector3d z = (centre.position - at).normalized();
   const Eigen::Vector3d x = frame_of(first_y(symmetry, set, z), z).col(0);
 
