@@ -1,6 +1,7 @@
 #include "output/symmetry_report.hpp"
 
 #include <sstream>
+#include <algorithm>
 #include <string>
 
 #include <doctest/doctest.h>

@@ -1,9 +1,11 @@
 #include "salc/orbital_reductions.hpp"
 
+#include <algorithm>
 #include <map>
 #include <string>
 
 #include <Eigen/Geometry>
+#include <Eigen/LU>
 #include <doctest/doctest.h>
 
 #include "basis/parameter_set.hpp"
