@@ -2,6 +2,9 @@
 
 #include <algorithm>
 #include <cstddef>
+#include <string>
+#include <utility>
+#include <vector>
 
 #include <fmt/format.h>
 
@@ -77,11 +80,8 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
   return table;
 }
 
-Table partners_in_columns(const SymmetryResult& result, const Functions& functions, int irrep) {
-  Functions chosen;
-  for (const SalcFunction* salc : functions) {
-    if (salc->irrep == irrep) chosen.push_back(salc);
-  }
+// @param several  whether the irrep occurs more than once in the shell
+Table partners_in_columns(const SymmetryResult& result, const Functions& chosen, bool several) {
   const SalcFunction& first = *chosen.front();
   const Shell& shell = result.orbitals->basis.shells[first.shell];
   const std::string label = irrep_label(result, first);
@@ -89,7 +89,6 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& functio
   table.caption = caption(result, first) + ": " + readable_label(label);
   table.columns = {{"atom", "atom", "", Align::Left, 0, false},
                    {"orbital", "orbital", "", Align::Left, 0, false}};
-  const bool several = several_in(functions, irrep);
   for (const SalcFunction* salc : chosen) {
     const std::string words = partner_words(result, *salc, several);
     const std::string header = readable_label(label) + (words.empty() ? "" : " " + words);
@@ -113,6 +112,27 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& functio
     }
   }
   return table;
+}
+
+// One table per irrep; where that is too wide to read, one per SALC, its partners side by side.
+std::vector<Table> partner_tables(const SymmetryResult& result, const Functions& functions,
+                                  int irrep) {
+  constexpr std::size_t most_columns = 7;
+  const bool several = several_in(functions, irrep);
+  std::vector<Functions> parts;
+  for (const SalcFunction* salc : functions) {
+    if (salc->irrep != irrep) continue;
+    const bool next_salc = salc->partner == 1;
+    const auto dimension = static_cast<std::size_t>(
+        result.symmetry.group.irreps()[static_cast<std::size_t>(irrep)].dimension);
+    if (parts.empty() || (next_salc && parts.back().size() + dimension > most_columns)) {
+      parts.emplace_back();
+    }
+    parts.back().push_back(salc);
+  }
+  std::vector<Table> tables;
+  for (const Functions& part : parts) tables.push_back(partners_in_columns(result, part, several));
+  return tables;
 }
 
 }  // namespace
@@ -144,7 +164,9 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
     for (const SalcFunction* salc : functions) {
       if (salc->irrep == last) continue;
       last = salc->irrep;
-      tables.push_back(partners_in_columns(result, functions, last));
+      for (Table& table : partner_tables(result, functions, last)) {
+        tables.push_back(std::move(table));
+      }
     }
   }
   const bool local = std::any_of(salcs.begin(), salcs.end(),

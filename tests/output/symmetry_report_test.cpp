@@ -34,7 +34,7 @@ int widest_line(const std::string& text) {
 }  // namespace
 
 TEST_CASE("reports of all kinds of molecules fit 100 columns") {
-  for (const char* name :
+  for (const std::string name :
        {"water", "sulfur hexafluoride", "buckminsterfullerene", "ferrocene, staggered", "carbon dioxide",
         "tris(ethylenediamine)cobalt(III)", "tetrahydroxoborate", "helium atom", "dinitrogen",
         "tetrachloroplatinate(II)", "six different ligands on platinum(IV)"}) {
