@@ -6,6 +6,8 @@
 #include <numbers>
 #include <utility>
 
+#include <Eigen/Geometry>
+
 #include <fmt/format.h>
 
 #include "complex/second_centre.hpp"

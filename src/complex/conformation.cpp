@@ -7,6 +7,8 @@
 #include <optional>
 #include <utility>
 
+#include <Eigen/Geometry>
+
 #include <fmt/format.h>
 
 #include "complex/clash.hpp"
