@@ -135,8 +135,9 @@ std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry
 
 std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   const Molecule& molecule = symmetry.molecule;
+  const bool one_point = fixes_one_point(symmetry.group.symbol().family);
   std::optional<int> best;
-  std::pair<int, int> best_merit = {least_neighbours, 0};
+  std::pair<int, int> best_merit = {one_point ? -1 : least_neighbours, 0};
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
     const std::pair merit = {neighbours(molecule, atom), molecule.atoms()[atom].atomic_number};
@@ -146,7 +147,7 @@ std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
     best_merit = merit;
   }
   if (best) return Centre{molecule.atoms()[*best].position, best};
-  if (fixes_one_point(symmetry.group.symbol().family)) return Centre{};
+  if (one_point) return Centre{};
   return std::nullopt;
 }
 
