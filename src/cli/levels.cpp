@@ -4,11 +4,10 @@
 
 #include <fmt/format.h>
 
-#include "basis/atom_kinds.hpp"
 #include "cli/commands.hpp"
+#include "cli/computed.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
-#include "core/error.hpp"
 #include "output/levels_json.hpp"
 #include "output/levels_report.hpp"
 
@@ -21,27 +20,6 @@ struct LevelsOptions {
   LevelWindow window;
   LevelsJsonParts parts;
 };
-
-LevelsResult compute(const Job& job) {
-  Basis basis = make_basis(job.molecule, job.parameters, job.overrides);
-  SymmetryOptions symmetry_options = job.symmetry;
-  symmetry_options.kinds = atom_kinds(basis);
-  MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
-  Levels levels = solve_levels(symmetry, basis, job.hueckel);
-  Populations populations = mulliken_populations(symmetry, basis, levels);
-  std::vector<std::string> warnings = geometry_warnings(job.molecule);
-  warnings.insert(warnings.end(), levels.warnings.begin(), levels.warnings.end());
-  return {job.title,        job.parameters.name(), job.molecule,           std::move(symmetry),
-          std::move(basis), std::move(levels),     std::move(populations), std::move(warnings)};
-}
-
-LevelsResult compute_named(const Job& job, const std::string& file) {
-  try {
-    return compute(job);
-  } catch (const Error& error) {
-    throw error_at(file, error);
-  }
-}
 
 void check_usage(const LevelsOptions& options) {
   const Format format = chosen_format(options.output);
@@ -83,7 +61,7 @@ void run(const LevelsOptions& options) {
   check_usage(options);
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
-  const LevelsResult result = compute_named(job, options.job.file);
+  const LevelsResult result = computed(job, options.job.file);
   const std::string text = written(result, options);
   print_warnings(options.output, result.warnings);
   emit(options.output, text);

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <filesystem>
+#include <string_view>
 #include <system_error>
 #include <utility>
 
@@ -36,18 +37,47 @@ std::string read_named(const YamlNode& from, const std::string& path) {
 // The molecule with its own title, and defaults for all else.
 Job job_of(Molecule molecule) {
   std::string title = molecule.title();
-  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}};
+  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}, {}, {}};
+}
+
+// The molecule from `geometry` or `build`.
+Job read_structure(const YamlNode& node, const std::string& path, FileChain& files) {
+  const YamlNode* const build = node.find("build");
+  if (!build) return job_of(read_geometry(node.at("geometry"), path, files));
+  if (const YamlNode* const geometry = node.find("geometry")) {
+    geometry->fail("`geometry` and `build` exclude each other; keep one");
+  }
+  ComplexSpec complex = read_build(*build, path, files);
+  if (const YamlNode* const charge = node.find("charge")) {
+    complex.charge = charge->whole_number("a whole number of charges");
+    complex.charge_place = charge->place();
+  }
+  BuiltComplex built = [&] {
+    try {
+      return build_complex(complex);
+    } catch (const Error& error) {
+      // Where no value of the section is to blame, the section is.
+      const bool has_place = std::string_view(error.what()).starts_with(path);
+      if (has_place) throw;
+      throw error_at(build->place(), error);
+    }
+  }();
+  Job job = job_of(built.molecule);
+  job.complex = std::move(complex);
+  job.built = std::move(built);
+  return job;
 }
 
 Job parse_job(const std::string& text, const std::string& path, FileChain& files) {
   files.open.push_back(path);
   files.read.push_back(path);
   const YamlNode node = YamlNode::parse(text, path);
-  node.expect_keys("a job", {"title", "geometry", "charge", "multiplicity", "occupations",
+  node.expect_keys("a job", {"title", "geometry", "build", "charge", "multiplicity", "occupations",
                              "parameters", "overrides", "rule", "k", "symmetry"});
-  Job job = job_of(read_geometry(node.at("geometry"), path, files));
+  Job job = read_structure(node, path, files);
   if (const YamlNode* const title = node.find("title")) job.title = title->word("a title");
-  if (const YamlNode* const charge = node.find("charge")) {
+  const YamlNode* const charge = node.find("charge");
+  if (charge && !job.built) {
     const int value = charge->whole_number("a whole number of charges");
     try {
       job.molecule = job.molecule.with_charge(value);

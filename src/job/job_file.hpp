@@ -10,6 +10,7 @@
 
 #include "basis/basis.hpp"
 #include "basis/parameter_set.hpp"
+#include "complex/spec.hpp"
 #include "core/yaml.hpp"
 #include "hueckel/options.hpp"
 #include "molecule/molecule.hpp"
@@ -29,6 +30,18 @@ struct FileChain {
 /// @returns       a molecule with the charge that its file states, otherwise 0
 [[nodiscard]] Molecule read_geometry(const YamlNode& node, const std::string& beside,
                                      FileChain& files);
+
+/// `build`: a metal, a polyhedron and ligands, or two centres with bridges, in place of `geometry`.
+/// @param beside  the job file, beside which a library of ligands is looked for
+[[nodiscard]] ComplexSpec read_build(const YamlNode& node, const std::string& beside,
+                                     FileChain& files);
+
+/// One ligand: its name, or a map with `ligand`, `vertices` and more.
+[[nodiscard]] LigandRequest read_ligand_request(const YamlNode& node);
+
+/// A change of a complex: `metal`, `oxidation`, `polyhedron`, `ligands` with the vertices that they
+/// take over, `distances` by vertex.
+[[nodiscard]] Substitution read_substitution(const YamlNode& node);
 
 /// `parameters`: `published`, the name of a file, or a parameter set in place.
 [[nodiscard]] ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,

@@ -29,7 +29,8 @@ std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
   for (const int component : salc.components) {
     names.push_back(salc_orbital_name(shell, component, salc.local));
   }
-  return fmt::format("SALCs of {} on {}{}", joined(names), atom_sets(result.symmetry)[salc.set].name,
+  return fmt::format("SALCs of {} on {}{}", joined(names),
+                     atom_sets(result.symmetry)[salc.set].name,
                      salc.part == Part::PiInPlane      ? " (in plane)"
                      : salc.part == Part::PiOutOfPlane ? " (out of plane)"
                                                        : "");
@@ -70,7 +71,8 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
       const Eigen::VectorXd column = salc->coefficients.col(static_cast<Eigen::Index>(i));
       if (column.isZero(0.0)) continue;
       Row row{{SymmetryLabel{label}, partner}};
-      if (!one_orbital) row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
+      if (!one_orbital)
+        row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
       for (const double value : column) row.cells.emplace_back(coefficient_text(value));
       table.lines.emplace_back(std::move(row));
       label.clear();
@@ -100,8 +102,8 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& chosen,
       Row row{{name, salc_orbital_name(shell, first.components[i], first.local)}};
       bool any = false;
       for (const SalcFunction* salc : chosen) {
-        const double value = salc->coefficients(static_cast<Eigen::Index>(atom),
-                                                static_cast<Eigen::Index>(i));
+        const double value =
+            salc->coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         any = any || value != 0.0;
         row.cells.emplace_back(coefficient_text(value));
       }
@@ -121,10 +123,11 @@ std::vector<Table> tables_by_irrep(const SymmetryResult& result, const Functions
     chosen.push_back(functions[i]);
     const int irrep = functions[i]->irrep;
     const bool last = i + 1 == functions.size();
-    const int with_next = static_cast<int>(chosen.size()) + result.symmetry.group.irreps()[irrep].dimension;
+    const int with_next =
+        static_cast<int>(chosen.size()) + result.symmetry.group.irreps()[irrep].dimension;
     const bool next_is_partner = !last && functions[i + 1]->partner > 1;
-    const bool next_fits = !last && functions[i + 1]->irrep == irrep &&
-                           with_next <= most_partners_in_columns;
+    const bool next_fits =
+        !last && functions[i + 1]->irrep == irrep && with_next <= most_partners_in_columns;
     if (next_is_partner || next_fits) continue;
     tables.push_back(partners_in_columns(result, chosen, several_in(functions, irrep)));
     chosen.clear();
@@ -177,20 +180,21 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
     }
     for (Table& table : tables_by_irrep(result, functions)) tables.push_back(std::move(table));
   }
-  const bool local = std::any_of(salcs.begin(), salcs.end(),
-                                 [](const SalcFunction& salc) { return salc.local; });
+  const bool local =
+      std::any_of(salcs.begin(), salcs.end(), [](const SalcFunction& salc) { return salc.local; });
   const bool several = std::any_of(salcs.begin(), salcs.end(), [&](const SalcFunction& salc) {
     return salc.number > 1 && result.sets[salc.set].size() > 1;
   });
   if (!tables.empty()) {
     if (several) {
       tables.back().notes.push_back(
-          "2.1: the first partner of the second SALC of that irrep; without a point the number alone.");
+          "2.1: the first partner of the second SALC of that irrep; without a point the number "
+          "alone.");
     }
-    tables.back().notes.push_back(
-        local ? "Orbitals of each atom's own frame: z towards the centre, x and y across it; y points "
-                "along +z of the molecule where it can."
-              : "Orbitals of the standard frame.");
+    tables.back().notes.push_back(local ? "Orbitals of each atom's own frame: z towards the "
+                                          "centre, x and y across it; y points "
+                                          "along +z of the molecule where it can."
+                                        : "Orbitals of the standard frame.");
   }
   return tables;
 }

@@ -40,13 +40,30 @@ int OperationIndex::find(const Eigen::Matrix3d& matrix) const {
 }
 
 std::vector<int> product_table(const std::vector<Eigen::Matrix3d>& operations) {
+  // Matrices are multiplied for a few generators only: the row of s g is that of g, each product
+  // multiplied by s from the left.
   const OperationIndex index(operations);
   const std::size_t order = operations.size();
-  std::vector<int> products(order * order);
-  for (std::size_t g = 0; g < order; ++g) {
+  std::vector<int> products(order * order, -1);
+  std::vector<std::size_t> reached = {0};
+  for (std::size_t h = 0; h < order; ++h) products[h] = static_cast<int>(h);
+  std::vector<std::vector<int>> times;  // [generator][h]: index of the generator after h
+  for (std::size_t candidate = 1; candidate < order; ++candidate) {
+    if (products[candidate * order] >= 0) continue;
+    times.emplace_back();
     for (std::size_t h = 0; h < order; ++h) {
-      products[g * order + h] = index.find(operations[g] * operations[h]);
-      assert(products[g * order + h] >= 0);
+      times.back().push_back(index.find(operations[candidate] * operations[h]));
+      assert(times.back().back() >= 0);
+    }
+    for (std::size_t done = 0; done < reached.size(); ++done) {
+      for (const std::vector<int>& left : times) {
+        const auto image = static_cast<std::size_t>(left[reached[done]]);
+        if (products[image * order] >= 0) continue;
+        reached.push_back(image);
+        for (std::size_t h = 0; h < order; ++h) {
+          products[image * order + h] = left[products[reached[done] * order + h]];
+        }
+      }
     }
   }
   return products;

@@ -1,6 +1,6 @@
 // Feeds mutated inputs to every reader; the same seed gives the same inputs.
 //
-//   irrepwise_fuzz --corpus SOURCE_FOLDER [--runs N] [--seed S]
+//   irrepwise_fuzz --corpus SOURCE_FOLDER [--runs N] [--seed S] [--keep FILE]
 #include <algorithm>
 #include <cstdlib>
 #include <filesystem>
@@ -36,7 +36,7 @@ elements:
         coefficients: [0.5505, 0.6260]
         source: somewhere
 )";
-const std::string extension = R"(extends: published
+const std::string other_set = R"(extends: published
 name: with another carbon
 elements:
   C: {valence_electrons: 4, shells: [{shell: 2s, h_ii: -20, exponent: 1.6, source: x}]}
@@ -59,18 +59,25 @@ std::vector<std::string> files(const std::filesystem::path& folder, const std::s
   return texts;
 }
 
+struct Options {
+  std::filesystem::path corpus;
+  std::filesystem::path keep;  // where each input is written before it is read, for after a crash
+  long runs = 1000;
+  unsigned long seed = 1;
+};
+
 bool run(const char* name, Outcome (*target)(const std::string&),
-         const std::vector<std::string>& seeds, long runs, unsigned long seed) {
+         const std::vector<std::string>& seeds, const Options& options) {
   if (seeds.empty()) {
     std::cerr << name << ": no inputs to start from\n";
     return false;
   }
-  std::mt19937_64 random(seed);
+  std::mt19937_64 random(options.seed);
   long accepted = 0;
-  for (long i = 0; i < runs; ++i) {
+  for (long i = 0; i < options.runs; ++i) {
     const std::string text = mutant(seeds, random);
-    // Written beforehand, so that it is there to look at after a crash.
-    std::ofstream("fuzz_last_input", std::ios::binary | std::ios::trunc) << text;
+    if (!options.keep.empty())
+      std::ofstream(options.keep, std::ios::binary | std::ios::trunc) << text;
     const Outcome outcome = target(text);
     if (!outcome.failure.empty()) {
       std::cerr << name << ", run " << i << ": " << outcome.failure << "\n--- input:\n"
@@ -79,30 +86,30 @@ bool run(const char* name, Outcome (*target)(const std::string&),
     }
     accepted += outcome.accepted;
   }
-  std::cout << name << ": " << runs << " inputs, " << accepted << " read, the rest refused\n";
-  return accepted < runs;  // mutations that nothing notices would test nothing
+  std::cout << name << ": " << options.runs << " inputs, " << accepted
+            << " read, the rest refused\n";
+  return accepted < options.runs;  // mutations that nothing notices would test nothing
 }
 
 }  // namespace
 
 int main(int argc, char** argv) {
-  std::filesystem::path corpus;
-  long runs = 1000;
-  unsigned long seed = 1;
+  Options options;
   for (int i = 1; i + 1 < argc; i += 2) {
     const std::string option = argv[i];
-    if (option == "--corpus") corpus = argv[i + 1];
-    if (option == "--runs") runs = std::atol(argv[i + 1]);
-    if (option == "--seed") seed = std::strtoul(argv[i + 1], nullptr, 10);
+    if (option == "--corpus") options.corpus = argv[i + 1];
+    if (option == "--keep") options.keep = argv[i + 1];
+    if (option == "--runs") options.runs = std::atol(argv[i + 1]);
+    if (option == "--seed") options.seed = std::strtoul(argv[i + 1], nullptr, 10);
   }
-  if (corpus.empty()) {
-    std::cerr << "usage: irrepwise_fuzz --corpus SOURCE_FOLDER [--runs N] [--seed S]\n";
+  if (options.corpus.empty()) {
+    std::cerr
+        << "usage: irrepwise_fuzz --corpus SOURCE_FOLDER [--runs N] [--seed S] [--keep FILE]\n";
     return 2;
   }
-  const std::vector<std::string> xyz = files(corpus / "inputs", ".xyz");
-  const std::vector<std::string> jobs = files(corpus / "inputs", ".yaml");
-  const bool well = run("xyz", fuzz_xyz, xyz, runs, seed) &&
-                    run("job", fuzz_job, jobs, runs, seed) &&
-                    run("parameters", fuzz_parameters, {small_set, extension}, runs, seed);
+  const std::vector<std::string> xyz = files(options.corpus / "inputs", ".xyz");
+  const std::vector<std::string> jobs = files(options.corpus / "inputs", ".yaml");
+  const bool well = run("xyz", fuzz_xyz, xyz, options) && run("job", fuzz_job, jobs, options) &&
+                    run("parameters", fuzz_parameters, {small_set, other_set}, options);
   return well ? 0 : 1;
 }

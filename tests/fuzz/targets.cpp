@@ -54,7 +54,8 @@ Outcome fuzz_xyz(const std::string& text) {
 
 Outcome fuzz_parameters(const std::string& text) {
   return outcome("fuzz", [&]() -> std::string {
-    for (const auto& [number, element] : parse_parameters(text, "fuzz").elements()) {
+    const ParameterSet set = parse_parameters(text, "fuzz");
+    for (const auto& [number, element] : set.elements()) {
       if (element.shells.empty()) return fmt::format("element {} without shells", number);
     }
     return {};

@@ -1,7 +1,7 @@
 #include "output/symmetry_report.hpp"
 
-#include <sstream>
 #include <algorithm>
+#include <sstream>
 #include <string>
 
 #include <doctest/doctest.h>
@@ -35,9 +35,10 @@ int widest_line(const std::string& text) {
 
 TEST_CASE("reports of all kinds of molecules fit 100 columns") {
   for (const std::string name :
-       {"water", "sulfur hexafluoride", "buckminsterfullerene", "octachlorodirhenate(III)", "carbon dioxide",
-        "tris(ethylenediamine)cobalt(III)", "tetrahydroxoborate", "helium atom", "dinitrogen",
-        "tetrachloroplatinate(II)", "six different ligands on platinum(IV)"}) {
+       {"water", "sulfur hexafluoride", "buckminsterfullerene", "ferrocene, staggered",
+        "octachlorodirhenate(III)", "carbon dioxide", "tris(ethylenediamine)cobalt(III)",
+        "tetrahydroxoborate", "helium atom", "dinitrogen", "tetrachloroplatinate(II)",
+        "six different ligands on platinum(IV)"}) {
     CAPTURE(name);
     SymmetryResult result = symmetry_of_test_molecule(name);
     result.orbitals->salcs =

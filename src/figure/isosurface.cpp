@@ -1,0 +1,170 @@
+#include "figure/isosurface.hpp"
+
+#include <cmath>
+#include <unordered_map>
+
+#include <Eigen/Geometry>
+
+namespace irrepwise {
+namespace {
+
+// The six tetrahedra of a cube share its diagonal 0-7; corner bits are steps along x, y, z.
+constexpr int tetrahedra[6][4] = {{0, 1, 3, 7}, {0, 1, 5, 7}, {0, 2, 3, 7},
+                                  {0, 2, 6, 7}, {0, 4, 5, 7}, {0, 4, 6, 7}};
+
+class Surface {
+ public:
+  Surface(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue)
+      : field_(field),
+        shape_(grid.shape),
+        values_(grid.values[static_cast<std::size_t>(orbital)]),
+        orbital_(orbital),
+        isovalue_(isovalue),
+        sign_(isovalue < 0.0 ? -1.0 : 1.0) {}
+
+  Mesh built() {
+    const std::array<int, 3>& n = shape_.size;
+    for (int k = 0; k + 1 < n[2]; ++k) {
+      for (int j = 0; j + 1 < n[1]; ++j) {
+        for (int i = 0; i + 1 < n[0]; ++i) cube(i, j, k);
+      }
+    }
+    return std::move(mesh_);
+  }
+
+ private:
+  // Positive inside the surface.
+  [[nodiscard]] double inside(std::size_t point) const {
+    return sign_ * (values_[point] - isovalue_);
+  }
+
+  void cube(int i, int j, int k) {
+    std::size_t corner[8];
+    int n_inside = 0;
+    for (int c = 0; c < 8; ++c) {
+      corner[c] = shape_.index(i + (c & 1), j + (c >> 1 & 1), k + (c >> 2));
+      n_inside += inside(corner[c]) > 0.0 ? 1 : 0;
+    }
+    if (n_inside == 0 || n_inside == 8) return;
+    for (const auto& t : tetrahedra) {
+      tetrahedron({corner[t[0]], corner[t[1]], corner[t[2]], corner[t[3]]});
+    }
+  }
+
+  void tetrahedron(const std::array<std::size_t, 4>& corners) {
+    std::vector<std::size_t> in;
+    std::vector<std::size_t> out;
+    for (const std::size_t c : corners) (inside(c) > 0.0 ? in : out).push_back(c);
+    if (in.empty() || out.empty()) return;
+    if (in.size() == 1) {
+      triangle(vertex(in[0], out[0]), vertex(in[0], out[1]), vertex(in[0], out[2]));
+    } else if (out.size() == 1) {
+      triangle(vertex(in[0], out[0]), vertex(in[1], out[0]), vertex(in[2], out[0]));
+    } else {
+      const std::uint32_t a = vertex(in[0], out[0]);
+      const std::uint32_t b = vertex(in[0], out[1]);
+      const std::uint32_t c = vertex(in[1], out[1]);
+      const std::uint32_t d = vertex(in[1], out[0]);
+      triangle(a, b, c);
+      triangle(a, c, d);
+    }
+  }
+
+  void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c) {
+    if (a == b || b == c || a == c) return;
+    const Eigen::Vector3f& pa = mesh_.vertices[a];
+    const Eigen::Vector3f across = (mesh_.vertices[b] - pa).cross(mesh_.vertices[c] - pa);
+    const Eigen::Vector3f outwards = mesh_.normals[a] + mesh_.normals[b] + mesh_.normals[c];
+    if (across.dot(outwards) < 0.0f) std::swap(b, c);
+    mesh_.triangles.push_back({a, b, c});
+  }
+
+  [[nodiscard]] std::array<int, 3> lattice(std::size_t point) const {
+    const auto nx = static_cast<std::size_t>(shape_.size[0]);
+    const auto ny = static_cast<std::size_t>(shape_.size[1]);
+    return {static_cast<int>(point % nx), static_cast<int>(point / nx % ny),
+            static_cast<int>(point / (nx * ny))};
+  }
+
+  // Steepest ascent of the value, by central differences on the grid.
+  [[nodiscard]] Eigen::Vector3d gradient(std::size_t point) const {
+    const std::array<int, 3> at = lattice(point);
+    Eigen::Vector3d g;
+    for (int axis = 0; axis < 3; ++axis) {
+      const auto a = static_cast<std::size_t>(axis);
+      std::array<int, 3> low = at;
+      std::array<int, 3> high = at;
+      if (low[a] > 0) --low[a];
+      if (high[a] + 1 < shape_.size[a]) ++high[a];
+      g(axis) = (values_[shape_.index(high[0], high[1], high[2])] -
+                 values_[shape_.index(low[0], low[1], low[2])]) /
+                (high[a] - low[a]);
+    }
+    return g;
+  }
+
+  // The part of the way from p to q at which the orbital has the value: false position with the
+  // Illinois change, which keeps the root bracketed.
+  [[nodiscard]] double root(const Eigen::Vector3d& p, const Eigen::Vector3d& q, double f_p,
+                            double f_q) const {
+    double low = 0.0;
+    double high = 1.0;
+    double t = 0.0;
+    int last_side = 0;
+    for (int step = 0; step < 30; ++step) {
+      t = low + (high - low) * f_p / (f_p - f_q);
+      const double f = sign_ * (field_.value(p + t * (q - p), orbital_) - isovalue_);
+      if (std::abs(f) < 1e-7 * std::abs(isovalue_)) break;
+      if (f > 0.0) {
+        low = t;
+        f_p = f;
+        if (last_side == 1) f_q *= 0.5;
+        last_side = 1;
+      } else {
+        high = t;
+        f_q = f;
+        if (last_side == -1) f_p *= 0.5;
+        last_side = -1;
+      }
+    }
+    return t;
+  }
+
+  // The vertex on the edge from a point inside to one outside; each edge has one.
+  std::uint32_t vertex(std::size_t in, std::size_t out) {
+    const std::uint64_t points = values_.size();
+    const std::uint64_t key = in * points + out;
+    const auto [place, is_new] =
+        known_.try_emplace(key, static_cast<std::uint32_t>(mesh_.vertices.size()));
+    if (!is_new) return place->second;
+    const std::array<int, 3> a = lattice(in);
+    const std::array<int, 3> b = lattice(out);
+    const Eigen::Vector3d p = shape_.point(a[0], a[1], a[2]);
+    const Eigen::Vector3d q = shape_.point(b[0], b[1], b[2]);
+    const double t = root(p, q, inside(in), inside(out));
+    Eigen::Vector3d normal = -sign_ * ((1.0 - t) * gradient(in) + t * gradient(out));
+    const double length = normal.norm();
+    normal =
+        length > 0.0 ? Eigen::Vector3d(normal / length) : Eigen::Vector3d((q - p).normalized());
+    mesh_.vertices.push_back((p + t * (q - p)).cast<float>());
+    mesh_.normals.push_back(normal.cast<float>());
+    return place->second;
+  }
+
+  const OrbitalField& field_;
+  const GridShape& shape_;
+  const std::vector<double>& values_;
+  int orbital_;
+  double isovalue_;
+  double sign_;
+  Mesh mesh_;
+  std::unordered_map<std::uint64_t, std::uint32_t> known_;
+};
+
+}  // namespace
+
+Mesh isosurface(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue) {
+  return Surface(field, grid, orbital, isovalue).built();
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,165 @@
+#include "figure/orbital_grid.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <functional>
+
+#include <fmt/format.h>
+
+#include "core/constants.hpp"
+#include "core/error.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr std::size_t most_points = 24'000'000;
+constexpr double usual_spacing_angstrom = 0.15;
+constexpr double wanted_error = 0.005;  // of an integral, without a wish of the user
+constexpr double refused_error = 0.01;
+constexpr int finer_tries = 4;
+constexpr double finer = 0.8;
+
+GridShape shape_around(const OrbitalField& field, double spacing) {
+  Eigen::Vector3d low = Eigen::Vector3d::Constant(1e9);
+  Eigen::Vector3d high = -low;
+  for (const OrbitalField::Centre& centre : field.centres()) {
+    const Eigen::Vector3d reach = Eigen::Vector3d::Constant(centre.density_angstrom);
+    low = low.cwiseMin(centre.position_angstrom - reach);
+    high = high.cwiseMax(centre.position_angstrom + reach);
+  }
+  GridShape shape;
+  shape.spacing_angstrom = spacing;
+  double points = 1.0;
+  for (int axis = 0; axis < 3; ++axis) {
+    const auto a = static_cast<std::size_t>(axis);
+    // Noise of rounding must not make one side of a symmetric grid longer.
+    const double first = std::floor(low(axis) / spacing + 1e-6);
+    const double last = std::ceil(high(axis) / spacing - 1e-6);
+    points *= last - first + 1.0;
+    if (points > static_cast<double>(most_points)) {
+      const double volume = (high - low).prod();
+      throw Error(fmt::format(
+          "a grid of spacing {} Å over {:.0f} Å^3 has too many points; use at least {:.2f} Å",
+          spacing, volume, std::ceil(100.0 * std::cbrt(volume / most_points) * 1.02) / 100.0));
+    }
+    shape.first[a] = static_cast<int>(first);
+    shape.size[a] = static_cast<int>(last - first) + 1;
+  }
+  return shape;
+}
+
+// First and one past the last index along an axis whose points lie within reach of a centre.
+std::pair<int, int> indices_within(const GridShape& shape, std::size_t axis, double centre,
+                                   double reach) {
+  const double h = shape.spacing_angstrom;
+  const int first = static_cast<int>(std::ceil((centre - reach) / h)) - shape.first[axis];
+  const int last = static_cast<int>(std::floor((centre + reach) / h)) - shape.first[axis];
+  return {std::max(0, first), std::min(shape.size[axis], last + 1)};
+}
+
+OrbitalGrid sampled(const OrbitalField& field, const GridShape& shape) {
+  const auto n = static_cast<std::size_t>(field.count());
+  std::vector<double> all(shape.points() * n, 0.0);  // orbitals run fastest
+  for (std::size_t c = 0; c < field.centres().size(); ++c) {
+    const OrbitalField::Centre& centre = field.centres()[c];
+    const Eigen::Vector3d& p = centre.position_angstrom;
+    const double reach = centre.reach_angstrom;
+    const auto [k0, k1] = indices_within(shape, 2, p.z(), reach);
+    for (int k = k0; k < k1; ++k) {
+      const double dz = shape.point(0, 0, k).z() - p.z();
+      const double disc = std::sqrt(std::max(0.0, reach * reach - dz * dz));
+      const auto [j0, j1] = indices_within(shape, 1, p.y(), disc);
+      for (int j = j0; j < j1; ++j) {
+        const double dy = shape.point(0, j, k).y() - p.y();
+        const double half = std::sqrt(std::max(0.0, disc * disc - dy * dy));
+        const auto [i0, i1] = indices_within(shape, 0, p.x(), half);
+        for (int i = i0; i < i1; ++i) {
+          field.add(static_cast<int>(c), shape.point(i, j, k), &all[shape.index(i, j, k) * n]);
+        }
+      }
+    }
+  }
+  OrbitalGrid grid;
+  grid.shape = shape;
+  const double volume = std::pow(shape.spacing_angstrom / bohr_in_angstrom, 3);
+  for (std::size_t orbital = 0; orbital < n; ++orbital) {
+    std::vector<double> values(shape.points());
+    double sum = 0.0;
+    for (std::size_t p = 0; p < values.size(); ++p) {
+      values[p] = all[p * n + orbital];
+      sum += values[p] * values[p];
+    }
+    grid.values.push_back(std::move(values));
+    grid.integrals.push_back(sum * volume);
+  }
+  return grid;
+}
+
+double worst_error(const OrbitalGrid& grid) {
+  double worst = 0.0;
+  for (const double integral : grid.integrals) worst = std::max(worst, std::abs(integral - 1.0));
+  return worst;
+}
+
+}  // namespace
+
+std::size_t GridShape::points() const {
+  return static_cast<std::size_t>(size[0]) * static_cast<std::size_t>(size[1]) *
+         static_cast<std::size_t>(size[2]);
+}
+
+Eigen::Vector3d GridShape::point(int i, int j, int k) const {
+  return spacing_angstrom * Eigen::Vector3d(first[0] + i, first[1] + j, first[2] + k);
+}
+
+std::size_t GridShape::index(int i, int j, int k) const {
+  return (static_cast<std::size_t>(k) * static_cast<std::size_t>(size[1]) +
+          static_cast<std::size_t>(j)) *
+             static_cast<std::size_t>(size[0]) +
+         static_cast<std::size_t>(i);
+}
+
+OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angstrom) {
+  if (spacing_angstrom && !(*spacing_angstrom >= 0.02 && *spacing_angstrom <= 1.0)) {
+    throw Error(
+        fmt::format("spacing of the grid: found {}, expected 0.02 to 1 Å", *spacing_angstrom));
+  }
+  double spacing = spacing_angstrom.value_or(usual_spacing_angstrom);
+  OrbitalGrid grid = sampled(field, shape_around(field, spacing));
+  if (!spacing_angstrom) {
+    for (int i = 0; i < finer_tries && worst_error(grid) > wanted_error; ++i) {
+      spacing *= finer;
+      grid = sampled(field, shape_around(field, spacing));
+    }
+  }
+  if (worst_error(grid) > refused_error) {
+    throw Error(fmt::format(
+        "the density on a grid of spacing {:.3g} Å is off by {:.1f} %; use a finer grid", spacing,
+        100.0 * worst_error(grid)));
+  }
+  return grid;
+}
+
+double enclosing_isovalue(const OrbitalGrid& grid, int orbital, double share) {
+  if (!(share > 0.0 && share < 1.0)) {
+    throw Error(
+        fmt::format("share of the density: found {}, expected more than 0 and less than 1", share));
+  }
+  const auto o = static_cast<std::size_t>(orbital);
+  const double volume = std::pow(grid.shape.spacing_angstrom / bohr_in_angstrom, 3);
+  std::vector<double> density;
+  density.reserve(grid.values[o].size());
+  for (const double value : grid.values[o]) {
+    if (value * value * volume > 1e-12) density.push_back(value * value);
+  }
+  std::sort(density.begin(), density.end(), std::greater<>());
+  const double wanted = share * grid.integrals[o] / volume;
+  double sum = 0.0;
+  for (const double value : density) {
+    sum += value;
+    if (sum >= wanted) return std::sqrt(value);
+  }
+  return std::sqrt(density.back());
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,46 @@
+// Orbitals on a regular grid, the integral of their density, and which isovalue encloses how much.
+#pragma once
+
+#include <array>
+#include <optional>
+#include <vector>
+
+#include <Eigen/Core>
+
+#include "figure/orbital_field.hpp"
+
+namespace irrepwise {
+
+/// Points of a cubic lattice that has a point at the origin, so that a grid around a symmetric
+/// molecule has the symmetry of the lattice.
+struct GridShape {
+  std::array<int, 3> first = {0, 0, 0};  // index of the first point along x, y, z
+  std::array<int, 3> size = {0, 0, 0};   // number of points
+  double spacing_angstrom = 0.0;
+
+  [[nodiscard]] std::size_t points() const;
+  [[nodiscard]] Eigen::Vector3d point(int i, int j, int k) const;  // Å
+  [[nodiscard]] std::size_t index(int i, int j, int k) const;      // x runs fastest
+};
+
+struct OrbitalGrid {
+  GridShape shape;
+  std::vector<std::vector<double>> values;  // per orbital, bohr^(-3/2)
+  std::vector<double> integrals;            // per orbital, of the density over the grid
+};
+
+/// @param spacing_angstrom  as the user wants it; without it, 0.15 Å, finer where the integral of
+///                          some density is otherwise further than 0.005 from 1
+/// @throws Error  where the grid would need more than 24 million points (with the spacing that
+///                does not), or an integral is further than 0.01 from 1
+[[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
+                                 std::optional<double> spacing_angstrom = {});
+
+/// The value of |psi| on the surface that encloses the given part of the density, by adding up the
+/// density from its largest values down.
+/// @param share    between 0 and 1
+/// @throws Error   for any other share
+/// @returns        bohr^(-3/2)
+[[nodiscard]] double enclosing_isovalue(const OrbitalGrid& grid, int orbital, double share);
+
+}  // namespace irrepwise

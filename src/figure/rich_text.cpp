@@ -1,0 +1,80 @@
+#include "figure/rich_text.hpp"
+
+#include <cctype>
+#include <cmath>
+#include <cstddef>
+#include <string_view>
+
+#include <fmt/format.h>
+
+#include "symmetry/irrep.hpp"
+
+namespace irrepwise {
+namespace {
+
+bool is_digit(char c) { return std::isdigit(static_cast<unsigned char>(c)) != 0; }
+
+// Bytes of the first UTF-8 character.
+std::size_t first_character(std::string_view text) {
+  std::size_t size = 1;
+  while (size < text.size() && (static_cast<unsigned char>(text[size]) & 0xC0u) == 0x80u) ++size;
+  return size;
+}
+
+void add(RichText& runs, const std::string& text, Script script) {
+  if (text.empty()) return;
+  if (!runs.empty() && runs.back().script == script) {
+    runs.back().text += text;
+  } else {
+    runs.push_back({text, script});
+  }
+}
+
+}  // namespace
+
+RichText label_text(const std::string& ascii) {
+  const std::string label = readable_label(ascii);
+  RichText runs;
+  std::size_t at = 0;
+  while (at < label.size() && is_digit(label[at])) ++at;  // the number of the level
+  if (at < label.size()) at += first_character(std::string_view(label).substr(at));
+  add(runs, label.substr(0, at), Script::Normal);
+  std::string sub;
+  std::string super;
+  for (; at < label.size(); ++at) {
+    const char c = label[at];
+    if (c == '\'') {
+      super += "′";
+    } else if (c == '"') {
+      super += "″";
+    } else if (c == '+') {
+      super += "+";
+    } else if (c == '-') {
+      super += "−";
+    } else {
+      sub += c;
+    }
+  }
+  add(runs, sub, Script::Sub);
+  // Primes are drawn high already and need no smaller size.
+  if (!super.empty()) {
+    const bool sign = super == "+" || super == "−";
+    add(runs, super, sign ? Script::Super : Script::Normal);
+  }
+  return runs;
+}
+
+RichText plain_text(const std::string& text) { return {{text, Script::Normal}}; }
+
+std::string energy_words(double energy_ev, int digits) {
+  const std::string size = fmt::format("{:.{}f}", std::abs(energy_ev), digits);
+  const bool zero = size.find_first_not_of("0.") == std::string::npos;
+  return (energy_ev < 0.0 && !zero ? "−" : "") + size + " eV";
+}
+
+RichText operator+(RichText first, const RichText& second) {
+  first.insert(first.end(), second.begin(), second.end());
+  return first;
+}
+
+}  // namespace irrepwise

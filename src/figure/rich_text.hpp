@@ -1,0 +1,21 @@
+// Typesetting of labels: "2e1g" as 2e with a subscript, "1a2\"" with its primes.
+#pragma once
+
+#include <string>
+
+#include "figure/figure.hpp"
+
+namespace irrepwise {
+
+/// @param ascii  label of an irrep or a level: "2e1g", "A1\"", "1sigmag", "piu"
+[[nodiscard]] RichText label_text(const std::string& ascii);
+
+[[nodiscard]] RichText plain_text(const std::string& text);
+
+/// @returns  "-11.304 eV" with a true minus sign
+[[nodiscard]] std::string energy_words(double energy_ev, int digits = 3);
+
+/// @returns  both, one after the other
+[[nodiscard]] RichText operator+(RichText first, const RichText& second);
+
+}  // namespace irrepwise
