@@ -4,9 +4,9 @@
 #include <map>
 #include <string>
 
+#include <doctest/doctest.h>
 #include <Eigen/Geometry>
 #include <Eigen/LU>
-#include <doctest/doctest.h>
 
 #include "basis/parameter_set.hpp"
 #include "support/molecules.hpp"
@@ -39,7 +39,8 @@ std::string spans(const std::string& name, int atom, Part part) {
   const Reduced all = reduced(test_molecule(name).molecule);
   for (const OrbitalReduction& reduction : all.reductions) {
     const auto& atoms = all.sets[reduction.set].atoms;
-    if (reduction.part != part || std::find(atoms.begin(), atoms.end(), atom) == atoms.end()) continue;
+    if (reduction.part != part || std::find(atoms.begin(), atoms.end(), atom) == atoms.end())
+      continue;
     std::string words;
     for (std::size_t i = 0; i < reduction.times.size(); ++i) {
       if (reduction.times[i] == 0) continue;
