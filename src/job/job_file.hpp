@@ -13,6 +13,7 @@
 #include "complex/spec.hpp"
 #include "core/yaml.hpp"
 #include "hueckel/options.hpp"
+#include "job/job.hpp"
 #include "molecule/molecule.hpp"
 #include "symmetry/options.hpp"
 
@@ -47,16 +48,24 @@ struct FileChain {
 [[nodiscard]] ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
                                                FileChain& files);
 
+enum class AbsentElement { Refused, Skipped };
+
 /// `overrides`: a list, each for an `element` or an `atom`.
-[[nodiscard]] std::vector<ParameterOverride> read_overrides(const YamlNode& node,
-                                                            const Molecule& molecule,
-                                                            const ParameterSet& parameters);
+/// @param absent  what to do with an override of an element that the molecule lacks
+[[nodiscard]] std::vector<ParameterOverride> read_overrides(
+    const YamlNode& node, const Molecule& molecule, const ParameterSet& parameters,
+    AbsentElement absent = AbsentElement::Refused);
 
 /// `symmetry`: `tolerance`, `limit`, `axes`, `group`, `subgroup`.
 [[nodiscard]] SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule);
 
-/// `rule`, `k`, `multiplicity` and `occupations` of the job itself.
-[[nodiscard]] HueckelOptions read_hueckel(const YamlNode& job);
+/// `rule`, `k`, `multiplicity` and `occupations` of the job itself, unless the variant has its own.
+[[nodiscard]] HueckelOptions read_hueckel(const YamlNode& job, const YamlNode* variant = nullptr);
+
+/// A whole job, with the keys of one of its `variants` in place of its own.
+/// @param variant  null for the job as it is
+[[nodiscard]] Job read_job_node(const YamlNode& node, const YamlNode* variant,
+                                const std::string& path, FileChain& files);
 
 /// The atoms of a job or an XYZ file, through a chain of files.
 /// @param from  the value that names the file; its place is blamed where the file cannot be read
