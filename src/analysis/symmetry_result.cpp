@@ -11,13 +11,20 @@ namespace {
 
 const char* part_letter(Part part) {
   switch (part) {
-    case Part::Shell: return "";
-    case Part::Sigma: return "σ";
-    case Part::Pi: return "π";
-    case Part::PiInPlane: return "π in plane";
-    case Part::PiOutOfPlane: return "π out of plane";
-    case Part::Delta: return "δ";
-    case Part::Phi: return "φ";
+    case Part::Shell:
+      return "";
+    case Part::Sigma:
+      return "σ";
+    case Part::Pi:
+      return "π";
+    case Part::PiInPlane:
+      return "π in plane";
+    case Part::PiOutOfPlane:
+      return "π out of plane";
+    case Part::Delta:
+      return "δ";
+    case Part::Phi:
+      return "φ";
   }
   return "";
 }
@@ -35,8 +42,8 @@ std::vector<std::string> orbitals_in_irrep(const SymmetryResult& result, const B
   HarmonicMatrix projector = HarmonicMatrix::Zero(shell.size(), shell.size());
   for (std::size_t h = 0; h < set.site_group.size(); ++h) {
     const int g = set.site_group[h];
-    projector += group.irreps()[irrep].characters[g] *
-                 harmonic_rotation(shell.l, group.operations()[g]);
+    projector +=
+        group.irreps()[irrep].characters[g] * harmonic_rotation(shell.l, group.operations()[g]);
   }
   std::vector<std::string> names;
   for (int m = 0; m < shell.size(); ++m) {
@@ -146,7 +153,8 @@ std::vector<TermsAnswer> answer_terms(const PointGroup& group,
                                       const std::vector<std::string>& configurations) {
   std::vector<TermsAnswer> answers;
   for (const std::string& configuration : configurations) {
-    answers.push_back({configuration, find_terms(group, parse_configuration(group, configuration))});
+    answers.push_back(
+        {configuration, find_terms(group, parse_configuration(group, configuration))});
   }
   return answers;
 }

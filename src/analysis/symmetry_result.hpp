@@ -60,8 +60,8 @@ struct OrbitalSymmetry {
 struct FrontierSymmetry {
   Levels levels;
   std::vector<Transition> transitions;
-  std::vector<OpenLevel> open;      // empty for a closed shell
-  std::vector<Term> terms;          // of the open shell
+  std::vector<OpenLevel> open;  // empty for a closed shell
+  std::vector<Term> terms;      // of the open shell
   std::vector<GroundTerm> ground;
 };
 

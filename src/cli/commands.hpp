@@ -14,6 +14,7 @@ struct Command {
 
 [[nodiscard]] Command add_compare(CLI::App& program);
 [[nodiscard]] Command add_draw(CLI::App& program);
+[[nodiscard]] Command add_build(CLI::App& program);
 [[nodiscard]] Command add_levels(CLI::App& program);
 [[nodiscard]] Command add_parameters(CLI::App& program);
 [[nodiscard]] Command add_symmetry(CLI::App& program);

@@ -38,11 +38,10 @@ auto named(const char* option, Action action) {
 
 SheetWords heading(const LevelsResult& result) {
   const Levels& levels = result.levels;
-  std::string method =
-      fmt::format("{} · {} · extended Hückel, {} rule{} · parameters: {}",
-                  charged_formula(result.molecule), result.symmetry.group.symbol().name(),
-                  rule_name(levels.rule), levels.k ? fmt::format(", K = {}", *levels.k) : "",
-                  result.parameter_set);
+  std::string method = fmt::format(
+      "{} · {} · extended Hückel, {} rule{} · parameters: {}", charged_formula(result.molecule),
+      result.symmetry.group.symbol().name(), rule_name(levels.rule),
+      levels.k ? fmt::format(", K = {}", *levels.k) : "", result.parameter_set);
   return {result.title.empty() ? charged_formula(result.molecule) : result.title, method};
 }
 
@@ -103,19 +102,28 @@ struct Surfaces {
   std::vector<std::string> remarks;
 };
 
-// One orbital at a time, each on a grid of its own size.
+// Partners of a level share a grid; each level has one of its own size.
 Surfaces surfaces_of(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
   const Molecule& molecule = result.symmetry.molecule;
+  const double share = options.share.value_or(usual_share);
   Surfaces out;
-  for (std::size_t i = 0; i < chosen.orbitals.size(); ++i) {
-    const OrbitalField field(molecule, result.basis,
-                             chosen.coefficients.col(static_cast<Eigen::Index>(i)));
+  const std::size_t n = chosen.orbitals.size();
+  for (std::size_t first = 0; first < n;) {
+    std::size_t end = first + 1;
+    while (end < n && chosen.orbitals[end].level == chosen.orbitals[first].level) ++end;
+    const OrbitalField field(
+        molecule, result.basis,
+        chosen.coefficients.middleCols(static_cast<Eigen::Index>(first),
+                                       static_cast<Eigen::Index>(end - first)));
     const OrbitalGrid grid =
-        named(chosen.names[i].c_str(), [&] { return sample(field, options.spacing_angstrom); });
-    const double share = options.share.value_or(usual_share);
-    out.scenes.push_back(
-        named("--share", [&] { return orbital_scene(molecule, field, grid, 0, share); }));
-    out.remarks.push_back(surface_remark(chosen.names[i], out.scenes.back(), grid));
+        named(chosen.names[first].c_str(), [&] { return sample(field, options.spacing_angstrom); });
+    for (std::size_t i = first; i < end; ++i) {
+      out.scenes.push_back(named("--share", [&] {
+        return orbital_scene(molecule, field, grid, static_cast<int>(i - first), share);
+      }));
+      out.remarks.push_back(surface_remark(chosen.names[i], out.scenes.back(), grid));
+    }
+    first = end;
   }
   return out;
 }
@@ -144,13 +152,15 @@ Camera camera_for(const LevelsResult& result, const std::vector<OrbitalScene>& s
     const auto at = [&](std::size_t i) -> const Eigen::Vector3d& {
       return molecule.atoms()[static_cast<std::size_t>(atoms[i])].position;
     };
-    if (atoms.size() == 3) return camera_from(atoms_plane(molecule, {atoms[0], atoms[1], atoms[2]}).normal());
+    if (atoms.size() == 3)
+      return camera_from(atoms_plane(molecule, {atoms[0], atoms[1], atoms[2]}).normal());
     towards = atoms.size() == 1 ? at(0) : Eigen::Vector3d(at(1) - at(0));
   }
   if (!(towards.norm() > 1e-6)) {
-    throw Error(fmt::format("'{}' gives no direction; use x, y, z, a vector such as 1,1,0.5 or "
-                            "atoms away from the centre",
-                            view));
+    throw Error(
+        fmt::format("'{}' gives no direction; use x, y, z, a vector such as 1,1,0.5 or "
+                    "atoms away from the centre",
+                    view));
   }
   return camera_from(towards);
 }
@@ -180,8 +190,8 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
     constexpr int picture_px = 260;
     for (std::size_t i = 0; i < surfaces.scenes.size(); ++i) {
       const auto level = static_cast<std::size_t>(chosen.orbitals[i].level);
-      diagram.columns[0].levels[level].pictures.push_back(std::make_shared<const Raster>(
-          surface_picture(surfaces.scenes[i], camera, picture_px)));
+      diagram.columns[0].levels[level].pictures.push_back(
+          std::make_shared<const Raster>(surface_picture(surfaces.scenes[i], camera, picture_px)));
     }
     out.remarks = surfaces.remarks;
   }
@@ -261,10 +271,10 @@ Drawn draw_grid(const LevelsResult& result, const Chosen& chosen, const DrawOpti
   Drawn out{vti_document(grid, chosen.names, molecule), {}};
   for (std::size_t i = 0; i < chosen.names.size(); ++i) {
     const std::array<int, 3>& n = grid.shape.size;
-    out.remarks.push_back(fmt::format("{}: integral of the density on the grid {:.4f} ({} x {} x {} "
-                                      "points, spacing {:.3g} Å)",
-                                      chosen.names[i], grid.integrals[i], n[0], n[1], n[2],
-                                      grid.shape.spacing_angstrom));
+    out.remarks.push_back(fmt::format(
+        "{}: integral of the density on the grid {:.4f} ({} x {} x {} "
+        "points, spacing {:.3g} Å)",
+        chosen.names[i], grid.integrals[i], n[0], n[1], n[2], grid.shape.spacing_angstrom));
   }
   return out;
 }

@@ -56,9 +56,10 @@ DrawKind draw_kind(const DrawOptions& options) {
   const DrawFormat format = draw_format(options.output);
   const bool solid = format == DrawFormat::Glb || format == DrawFormat::Vti;
   if (options.orbitals.empty() && solid) {
-    throw Error(fmt::format("{}: a level diagram is written as .svg or .png; name an orbital, such "
-                            "as homo, for this file",
-                            options.output));
+    throw Error(
+        fmt::format("{}: a level diagram is written as .svg or .png; name an orbital, such "
+                    "as homo, for this file",
+                    options.output));
   }
   const bool plane_asked = options.contours || !options.plane.empty();
   if (solid && plane_asked) {

@@ -104,7 +104,8 @@ Job read_job_with(const JobOptions& options) {
     job.symmetry.x = named("--x", [&] { return parse_axis(options.x, job.molecule); });
   }
   if (!options.group.empty()) {
-    job.symmetry.group = named("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
+    job.symmetry.group =
+        named("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
   }
   if (options.limit) {
     job.symmetry.limit_angstrom = in_range("--limit", *options.limit, largest_tolerance_angstrom);

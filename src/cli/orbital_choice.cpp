@@ -39,8 +39,8 @@ class Chooser {
       const int first = level_of(word.substr(0, dots), given);
       const int last = level_of(word.substr(dots + 2), given);
       if (first > last) {
-        throw Error(fmt::format("{} runs downwards in energy; write the lower level first",
-                                quoted(given)));
+        throw Error(
+            fmt::format("{} runs downwards in energy; write the lower level first", quoted(given)));
       }
       for (int level = first; level <= last; ++level) add_level(level);
       return;
@@ -54,11 +54,11 @@ class Chooser {
     const int degeneracy = levels_.levels[static_cast<std::size_t>(level)].degeneracy;
     const std::optional<int> partner = parse_whole_number(word.substr(colon + 1));
     if (!partner || *partner < 1 || *partner > degeneracy) {
-      throw Error(fmt::format("{}: {} has {}; give a number from 1 to {}", quoted(given),
-                              names_[static_cast<std::size_t>(level)],
-                              degeneracy == 1 ? "one partner only"
-                                              : fmt::format("{} partners", degeneracy),
-                              degeneracy));
+      throw Error(
+          fmt::format("{}: {} has {}; give a number from 1 to {}", quoted(given),
+                      names_[static_cast<std::size_t>(level)],
+                      degeneracy == 1 ? "one partner only" : fmt::format("{} partners", degeneracy),
+                      degeneracy));
     }
     add({level, *partner - 1});
   }
@@ -94,9 +94,10 @@ class Chooser {
     const int n = static_cast<int>(levels_.levels.size());
     // Checked without adding, which could overflow.
     if (shift < -*start || shift > n - 1 - *start) {
-      throw Error(fmt::format("{} lies beyond the levels, of which there are {}: {} below and {} "
-                              "above the {}",
-                              quoted(given), n, *start, n - 1 - *start, homo ? "HOMO" : "LUMO"));
+      throw Error(
+          fmt::format("{} lies beyond the levels, of which there are {}: {} below and {} "
+                      "above the {}",
+                      quoted(given), n, *start, n - 1 - *start, homo ? "HOMO" : "LUMO"));
     }
     return *start + shift;
   }

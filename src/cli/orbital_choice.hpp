@@ -1,4 +1,5 @@
-// Orbitals as the user names them: "2e1g", "2e1g:2", "homo", "lumo+1", "homo-2..lumo+2", "frontier".
+// Orbitals as the user names them: "2e1g", "2e1g:2", "homo", "lumo+1", "homo-2..lumo+2",
+// "frontier".
 #pragma once
 
 #include <span>

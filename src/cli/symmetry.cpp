@@ -168,9 +168,8 @@ void run(SymmetryCommandOptions options) {
     return emit(options.output, written(group, answers(group, options), options));
   }
   if (!options.symmetrise.empty()) {
-    options.symmetrise = for_place("--symmetrise", [&] {
-      return parse_schoenflies(options.symmetrise).name();
-    });
+    options.symmetrise =
+        for_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
   }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
@@ -180,8 +179,7 @@ void run(SymmetryCommandOptions options) {
   }
   Computed computed = for_place(options.job.file, [&] { return compute(job, options); });
   computed.result.answers = answers(computed.result.symmetry.group, options);
-  const std::string text =
-      written(computed.result, {job.title, computed.warnings}, options);
+  const std::string text = written(computed.result, {job.title, computed.warnings}, options);
   print_warnings(options.output, computed.warnings);
   emit(options.output, text);
 }
@@ -198,7 +196,8 @@ Command add_symmetry(CLI::App& program) {
   const auto flag = [&](const char* name, bool& value, const char* help) {
     app->add_flag(name, value, help)->group("Sections");
   };
-  flag("--operations", options->sections.operations, "Each operation and what it does to the atoms");
+  flag("--operations", options->sections.operations,
+       "Each operation and what it does to the atoms");
   flag("--salcs", options->sections.salcs, "SALCs of each set, shell and irrep");
   flag("--local", options->local, "SALCs in each atom's own frame: σ and π about the centre");
   flag("--transitions", options->transitions,

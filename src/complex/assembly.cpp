@@ -7,6 +7,7 @@
 #include <utility>
 
 #include <Eigen/Geometry>
+
 #include <fmt/format.h>
 
 #include "complex/second_centre.hpp"

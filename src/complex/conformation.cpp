@@ -8,6 +8,7 @@
 #include <utility>
 
 #include <Eigen/Geometry>
+
 #include <fmt/format.h>
 
 #include "complex/clash.hpp"

@@ -96,8 +96,7 @@ class Tracer {
       return;
     }
     // A saddle: the mean decides whether the two inner corners are joined.
-    const double mean =
-        inside(i, j) + inside(i + 1, j) + inside(i + 1, j + 1) + inside(i, j + 1);
+    const double mean = inside(i, j) + inside(i + 1, j) + inside(i + 1, j + 1) + inside(i, j + 1);
     for (const int e : to_out) {
       const int partner = mean > 0.0 ? (e + 1) % 4 : (e + 3) % 4;
       next_[edges[e]] = edges[partner];

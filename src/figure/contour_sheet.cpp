@@ -18,7 +18,7 @@ constexpr double in_plane_angstrom = 0.15;  // atoms nearer than this count as l
 // From the plane to the cell: equal scale along both, y turned down.
 struct Scale {
   double px_per_angstrom = 1.0;
-  Point2 middle;  // of the plane's region, Å
+  Point2 middle;      // of the plane's region, Å
   double half = 0.0;  // px
 
   [[nodiscard]] Point2 operator()(const Point2& p) const {
@@ -140,7 +140,9 @@ void add_atoms(std::vector<Element>& elements, const Molecule& molecule, const P
 void add_scale_bar(std::vector<Element>& elements, const Scale& scale) {
   const double y = 2.0 * scale.half - 2.0;
   Path path;
-  path.lines = {{{2.0, y - 3.0}, {2.0, y}, {2.0 + scale.px_per_angstrom, y},
+  path.lines = {{{2.0, y - 3.0},
+                 {2.0, y},
+                 {2.0 + scale.px_per_angstrom, y},
                  {2.0 + scale.px_per_angstrom, y - 3.0}}};
   path.stroke = Stroke{palette::muted, 1.0, {}};
   elements.emplace_back(std::move(path));
@@ -184,15 +186,14 @@ Figure contour_sheet(const SheetWords& words, const Molecule& molecule,
     const OrbitalCaption& caption = captions[i];
     cell.name = caption.degeneracy == 1 ? caption.label
                                         : fmt::format("{}:{}", caption.label, caption.partner);
-    cell.title = fmt::format("{}, {}, {}", cell.name, energy_words(caption.energy_ev),
-                             planes[i].words);
+    cell.title =
+        fmt::format("{}, {}, {}", cell.name, energy_words(caption.energy_ev), planes[i].words);
     add_contours(cell.elements, maps[i], scale);
     add_atoms(cell.elements, molecule, planes[i], scale);
     add_scale_bar(cell.elements, scale);
     cell.caption = caption_lines(caption);
-    cell.caption.push_back(plain_text(
-        maps[i].contours.empty() ? planes[i].words + ": the orbital is zero here or nearly so"
-                                 : planes[i].words));
+    cell.caption.push_back(plain_text(planes[i].words));
+    if (maps[i].contours.empty()) cell.caption.push_back(plain_text("zero here, or nearly so"));
     sheet.description += cell.title + ". ";
     sheet.cells.push_back(std::move(cell));
   }

@@ -9,55 +9,25 @@
 #include "core/error.hpp"
 #include "figure/font.hpp"
 #include "figure/level_lanes.hpp"
+#include "figure/level_placing.hpp"
 #include "figure/palette.hpp"
 #include "figure/rich_text.hpp"
+#include "figure/text_layout.hpp"
 
 namespace irrepwise {
 namespace {
 
 // Lengths in px.
 constexpr double margin = 24.0;
-constexpr double bar_length = 30.0;
-constexpr double bar_gap = 6.0;
-constexpr double label_gap = 7.0;
-constexpr double label_size = 14.0;
 constexpr double small_size = 11.5;
-constexpr double arrow_height = 17.0;
-constexpr double least_apart = arrow_height + 5.0;  // of two levels in one lane
-constexpr double lane_gap = 18.0;
+constexpr double title_size = 17.0;
+constexpr double line_height = 16.0;
 constexpr double column_gap = 70.0;
 constexpr double axis_width = 62.0;
-constexpr double least_height = 460.0;  // of the energy range
-constexpr double most_height = 1200.0;
-constexpr int wanted_lanes = 3;  // the range grows until so many are enough
+constexpr double least_width = 420.0;  // room for the title
 constexpr double picture_size = 118.0;
 constexpr double picture_gap = 8.0;
-
-struct Drawn {
-  const DiagramLevel* level = nullptr;
-  int index = 0;  // in its column
-  int lane = 0;
-  double y = 0.0;
-  double left = 0.0;  // of the first bar
-  double bars_right = 0.0;
-};
-
-struct DrawnColumn {
-  std::vector<Drawn> levels;  // ascending energy
-  double left = 0.0;
-  double right = 0.0;
-};
-
-double bars_width(const DiagramLevel& level) {
-  return level.degeneracy * bar_length + (level.degeneracy - 1) * bar_gap;
-}
-
-RichText level_words(const DiagramLevel& level) {
-  RichText words = label_text(level.label);
-  if (level.frontier == FrontierMark::Homo) return words + plain_text("  HOMO");
-  if (level.frontier == FrontierMark::Lumo) return words + plain_text("  LUMO");
-  return words;
-}
+constexpr double picture_caption = 18.0;
 
 Colour level_colour(const DiagramLevel& level) {
   switch (level.frontier) {
@@ -71,77 +41,6 @@ Colour level_colour(const DiagramLevel& level) {
   return level.occupation > 0.0 ? palette::ink : palette::empty;
 }
 
-bool inside(const LevelDiagram& diagram, const DiagramLevel& level) {
-  return level.energy_ev >= diagram.from_ev && level.energy_ev <= diagram.to_ev;
-}
-
-// Places the levels of a column from its left side on; the lanes are as wide as what they hold.
-DrawnColumn place_column(const LevelDiagram& diagram, const DiagramColumn& column, const Font& font,
-                         double left, double top, double per_ev) {
-  DrawnColumn out;
-  out.left = left;
-  std::vector<double> heights;
-  for (std::size_t i = 0; i < column.levels.size(); ++i) {
-    const DiagramLevel& level = column.levels[i];
-    if (!inside(diagram, level)) continue;
-    Drawn drawn;
-    drawn.level = &level;
-    drawn.index = static_cast<int>(i);
-    drawn.y = top + (diagram.to_ev - level.energy_ev) * per_ev;
-    out.levels.push_back(drawn);
-    heights.push_back(drawn.y);
-  }
-  const std::vector<int> lanes = level_lanes(heights, least_apart);
-  std::vector<double> bars;
-  std::vector<double> labels;
-  for (std::size_t i = 0; i < out.levels.size(); ++i) {
-    const auto lane = static_cast<std::size_t>(lanes[i]);
-    out.levels[i].lane = lanes[i];
-    if (bars.size() <= lane) {
-      bars.resize(lane + 1, 0.0);
-      labels.resize(lane + 1, 0.0);
-    }
-    bars[lane] = std::max(bars[lane], bars_width(*out.levels[i].level));
-    labels[lane] =
-        std::max(labels[lane], font.width(level_words(*out.levels[i].level), label_size));
-  }
-  std::vector<double> centres;
-  double x = left;
-  for (std::size_t lane = 0; lane < bars.size(); ++lane) {
-    if (lane > 0) x += lane_gap;
-    centres.push_back(x + 0.5 * bars[lane]);
-    x += bars[lane] + label_gap + labels[lane];
-  }
-  out.right = x;
-  for (Drawn& drawn : out.levels) {
-    const double width = bars_width(*drawn.level);
-    drawn.left = centres[static_cast<std::size_t>(drawn.lane)] - 0.5 * width;
-    drawn.bars_right = drawn.left + width;
-  }
-  return out;
-}
-
-int lanes_needed(const LevelDiagram& diagram, double per_ev) {
-  int most = 0;
-  for (const DiagramColumn& column : diagram.columns) {
-    std::vector<double> heights;
-    for (const DiagramLevel& level : column.levels) {
-      if (inside(diagram, level)) heights.push_back(-level.energy_ev * per_ev);
-    }
-    for (const int lane : level_lanes(heights, least_apart)) most = std::max(most, lane + 1);
-  }
-  return most;
-}
-
-double px_per_ev(const LevelDiagram& diagram) {
-  const double range = diagram.to_ev - diagram.from_ev;
-  double height = least_height;
-  while (height < most_height && lanes_needed(diagram, height / range) > wanted_lanes) {
-    height += 60.0;
-  }
-  return height / range;
-}
-
 Path line(double x0, double y0, double x1, double y1, Colour colour, double width,
           std::vector<double> dashes = {}) {
   Path path;
@@ -151,7 +50,7 @@ Path line(double x0, double y0, double x1, double y1, Colour colour, double widt
 }
 
 Path arrow(double x, double y, bool up, Colour colour) {
-  const double half = 0.5 * arrow_height;
+  const double half = 0.5 * level_arrow_height;
   const double tip = up ? y - half : y + half;
   const double tail = up ? y + half : y - half;
   const double back = up ? tip + 4.6 : tip - 4.6;
@@ -162,13 +61,14 @@ Path arrow(double x, double y, bool up, Colour colour) {
 }
 
 // Electrons by Hund's rule, a hollow disc with a number where an orbital holds a part of one.
-void add_electrons(Group& group, const Drawn& drawn, Colour colour) {
+void add_electrons(Group& group, const PlacedLevel& drawn, Colour colour) {
   const DiagramLevel& level = *drawn.level;
   const double whole = std::round(level.occupation);
   if (std::abs(level.occupation - whole) > 1e-9) return;  // the label says how many
   const int electrons = static_cast<int>(whole);
   for (int partner = 0; partner < level.degeneracy; ++partner) {
-    const double x = drawn.left + partner * (bar_length + bar_gap) + 0.5 * bar_length;
+    const double x =
+        drawn.left + partner * (level_bar_length + level_bar_gap) + 0.5 * level_bar_length;
     const bool one = electrons > partner;
     const bool two = electrons > level.degeneracy + partner;
     if (two) {
@@ -180,7 +80,7 @@ void add_electrons(Group& group, const Drawn& drawn, Colour colour) {
   }
 }
 
-Group level_group(const Drawn& drawn) {
+Group level_group(const PlacedLevel& drawn) {
   const DiagramLevel& level = *drawn.level;
   const Colour colour = level_colour(level);
   Group group;
@@ -189,14 +89,14 @@ Group level_group(const Drawn& drawn) {
   group.title = fmt::format("{}: {}, {:g} of {} electrons", level.label,
                             energy_words(level.energy_ev), level.occupation, 2 * level.degeneracy);
   for (int partner = 0; partner < level.degeneracy; ++partner) {
-    const double x = drawn.left + partner * (bar_length + bar_gap);
-    group.elements.emplace_back(line(x, drawn.y, x + bar_length, drawn.y, colour, 2.4));
+    const double x = drawn.left + partner * (level_bar_length + level_bar_gap);
+    group.elements.emplace_back(line(x, drawn.y, x + level_bar_length, drawn.y, colour, 2.4));
   }
   add_electrons(group, drawn, colour);
   Text text;
-  text.at = {drawn.bars_right + label_gap, drawn.y + 0.33 * label_size};
+  text.at = {drawn.bars_right + level_label_gap, drawn.y + 0.33 * level_label_size};
   text.runs = level_words(level);
-  text.size = label_size;
+  text.size = level_label_size;
   text.colour = level.frontier == FrontierMark::None ? palette::ink : colour;
   group.elements.emplace_back(std::move(text));
   return group;
@@ -242,21 +142,21 @@ Group axis(const LevelDiagram& diagram, double x, double top, double per_ev) {
   return group;
 }
 
-Group links_group(const LevelDiagram& diagram, const std::vector<DrawnColumn>& columns) {
+Group links_group(const LevelDiagram& diagram, const std::vector<PlacedColumn>& columns) {
   Group group;
   group.kind = "links";
   for (const DiagramLink& link : diagram.links) {
-    const auto find = [&](int column, int level) -> const Drawn* {
-      for (const Drawn& drawn : columns[static_cast<std::size_t>(column)].levels) {
+    const auto find = [&](int column, int level) -> const PlacedLevel* {
+      for (const PlacedLevel& drawn : columns[static_cast<std::size_t>(column)].levels) {
         if (drawn.index == level) return &drawn;
       }
       return nullptr;
     };
-    const Drawn* a = find(link.column_a, link.level_a);
-    const Drawn* b = find(link.column_b, link.level_b);
+    const PlacedLevel* a = find(link.column_a, link.level_a);
+    const PlacedLevel* b = find(link.column_b, link.level_b);
     if (a == nullptr || b == nullptr) continue;
     if (a->left > b->left) std::swap(a, b);
-    const DrawnColumn& column =
+    const PlacedColumn& column =
         columns[static_cast<std::size_t>(std::min(link.column_a, link.column_b))];
     const double edge = column.right + 6.0;
     group.elements.emplace_back(line(edge, a->y, b->left - 5.0, b->y, palette::faint, 1.1, {4, 3}));
@@ -287,7 +187,7 @@ std::string left_out(const LevelDiagram& diagram) {
 std::string fractions_note(const LevelDiagram& diagram) {
   for (const DiagramColumn& column : diagram.columns) {
     for (const DiagramLevel& level : column.levels) {
-      if (inside(diagram, level) &&
+      if (is_shown(diagram, level) &&
           std::abs(level.occupation - std::round(level.occupation)) > 1e-9) {
         return fmt::format("{} holds {:g} electrons, spread evenly", level.label, level.occupation);
       }
@@ -297,21 +197,16 @@ std::string fractions_note(const LevelDiagram& diagram) {
 }
 
 Text words(Point2 at, const std::string& text, double size, Colour colour) {
-  Text out;
-  out.at = at;
-  out.runs = plain_text(text);
-  out.size = size;
-  out.colour = colour;
-  return out;
+  return text_at(at, plain_text(text), size, colour);
 }
 
 // The gap as a measure between the two frontier levels, to the right of a single column.
-Group gap_group(const DrawnColumn& column, double x) {
+Group gap_group(const PlacedColumn& column, double x) {
   Group group;
   group.kind = "gap";
-  const Drawn* homo = nullptr;
-  const Drawn* lumo = nullptr;
-  for (const Drawn& drawn : column.levels) {
+  const PlacedLevel* homo = nullptr;
+  const PlacedLevel* lumo = nullptr;
+  for (const PlacedLevel& drawn : column.levels) {
     if (drawn.level->frontier == FrontierMark::Homo) homo = &drawn;
     if (drawn.level->frontier == FrontierMark::Lumo) lumo = &drawn;
   }
@@ -328,21 +223,23 @@ Group gap_group(const DrawnColumn& column, double x) {
 struct Pictures {
   std::vector<Group> groups;
   double right = 0.0;
-  double top = std::numeric_limits<double>::infinity();
   double bottom = 0.0;
 };
 
 // Orbital pictures in a row for each level that has them, beside the column, led to their level.
-Pictures picture_groups(const DrawnColumn& column, double x) {
+Pictures picture_groups(const PlacedColumn& column, double x, double top) {
   Pictures out;
-  std::vector<const Drawn*> shown;
+  std::vector<const PlacedLevel*> shown;
   std::vector<double> places;
   for (auto drawn = column.levels.rbegin(); drawn != column.levels.rend(); ++drawn) {
     if (drawn->level->pictures.empty()) continue;
     shown.push_back(&*drawn);
     places.push_back(drawn->y);
   }
-  const std::vector<double> centres = spread_apart(places, picture_size + picture_gap + 18.0);
+  std::vector<double> centres = spread_apart(places, picture_size + picture_gap + picture_caption);
+  // None may stand over the heading.
+  const double lift = centres.empty() ? 0.0 : top - (centres.front() - 0.5 * picture_size);
+  for (double& centre : centres) centre += std::max(0.0, lift);
   for (std::size_t i = 0; i < shown.size(); ++i) {
     const DiagramLevel& level = *shown[i]->level;
     Group group;
@@ -361,8 +258,7 @@ Pictures picture_groups(const DrawnColumn& column, double x) {
     text.runs = label_text(level.label) + plain_text("   " + energy_words(level.energy_ev, 2));
     group.elements.emplace_back(std::move(text));
     out.right = std::max(out.right, left);
-    out.top = std::min(out.top, centres[i] - 0.5 * picture_size);
-    out.bottom = std::max(out.bottom, centres[i] + 0.5 * picture_size + 18.0);
+    out.bottom = std::max(out.bottom, centres[i] + 0.5 * picture_size + picture_caption);
     out.groups.push_back(std::move(group));
   }
   return out;
@@ -374,7 +270,7 @@ std::string description(const LevelDiagram& diagram) {
   for (const DiagramColumn& column : diagram.columns) {
     if (!column.title.empty()) text += column.title + ": ";
     for (auto level = column.levels.rbegin(); level != column.levels.rend(); ++level) {
-      if (!inside(diagram, *level)) continue;
+      if (!is_shown(diagram, *level)) continue;
       text += fmt::format("{} at {}, {:g} electrons{}; ", level->label,
                           energy_words(level->energy_ev, 2), level->occupation,
                           level->frontier == FrontierMark::Homo   ? " (HOMO)"
@@ -397,7 +293,7 @@ void check_window(const LevelDiagram& diagram) {
   double highest = -lowest;
   for (const DiagramColumn& column : diagram.columns) {
     for (const DiagramLevel& level : column.levels) {
-      if (inside(diagram, level)) return;
+      if (is_shown(diagram, level)) return;
       lowest = std::min(lowest, level.energy_ev);
       highest = std::max(highest, level.energy_ev);
     }
@@ -406,70 +302,102 @@ void check_window(const LevelDiagram& diagram) {
                           diagram.from_ev, diagram.to_ev, lowest, highest));
 }
 
+double add_heading(Figure& figure, const LevelDiagram& diagram, const Font& font, double width) {
+  Group group;
+  group.kind = "heading";
+  double y = margin - 4.0;
+  for (const std::string& line : wrapped(font, diagram.title, title_size, width)) {
+    y += title_size + 3.0;
+    group.elements.emplace_back(words({margin, y}, line, title_size, palette::ink));
+  }
+  y += 4.0;
+  for (const std::string& line : wrapped(font, diagram.method, small_size, width)) {
+    y += line_height;
+    group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+  }
+  figure.groups.push_back(std::move(group));
+  return y;
+}
+
+// Everything between heading and notes, for one place of the upper end.
+struct Body {
+  std::vector<PlacedColumn> columns;
+  double right = 0.0;
+  Group gap;
+  Pictures pictures;
+};
+
+Body placed_body(const LevelDiagram& diagram, const Font& font, double top, double per_ev) {
+  Body body;
+  double x = margin + axis_width + 30.0;
+  for (const DiagramColumn& column : diagram.columns) {
+    body.columns.push_back(place_column(diagram, column, font, x, top, per_ev));
+    const double title = font.width(plain_text(column.title), level_label_size);
+    body.columns.back().right = std::max(body.columns.back().right, x + title);
+    x = body.columns.back().right + column_gap;
+  }
+  body.right = body.columns.back().right;
+  if (body.columns.size() == 1) body.gap = gap_group(body.columns.front(), body.right + 22.0);
+  if (!body.gap.elements.empty()) body.right += 22.0 + 80.0;
+  body.pictures = picture_groups(body.columns.back(), body.right + 20.0, top);
+  if (!body.pictures.groups.empty()) body.right = body.pictures.right;
+  return body;
+}
+
+double add_column_titles(Figure& figure, const LevelDiagram& diagram,
+                         const std::vector<PlacedColumn>& columns, double y) {
+  Group group;
+  group.kind = "column-titles";
+  for (std::size_t i = 0; i < columns.size(); ++i) {
+    if (diagram.columns[i].title.empty()) continue;
+    group.elements.emplace_back(words({columns[i].left, y + 10.0}, diagram.columns[i].title,
+                                      level_label_size, palette::ink));
+  }
+  if (group.elements.empty()) return y;
+  figure.groups.push_back(std::move(group));
+  return y + 20.0;
+}
+
+double add_notes(Figure& figure, const LevelDiagram& diagram, const Font& font, double width,
+                 double y) {
+  Group group;
+  group.kind = "notes";
+  for (const std::string& note : {left_out(diagram), fractions_note(diagram)}) {
+    for (const std::string& line : wrapped(font, note, small_size, width)) {
+      y += line_height;
+      group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+    }
+  }
+  if (!group.elements.empty()) figure.groups.push_back(std::move(group));
+  return y;
+}
+
 }  // namespace
 
 Figure level_diagram_figure(const LevelDiagram& diagram) {
   check_window(diagram);
   const Font font;
-  const double per_ev = px_per_ev(diagram);
-  double top = margin + 62.0;
-  std::vector<DrawnColumn> columns;
-  double x = margin + axis_width + 30.0;
-  for (const DiagramColumn& column : diagram.columns) {
-    columns.push_back(place_column(diagram, column, font, x, top, per_ev));
-    const double title = font.width(plain_text(column.title), label_size);
-    columns.back().right = std::max(columns.back().right, x + title);
-    x = columns.back().right + column_gap;
-  }
-  double right = columns.back().right;
-  const bool single = columns.size() == 1;
-  Group gap;
-  if (single) gap = gap_group(columns.front(), right + 22.0);
-  if (!gap.elements.empty()) right += 22.0 + 80.0;
-  Pictures pictures = picture_groups(columns.back(), right + 20.0);
-  if (!pictures.groups.empty()) right = pictures.right;
-
-  const double range_bottom = top + (diagram.to_ev - diagram.from_ev) * per_ev;
-  double bottom = std::max(range_bottom, pictures.bottom) + 14.0;
+  const double per_ev = level_scale(diagram);
+  // The width does not depend on the height at which things start.
+  const double width =
+      std::max(least_width, placed_body(diagram, font, 0.0, per_ev).right - margin);
   Figure figure;
   figure.title = diagram.title;
   figure.description = description(diagram);
-  Group heading;
-  heading.kind = "heading";
-  heading.elements.emplace_back(words({margin, margin + 14.0}, diagram.title, 17.0, palette::ink));
-  heading.elements.emplace_back(
-      words({margin, margin + 34.0}, diagram.method, small_size, palette::muted));
-  const double heading_width = std::max(font.width(plain_text(diagram.title), 17.0),
-                                        font.width(plain_text(diagram.method), small_size));
-  figure.groups.push_back(std::move(heading));
+  const double top = add_heading(figure, diagram, font, width) + 28.0;
+  Body body = placed_body(diagram, font, top, per_ev);
   figure.groups.push_back(axis(diagram, margin + axis_width, top, per_ev));
-  Group names;
-  names.kind = "column-titles";
-  for (std::size_t i = 0; i < columns.size(); ++i) {
-    if (diagram.columns[i].title.empty()) continue;
-    names.elements.emplace_back(words({columns[i].left, bottom + 10.0}, diagram.columns[i].title,
-                                      label_size, palette::ink));
+  if (!diagram.links.empty()) figure.groups.push_back(links_group(diagram, body.columns));
+  for (const PlacedColumn& column : body.columns) {
+    for (const PlacedLevel& level : column.levels) figure.groups.push_back(level_group(level));
   }
-  if (!names.elements.empty()) bottom += 20.0;
-  if (!diagram.links.empty()) figure.groups.push_back(links_group(diagram, columns));
-  for (const DrawnColumn& column : columns) {
-    for (const Drawn& drawn : column.levels) figure.groups.push_back(level_group(drawn));
-  }
-  if (!gap.elements.empty()) figure.groups.push_back(std::move(gap));
-  for (Group& group : pictures.groups) figure.groups.push_back(std::move(group));
-  if (!names.elements.empty()) figure.groups.push_back(std::move(names));
-  Group notes;
-  notes.kind = "notes";
-  double notes_width = 0.0;
-  for (const std::string& note : {left_out(diagram), fractions_note(diagram)}) {
-    if (note.empty()) continue;
-    bottom += 16.0;
-    notes.elements.emplace_back(words({margin, bottom}, note, small_size, palette::muted));
-    notes_width = std::max(notes_width, font.width(plain_text(note), small_size));
-  }
-  if (!notes.elements.empty()) figure.groups.push_back(std::move(notes));
-  figure.width =
-      std::ceil(std::max({right, margin + heading_width, margin + notes_width}) + margin);
+  if (!body.gap.elements.empty()) figure.groups.push_back(std::move(body.gap));
+  for (Group& group : body.pictures.groups) figure.groups.push_back(std::move(group));
+  const double range_bottom = top + (diagram.to_ev - diagram.from_ev) * per_ev;
+  double bottom = std::max(range_bottom, body.pictures.bottom) + 14.0;
+  bottom = add_column_titles(figure, diagram, body.columns, bottom);
+  bottom = add_notes(figure, diagram, font, width, bottom);
+  figure.width = std::ceil(width + 2.0 * margin);
   figure.height = std::ceil(bottom + margin);
   return figure;
 }

@@ -90,16 +90,16 @@ std::string heading_words(std::span<const OrbitalCaption> captions) {
 std::vector<RichText> caption_lines(const OrbitalCaption& caption) {
   RichText first = label_text(caption.label);
   if (caption.degeneracy > 1) {
-    first = first + plain_text(fmt::format("   partner {} of {}", caption.partner,
-                                           caption.degeneracy));
+    first =
+        first + plain_text(fmt::format("   partner {} of {}", caption.partner, caption.degeneracy));
   }
   std::string second = energy_words(caption.energy_ev);
   if (caption.occupation > 0.0) {
-    second += caption.degeneracy > 1
-                  ? fmt::format(" · {:g} of {} electrons in the level", caption.occupation,
-                                2 * caption.degeneracy)
-                  : fmt::format(" · {:g} {}", caption.occupation,
-                                caption.occupation == 1.0 ? "electron" : "electrons");
+    second +=
+        caption.degeneracy > 1
+            ? fmt::format(" · {:g} of {} electrons", caption.occupation, 2 * caption.degeneracy)
+            : fmt::format(" · {:g} {}", caption.occupation,
+                          caption.occupation == 1.0 ? "electron" : "electrons");
   } else {
     second += " · empty";
   }
@@ -112,8 +112,8 @@ Raster surface_picture(const OrbitalScene& scene, const Camera& camera, int size
 }
 
 Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
-                     std::span<const OrbitalCaption> captions,
-                     std::span<const OrbitalScene> scenes, const Camera& camera) {
+                     std::span<const OrbitalCaption> captions, std::span<const OrbitalScene> scenes,
+                     const Camera& camera) {
   assert(captions.size() == scenes.size() && !scenes.empty());
   Sheet sheet;
   sheet.title = words.title;
@@ -125,10 +125,12 @@ Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
     cell.name = cell_name(captions[i]);
     cell.title = spoken(captions[i]);
     const int size = static_cast<int>(std::lround(sheet.cell_size * raster_scale));
-    cell.elements.emplace_back(Picture{
-        {0.0, 0.0}, sheet.cell_size, sheet.cell_size,
-        std::make_shared<const Raster>(rendered(scenes[i].scene, camera, frame, size)),
-        spoken(captions[i])});
+    cell.elements.emplace_back(
+        Picture{{0.0, 0.0},
+                sheet.cell_size,
+                sheet.cell_size,
+                std::make_shared<const Raster>(rendered(scenes[i].scene, camera, frame, size)),
+                spoken(captions[i])});
     cell.caption = caption_lines(captions[i]);
     cell.caption.push_back(
         RichText{{fmt::format("isovalue {:.4f} bohr", scenes[i].isovalue), Script::Normal},
@@ -141,12 +143,13 @@ Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
     if (body.opacity < 1.0 || body.name == "bonds") continue;
     sheet.legend.push_back({body.name, body.colour, false, false});
   }
-  sheet.notes = {fmt::format("Surfaces enclose {} of the density; {}; lobes let the molecule show "
-                             "through.",
-                             share_words(scenes.front().share), camera_words(camera))};
+  sheet.notes = {
+      fmt::format("Surfaces enclose {} of the density; {}; lobes let the molecule show "
+                  "through.",
+                  share_words(scenes.front().share), camera_words(camera))};
   sheet.corner = axes_corner(camera);
-  sheet.description = fmt::format("Orbital surfaces of {}. {}", hill_formula(molecule),
-                                  heading_words(captions));
+  sheet.description =
+      fmt::format("Orbital surfaces of {}. {}", hill_formula(molecule), heading_words(captions));
   return sheet_figure(sheet);
 }
 

@@ -130,11 +130,10 @@ Plane axes_plane(const std::string& name, double offset_angstrom) {
         "'{}' is no plane; expected xy, xz, yz or three atoms such as Pt1,Cl2,Cl3", name));
   }
   const Eigen::Vector3d normal = Eigen::Vector3d::Unit(third);
-  const std::string words =
-      offset_angstrom == 0.0
-          ? "plane " + letters
-          : fmt::format("plane parallel to {} at {} = {}", letters, axis_names[third],
-                        signed_angstrom(offset_angstrom));
+  const std::string words = offset_angstrom == 0.0
+                                ? "plane " + letters
+                                : fmt::format("plane parallel to {} at {} = {}", letters,
+                                              axis_names[third], signed_angstrom(offset_angstrom));
   return upright_plane(offset_angstrom * normal, normal, words);
 }
 
@@ -150,8 +149,8 @@ Plane atoms_plane(const Molecule& molecule, const std::array<int, 3>& atoms) {
                   atom_name(molecule, atoms[2]));
   constexpr double least_sine = 0.02;  // about one degree
   if (normal.norm() < least_sine * a.norm() * b.norm()) {
-    throw Error(fmt::format("{} lie on a line and give no plane; choose three atoms that do not",
-                            names));
+    throw Error(
+        fmt::format("{} lie on a line and give no plane; choose three atoms that do not", names));
   }
   // The foot of the origin keeps the drawing centred on the molecule.
   const Eigen::Vector3d unit = normal.normalized();

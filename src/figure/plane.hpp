@@ -18,7 +18,9 @@ struct Plane {
   std::string words;  // "plane xz", "plane parallel to xy at z = 0.50 Å"
 
   [[nodiscard]] Eigen::Vector3d normal() const;
-  [[nodiscard]] Eigen::Vector3d point(double x, double y) const { return origin + x * right + y * up; }
+  [[nodiscard]] Eigen::Vector3d point(double x, double y) const {
+    return origin + x * right + y * up;
+  }
 };
 
 /// @param name             "xy", "xz" or "yz", the letters in either order

@@ -3,10 +3,10 @@
 #include <algorithm>
 #include <cmath>
 
-#include "core/text.hpp"
 #include "figure/font.hpp"
 #include "figure/palette.hpp"
 #include "figure/rich_text.hpp"
+#include "figure/text_layout.hpp"
 
 namespace irrepwise {
 namespace {
@@ -41,38 +41,14 @@ void add_moved(Group& group, std::vector<Element> elements, Point2 by) {
   }
 }
 
-std::vector<std::string> wrapped(const Font& font, const std::string& text, double size,
-                                 double width) {
-  std::vector<std::string> lines;
-  for (const std::string_view word : split_words(text)) {
-    const std::string longer =
-        lines.empty() ? std::string(word) : lines.back() + " " + std::string(word);
-    if (lines.empty() || font.width(plain_text(longer), size) > width) {
-      lines.emplace_back(word);
-    } else {
-      lines.back() = longer;
-    }
-  }
-  return lines;
-}
-
-Text text_at(Point2 at, RichText runs, double size, Colour colour) {
-  Text text;
-  text.at = at;
-  text.runs = std::move(runs);
-  text.size = size;
-  text.colour = colour;
-  return text;
-}
-
 std::size_t columns_for(std::size_t cells) {
   if (cells <= 4) return std::max<std::size_t>(1, cells);
   return cells <= 6 || cells == 9 ? 3 : 4;
 }
 
 // A swatch and words for each item, one after the other, broken into lines.
-double add_legend(Group& group, const Font& font, const std::vector<LegendItem>& legend,
-                  double top, double width) {
+double add_legend(Group& group, const Font& font, const std::vector<LegendItem>& legend, double top,
+                  double width) {
   double x = margin;
   double y = top;
   for (const LegendItem& item : legend) {
@@ -85,14 +61,15 @@ double add_legend(Group& group, const Font& font, const std::vector<LegendItem>&
     if (item.line) {
       Path path;
       path.lines = {{{x, y - 4.0}, {x + swatch, y - 4.0}}};
-      path.stroke = Stroke{item.fill, 1.6, item.dashed ? std::vector<double>{5, 3} : std::vector<double>{}};
+      path.stroke =
+          Stroke{item.fill, 1.6, item.dashed ? std::vector<double>{5, 3} : std::vector<double>{}};
       group.elements.emplace_back(std::move(path));
     } else {
       group.elements.emplace_back(
           Disc{{x + 6.0, y - 4.0}, 5.0, item.fill, Stroke{palette::muted, 0.7, {}}});
     }
-    group.elements.emplace_back(text_at({x + swatch + 6.0, y}, plain_text(item.words), small_size,
-                                        palette::muted));
+    group.elements.emplace_back(
+        text_at({x + swatch + 6.0, y}, plain_text(item.words), small_size, palette::muted));
     x += length + 18.0;
   }
   return y;

@@ -9,8 +9,8 @@
 namespace irrepwise {
 
 struct SheetCell {
-  std::string name;   // ASCII, "2e1g:1"
-  std::string title;  // what a pointer over it is told
+  std::string name;               // ASCII, "2e1g:1"
+  std::string title;              // what a pointer over it is told
   std::vector<Element> elements;  // with the upper left corner of the cell as origin
   std::vector<RichText> caption;  // the first line larger
 };
@@ -25,7 +25,7 @@ struct LegendItem {
 struct Sheet {
   std::string title;
   std::string method;
-  std::string description;  // for screen readers
+  std::string description;   // for screen readers
   double cell_size = 260.0;  // px, cells are square
   std::vector<SheetCell> cells;
   std::vector<LegendItem> legend;

@@ -176,8 +176,8 @@ std::string base64(std::string_view bytes) {
       three = (three << 8) | (i + k < bytes.size() ? static_cast<unsigned char>(bytes[i + k]) : 0u);
     }
     for (std::size_t k = 0; k < 4; ++k) {
-      const bool padding = i + k > bytes.size();  // k - 1 bytes are needed for letter k
-      out += padding && k >= 2 ? '=' : letters[(three >> (18 - 6 * k)) & 63u];
+      const bool padding = i + k > bytes.size();  // letter k needs k bytes, letter 0 one
+      out += padding ? '=' : letters[(three >> (18 - 6 * k)) & 63u];
     }
   }
   return out;

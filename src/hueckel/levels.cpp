@@ -62,16 +62,18 @@ void judge_overlap(const HueckelBlock& block, const MolecularSymmetry& symmetry,
   const SmallestOverlap smallest =
       smallest_overlap(block.overlap, symmetry, basis, result.salcs, irrep);
   if (!positive || smallest.eigenvalue <= 1e-12) {
-    throw Error(fmt::format(
-        "the overlap of {} is not positive definite (smallest eigenvalue {:.1e}), through {}; atoms "
-        "stand too close, or exponents are too small",
-        irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
+    throw Error(
+        fmt::format("the overlap of {} is not positive definite (smallest eigenvalue {:.1e}), "
+                    "through {}; atoms "
+                    "stand too close, or exponents are too small",
+                    irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
   }
   if (smallest.eigenvalue < near_singular_overlap) {
-    result.warnings.push_back(fmt::format(
-        "the overlap of {} is nearly singular (smallest eigenvalue {:.1e}), through {}; its highest "
-        "levels cannot be trusted",
-        irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
+    result.warnings.push_back(
+        fmt::format("the overlap of {} is nearly singular (smallest eigenvalue {:.1e}), through "
+                    "{}; its highest "
+                    "levels cannot be trusted",
+                    irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
   }
 }
 

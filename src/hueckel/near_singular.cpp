@@ -5,8 +5,8 @@
 #include <utility>
 #include <vector>
 
-#include <Eigen/Eigenvalues>
 #include <fmt/format.h>
+#include <Eigen/Eigenvalues>
 
 #include "core/text.hpp"
 

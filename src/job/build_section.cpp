@@ -147,9 +147,8 @@ LigandRequest read_ligand_request(const YamlNode& node) {
 }
 
 ComplexSpec read_build(const YamlNode& node, const std::string& beside, FileChain& files) {
-  node.expect_keys("the section `build`",
-                   {"metal", "polyhedron", "oxidation", "ligands", "centres", "bridges",
-                    "bridge_angle", "torsion", "library"});
+  node.expect_keys("the section `build`", {"metal", "polyhedron", "oxidation", "ligands", "centres",
+                                           "bridges", "bridge_angle", "torsion", "library"});
   ComplexSpec complex;
   if (const YamlNode* const library = node.find("library")) {
     const std::string path = path_beside(beside, library->word("the name of a file"));

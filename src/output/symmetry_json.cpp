@@ -94,7 +94,8 @@ void add_group(Json& document, const PointGroup& group) {
 void add_answers(Json& document, const PointGroup& group, const GroupAnswers& answers) {
   document["products"] = Json::array();
   for (const ProductAnswer& answer : answers.products) {
-    Json entry = {{"product", factors_text(answer.factors)}, {"irreps", counts_json(answer.product)}};
+    Json entry = {{"product", factors_text(answer.factors)},
+                  {"irreps", counts_json(answer.product)}};
     if (answer.has_parts) {
       entry["symmetric"] = counts_json(answer.symmetric);
       entry["antisymmetric"] = counts_json(answer.antisymmetric);
@@ -181,8 +182,8 @@ Json salcs_json(const SymmetryResult& result) {
     Json coefficients = Json::array();
     for (std::size_t atom = 0; atom < atoms.size(); ++atom) {
       for (std::size_t i = 0; i < salc.components.size(); ++i) {
-        const double value = salc.coefficients(static_cast<Eigen::Index>(atom),
-                                               static_cast<Eigen::Index>(i));
+        const double value =
+            salc.coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         if (value == 0.0) continue;
         Json entry = {{"atom", atoms[atom] + 1},
                       {"orbital", salc_orbital_name(shell, salc.components[i], salc.local)},

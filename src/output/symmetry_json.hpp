@@ -13,8 +13,8 @@ namespace irrepwise {
                                         const SymmetryHeadings& headings);
 [[nodiscard]] std::string group_json(const PointGroup& group, const GroupAnswers& answers);
 
-/// One value in a row: `section`, what it is of (`set`, `part`, `irrep`, `partner`, `atom`, `name`),
-/// `value`.
+/// One value in a row: `section`, what it is of (`set`, `part`, `irrep`, `partner`, `atom`,
+/// `name`), `value`.
 [[nodiscard]] std::string symmetry_csv(const SymmetryResult& result);
 [[nodiscard]] std::string group_csv(const PointGroup& group, const GroupAnswers& answers);
 

@@ -27,10 +27,10 @@ std::string group_words(const MolecularSymmetry& symmetry) {
 
 // Lines break between the rungs only, after an arrow.
 std::string unbroken_rungs(std::string words) {
-  for (const auto& [breaks, keeps] : {std::pair<std::string_view, std::string_view>{
-                                          " at ", "\u00a0at\u00a0"},
-                                      {" Å", "\u00a0Å"},
-                                      {" →", "\u00a0→"}}) {
+  for (const auto& [breaks, keeps] :
+       {std::pair<std::string_view, std::string_view>{" at ", "\u00a0at\u00a0"},
+        {" Å", "\u00a0Å"},
+        {" →", "\u00a0→"}}) {
     for (std::size_t at = words.find(breaks); at != std::string::npos; at = words.find(breaks)) {
       words.replace(at, breaks.size(), keeps);
     }
@@ -46,16 +46,16 @@ std::vector<std::string> effect_words(const AxisEffect& effect) {
     for (std::size_t i = 0; i < changes.size(); ++i) {
       bool swapped = false, counted = false;
       for (std::size_t j = 0; j < changes.size(); ++j) {
-        const bool back = changes[j].before == changes[i].after && changes[j].after == changes[i].before;
+        const bool back =
+            changes[j].before == changes[i].after && changes[j].after == changes[i].before;
         swapped = swapped || back;
         counted = counted || (back && j < i);
       }
       if (counted) continue;
       const bool turn_over = swapped && changes[i].after < changes[i].before;
-      words += (words.empty() ? "" : ", ") +
-               readable(turn_over ? changes[i].after : changes[i].before) +
-               (swapped ? " ↔ " : " → ") +
-               readable(turn_over ? changes[i].before : changes[i].after);
+      words +=
+          (words.empty() ? "" : ", ") + readable(turn_over ? changes[i].after : changes[i].before) +
+          (swapped ? " ↔ " : " → ") + readable(turn_over ? changes[i].before : changes[i].after);
     }
     return words;
   };
@@ -133,8 +133,9 @@ Report symmetry_report(const SymmetryResult& result, const SymmetryHeadings& hea
 Report group_report(const PointGroup& group, const GroupAnswers& answers, int width) {
   Report report;
   report.title = "Point group " + group.symbol().name();
-  report.facts = {{"order", {group.symbol().is_finite() ? std::to_string(group.order()) : "infinite"}},
-                  {"irreps", {group.symbol().is_finite() ? irrep_count_words(group) : "infinitely many"}}};
+  report.facts = {
+      {"order", {group.symbol().is_finite() ? std::to_string(group.order()) : "infinite"}},
+      {"irreps", {group.symbol().is_finite() ? irrep_count_words(group) : "infinitely many"}}};
   append(report.tables, character_tables(group, width));
   report.tables.push_back(function_table(group));
   append(report.tables, answer_tables(group, answers));

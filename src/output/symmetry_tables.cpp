@@ -15,7 +15,8 @@ namespace {
 std::string direction_words(const Eigen::Vector3d& axis) {
   static constexpr const char* names[] = {"x", "y", "z"};
   for (int i = 0; i < 3; ++i) {
-    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9) return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
+    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9)
+      return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
   }
   std::string words;
   for (int i = 0; i < 3; ++i) {
@@ -27,11 +28,16 @@ std::string direction_words(const Eigen::Vector3d& axis) {
 
 const char* kind_words(const SymmetryOperation& operation) {
   switch (operation.kind) {
-    case OperationKind::Identity: return "identity";
-    case OperationKind::Rotation: return "rotation about";
-    case OperationKind::Inversion: return "inversion";
-    case OperationKind::Reflection: return "reflection across";
-    case OperationKind::Rotoreflection: return "rotoreflection about";
+    case OperationKind::Identity:
+      return "identity";
+    case OperationKind::Rotation:
+      return "rotation about";
+    case OperationKind::Inversion:
+      return "inversion";
+    case OperationKind::Reflection:
+      return "reflection across";
+    case OperationKind::Rotoreflection:
+      return "rotoreflection about";
   }
   return "";
 }
@@ -43,9 +49,13 @@ std::string cycle_words(const Molecule& molecule, const std::vector<int>& images
   for (std::size_t start = 0; start < images.size(); ++start) {
     if (seen[start] || images[start] == static_cast<int>(start)) continue;
     std::string cycle;
+    int length = 0;
     for (std::size_t atom = start; !seen[atom]; atom = static_cast<std::size_t>(images[atom])) {
       seen[atom] = true;
-      cycle += (cycle.empty() ? "" : "\u00a0") + atom_name(molecule, static_cast<int>(atom));
+      // Short cycles stay on one line; long ones may break.
+      const char* space = length % 6 == 0 ? " " : "\u00a0";
+      ++length;
+      cycle += (cycle.empty() ? "" : space) + atom_name(molecule, static_cast<int>(atom));
     }
     words += (words.empty() ? "(" : " (") + cycle + ")";
   }
@@ -99,7 +109,8 @@ Table operation_table(const SymmetryResult& result) {
                cycle_words(result.symmetry.molecule, result.symmetry.images[g])}});
     }
   }
-  table.notes.push_back("Axes in the standard frame; in brackets atoms go round: each to the next.");
+  table.notes.push_back(
+      "Axes in the standard frame; in brackets atoms go round: each to the next.");
   if (!group.symbol().is_finite()) {
     table.notes.push_back("The group is infinite: turns by multiples of 45° stand for all.");
   }
@@ -127,13 +138,20 @@ Table equivalent_atoms_table(const SymmetryResult& result) {
 
 std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction) {
   switch (reduction.part) {
-    case Part::Shell: break;
-    case Part::Sigma: return "σ";
-    case Part::Pi: return "π";
-    case Part::PiInPlane: return "π in plane";
-    case Part::PiOutOfPlane: return "π out of plane";
-    case Part::Delta: return "δ";
-    case Part::Phi: return "φ";
+    case Part::Shell:
+      break;
+    case Part::Sigma:
+      return "σ";
+    case Part::Pi:
+      return "π";
+    case Part::PiInPlane:
+      return "π in plane";
+    case Part::PiOutOfPlane:
+      return "π out of plane";
+    case Part::Delta:
+      return "δ";
+    case Part::Phi:
+      return "φ";
   }
   const Shell& shell = result.orbitals->basis.shells[reduction.shells.front()];
   return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
@@ -164,8 +182,8 @@ Table reduction_table(const SymmetryResult& result) {
     const bool first = reduction.set != last_set;
     last_set = reduction.set;
     table.lines.emplace_back(
-        Row{{first ? names[reduction.set].name : "", part_words(result, reduction),
-             shells, Number{double(reduction.orbitals), 0},
+        Row{{first ? names[reduction.set].name : "", part_words(result, reduction), shells,
+             Number{double(reduction.orbitals), 0},
              readable_reduction(reduction_of(result.symmetry.group, reduction.times))}});
   }
   table.notes.push_back(
@@ -173,10 +191,10 @@ Table reduction_table(const SymmetryResult& result) {
   bool has_parts = false;
   for (const auto& frames : result.frames) has_parts = has_parts || frames;
   if (has_parts) {
-    table.notes.push_back(fmt::format(
-        "σ: along the line to {}; π: across it.",
-        result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
-                            : std::string("the centre")));
+    table.notes.push_back(
+        fmt::format("σ: along the line to {}; π: across it.",
+                    result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
+                                        : std::string("the centre")));
   }
   return table;
 }
@@ -214,9 +232,9 @@ Table vibration_table(const SymmetryResult& result) {
   const std::string symmetric = group.irreps().front().label;
   for (const IrrepCount& mode : result.displacements.vibrations) {
     const TransitionRule rule = transition_rule(group, symmetric, mode.label);
-    table.lines.emplace_back(Row{{SymmetryLabel{level_label(mode.label)},
-                                  Number{double(mode.count), 0},
-                                  list_or_dash(rule.dipole_axes), rule.two_photon ? "yes" : "–"}});
+    table.lines.emplace_back(
+        Row{{SymmetryLabel{level_label(mode.label)}, Number{double(mode.count), 0},
+             list_or_dash(rule.dipole_axes), rule.two_photon ? "yes" : "–"}});
   }
   table.notes.push_back("Fundamentals: allowed in the infrared along the axes named, or in Raman.");
   return table;

@@ -22,6 +22,7 @@ namespace irrepwise {
 [[nodiscard]] Table vibration_table(const SymmetryResult& result);
 
 /// @returns  "σ", "π in plane", "3p": for people
-[[nodiscard]] std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction);
+[[nodiscard]] std::string part_words(const SymmetryResult& result,
+                                     const OrbitalReduction& reduction);
 
 }  // namespace irrepwise

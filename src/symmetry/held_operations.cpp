@@ -74,6 +74,8 @@ std::optional<ReferencePair> reference_pair(const std::vector<std::vector<int>>&
     for (std::size_t j = 0; j < sets.size(); ++j) {
       for (int b : sets[j]) {
         const int a = sets[i].front();
+        // The first atom sets a direction, which errors turn the more the nearer it is.
+        if (positions.col(a).norm() < 0.5 * positions.col(b).norm()) continue;
         const double sharp = sharpness(positions.col(a), positions.col(b));
         sharpest = std::max(sharpest, sharp);
         pairs.push_back({sharp, {a, b, i, j}});

@@ -5,8 +5,8 @@
 #include <optional>
 #include <utility>
 
-#include <Eigen/Geometry>
 #include <fmt/format.h>
+#include <Eigen/Geometry>
 
 #include "core/error.hpp"
 #include "symmetry/approached_groups.hpp"
@@ -28,7 +28,8 @@ Eigen::Matrix3d without_rounding(const Eigen::Matrix3d& rotation) {
 }
 
 PlacedGroup linear(const Molecule& molecule, const std::vector<int>& kinds,
-             const Eigen::Matrix3Xd& positions, double tolerance, bool may_have_centre = true) {
+                   const Eigen::Matrix3Xd& positions, double tolerance,
+                   bool may_have_centre = true) {
   const Eigen::Matrix3d rotation =
       Eigen::Quaterniond::FromTwoVectors(best_line(molecule), Eigen::Vector3d::UnitZ())
           .toRotationMatrix();
@@ -47,7 +48,8 @@ PlacedGroup linear(const Molecule& molecule, const std::vector<int>& kinds,
       on_axis(2, i) = 0.5 * (before(2, i) - before(2, reversed[i]));
     }
   }
-  PlacedGroup found{PointGroup({centred ? Family::Dinfh : Family::Cinfv, 1}), rotation, on_axis, {}};
+  PlacedGroup found{
+      PointGroup({centred ? Family::Dinfh : Family::Cinfv, 1}), rotation, on_axis, {}};
   std::vector<int> same(static_cast<std::size_t>(molecule.size()));
   for (int i = 0; i < molecule.size(); ++i) same[i] = i;
   for (const Eigen::Matrix3d& g : found.group.operations()) {
@@ -57,7 +59,9 @@ PlacedGroup linear(const Molecule& molecule, const std::vector<int>& kinds,
 }
 
 PlacedGroup single_atom() {
-  return {PointGroup({Family::Kh, 1}), Eigen::Matrix3d::Identity(), Eigen::Matrix3Xd::Zero(3, 1),
+  return {PointGroup({Family::Kh, 1}),
+          Eigen::Matrix3d::Identity(),
+          Eigen::Matrix3Xd::Zero(3, 1),
           {{0}, {0}}};
 }
 
@@ -81,7 +85,7 @@ Subset largest_group(const PartialTable& table, const std::vector<HeldOperation>
 }
 
 PlacedGroup general(const Molecule& molecule, const std::vector<int>& kinds,
-              const Eigen::Matrix3Xd& positions, double tolerance) {
+                    const Eigen::Matrix3Xd& positions, double tolerance) {
   const std::vector<HeldOperation> held = find_held_operations(molecule, kinds, tolerance);
   OperationList list;
   list.table = {static_cast<int>(held.size()), partial_products(molecule, held)};
@@ -102,7 +106,8 @@ Error nowhere_near(const Schoenflies& symbol, const Molecule& molecule,
 
 // A linear group that the structure approaches; raises the tolerance to where it holds.
 PlacedGroup near_linear(const Molecule& molecule, const SymmetryOptions& options,
-                  const Eigen::Matrix3Xd& positions, const Schoenflies& symbol, double& tolerance) {
+                        const Eigen::Matrix3Xd& positions, const Schoenflies& symbol,
+                        double& tolerance) {
   const LinearTolerances needed = linear_tolerances(molecule, options.kinds);
   const double reach = symbol.family == Family::Dinfh
                            ? std::max(needed.line_angstrom, needed.centre_angstrom)
@@ -150,8 +155,8 @@ InGroup near_group(const Molecule& molecule, const SymmetryOptions& options,
   }
   PlacedGroup whole = made_exact(list, largest->operations, positions);
   turn_to_conventions(whole, molecule, {});
-  auto found = best_placed(list, candidates, symbol, whole.rotation.row(2), molecule, positions,
-                           wanted);
+  auto found =
+      best_placed(list, candidates, symbol, whole.rotation.row(2), molecule, positions, wanted);
   return {std::move(*found), whole.group.symbol().name()};
 }
 
@@ -175,7 +180,8 @@ Eigen::Vector3d fixed_centre(const PlacedGroup& found) {
 MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions& options) {
   double tolerance = options.tolerance_angstrom;
   if (!(tolerance > 0.0 && tolerance <= 1.0)) {
-    throw Error(fmt::format("symmetry tolerance = {} Å, expected more than 0 and at most 1", tolerance));
+    throw Error(
+        fmt::format("symmetry tolerance = {} Å, expected more than 0 and at most 1", tolerance));
   }
   const Eigen::Matrix3Xd input = molecule.positions();
   const Eigen::Vector3d centroid = input.rowwise().mean();
@@ -198,16 +204,21 @@ MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions&
       }
     }
     switch (shape) {
-      case Shape::SingleAtom: return single_atom();
-      case Shape::Linear: return linear(molecule, options.kinds, centred, tolerance);
-      case Shape::General: break;
+      case Shape::SingleAtom:
+        return single_atom();
+      case Shape::Linear:
+        return linear(molecule, options.kinds, centred, tolerance);
+      case Shape::General:
+        break;
     }
     return general(molecule, options.kinds, centred, tolerance);
   }();
   // A finite group of a linear molecule or an atom is a subgroup of what it has.
-  const bool is_group_of_linear = options.group && !(found.group.symbol() == parse_schoenflies(*options.group));
-  const std::optional<std::string> subgroup =
-      options.subgroup ? options.subgroup : is_group_of_linear ? options.group : std::nullopt;
+  const bool is_group_of_linear =
+      options.group && !(found.group.symbol() == parse_schoenflies(*options.group));
+  const std::optional<std::string> subgroup = options.subgroup     ? options.subgroup
+                                              : is_group_of_linear ? options.group
+                                                                   : std::nullopt;
   if (subgroup) {
     full_group = found.group.symbol().name();
     turn_to_conventions(found, molecule, {});

@@ -93,7 +93,7 @@ std::vector<int> nearest_images(const Molecule& molecule, const std::vector<int>
 }
 
 PlacedGroup made_exact(const OperationList& list, const Subset& subset,
-                 const Eigen::Matrix3Xd& positions) {
+                       const Eigen::Matrix3Xd& positions) {
   const Schoenflies symbol = identify_group(list.table, list.matrices, subset);
   const Eigen::Matrix3d frame = some_standard_frame(symbol, list.table, list.matrices, subset);
   std::vector<Eigen::Matrix3d> held;
@@ -108,9 +108,8 @@ PlacedGroup made_exact(const OperationList& list, const Subset& subset,
 }
 
 void turn_to_conventions(PlacedGroup& found, const Molecule& molecule, const WantedAxes& wanted) {
-  const FrameChoice choice =
-      choose_frame(found.group.symbol(), molecule.with_positions(found.positions), found.rotation,
-                   wanted);
+  const FrameChoice choice = choose_frame(
+      found.group.symbol(), molecule.with_positions(found.positions), found.rotation, wanted);
   const Eigen::Matrix3d turn = choice.rotation * found.rotation.transpose();
   // A linear molecule may turn about its axis by any angle, and its images do not depend on it.
   if (found.group.symbol().is_finite()) {
@@ -120,10 +119,11 @@ void turn_to_conventions(PlacedGroup& found, const Molecule& molecule, const Wan
   found.rotation = choice.rotation;
 }
 
-std::optional<PlacedGroup> best_placed(const OperationList& list, const std::vector<Subset>& subsets,
-                                 const Schoenflies& symbol, const Eigen::Vector3d& line,
-                                 const Molecule& molecule, const Eigen::Matrix3Xd& positions,
-                                 const WantedAxes& wanted) {
+std::optional<PlacedGroup> best_placed(const OperationList& list,
+                                       const std::vector<Subset>& subsets,
+                                       const Schoenflies& symbol, const Eigen::Vector3d& line,
+                                       const Molecule& molecule, const Eigen::Matrix3Xd& positions,
+                                       const WantedAxes& wanted) {
   std::optional<PlacedGroup> best;
   std::vector<double> best_merit;
   std::optional<Error> last_error;
@@ -132,17 +132,17 @@ std::optional<PlacedGroup> best_placed(const OperationList& list, const std::vec
     PlacedGroup found = made_exact(list, subset, positions);
     FrameChoice choice;
     try {
-      choice = choose_frame(symbol, molecule.with_positions(found.positions), found.rotation, wanted);
+      choice =
+          choose_frame(symbol, molecule.with_positions(found.positions), found.rotation, wanted);
     } catch (const Error& error) {  // the wished axes may suit another subset of this symbol
       last_error = error;
       continue;
     }
     std::vector<double> merit = {std::round(std::abs(choice.rotation.row(2).dot(line)) * 1e6)};
     merit.insert(merit.end(), choice.merit.begin(), choice.merit.end());
-    const bool better =
-        !best || better_merit(merit, best_merit) ||
-        (!better_merit(best_merit, merit) &&
-         choice.rotation.trace() > best->rotation.trace() + 1e-9);
+    const bool better = !best || better_merit(merit, best_merit) ||
+                        (!better_merit(best_merit, merit) &&
+                         choice.rotation.trace() > best->rotation.trace() + 1e-9);
     if (!better) continue;
     const Eigen::Matrix3d turn = choice.rotation * found.rotation.transpose();
     found.images = turned_images(found.group, found.images, turn);
@@ -156,8 +156,8 @@ std::optional<PlacedGroup> best_placed(const OperationList& list, const std::vec
 }
 
 PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
-                      const std::vector<int>& kinds, const std::string& text,
-                      const WantedAxes& wanted) {
+                            const std::vector<int>& kinds, const std::string& text,
+                            const WantedAxes& wanted) {
   const bool says_which = text.find('(') != std::string::npos;  // "C2v(C2')", one of several ways
   std::optional<Embedding> way;
   if (says_which) way = find_embedding(whole.group, text);
@@ -171,10 +171,12 @@ PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
       if (symbol == whole.group.symbol()) return whole;
       throw refuse("choose a finite group");
     }
-    auto found = finite_part(whole, molecule, kinds, symbol,
-                             way ? std::vector{way->rotation} : lays());
-    if (!found) throw refuse("a linear molecule allows Cn and Cnv, with a centre also Cnh, Dn, Dnh, "
-                             "Dnd and S2n");
+    auto found =
+        finite_part(whole, molecule, kinds, symbol, way ? std::vector{way->rotation} : lays());
+    if (!found)
+      throw refuse(
+          "a linear molecule allows Cn and Cnv, with a centre also Cnh, Dn, Dnh, "
+          "Dnd and S2n");
     turn_to_conventions(*found, molecule, wanted);
     return *found;
   }
@@ -191,8 +193,8 @@ PlacedGroup inside_subgroup(const PlacedGroup& whole, const Molecule& molecule,
   const Eigen::Matrix3Xd in_input_frame = whole.rotation.transpose() * whole.positions;
   const std::vector<Subset> subsets =
       way ? conjugates(whole.group, *way) : closed_subsets(list.table);
-  auto best = best_placed(list, subsets, symbol, whole.rotation.row(2), molecule, in_input_frame,
-                          wanted);
+  auto best =
+      best_placed(list, subsets, symbol, whole.rotation.row(2), molecule, in_input_frame, wanted);
   if (!best) {
     throw refuse("its subgroups are " + subgroup_names(list.table, list.matrices, subsets));
   }

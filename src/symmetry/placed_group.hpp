@@ -49,13 +49,10 @@ void turn_to_conventions(PlacedGroup& placed, const Molecule& molecule, const Wa
 /// then by the conventions' rules for axes; then the one turned least.
 /// @returns       nothing where no subset has the symbol
 /// @throws Error  where the wished axes suit none
-[[nodiscard]] std::optional<PlacedGroup> best_placed(const OperationList& list,
-                                                     const std::vector<Subset>& subsets,
-                                                     const Schoenflies& symbol,
-                                                     const Eigen::Vector3d& line,
-                                                     const Molecule& molecule,
-                                                     const Eigen::Matrix3Xd& positions,
-                                                     const WantedAxes& wanted);
+[[nodiscard]] std::optional<PlacedGroup> best_placed(
+    const OperationList& list, const std::vector<Subset>& subsets, const Schoenflies& symbol,
+    const Eigen::Vector3d& line, const Molecule& molecule, const Eigen::Matrix3Xd& positions,
+    const WantedAxes& wanted);
 
 /// Of all subgroups with the wanted symbol, the one whose z stays the whole group's z where it can;
 /// then as `best_placed`.

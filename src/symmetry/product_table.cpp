@@ -8,10 +8,9 @@ namespace {
 
 // Components without rational relations, so that different operations have different keys.
 double key_of(const Eigen::Matrix3d& m) {
-  static const Eigen::Matrix3d weights =
-      (Eigen::Matrix3d() << 1.0, 0.7320508, 0.4142136, 0.2360680, 1.6457513, 0.3166248, 0.6055513,
-       0.1231056, 1.3588989)
-          .finished();
+  static const Eigen::Matrix3d weights = (Eigen::Matrix3d() << 1.0, 0.7320508, 0.4142136, 0.2360680,
+                                          1.6457513, 0.3166248, 0.6055513, 0.1231056, 1.3588989)
+                                             .finished();
   return m.cwiseProduct(weights).sum();
 }
 

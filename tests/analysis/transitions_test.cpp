@@ -16,7 +16,9 @@ TEST_CASE("benzene's frontier transition e1g to e2u is dipole-allowed in the pla
   const Transition& first = transitions.front();
   CHECK(first.from == benzene.levels.frontier.homo.value());
   CHECK(first.to == benzene.levels.frontier.lumo.value());
-  CHECK(level_label(benzene.symmetry.group.irreps()[benzene.levels.levels[first.from].irrep].label) == "e1g");
+  CHECK(
+      level_label(benzene.symmetry.group.irreps()[benzene.levels.levels[first.from].irrep].label) ==
+      "e1g");
   CHECK(first.rule.dipole_axes == std::vector<std::string>{"x", "y"});
   CHECK_FALSE(first.rule.two_photon);
   CHECK(open_levels(benzene.symmetry.group, benzene.levels).empty());

@@ -1,10 +1,12 @@
 #include "salc/orbital_reductions.hpp"
 
+#include <algorithm>
 #include <map>
 #include <string>
 
-#include <Eigen/Geometry>
 #include <doctest/doctest.h>
+#include <Eigen/Geometry>
+#include <Eigen/LU>
 
 #include "basis/parameter_set.hpp"
 #include "support/molecules.hpp"
@@ -37,7 +39,8 @@ std::string spans(const std::string& name, int atom, Part part) {
   const Reduced all = reduced(test_molecule(name).molecule);
   for (const OrbitalReduction& reduction : all.reductions) {
     const auto& atoms = all.sets[reduction.set].atoms;
-    if (reduction.part != part || std::find(atoms.begin(), atoms.end(), atom) == atoms.end()) continue;
+    if (reduction.part != part || std::find(atoms.begin(), atoms.end(), atom) == atoms.end())
+      continue;
     std::string words;
     for (std::size_t i = 0; i < reduction.times.size(); ++i) {
       if (reduction.times[i] == 0) continue;

@@ -29,8 +29,8 @@ Tables tables(const Molecule& molecule) {
   auto frames = frames_of_sets(symmetry, sets);
   auto standard = salc_table(symmetry, basis, sets);
   auto local = salc_table(symmetry, basis, sets, frames);
-  return {std::move(symmetry), std::move(basis), std::move(sets), std::move(frames),
-          std::move(standard), std::move(local)};
+  return {std::move(symmetry), std::move(basis),    std::move(sets),
+          std::move(frames),   std::move(standard), std::move(local)};
 }
 
 // Over all orbitals of the basis, standard frame.
@@ -55,8 +55,8 @@ Eigen::VectorXd spread(const Tables& all, const SalcFunction& salc) {
 Eigen::VectorXd turned(const Tables& all, int g, const Eigen::VectorXd& vector) {
   Eigen::VectorXd image = Eigen::VectorXd::Zero(vector.size());
   for (const Shell& shell : all.basis.shells) {
-    const int in_atom = static_cast<int>(&shell - all.basis.shells.data()) -
-                        all.basis.first_shell[shell.atom];
+    const int in_atom =
+        static_cast<int>(&shell - all.basis.shells.data()) - all.basis.first_shell[shell.atom];
     const int atom = all.symmetry.images[g][shell.atom];
     const Shell& to = all.basis.shells[all.basis.first_shell[atom] + in_atom];
     image.segment(to.first_orbital, to.size()) =
@@ -124,7 +124,8 @@ TEST_CASE("the two Eg partners of six σ orbitals meet dz2 and dx2-y2") {
     const Eigen::Vector3d along =
         all.symmetry.molecule.atoms()[all.sets[1].atoms[i]].position.normalized();
     const double x = along[0], y = along[1], z = along[2];
-    CHECK(meets_z2[i] == doctest::Approx((3 * z * z - 1) / std::sqrt(12.0)).epsilon(1e-10).scale(0));
+    CHECK(meets_z2[i] ==
+          doctest::Approx((3 * z * z - 1) / std::sqrt(12.0)).epsilon(1e-10).scale(0));
     CHECK(std::abs(meets_x2_y2[i] - (x * x - y * y) / 2.0) < 1e-12);
   }
 }
@@ -132,25 +133,27 @@ TEST_CASE("the two Eg partners of six σ orbitals meet dz2 and dx2-y2") {
 TEST_CASE("the T1u σ partners meet px, py and pz in this order") {
   const Tables all = tables(test_molecule("sulfur hexafluoride").molecule);
   for (int axis = 0; axis < 3; ++axis) {
-    const SalcFunction& salc =
-        find(all.local, all.symmetry.group, 1, Part::Sigma, "T1u", axis + 1);
+    const SalcFunction& salc = find(all.local, all.symmetry.group, 1, Part::Sigma, "T1u", axis + 1);
     for (int i = 0; i < 6; ++i) {
       const Eigen::Vector3d along =
           all.symmetry.molecule.atoms()[all.sets[1].atoms[i]].position.normalized();
       // One sign for all partners, either way.
-      CHECK(std::abs(std::abs(salc.coefficients(i, 0)) - std::abs(along[axis]) / std::sqrt(2.0)) < 1e-12);
+      CHECK(std::abs(std::abs(salc.coefficients(i, 0)) - std::abs(along[axis]) / std::sqrt(2.0)) <
+            1e-12);
     }
   }
 }
 
 TEST_CASE("benzene's π orbitals have the coefficients of Hückel theory") {
-  // a2u: all 1/√6; e1g: (2 1 -1 -2 -1 1)/√12 and (0 1 1 0 -1 -1)/2; from the cosines, Hückel (1931).
+  // a2u: all 1/√6; e1g: (2 1 -1 -2 -1 1)/√12 and (0 1 1 0 -1 -1)/2; from the cosines, Hückel
+  // (1931).
   const Tables all = tables(test_molecule("benzene").molecule);
   const PointGroup& group = all.symmetry.group;
   const int carbon = 0;
   const auto sizes = [&](const char* irrep, int partner) {
     std::vector<double> found;
-    for (const double c : find(all.local, group, carbon, Part::PiOutOfPlane, irrep, partner).coefficients.col(0)) {
+    for (const double c :
+         find(all.local, group, carbon, Part::PiOutOfPlane, irrep, partner).coefficients.col(0)) {
       found.push_back(std::abs(c));
     }
     std::sort(found.begin(), found.end());
@@ -172,7 +175,8 @@ TEST_CASE("benzene's π orbitals have the coefficients of Hückel theory") {
 }
 
 TEST_CASE("orbitals are called by their frame") {
-  const Basis basis = make_basis(test_molecule("titanium tetrachloride").molecule, published_parameters());
+  const Basis basis =
+      make_basis(test_molecule("titanium tetrachloride").molecule, published_parameters());
   const Shell& p = basis.shells[basis.first_shell[1] + 1];
   CHECK(salc_orbital_name(p, 2, true) == "3pσ");
   CHECK(salc_orbital_name(p, 0, true) == "3pπx");

@@ -38,9 +38,17 @@ Molecule stretched_octahedron(double stretch) {
   return {atoms, 0};
 }
 
-const std::vector<std::string> some_molecules = {
-    "water", "ammonia", "boron trifluoride", "tetrachloroplatinate(II)", "ethylene", "allene",
-    "pentacarbonyliron", "carbon dioxide", "hydrogen cyanide", "trans-diazene", "sulfur hexafluoride"};
+const std::vector<std::string> some_molecules = {"water",
+                                                 "ammonia",
+                                                 "boron trifluoride",
+                                                 "tetrachloroplatinate(II)",
+                                                 "ethylene",
+                                                 "allene",
+                                                 "pentacarbonyliron",
+                                                 "carbon dioxide",
+                                                 "hydrogen cyanide",
+                                                 "trans-diazene",
+                                                 "sulfur hexafluoride"};
 
 }  // namespace
 
@@ -86,8 +94,8 @@ TEST_CASE("noise puts the right group on the ladder, at a tolerance of that size
       const std::vector<Rung> ladder = symmetry_ladder(with_noise(test.molecule, noise, 7));
       bool found = false;
       for (const Rung& rung : ladder) {
-        found = found || (rung.group.name() == test.point_group &&
-                          rung.tolerance_angstrom <= 2.5 * noise);
+        found = found ||
+                (rung.group.name() == test.point_group && rung.tolerance_angstrom <= 2.5 * noise);
       }
       CHECK(found);
     }
@@ -132,7 +140,8 @@ TEST_CASE("a structure made exact has the group at any tolerance, and its atoms 
     const Eigen::Matrix3Xd back =
         (symmetry.rotation.transpose() * symmetry.molecule.positions()).colwise() + symmetry.origin;
     CHECK((back - noisy.positions()).colwise().norm().maxCoeff() < 0.1);
-    CHECK(find_symmetry(symmetry.molecule, in_group(test.point_group)).largest_shift_angstrom < 1e-10);
+    CHECK(find_symmetry(symmetry.molecule, in_group(test.point_group)).largest_shift_angstrom <
+          1e-10);
   }
 }
 
@@ -148,9 +157,15 @@ TEST_CASE("a group smaller than the structure's own is laid as the conventions l
 }
 
 TEST_CASE("linear molecules and atoms take finite groups as subgroups, and bent ones Dinfh") {
-  CHECK(find_symmetry(test_molecule("carbon dioxide").molecule, in_group("D2h")).group.symbol().name() == "D2h");
-  CHECK(find_symmetry(test_molecule("carbon dioxide").molecule, in_group("Cinfv")).group.symbol().name() == "Cinfv");
-  CHECK(find_symmetry(test_molecule("helium atom").molecule, in_group("Oh")).group.symbol().name() == "Oh");
+  CHECK(find_symmetry(test_molecule("carbon dioxide").molecule, in_group("D2h"))
+            .group.symbol()
+            .name() == "D2h");
+  CHECK(find_symmetry(test_molecule("carbon dioxide").molecule, in_group("Cinfv"))
+            .group.symbol()
+            .name() == "Cinfv");
+  CHECK(
+      find_symmetry(test_molecule("helium atom").molecule, in_group("Oh")).group.symbol().name() ==
+      "Oh");
   const Molecule bent({{8, {0.0, 0.1, 1.16}}, {6, {0.0, 0.0, 0.0}}, {8, {0.0, 0.1, -1.16}}}, 0);
   CHECK(find_symmetry(bent).group.symbol().name() == "C2v");
   CHECK(find_symmetry(bent, in_group("Dinfh")).group.symbol().name() == "Dinfh");

@@ -25,14 +25,12 @@ TEST_CASE("x between the ligands of a square: B1 and B2 change places, and the c
   options.x = Eigen::Vector3d(1, 1, 0);
   const AxisEffect effect = axis_effect(find_symmetry(square), find_symmetry(square, options));
   // Common practice: dx2-y2 points at the ligands in one choice, dxy in the other.
-  CHECK(as_map(effect.irreps) == std::map<std::string, std::string>{{"B1g", "B2g"},
-                                                                    {"B2g", "B1g"},
-                                                                    {"B1u", "B2u"},
-                                                                    {"B2u", "B1u"}});
-  CHECK(as_map(effect.classes) == std::map<std::string, std::string>{{"C2'", "C2''"},
-                                                                     {"C2''", "C2'"},
-                                                                     {"sigmav", "sigmad"},
-                                                                     {"sigmad", "sigmav"}});
+  CHECK(as_map(effect.irreps) ==
+        std::map<std::string, std::string>{
+            {"B1g", "B2g"}, {"B2g", "B1g"}, {"B1u", "B2u"}, {"B2u", "B1u"}});
+  CHECK(as_map(effect.classes) ==
+        std::map<std::string, std::string>{
+            {"C2'", "C2''"}, {"C2''", "C2'"}, {"sigmav", "sigmad"}, {"sigmad", "sigmav"}});
 }
 
 TEST_CASE("another z of ethylene takes B1, B2 and B3 round") {
@@ -43,9 +41,12 @@ TEST_CASE("another z of ethylene takes B1, B2 and B3 round") {
   options.z = Eigen::Vector3d(usual.rotation.row(0));
   options.x = Eigen::Vector3d(usual.rotation.row(1));
   const AxisEffect effect = axis_effect(usual, find_symmetry(ethylene, options));
-  CHECK(as_map(effect.irreps) ==
-        std::map<std::string, std::string>{{"B3g", "B1g"}, {"B2g", "B3g"}, {"B1g", "B2g"},
-                                           {"B3u", "B1u"}, {"B2u", "B3u"}, {"B1u", "B2u"}});
+  CHECK(as_map(effect.irreps) == std::map<std::string, std::string>{{"B3g", "B1g"},
+                                                                    {"B2g", "B3g"},
+                                                                    {"B1g", "B2g"},
+                                                                    {"B3u", "B1u"},
+                                                                    {"B2u", "B3u"},
+                                                                    {"B1u", "B2u"}});
 }
 
 TEST_CASE("axes that the conventions would choose change nothing") {

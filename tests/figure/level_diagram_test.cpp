@@ -1,0 +1,201 @@
+#include "figure/level_diagram.hpp"
+
+#include <cmath>
+#include <map>
+#include <optional>
+#include <set>
+
+#include <doctest/doctest.h>
+
+#include "core/error.hpp"
+#include "figure/collisions.hpp"
+#include "support/molecules.hpp"
+#include "support/run.hpp"
+
+using namespace irrepwise;
+
+namespace {
+
+LevelDiagram diagram_of(const Molecule& molecule) {
+  const Run r = run(molecule);
+  LevelDiagram diagram;
+  diagram.title = "title";
+  diagram.method = "method";
+  diagram.columns = {diagram_column(r.symmetry.group, r.levels)};
+  const EnergyWindow window = frontier_window(diagram.columns);
+  diagram.from_ev = window.from_ev;
+  diagram.to_ev = window.to_ev;
+  return diagram;
+}
+
+Box box_of(const Path& path) {
+  Box box{1e9, 1e9, -1e9, -1e9};
+  for (const auto& line : path.lines) {
+    for (const Point2& p : line) {
+      box = {std::min(box.left, p.x), std::min(box.top, p.y), std::max(box.right, p.x),
+             std::max(box.bottom, p.y)};
+    }
+  }
+  return box;
+}
+
+bool is_bar(const Path& path) {
+  return path.lines.size() == 1 && path.lines[0].size() == 2 &&
+         path.lines[0][0].y == path.lines[0][1].y;
+}
+
+// Every text, and every bar and arrow of the levels; pairs of one level's own strokes are left out.
+std::string first_collision(const Figure& figure) {
+  const std::string texts_only = first_text_collision(figure);
+  if (!texts_only.empty()) return texts_only;
+  const std::vector<NamedBox> texts = text_boxes(figure);
+  std::vector<NamedBox> strokes;
+  for (const Group& group : figure.groups) {
+    for (const Element& element : group.elements) {
+      const auto* path = std::get_if<Path>(&element);
+      if (path != nullptr && group.kind == "level") strokes.push_back({group.name, box_of(*path)});
+    }
+  }
+  for (std::size_t i = 0; i < strokes.size(); ++i) {
+    for (const NamedBox& text : texts) {
+      if (overlap(text.box, strokes[i].box))
+        return text.name + " over a stroke of " + strokes[i].name;
+    }
+    for (std::size_t j = 0; j < i; ++j) {
+      if (strokes[i].name != strokes[j].name && overlap(strokes[i].box, strokes[j].box)) {
+        return "strokes of " + strokes[i].name + " over " + strokes[j].name;
+      }
+    }
+  }
+  return {};
+}
+
+}  // namespace
+
+TEST_CASE(
+    "nothing overlaps in the level diagram of any molecule, all stays inside the figure, and "
+    "every level of the window appears once, with a bar for each partner") {
+  for (const TestMolecule& test : test_molecules()) {
+    LevelDiagram diagram;
+    try {
+      diagram = diagram_of(test.molecule);
+    } catch (const Error&) {  // without electrons or parameters: no levels to draw
+      continue;
+    }
+    CAPTURE(test.name);
+    const Figure figure = level_diagram_figure(diagram);
+    CHECK(first_collision(figure) == "");
+    std::map<std::string, int> bars;
+    std::set<std::string> twice;
+    for (const Group& group : figure.groups) {
+      if (group.kind != "level") continue;
+      if (bars.count(group.name) != 0) twice.insert(group.name);
+      for (const Element& element : group.elements) {
+        const auto* path = std::get_if<Path>(&element);
+        if (path != nullptr && is_bar(*path)) ++bars[group.name];
+      }
+    }
+    CHECK(twice.empty());
+    std::map<std::string, int> expected;
+    for (const DiagramLevel& level : diagram.columns[0].levels) {
+      if (level.energy_ev >= diagram.from_ev && level.energy_ev <= diagram.to_ev) {
+        expected[level.label] = level.degeneracy;
+      }
+    }
+    CHECK(bars == expected);
+  }
+}
+
+TEST_CASE("the default window holds HOMO and LUMO of every molecule") {
+  for (const TestMolecule& test : test_molecules()) {
+    LevelDiagram diagram;
+    try {
+      diagram = diagram_of(test.molecule);
+    } catch (const Error&) {
+      continue;
+    }
+    CAPTURE(test.name);
+    for (const DiagramLevel& level : diagram.columns[0].levels) {
+      if (level.frontier == FrontierMark::None) continue;
+      CHECK(level.energy_ev > diagram.from_ev);
+      CHECK(level.energy_ev < diagram.to_ev);
+    }
+  }
+}
+
+TEST_CASE("heights are to scale: equal steps of energy are equal lengths") {
+  LevelDiagram diagram;
+  diagram.columns = {{"",
+                      {{"1a", -12.0, 1, 2.0, FrontierMark::None, {}},
+                       {"2a", -10.0, 1, 2.0, FrontierMark::Homo, {}},
+                       {"3a", -4.0, 1, 0.0, FrontierMark::Lumo, {}}}}};
+  diagram.from_ev = -13.0;
+  diagram.to_ev = -3.0;
+  std::map<std::string, double> height;
+  for (const Group& group : level_diagram_figure(diagram).groups) {
+    if (group.kind != "level") continue;
+    const auto& bar = std::get<Path>(group.elements.front());
+    height[group.name] = bar.lines[0][0].y;
+  }
+  CHECK(height["1a"] > height["2a"]);  // y runs down
+  CHECK(std::abs((height["2a"] - height["3a"]) / (height["1a"] - height["2a"]) - 3.0) < 1e-9);
+}
+
+TEST_CASE("electrons are drawn as arrows, in pairs only once every partner has one") {
+  // Hund's rule for 3 electrons in a doubly degenerate level: two up, one down.
+  LevelDiagram diagram;
+  diagram.columns = {{"", {{"1e", -12.0, 2, 3.0, FrontierMark::Homo, {}}}}};
+  diagram.from_ev = -13.0;
+  diagram.to_ev = -11.0;
+  int up = 0;
+  int down = 0;
+  for (const Group& group : level_diagram_figure(diagram).groups) {
+    if (group.kind != "level") continue;
+    for (const Element& element : group.elements) {
+      const auto* path = std::get_if<Path>(&element);
+      if (path == nullptr || is_bar(*path)) continue;
+      (path->lines[0][1].y < path->lines[0][0].y ? up : down) += 1;
+    }
+  }
+  CHECK(up == 2);
+  CHECK(down == 1);
+}
+
+TEST_CASE("columns with links stand side by side without overlaps") {
+  LevelDiagram diagram = diagram_of(test_molecule("benzenetricarbonylchromium").molecule);
+  diagram.columns.push_back(diagram.columns.front());
+  diagram.columns[0].title = "first";
+  diagram.columns[1].title = "second variant";
+  for (int i = 0; i < static_cast<int>(diagram.columns[0].levels.size()); ++i) {
+    diagram.links.push_back({0, i, 1, i});
+  }
+  const Figure figure = level_diagram_figure(diagram);
+  CHECK(first_collision(figure) == "");
+  std::size_t shown = 0;
+  for (const DiagramLevel& level : diagram.columns[0].levels) {
+    shown += level.energy_ev >= diagram.from_ev && level.energy_ev <= diagram.to_ev ? 1 : 0;
+  }
+  for (const Group& group : figure.groups) {
+    if (group.kind != "links") continue;
+    CHECK(group.elements.size() == shown);
+    for (const Element& element : group.elements) {  // equal columns: every link is level
+      const auto& line = std::get<Path>(element).lines[0];
+      CHECK(line[0].y == line[1].y);
+      CHECK(line[0].x < line[1].x);
+    }
+  }
+}
+
+TEST_CASE("a window without levels, or upside down, is refused") {
+  LevelDiagram diagram;
+  diagram.columns = {{"", {{"1a", -12.0, 1, 2.0, FrontierMark::Homo, {}}}}};
+  diagram.from_ev = -5.0;
+  diagram.to_ev = -1.0;
+  CHECK_THROWS_WITH_AS(static_cast<void>(level_diagram_figure(diagram)),
+                       "no level lies between -5 and -1 eV; they run from -12.000 to -12.000 eV",
+                       Error);
+  diagram.to_ev = -6.0;
+  CHECK_THROWS_WITH_AS(
+      static_cast<void>(level_diagram_figure(diagram)),
+      "the range of energies runs from -5 to -6 eV; its end must lie above its start", Error);
+}
