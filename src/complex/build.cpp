@@ -120,7 +120,7 @@ std::string how_made(const ComplexSpec& complex, const std::vector<BuiltCentre>&
                      const std::vector<BuiltLigand>& ligands) {
   std::string words = "built:";
   for (std::size_t c = 0; c < centres.size(); ++c) {
-    words += fmt::format("{} {}({:+}) {}", c == 0 ? "" : " and",
+    words += fmt::format("{} {}({}) {}", c == 0 ? "" : " and",
                          element_symbol(complex.centres[c].atomic_number),
                          signed_number(centres[c].electrons.oxidation), centres[c].polyhedron);
     const Polyhedron& polyhedron = complex.centres[c].polyhedron;
