@@ -77,10 +77,13 @@ MetalPlace below_donors(const SeatedLigand& seated, double distance) {
   }
   const Eigen::Vector3d towards_metal = seated.binding->metal - middle;
   Eigen::Vector3d down;
+  std::optional<Eigen::Vector3d> x;
   Eigen::Vector3d in_plane = Eigen::Vector3d::Zero();  // from the middle to the circle's centre
   const Eigen::JacobiSVD<Eigen::MatrixX3d> svd(from_middle, Eigen::ComputeFullV);
   if (n == 2) {
-    const Eigen::Vector3d along = svd.matrixV().col(0);
+    const Eigen::Vector3d along =
+        (position(ligand, donors[0]) - position(ligand, donors[1])).normalized();
+    x = along;
     const auto below = perpendicular(towards_metal, along);
     if (!below)
       throw Error(fmt::format("{}: its `metal` lies in line with the donors", ligand.name));
@@ -101,7 +104,7 @@ MetalPlace below_donors(const SeatedLigand& seated, double distance) {
   const double height = std::sqrt(distance * distance - radius * radius);
   const Eigen::Vector3d metal = middle + in_plane + height * down;
   const Eigen::Vector3d z = (middle - metal).normalized();
-  return {metal, z, own_x(z)};
+  return {metal, z, x ? *x : own_x(z)};
 }
 
 // The point in the plane of both teeth and the metal's side that has the given distances to them.

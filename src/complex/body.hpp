@@ -11,7 +11,7 @@ namespace irrepwise {
 
 /// The metal is at the origin and the ligand along +z: the donor, the centroid of donors side by
 /// side, or the middle of the angle between two teeth. x is the ligand's own x made perpendicular
-/// to z; for a chelate it points from the second tooth to the first.
+/// to z; of two donors side by side, and of a chelate, it points from the second to the first.
 struct LigandBody {
   std::vector<Atom> atoms;                 // in the order of the library
   std::vector<Eigen::Vector3d> teeth;      // donors or centroids, one for each tooth

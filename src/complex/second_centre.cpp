@@ -33,8 +33,6 @@ Eigen::Vector3d beyond(const std::vector<Eigen::Vector3d>& donors, const std::ve
   }
   // Least norm: the part of the answer within the span of the edges, seen from the first donor.
   const Eigen::Vector3d inside = edges.completeOrthogonalDecomposition().solve(right);
-  const double square = d[0] * d[0] - inside.squaredNorm();
-  if (!(square > 0.01)) throw no_fit();
   Eigen::Vector3d middle = Eigen::Vector3d::Zero();
   for (const Eigen::Vector3d& donor : donors) middle += donor / static_cast<double>(donors.size());
   const Eigen::Vector3d across =
@@ -42,6 +40,8 @@ Eigen::Vector3d beyond(const std::vector<Eigen::Vector3d>& donors, const std::ve
   if (across.norm() < 0.1) {
     throw Error("the first metal lies between its bridges; give them neighbouring vertices");
   }
+  const double square = d[0] * d[0] - inside.squaredNorm();
+  if (!(square > 0.01)) throw no_fit();
   return donors[0] + inside + std::sqrt(square) * across.normalized();
 }
 

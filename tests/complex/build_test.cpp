@@ -136,11 +136,15 @@ TEST_CASE("distance, angle, bite, hapticity and denticity can be set") {
   CHECK(std::abs(angle(built.molecule, nitrate[0], 0, nitrate[1]) - 58.0) < 0.05);
   CHECK(built.centres[0].electrons.total == 0 + 4 * 2 + 4);
 
-  spec = spec_of("Ag", "L-2", 1, {"C6H6", "Cl"});
+  // The ring leans away from the metal, so that it has room beside other ligands.
+  spec = spec_of("Os", "OC-6", 2, {"C6H6", "NH3", "NH3", "NH3", "NH3", "NH3"});
   spec.centres[0].ligands[0].hapticity = 2;
   built = build_complex(spec);
   CHECK(built.ligands[0].hapticity == 2);
-  CHECK(built.centres[0].electrons.total == 10 + 2 + 2);
+  CHECK(built.centres[0].electrons.total == 18);
+  const std::vector<double> carbons = distances(built.molecule, 76, 6, 4.0);
+  REQUIRE(carbons.size() == 6);
+  CHECK(carbons[2] > carbons[1] + 0.5);  // two carbons are bound, four are not
 }
 
 TEST_CASE("the charge follows from the oxidation state, or the other way round") {

@@ -111,7 +111,7 @@ TEST_CASE("what cannot be built is refused with its line and column") {
   CHECK(refusal(square + "    - {ligand: Cl, vertices: 5}\n") ==
         "job.yaml:6:7: SP-4 has no vertex 5, expected 1 to 4");
   CHECK(refusal(square + "    - {ligand: Cp, hapticity: 4}\n") ==
-        "job.yaml:6:7: Cp does not bind with hapticity 4; it binds with η5 or η3");
+        "job.yaml:6:7: Cp does not bind with hapticity 4; it binds with η5");
   CHECK(refusal(square + "    - {ligand: NH3, denticity: 2}\n") ==
         "job.yaml:6:7: NH3 does not bind with denticity 2; it binds with one tooth");
   CHECK(refusal(square + "    - {ligand: en, vertices: [1, 3]}\n") ==
