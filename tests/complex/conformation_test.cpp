@@ -60,7 +60,7 @@ TEST_CASE("complexes come out in their textbook groups") {
 
 TEST_CASE("a twist that was asked for is kept, and lowers the group") {
   ComplexSpec spec = spec_of("Fe", "L-2", 2, {"Cp", "Cp"});
-  spec.centres[0].ligands[0].twist_degrees = 0.0;  // left free, this ring would follow the other
+  spec.centres[0].ligands[0].twist_degrees = 0.0;   // left free, this ring would follow the other
   spec.centres[0].ligands[1].twist_degrees = 36.0;  // staggered
   BuiltComplex built = build_complex(spec);
   CHECK(built.point_group == "D5d");
@@ -80,6 +80,25 @@ TEST_CASE("either hand of a chelate can be asked for, and mirror images agree") 
   CHECK(groups == std::vector<std::string>{"D3", "D3"});  // lel3 and ob3
   spec.centres[0].ligands[0].mirrored = false;
   CHECK(group_of(spec) == "C2");  // lel2ob or lelob2
+}
+
+TEST_CASE("hands of ligands go with improper operations") {
+  // Six donors with three different substituents, one hand on a face and the other hand opposite:
+  // no mirror plane or twofold axis can hold, the inversion and the threefold axis can: S6.
+  ComplexSpec spec = spec_of("Zr", "OC-6", 4, {});
+  spec.library = built_in_ligands().extended_by(parse_ligands(
+      "ligands:\n  NHFCl:\n    charge: 0\n    binding: [{donors: [[1]], electrons: 2}]\n"
+      "    atoms:\n      - [N, 0, 0, 0]\n      - [H, 0.96, 0, 0.34]\n"
+      "      - [F, -0.65, 1.13, 0.46]\n      - [Cl, -0.83, -1.44, 0.59]\n",
+      "chiral.yaml"));
+  LigandRequest twisted = on("NHFCl", {1});
+  twisted.twist_degrees = 40.0;  // which the others must follow
+  LigandRequest same_hand = on("NHFCl", {2, 3});
+  LigandRequest other_hand = on("NHFCl", {4, 5, 6});
+  twisted.mirrored = same_hand.mirrored = false;
+  other_hand.mirrored = true;
+  spec.centres[0].ligands = {twisted, same_hand, other_hand};
+  CHECK(group_of(spec) == "S6");
 }
 
 TEST_CASE("subgroups of the octahedral skeleton are as many as in the literature") {
