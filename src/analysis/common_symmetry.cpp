@@ -1,6 +1,7 @@
 #include "analysis/common_symmetry.hpp"
 
 #include <algorithm>
+#include <cassert>
 #include <cmath>
 #include <cstddef>
 #include <numeric>
@@ -45,7 +46,8 @@ bool holds(const PointGroup& group, const Eigen::Matrix3d& matrix) {
 double character(const PointGroup& group, std::size_t irrep, const Eigen::Matrix3d& matrix) {
   if (!group.symbol().is_finite()) return continuous_character(group, irrep, matrix);
   const std::optional<int> operation = find_operation(group.operations(), matrix);
-  return group.irreps()[irrep].characters[static_cast<std::size_t>(operation.value_or(0))];
+  assert(operation.has_value());  // the common group holds nothing that the whole one lacks
+  return group.irreps()[irrep].characters[static_cast<std::size_t>(*operation)];
 }
 
 // @param turn  from the frame of the common group to that of the whole one
