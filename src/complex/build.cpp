@@ -28,7 +28,8 @@ double twist_of(const Site& site, const Pose& pose) {
   const Eigen::Vector3d x = pose.axes.col(0);
   const double angle = std::atan2(x.dot(site.along.cross(reference)), x.dot(reference));
   const double degrees = angle * 180.0 / std::numbers::pi;
-  return std::abs(degrees) < 1e-6 ? 0.0 : degrees;
+  if (std::abs(degrees) < 1e-6) return 0.0;
+  return degrees < -180.0 + 1e-6 ? degrees + 360.0 : degrees;
 }
 
 // Adds the atoms and tells their indices.
@@ -125,9 +126,9 @@ std::string how_made(const ComplexSpec& complex, const std::vector<BuiltCentre>&
   for (std::size_t c = 0; c < centres.size(); ++c) {
     words += fmt::format("{} {}({:+}) {}", c == 0 ? "" : " and",
                          element_symbol(complex.centres[c].atomic_number),
-                         centres[c].electrons.oxidation, centres[c].polyhedron);
+                         signed_number(centres[c].electrons.oxidation), centres[c].polyhedron);
     const Polyhedron& polyhedron = complex.centres[c].polyhedron;
-    if (!polyhedron.kind().free_angle.empty()) {
+    if (polyhedron.angle_degrees() != polyhedron.kind().angle_degrees) {
       words +=
           fmt::format(" with {} {:.1f}°", polyhedron.kind().free_angle, polyhedron.angle_degrees());
     }

@@ -5,6 +5,7 @@
 
 #include <fmt/format.h>
 
+#include "complex/electron_count.hpp"
 #include "core/error.hpp"
 
 namespace irrepwise {
@@ -40,11 +41,11 @@ Charges settle_charges(const ComplexSpec& complex, const Assembly& assembly) {
   if (n_open == 0) {
     const int total = known + ligands;
     if (complex.charge && *complex.charge != total) {
-      fail_at(
-          complex.charge_place,
-          fmt::format("the charge {:+} contradicts oxidation state {:+} and ligands {:+}, which "
-                      "make {:+}; correct one, or leave one out",
-                      *complex.charge, known, ligands, total));
+      fail_at(complex.charge_place,
+              fmt::format("the charge {} contradicts oxidation state {} and ligands {}, which "
+                          "make {}; correct one, or leave one out",
+                          signed_number(*complex.charge), signed_number(known),
+                          signed_number(ligands), signed_number(total)));
     }
     Charges charges{{}, total};
     for (const CentreSpec& centre : complex.centres) charges.oxidation.push_back(*centre.oxidation);
@@ -53,9 +54,9 @@ Charges settle_charges(const ComplexSpec& complex, const Assembly& assembly) {
   const int left = *complex.charge - ligands - known;
   if (left % n_open != 0) {
     fail_at(complex.charge_place,
-            fmt::format("the charge {:+} leaves an odd sum of oxidation states, {:+}, for two "
+            fmt::format("the charge {} leaves an odd sum of oxidation states, {}, for two "
                         "metals; give `oxidation` for each",
-                        *complex.charge, left));
+                        signed_number(*complex.charge), signed_number(left)));
   }
   Charges charges{{}, *complex.charge};
   for (const CentreSpec& centre : complex.centres) {

@@ -43,21 +43,23 @@ int valence_electrons(int atomic_number) {
   return valence(atomic_number).electrons;
 }
 
+std::string signed_number(int number) { return number == 0 ? "0" : fmt::format("{:+}", number); }
+
 ElectronCount count_electrons(int atomic_number, int oxidation, int donated) {
   const Valence neutral = valence(atomic_number);
   const int left = neutral.electrons - oxidation;
   const std::string_view symbol = element_symbol(atomic_number);
   if (left < 0) {
     throw Error(
-        fmt::format("the oxidation state {:+} takes more electrons from {} than its {} "
+        fmt::format("the oxidation state {} takes more electrons from {} than its {} "
                     "valence electrons; check oxidation state, charge and ligands",
-                    oxidation, symbol, neutral.electrons));
+                    signed_number(oxidation), symbol, neutral.electrons));
   }
   if (left > most_electrons(neutral.shell)) {
     throw Error(
-        fmt::format("the oxidation state {:+} leaves {} electrons on {}, more than the {} "
+        fmt::format("the oxidation state {} leaves {} electrons on {}, more than the {} "
                     "that its valence shells hold; check oxidation state, charge and ligands",
-                    oxidation, left, symbol, most_electrons(neutral.shell)));
+                    signed_number(oxidation), left, symbol, most_electrons(neutral.shell)));
   }
   return {oxidation, left, neutral.shell, donated, left + donated};
 }

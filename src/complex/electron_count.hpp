@@ -1,7 +1,7 @@
 // Electrons at a metal by the counting of closed-shell ligands.
 #pragma once
 
-#include <vector>
+#include <string>
 
 namespace irrepwise {
 
@@ -19,6 +19,9 @@ struct ElectronCount {
 /// @param atomic_number  1 to 118
 /// @source  common practice
 [[nodiscard]] int valence_electrons(int atomic_number);
+
+/// @returns  "+2", "0", "-1"
+[[nodiscard]] std::string signed_number(int number);
 
 /// @param donated  electrons that the ligands give
 /// @throws Error   an oxidation state that takes more electrons than there are, or leaves more than

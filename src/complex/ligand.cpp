@@ -65,9 +65,9 @@ const Ligand& LigandLibrary::find(std::string_view name) const {
     known.insert(known.end(), ligand.names.begin(), ligand.names.end());
   }
   const std::string nearest = nearest_word(name, known);
-  throw Error(fmt::format("no ligand is called {}{}; `irrepwise build --list ligands` shows all",
+  throw Error(fmt::format("no ligand is called {}{} `irrepwise build --list ligands` shows all",
                           quoted(name),
-                          nearest.empty() ? "" : ", did you mean '" + nearest + "'?"));
+                          nearest.empty() ? ";" : ", did you mean '" + nearest + "'?"));
 }
 
 LigandLibrary LigandLibrary::extended_by(const LigandLibrary& other) const {

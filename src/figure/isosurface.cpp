@@ -2,6 +2,8 @@
 
 #include <cmath>
 #include <unordered_map>
+#include <utility>
+#include <vector>
 
 #include <Eigen/Geometry>
 
@@ -56,27 +58,40 @@ class Surface {
     std::vector<std::size_t> out;
     for (const std::size_t c : corners) (inside(c) > 0.0 ? in : out).push_back(c);
     if (in.empty() || out.empty()) return;
+    const Eigen::Vector3d outwards = centre(out) - centre(in);
     if (in.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[0], out[1]), vertex(in[0], out[2]));
+      triangle(vertex(in[0], out[0]), vertex(in[0], out[1]), vertex(in[0], out[2]), outwards);
     } else if (out.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[1], out[0]), vertex(in[2], out[0]));
+      triangle(vertex(in[0], out[0]), vertex(in[1], out[0]), vertex(in[2], out[0]), outwards);
     } else {
       const std::uint32_t a = vertex(in[0], out[0]);
       const std::uint32_t b = vertex(in[0], out[1]);
       const std::uint32_t c = vertex(in[1], out[1]);
       const std::uint32_t d = vertex(in[1], out[0]);
-      triangle(a, b, c);
-      triangle(a, c, d);
+      triangle(a, b, c, outwards);
+      triangle(a, c, d, outwards);
     }
   }
 
-  void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c) {
-    if (a == b || b == c || a == c) return;
-    const Eigen::Vector3f& pa = mesh_.vertices[a];
-    const Eigen::Vector3f across = (mesh_.vertices[b] - pa).cross(mesh_.vertices[c] - pa);
-    const Eigen::Vector3f outwards = mesh_.normals[a] + mesh_.normals[b] + mesh_.normals[c];
-    if (across.dot(outwards) < 0.0f) std::swap(b, c);
+  [[nodiscard]] Eigen::Vector3d centre(const std::vector<std::size_t>& points) const {
+    Eigen::Vector3d sum = Eigen::Vector3d::Zero();
+    for (const std::size_t point : points) sum += position(point);
+    return sum / static_cast<double>(points.size());
+  }
+
+  // The middles of the edges decide which way round: they never coincide, as vertices may where the
+  // surface touches a grid point, so neighbours always agree and the surface closes.
+  void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c,
+                const Eigen::Vector3d& outwards) {
+    const Eigen::Vector3d across =
+        (middles_[b] - middles_[a]).cross(middles_[c] - middles_[a]);
+    if (across.dot(outwards) < 0.0) std::swap(b, c);
     mesh_.triangles.push_back({a, b, c});
+  }
+
+  [[nodiscard]] Eigen::Vector3d position(std::size_t point) const {
+    const std::array<int, 3> at = lattice(point);
+    return shape_.point(at[0], at[1], at[2]);
   }
 
   [[nodiscard]] std::array<int, 3> lattice(std::size_t point) const {
@@ -146,6 +161,7 @@ class Surface {
     const double length = normal.norm();
     normal =
         length > 0.0 ? Eigen::Vector3d(normal / length) : Eigen::Vector3d((q - p).normalized());
+    middles_.push_back(0.5 * (p + q));
     mesh_.vertices.push_back((p + t * (q - p)).cast<float>());
     mesh_.normals.push_back(normal.cast<float>());
     return place->second;
@@ -158,6 +174,7 @@ class Surface {
   double isovalue_;
   double sign_;
   Mesh mesh_;
+  std::vector<Eigen::Vector3d> middles_;  // by vertex: the middle of its edge
   std::unordered_map<std::uint64_t, std::uint32_t> known_;
 };
 

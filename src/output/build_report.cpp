@@ -129,7 +129,7 @@ Report build_report(const BuiltComplex& complex, const std::string& title) {
     const Polyhedron polyhedron(centre.polyhedron);
     report.facts.push_back(
         {metal_name(complex, c),
-         {fmt::format("oxidation state {:+}, {} ({})", centre.electrons.oxidation,
+         {fmt::format("oxidation state {}, {} ({})", signed_number(centre.electrons.oxidation),
                       centre.polyhedron, polyhedron.kind().name),
           electron_words(centre.electrons)}});
   }

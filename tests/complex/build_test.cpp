@@ -149,11 +149,10 @@ TEST_CASE("the charge follows from the oxidation state, or the other way round")
   const BuiltComplex built = build_complex(spec);
   CHECK(built.centres[0].electrons.oxidation == 2);
   spec.centres[0].oxidation = 4;
-  CHECK_THROWS_WITH_AS(
-      static_cast<void>(build_complex(spec)),
-      "the charge -2 contradicts oxidation state +4 and ligands -4, which make +0; "
-      "correct one, or leave one out",
-      Error);
+  CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(spec)),
+                       "the charge -2 contradicts oxidation state +4 and ligands -4, which make 0; "
+                       "correct one, or leave one out",
+                       Error);
   spec.centres[0].oxidation.reset();
   spec.charge.reset();
   CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(spec)),

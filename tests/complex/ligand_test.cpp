@@ -143,7 +143,7 @@ TEST_CASE("a library of the user's own adds ligands and replaces them") {
 
 TEST_CASE("unknown ligands and wrong libraries are refused with what to do") {
   CHECK_THROWS_WITH_AS(static_cast<void>(built_in_ligands().find("amine")),
-                       "no ligand is called 'amine', did you mean 'ammine'?; `irrepwise build "
+                       "no ligand is called 'amine', did you mean 'ammine'? `irrepwise build "
                        "--list ligands` shows all",
                        Error);
   const std::string head = "ligands:\n  A:\n    charge: 0\n    atoms: [[N, 0, 0, 0]]\n";

@@ -92,7 +92,7 @@ TEST_CASE("two centres with bridges are read") {
 
 TEST_CASE("what cannot be built is refused with its line and column") {
   CHECK(refusal(square + "    - Cl\n    - Cl\n    - NH33\n    - Cl\n") ==
-        "job.yaml:8:7: no ligand is called 'NH33', did you mean 'NH3'?; `irrepwise build --list "
+        "job.yaml:8:7: no ligand is called 'NH33', did you mean 'NH3'? `irrepwise build --list "
         "ligands` shows all");
   CHECK(refusal("build:\n  metal: Pt\n  polyhedron: SQ-4\n  ligands: []\n") ==
         "job.yaml:3:15: 'SQ-4' is no polyhedral symbol; did you mean T-4? Otherwise the known ones "
