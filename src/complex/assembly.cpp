@@ -10,6 +10,7 @@
 
 #include <fmt/format.h>
 
+#include "complex/at_place.hpp"
 #include "complex/second_centre.hpp"
 #include "core/error.hpp"
 
@@ -17,16 +18,6 @@ namespace irrepwise {
 namespace {
 
 constexpr double degree = std::numbers::pi / 180.0;
-
-template <typename Action>
-auto at_place(const std::string& place, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    if (place.empty()) throw;
-    throw error_at(place, error);
-  }
-}
 
 std::string vertex_words(const std::vector<int>& vertices) {
   std::string words = vertices.size() == 1 ? "vertex" : "vertices";

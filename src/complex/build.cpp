@@ -11,9 +11,9 @@
 #include <fmt/format.h>
 
 #include "complex/assembly.hpp"
+#include "complex/at_place.hpp"
 #include "complex/charges.hpp"
 #include "complex/conformation.hpp"
-#include "core/error.hpp"
 #include "molecule/element.hpp"
 #include "symmetry/molecular_symmetry.hpp"
 
@@ -85,14 +85,10 @@ std::vector<BuiltCentre> count_centres(const ComplexSpec& complex, const Charges
           std::find(holders.begin(), holders.end(), static_cast<int>(c)) != holders.end();
       if (here) donated += ligand.electrons;
     }
-    try {
-      centres.push_back({static_cast<int>(c), std::string(spec.polyhedron.kind().symbol),
-                         count_electrons(spec.atomic_number, charges.oxidation[c], donated)});
-    } catch (const Error& error) {
-      const std::string& place = spec.oxidation ? spec.oxidation_place : complex.charge_place;
-      if (place.empty()) throw;
-      throw error_at(place, error);
-    }
+    const std::string& place = spec.oxidation ? spec.oxidation_place : complex.charge_place;
+    const ElectronCount electrons = at_place(
+        place, [&] { return count_electrons(spec.atomic_number, charges.oxidation[c], donated); });
+    centres.push_back({static_cast<int>(c), std::string(spec.polyhedron.kind().symbol), electrons});
   }
   return centres;
 }
@@ -124,7 +120,7 @@ std::string how_made(const ComplexSpec& complex, const std::vector<BuiltCentre>&
                      const std::vector<BuiltLigand>& ligands) {
   std::string words = "built:";
   for (std::size_t c = 0; c < centres.size(); ++c) {
-    words += fmt::format("{} {}({:+}) {}", c == 0 ? "" : " and",
+    words += fmt::format("{} {}({}) {}", c == 0 ? "" : " and",
                          element_symbol(complex.centres[c].atomic_number),
                          signed_number(centres[c].electrons.oxidation), centres[c].polyhedron);
     const Polyhedron& polyhedron = complex.centres[c].polyhedron;
@@ -152,15 +148,8 @@ BuiltComplex build_complex(const ComplexSpec& complex) {
   const Charges charges = settle_charges(complex, assembly);
   std::vector<int> metals;
   for (const CentreSpec& centre : complex.centres) metals.push_back(centre.atomic_number);
-  const std::vector<Pose> poses = [&] {
-    try {
-      return most_symmetric_poses(assembly, metals);
-    } catch (const Error& error) {
-      const std::string& place = complex.centres.front().place;
-      if (place.empty()) throw;
-      throw error_at(place, error);
-    }
-  }();
+  const std::vector<Pose> poses = at_place(complex.centres.front().place,
+                                           [&] { return most_symmetric_poses(assembly, metals); });
   std::vector<Atom> atoms;
   for (std::size_t m = 0; m < metals.size(); ++m) atoms.push_back({metals[m], assembly.metals[m]});
   std::vector<BuiltLigand> ligands;

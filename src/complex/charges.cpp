@@ -11,9 +11,24 @@
 namespace irrepwise {
 namespace {
 
+constexpr int largest_oxidation = 20;  // far beyond any; keeps sums in range
+constexpr int largest_charge = 1000;
+
 [[noreturn]] void fail_at(const std::string& place, const std::string& message) {
-  if (place.empty()) throw Error(message);
-  throw error_at(place, Error(message));
+  throw place.empty() ? Error(message) : error_at(place, Error(message));
+}
+
+void check_ranges(const ComplexSpec& complex) {
+  for (const CentreSpec& centre : complex.centres) {
+    const int oxidation = centre.oxidation.value_or(0);
+    if (oxidation >= -largest_oxidation && oxidation <= largest_oxidation) continue;
+    fail_at(centre.oxidation_place, fmt::format("found an oxidation state of {}, expected {} to {}",
+                                                oxidation, -largest_oxidation, largest_oxidation));
+  }
+  const int charge = complex.charge.value_or(0);
+  if (charge >= -largest_charge && charge <= largest_charge) return;
+  fail_at(complex.charge_place, fmt::format("found a charge of {}, expected {} to {}", charge,
+                                            -largest_charge, largest_charge));
 }
 
 int ligand_charge(const Assembly& assembly) {
@@ -26,6 +41,7 @@ int ligand_charge(const Assembly& assembly) {
 }  // namespace
 
 Charges settle_charges(const ComplexSpec& complex, const Assembly& assembly) {
+  check_ranges(complex);
   const int ligands = ligand_charge(assembly);
   int known = 0;
   int n_open = 0;

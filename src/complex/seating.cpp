@@ -6,23 +6,13 @@
 
 #include <fmt/format.h>
 
+#include "complex/at_place.hpp"
 #include "complex/spec.hpp"
 #include "core/error.hpp"
 #include "core/text.hpp"
 
 namespace irrepwise {
 namespace {
-
-// Runs an action; an error in it gets the place where the request stands.
-template <typename Action>
-auto at_place(const std::string& place, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    if (place.empty()) throw;
-    throw error_at(place, error);
-  }
-}
 
 std::string binding_words(const Binding& binding) {
   if (binding.denticity() > 1) return "two teeth";

@@ -60,7 +60,8 @@ TEST_CASE("complexes come out in their textbook groups") {
 
 TEST_CASE("a twist that was asked for is kept, and lowers the group") {
   ComplexSpec spec = spec_of("Fe", "L-2", 2, {"Cp", "Cp"});
-  spec.centres[0].ligands[1].twist_degrees = 36.0;  // of one ring: staggered
+  spec.centres[0].ligands[0].twist_degrees = 0.0;  // left free, this ring would follow the other
+  spec.centres[0].ligands[1].twist_degrees = 36.0;  // staggered
   BuiltComplex built = build_complex(spec);
   CHECK(built.point_group == "D5d");
   CHECK(std::abs(built.ligands[1].twist_degrees - 36.0) < 1e-9);

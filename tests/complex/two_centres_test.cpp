@@ -120,7 +120,9 @@ TEST_CASE("bridges that cannot be are refused") {
       "CO cannot lie straight between two metals; give `bridge_angle`", Error);
   CHECK_THROWS_WITH_AS(
       static_cast<void>(build_complex(pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 3}))),
-      "the first metal lies between its bridges; give them neighbouring vertices", Error);
+      "the bridges lie too far apart for the second metal to reach them all; give longer distances, "
+      "or vertices that lie nearer to each other",
+      Error);
   ComplexSpec alone = spec_of("Pd", "SP-4", 2, {"Cl", "Cl", "Cl", "Cl"});
   alone.centres.push_back(alone.centres[0]);
   CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(alone)),

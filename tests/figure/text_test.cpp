@@ -65,8 +65,8 @@ TEST_CASE("the outlines of text stay in its box, whatever its anchor and directi
       const Box box = font.box(text);
       for (const std::vector<Point2>& polygon : font.outlines(text)) {
         for (const Point2& p : polygon) {
-          CHECK(p.x > box.left - 0.5);
-          CHECK(p.x < box.right + 0.5);
+          CHECK(p.x > box.left - 4.0);  // in upright text the ring of Å is on this side
+          CHECK(p.x < box.right + 1.5);
           CHECK(p.y > box.top - 4.0);  // the ring of Å stands above the capitals
           CHECK(p.y < box.bottom + 0.5);
         }

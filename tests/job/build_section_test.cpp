@@ -95,7 +95,7 @@ TEST_CASE("what cannot be built is refused with its line and column") {
         "job.yaml:8:7: no ligand is called 'NH33', did you mean 'NH3'? `irrepwise build --list "
         "ligands` shows all");
   CHECK(refusal("build:\n  metal: Pt\n  polyhedron: SQ-4\n  ligands: []\n") ==
-        "job.yaml:3:15: 'SQ-4' is no polyhedral symbol; did you mean T-4? Otherwise the known ones "
+        "job.yaml:3:15: 'SQ-4' is no polyhedral symbol; did you mean SP-4? Otherwise the known ones "
         "are L-2, A-2, TP-3, TPY-3, TS-3, T-4, SP-4, SPY-4, SS-4, TBPY-5, SPY-5, OC-6, TPR-6, "
         "PBPY-7, OCF-7, TPRS-7, CU-8, SAPR-8, DD-8, HBPY-8 and TPRS-9");
   CHECK(refusal("build:\n  metal: Pq\n  polyhedron: SP-4\n") ==
@@ -124,10 +124,11 @@ TEST_CASE("what cannot be built is refused with its line and column") {
                 "Cl]\n") ==
         "job.yaml:4:14: the oxidation state +5 takes more electrons from Ti than its 4 valence "
         "electrons; check oxidation state, charge and ligands");
-  CHECK(refusal(square + "    - {ligand: Cl, distance: 0}\n") ==
+  CHECK(refusal(square + "    - {ligand: Cl, vertices: [1, 2, 3, 4], distance: 0}\n") ==
         "job.yaml:6:7: found a distance of 0 Å, expected 0.5 to 6");
   CHECK(refusal(square + "    - {ligand: Cl, vertex: 1}\n") ==
-        "job.yaml:6:20: unknown key 'vertex' in a ligand; did you mean 'vertices'?");
+        "job.yaml:6:20: unknown key 'vertex' in a ligand; known keys are ligand, vertices, covers, "
+        "denticity, hapticity, distance, twist, angle, bite and mirrored");
   CHECK(refusal("geometry: a.xyz\n" + square + "    - Cl\n") ==
         "job.yaml:1:11: `geometry` and `build` exclude each other; keep one");
   CHECK(refusal("build:\n  metal: Pt\n  polyhedron: {symbol: SP-4, angle: 80}\n") ==
