@@ -14,11 +14,11 @@ namespace {
 
 constexpr double same_element = 0.1;
 
-// The operation of a finite group that a matrix is; the nearest one within the tolerance.
+// The nearest operation of a finite group, if no element differs by as much as the tolerance.
 std::optional<int> find_operation(const std::vector<Eigen::Matrix3d>& operations,
-                                  const Eigen::Matrix3d& matrix) {
+                                  const Eigen::Matrix3d& matrix, double tolerance = same_element) {
   std::optional<int> found;
-  double nearest = same_element;
+  double nearest = tolerance;
   for (std::size_t g = 0; g < operations.size(); ++g) {
     const double distance = (operations[g] - matrix).cwiseAbs().maxCoeff();
     if (distance < nearest) {
@@ -44,8 +44,11 @@ bool holds(const PointGroup& group, const Eigen::Matrix3d& matrix) {
 
 double character(const PointGroup& group, std::size_t irrep, const Eigen::Matrix3d& matrix) {
   if (!group.symbol().is_finite()) return continuous_character(group, irrep, matrix);
-  const std::optional<int> operation = find_operation(group.operations(), matrix);
-  return group.irreps()[irrep].characters[static_cast<std::size_t>(operation.value_or(0))];
+  // The frame of the common group is exact, that of a distorted molecule only near it, so that
+  // deviations add up: here the nearest operation counts, how far off it may be.
+  constexpr double any_distance = 3.0;  // no two orthogonal matrices differ by more than 2
+  const std::optional<int> operation = find_operation(group.operations(), matrix, any_distance);
+  return group.irreps()[irrep].characters[static_cast<std::size_t>(*operation)];
 }
 
 // @param turn  from the frame of the common group to that of the whole one

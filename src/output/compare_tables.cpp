@@ -126,11 +126,11 @@ Table frontier_match_table(const Comparison& comparison) {
                    {"shared_atoms", "atoms shared", "", Align::Right, 4, false},
                    {"homo", title("HOMO", frontier.homo), "", Align::Right, 0, false},
                    {"homo_shift_ev", "shift", "eV", Align::Decimal, 0, false},
-                   {"homo_overlap", "overlap", "%", Align::Decimal, 3, false},
+                   {"homo_overlap", "HOMO overlap", "%", Align::Decimal, 3, false},
                    {"homo_change", "HOMO?", "", Align::Left, 2, false},
                    {"lumo", title("LUMO", frontier.lumo), "", Align::Right, 0, false},
                    {"lumo_shift_ev", "shift", "eV", Align::Decimal, 0, false},
-                   {"lumo_overlap", "overlap", "%", Align::Decimal, 3, false},
+                   {"lumo_overlap", "LUMO overlap", "%", Align::Decimal, 3, false},
                    {"lumo_change", "LUMO?", "", Align::Left, 2, false}};
   for (int i = 0; i < static_cast<int>(comparison.variants.size()); ++i) {
     if (i == comparison.reference) continue;
@@ -184,9 +184,9 @@ Table slopes_table(const VariantResult& variant) {
   table.columns = {{"parameter", "parameter", "", Align::Left, 0, false},
                    {"value", "value", "", Align::Decimal, 0, false},
                    {"unit", "unit", "", Align::Left, 1, false},
-                   {"homo", "HOMO", "eV per unit", Align::Decimal, 0, false},
-                   {"lumo", "LUMO", "eV per unit", Align::Decimal, 0, false},
-                   {"gap", "gap", "eV per unit", Align::Decimal, 0, false}};
+                   {"homo", "HOMO", "eV/unit", Align::Decimal, 0, false},
+                   {"lumo", "LUMO", "eV/unit", Align::Decimal, 0, false},
+                   {"gap", "gap", "eV/unit", Align::Decimal, 0, false}};
   for (std::size_t p = 0; p < variant.robustness.parameters.size(); ++p) {
     const Parameter& parameter = variant.robustness.parameters[p];
     const auto row = variant.robustness.slopes.row(static_cast<Eigen::Index>(p));

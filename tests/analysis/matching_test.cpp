@@ -105,3 +105,28 @@ TEST_CASE("the common group of two groups keeps only what both have") {
   CHECK(common_symmetry(linear, square, Eigen::Matrix3d::Identity()).group.symbol().name() ==
         "D4h");
 }
+
+TEST_CASE("a common group that lies askew in both is described the same way from either side") {
+  // A turn by 120 degrees about (1,1,1) puts the C4 of C4v along x or y of D4h, where D4h has C2':
+  // the two share C2v. Descent keeps dimensions, and the totally symmetric irrep.
+  const PointGroup first(parse_schoenflies("D4h")), second(parse_schoenflies("C4v"));
+  const Eigen::Matrix3d third =
+      Eigen::AngleAxisd(2.0943951023931953, Eigen::Vector3d::Ones().normalized())
+          .toRotationMatrix();
+  for (const Eigen::Matrix3d& turn : {third, Eigen::Matrix3d(third.transpose())}) {
+    const CommonSymmetry common = common_symmetry(first, second, turn);
+    CHECK(common.group.symbol().name() == "C2v");
+    const auto check = [&](const PointGroup& whole, const std::vector<std::vector<int>>& counts) {
+      CHECK(counts.front().front() == 1);
+      for (std::size_t i = 0; i < counts.size(); ++i) {
+        int dimension = 0;
+        for (std::size_t j = 0; j < counts[i].size(); ++j) {
+          dimension += counts[i][j] * common.group.irreps()[j].dimension;
+        }
+        CHECK(dimension == whole.irreps()[i].dimension);
+      }
+    };
+    check(first, common.first);
+    check(second, common.second);
+  }
+}
