@@ -200,9 +200,13 @@ Figure contour_sheet(const SheetWords& words, const Molecule& molecule,
   sheet.legend = {{"positive phase", palette::homo, false, true},
                   {"negative phase", palette::negative_line, true, true}};
   const std::string levels = level_words(maps);
-  if (!levels.empty()) sheet.notes.push_back("Lines at " + levels + " bohr^(−3/2).");
+  if (!levels.empty()) {
+    sheet.notes.push_back(plain_text("Lines at " + levels + "\u00A0bohr") +
+                          RichText{{"−3/2", Script::Super}} + plain_text("."));
+  }
   sheet.notes.push_back(
-      "Discs with symbols are atoms in the plane; small rings are atoms in front of it or behind.");
+      plain_text("Discs with symbols are atoms in the plane; small rings are atoms in front of it "
+                 "or behind."));
   return sheet_figure(sheet);
 }
 

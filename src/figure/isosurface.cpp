@@ -2,15 +2,15 @@
 
 #include <cmath>
 #include <unordered_map>
-
-#include <Eigen/Geometry>
+#include <utility>
 
 namespace irrepwise {
 namespace {
 
-// The six tetrahedra of a cube share its diagonal 0-7; corner bits are steps along x, y, z.
-constexpr int tetrahedra[6][4] = {{0, 1, 3, 7}, {0, 1, 5, 7}, {0, 2, 3, 7},
-                                  {0, 2, 6, 7}, {0, 4, 5, 7}, {0, 4, 6, 7}};
+// The six tetrahedra of a cube share its diagonal 0-7; corner bits are steps along x, y, z. Each is
+// listed so that its corners 1, 2, 3 run counter-clockwise seen from beyond them, from corner 0.
+constexpr int tetrahedra[6][4] = {{0, 1, 3, 7}, {0, 1, 7, 5}, {0, 2, 7, 3},
+                                  {0, 2, 6, 7}, {0, 4, 5, 7}, {0, 4, 7, 6}};
 
 class Surface {
  public:
@@ -51,31 +51,39 @@ class Surface {
     }
   }
 
+  // The winding follows from the order of the corners alone, so that neighbours always agree.
   void tetrahedron(const std::array<std::size_t, 4>& corners) {
-    std::vector<std::size_t> in;
-    std::vector<std::size_t> out;
-    for (const std::size_t c : corners) (inside(c) > 0.0 ? in : out).push_back(c);
-    if (in.empty() || out.empty()) return;
-    if (in.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[0], out[1]), vertex(in[0], out[2]));
-    } else if (out.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[1], out[0]), vertex(in[2], out[0]));
-    } else {
-      const std::uint32_t a = vertex(in[0], out[0]);
-      const std::uint32_t b = vertex(in[0], out[1]);
-      const std::uint32_t c = vertex(in[1], out[1]);
-      const std::uint32_t d = vertex(in[1], out[0]);
+    std::array<std::size_t, 4> ordered;  // those inside first
+    std::size_t n_inside = 0;
+    bool odd = false;
+    for (std::size_t i = 0; i < 4; ++i) {
+      if (!(inside(corners[i]) > 0.0)) continue;
+      odd ^= (i - n_inside) % 2 == 1;  // it passes so many corners that lie outside
+      ordered[n_inside++] = corners[i];
+    }
+    if (n_inside == 0 || n_inside == 4) return;
+    std::size_t n = n_inside;
+    for (const std::size_t c : corners) {
+      if (!(inside(c) > 0.0)) ordered[n++] = c;
+    }
+    if (odd && n_inside < 3) std::swap(ordered[2], ordered[3]);  // both outside
+    if (odd && n_inside == 3) std::swap(ordered[0], ordered[1]);
+    const auto& [p, q, r, s] = ordered;
+    if (n_inside == 1) {
+      triangle(vertex(p, q), vertex(p, r), vertex(p, s));
+    } else if (n_inside == 2) {
+      const std::uint32_t a = vertex(p, r);
+      const std::uint32_t b = vertex(p, s);
+      const std::uint32_t c = vertex(q, s);
+      const std::uint32_t d = vertex(q, r);
       triangle(a, b, c);
       triangle(a, c, d);
+    } else {
+      triangle(vertex(p, s), vertex(q, s), vertex(r, s));
     }
   }
 
   void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c) {
-    if (a == b || b == c || a == c) return;
-    const Eigen::Vector3f& pa = mesh_.vertices[a];
-    const Eigen::Vector3f across = (mesh_.vertices[b] - pa).cross(mesh_.vertices[c] - pa);
-    const Eigen::Vector3f outwards = mesh_.normals[a] + mesh_.normals[b] + mesh_.normals[c];
-    if (across.dot(outwards) < 0.0f) std::swap(b, c);
     mesh_.triangles.push_back({a, b, c});
   }
 

@@ -23,7 +23,7 @@ constexpr double small_size = 11.5;
 constexpr double title_size = 17.0;
 constexpr double line_height = 16.0;
 constexpr double column_gap = 70.0;
-constexpr double axis_width = 62.0;
+constexpr double axis_width = 66.0;
 constexpr double least_width = 420.0;  // room for the title
 constexpr double picture_size = 118.0;
 constexpr double picture_gap = 8.0;
@@ -104,7 +104,7 @@ Group level_group(const PlacedLevel& drawn) {
 
 double tick_step(double per_ev) {
   for (const double step : {0.1, 0.2, 0.5, 1.0, 2.0, 5.0, 10.0, 20.0, 50.0}) {
-    if (step * per_ev >= 36.0) return step;
+    if (step * per_ev >= 44.0) return step;
   }
   return 100.0;
 }
@@ -132,7 +132,7 @@ Group axis(const LevelDiagram& diagram, double x, double top, double per_ev) {
     group.elements.emplace_back(std::move(text));
   }
   Text title;
-  title.at = {x - 42.0, 0.5 * (top + bottom)};
+  title.at = {x - 48.0, 0.5 * (top + bottom)};
   title.runs = plain_text("orbital energy / eV");
   title.size = small_size;
   title.colour = palette::muted;
@@ -255,7 +255,8 @@ Pictures picture_groups(const PlacedColumn& column, double x, double top) {
       left += picture_size + picture_gap;
     }
     Text text = words({x, centres[i] + 0.5 * picture_size + 12.0}, "", small_size, palette::ink);
-    text.runs = label_text(level.label) + plain_text("   " + energy_words(level.energy_ev, 2));
+    text.runs =
+        label_text(level.label) + plain_text("\u00A0\u00A0 " + energy_words(level.energy_ev, 2));
     group.elements.emplace_back(std::move(text));
     out.right = std::max(out.right, left);
     out.bottom = std::max(out.bottom, centres[i] + 0.5 * picture_size + picture_caption);
@@ -306,14 +307,14 @@ double add_heading(Figure& figure, const LevelDiagram& diagram, const Font& font
   Group group;
   group.kind = "heading";
   double y = margin - 4.0;
-  for (const std::string& line : wrapped(font, diagram.title, title_size, width)) {
+  for (const RichText& line : wrapped(font, plain_text(diagram.title), title_size, width)) {
     y += title_size + 3.0;
-    group.elements.emplace_back(words({margin, y}, line, title_size, palette::ink));
+    group.elements.emplace_back(text_at({margin, y}, line, title_size, palette::ink));
   }
   y += 4.0;
-  for (const std::string& line : wrapped(font, diagram.method, small_size, width)) {
+  for (const RichText& line : wrapped(font, diagram.method, small_size, width)) {
     y += line_height;
-    group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+    group.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
   }
   figure.groups.push_back(std::move(group));
   return y;
@@ -363,9 +364,9 @@ double add_notes(Figure& figure, const LevelDiagram& diagram, const Font& font, 
   Group group;
   group.kind = "notes";
   for (const std::string& note : {left_out(diagram), fractions_note(diagram)}) {
-    for (const std::string& line : wrapped(font, note, small_size, width)) {
+    for (const RichText& line : wrapped(font, plain_text(note), small_size, width)) {
       y += line_height;
-      group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+      group.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
     }
   }
   if (!group.elements.empty()) figure.groups.push_back(std::move(group));

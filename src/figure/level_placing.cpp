@@ -34,8 +34,8 @@ int lanes_needed(const LevelDiagram& diagram, double per_ev) {
 
 RichText level_words(const DiagramLevel& level) {
   RichText words = label_text(level.label);
-  if (level.frontier == FrontierMark::Homo) return words + plain_text("  HOMO");
-  if (level.frontier == FrontierMark::Lumo) return words + plain_text("  LUMO");
+  if (level.frontier == FrontierMark::Homo) return words + plain_text("\u00A0\u00A0HOMO");
+  if (level.frontier == FrontierMark::Lumo) return words + plain_text("\u00A0\u00A0LUMO");
   return words;
 }
 
@@ -58,7 +58,12 @@ PlacedColumn place_column(const LevelDiagram& diagram, const DiagramColumn& colu
     out.levels.push_back(drawn);
     heights.push_back(drawn.y);
   }
-  const std::vector<int> lanes = level_lanes(heights, least_apart);
+  // The frontier stands in the main lane.
+  std::vector<std::size_t> first;
+  for (std::size_t i = 0; i < out.levels.size(); ++i) {
+    if (out.levels[i].level->frontier != FrontierMark::None) first.push_back(i);
+  }
+  const std::vector<int> lanes = level_lanes(heights, least_apart, first);
   std::vector<double> bars;
   std::vector<double> labels;
   for (std::size_t i = 0; i < out.levels.size(); ++i) {

@@ -13,20 +13,39 @@ namespace irrepwise {
 namespace {
 
 constexpr std::size_t most_points = 24'000'000;
-constexpr double usual_spacing_angstrom = 0.15;
-constexpr double wanted_error = 0.005;  // of an integral, without a wish of the user
+constexpr double coarsest_spacing_angstrom = 0.15;  // without a wish of the user
+constexpr double finest_spacing_angstrom = 0.07;
+constexpr double wanted_points = 300'000;  // small molecules get a finer grid
+constexpr double wanted_error = 0.005;     // of an integral, without a wish of the user
 constexpr double refused_error = 0.01;
 constexpr int finer_tries = 4;
 constexpr double finer = 0.8;
 
-GridShape shape_around(const OrbitalField& field, double spacing) {
-  Eigen::Vector3d low = Eigen::Vector3d::Constant(1e9);
-  Eigen::Vector3d high = -low;
+struct Region {
+  Eigen::Vector3d low = Eigen::Vector3d::Constant(1e9);  // Å
+  Eigen::Vector3d high = Eigen::Vector3d::Constant(-1e9);
+};
+
+Region region_of(const OrbitalField& field) {
+  Region region;
   for (const OrbitalField::Centre& centre : field.centres()) {
     const Eigen::Vector3d reach = Eigen::Vector3d::Constant(centre.density_angstrom);
-    low = low.cwiseMin(centre.position_angstrom - reach);
-    high = high.cwiseMax(centre.position_angstrom + reach);
+    region.low = region.low.cwiseMin(centre.position_angstrom - reach);
+    region.high = region.high.cwiseMax(centre.position_angstrom + reach);
   }
+  return region;
+}
+
+// In hundredths of Å.
+double usual_spacing(const OrbitalField& field) {
+  const Region region = region_of(field);
+  const double spacing = std::cbrt((region.high - region.low).prod() / wanted_points);
+  return std::clamp(std::round(100.0 * spacing) / 100.0, finest_spacing_angstrom,
+                    coarsest_spacing_angstrom);
+}
+
+GridShape shape_around(const OrbitalField& field, double spacing) {
+  const auto [low, high] = region_of(field);
   GridShape shape;
   shape.spacing_angstrom = spacing;
   double points = 1.0;
@@ -124,7 +143,7 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
     throw Error(
         fmt::format("spacing of the grid: found {}, expected 0.02 to 1 Å", *spacing_angstrom));
   }
-  double spacing = spacing_angstrom.value_or(usual_spacing_angstrom);
+  double spacing = spacing_angstrom.value_or(usual_spacing(field));
   OrbitalGrid grid = sampled(field, shape_around(field, spacing));
   if (!spacing_angstrom) {
     for (int i = 0; i < finer_tries && worst_error(grid) > wanted_error; ++i) {

@@ -29,8 +29,9 @@ struct OrbitalGrid {
   std::vector<double> integrals;            // per orbital, of the density over the grid
 };
 
-/// @param spacing_angstrom  as the user wants it; without it, 0.15 Å, finer where the integral of
-///                          some density is otherwise further than 0.005 from 1
+/// @param spacing_angstrom  as the user wants it; without it, 0.07 to 0.15 Å by the size of the
+///                          molecule, finer where the integral of some density is otherwise
+///                          further than 0.005 from 1
 /// @throws Error  where the grid would need more than 24 million points (with the spacing that
 ///                does not), or an integral is further than 0.01 from 1
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,

@@ -29,9 +29,9 @@ std::array<std::uint8_t, 3> shaded(const Colour& colour, const Eigen::Vector3d& 
   static const Eigen::Vector3d halfway = (light + Eigen::Vector3d(0.0, 0.0, 1.0)).normalized();
   const double diffuse = std::max(0.0, n.dot(light));
   const double from_above = 0.5 + 0.5 * n.y();
-  const double shine = 0.30 * std::pow(std::max(0.0, n.dot(halfway)), 40.0);
+  const double shine = 0.24 * std::pow(std::max(0.0, n.dot(halfway)), 40.0);
   const double rim = std::clamp(n.z() / 0.38, 0.0, 1.0);
-  const double brightness = (0.40 + 0.10 * from_above + 0.62 * diffuse) * (0.45 + 0.55 * rim);
+  const double brightness = (0.56 + 0.12 * from_above + 0.42 * diffuse) * (0.55 + 0.45 * rim);
   const double white = 255.0 * shine;
   return {channel(colour.red * brightness + white), channel(colour.green * brightness + white),
           channel(colour.blue * brightness + white)};

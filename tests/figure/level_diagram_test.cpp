@@ -9,6 +9,7 @@
 
 #include "core/error.hpp"
 #include "figure/collisions.hpp"
+#include "figure/rich_text.hpp"
 #include "support/molecules.hpp"
 #include "support/run.hpp"
 
@@ -20,7 +21,7 @@ LevelDiagram diagram_of(const Molecule& molecule) {
   const Run r = run(molecule);
   LevelDiagram diagram;
   diagram.title = "title";
-  diagram.method = "method";
+  diagram.method = plain_text("method");
   diagram.columns = {diagram_column(r.symmetry.group, r.levels)};
   const EnergyWindow window = frontier_window(diagram.columns);
   diagram.from_ev = window.from_ev;
