@@ -14,6 +14,7 @@ install(DIRECTORY ${CMAKE_CURRENT_SOURCE_DIR}/ DESTINATION ${CMAKE_INSTALL_INCLU
   FILES_MATCHING PATTERN "*.hpp"
   PATTERN "cli" EXCLUDE
   PATTERN "core/yaml.hpp" EXCLUDE
+  PATTERN "molecule/atoms_yaml.hpp" EXCLUDE
   PATTERN "basis/parameter_yaml.hpp" EXCLUDE
   PATTERN "job/job_file.hpp" EXCLUDE
   PATTERN "output/json_text.hpp" EXCLUDE)

@@ -3,15 +3,15 @@
 #include <cmath>
 #include <variant>
 
-#include "overlap/two_centre.hpp"
 #include "core/constants.hpp"
+#include "overlap/two_centre.hpp"
 #include "salc/expansion.hpp"
 
 namespace irrepwise {
 namespace {
 
-// Orbitals of one level and S times them, `n_orbitals x degeneracy` each. S times an orbital has the
-// orbital's symmetry, so it expands in the same SALCs and needs no overlap matrix over atomic
+// Orbitals of one level and S times them, `n_orbitals x degeneracy` each. S times an orbital has
+// the orbital's symmetry, so it expands in the same SALCs and needs no overlap matrix over atomic
 // orbitals.
 struct LevelColumns {
   Eigen::MatrixXd orbitals;
@@ -111,12 +111,11 @@ std::vector<OverlapPopulation> overlap_populations(const MolecularSymmetry& symm
   for (int a = 0; a < n_atoms; ++a) {
     const int back = symmetry.group.inverse(operation_to[a]);
     for (int b = a + 1; b < n_atoms; ++b) {
-      populations.push_back({a, b,
-                             (symmetry.molecule.atoms()[a].position -
-                              symmetry.molecule.atoms()[b].position)
-                                 .norm(),
-                             of_representative[set_of[a]][symmetry.images[back][b]],
-                             are_bonded(symmetry.molecule, a, b)});
+      populations.push_back(
+          {a, b,
+           (symmetry.molecule.atoms()[a].position - symmetry.molecule.atoms()[b].position).norm(),
+           of_representative[set_of[a]][symmetry.images[back][b]],
+           are_bonded(symmetry.molecule, a, b)});
     }
   }
   return populations;
@@ -142,7 +141,8 @@ Populations mulliken_populations(const MolecularSymmetry& symmetry, const Basis&
   populations.charge.resize(n_atoms);
   for (int atom = 0; atom < n_atoms; ++atom) {
     const AtomOrbitals own = orbitals_of(basis, atom);
-    populations.gross_by_atom[atom] = populations.gross_by_orbital.segment(own.first, own.count).sum();
+    populations.gross_by_atom[atom] =
+        populations.gross_by_orbital.segment(own.first, own.count).sum();
     populations.charge[atom] = basis.valence_electrons[atom] - populations.gross_by_atom[atom];
   }
   populations.overlap_populations = overlap_populations(symmetry, basis, levels);

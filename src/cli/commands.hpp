@@ -12,7 +12,9 @@ struct Command {
   std::function<void()> run;  // throws Error, or CLI::ParseError for options that contradict
 };
 
+[[nodiscard]] Command add_compare(CLI::App& program);
 [[nodiscard]] Command add_draw(CLI::App& program);
+[[nodiscard]] Command add_build(CLI::App& program);
 [[nodiscard]] Command add_levels(CLI::App& program);
 [[nodiscard]] Command add_parameters(CLI::App& program);
 [[nodiscard]] Command add_symmetry(CLI::App& program);

@@ -6,6 +6,7 @@
 
 #include "cli/axis.hpp"
 #include "core/error.hpp"
+#include "symmetry/schoenflies.hpp"
 
 namespace irrepwise::cli {
 namespace {
@@ -102,7 +103,10 @@ Job read_job_with(const JobOptions& options) {
   if (!options.x.empty()) {
     job.symmetry.x = named("--x", [&] { return parse_axis(options.x, job.molecule); });
   }
-  if (!options.group.empty()) job.symmetry.group = options.group;
+  if (!options.group.empty()) {
+    job.symmetry.group =
+        named("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
+  }
   if (options.limit) {
     job.symmetry.limit_angstrom = in_range("--limit", *options.limit, largest_tolerance_angstrom);
   }

@@ -1,6 +1,7 @@
 // irrepwise symmetry: the group of a structure and all that follows from it, or a group alone.
-#include <algorithm>
 #include <memory>
+#include <optional>
+#include <utility>
 
 #include <fmt/format.h>
 
@@ -9,7 +10,6 @@
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
-#include "core/text.hpp"
 #include "molecule/xyz.hpp"
 #include "output/symmetry_json.hpp"
 #include "output/symmetry_report.hpp"
@@ -29,75 +29,69 @@ struct SymmetryCommandOptions {
   std::vector<std::string> products;
   std::vector<std::string> terms;
   std::vector<std::string> descents;
+
+  [[nodiscard]] bool asks_for_salcs() const { return sections.salcs || local; }
 };
 
-void compute_orbitals(SymmetryResult& result, const Job& job, const Basis& basis,
-                      const SymmetryCommandOptions& options) {
-  const MolecularSymmetry& symmetry = result.symmetry;
-  result.orbitals =
-      OrbitalSymmetry{basis, orbital_reductions(symmetry, basis, result.sets, result.frames), {}};
-  if (options.sections.salcs) {
-    result.orbitals->salcs = options.local
-                                 ? salc_table(symmetry, basis, result.sets, result.frames)
-                                 : salc_table(symmetry, basis, result.sets);
-  }
-  if (!options.transitions) return;
-  FrontierSymmetry frontier{solve_levels(symmetry, basis, job.hueckel), {}, {}, {}, {}};
-  frontier.transitions = frontier_transitions(symmetry.group, frontier.levels);
-  frontier.open = open_levels(symmetry.group, frontier.levels);
-  if (!frontier.open.empty()) {
-    frontier.terms = find_terms(symmetry.group, frontier.open);
-    frontier.ground = ground_terms(symmetry, frontier.terms);
-  }
-  for (const std::string& warning : frontier.levels.warnings) result.warnings.push_back(warning);
-  result.frontier = std::move(frontier);
+struct Computed {
+  SymmetryResult result;
+  std::vector<std::string> warnings;
+};
+
+// The reason of an error without the long remedy.
+std::string first_words(const Error& error) {
+  const std::string message = error.what();
+  return message.substr(0, message.find(';'));
 }
 
-SymmetryResult compute(const Job& job, const SymmetryCommandOptions& options) {
+Computed compute(const Job& job, const SymmetryCommandOptions& options) {
+  std::vector<std::string> warnings = geometry_warnings(job.molecule);
   SymmetryOptions symmetry_options = job.symmetry;
   std::optional<Basis> basis;
-  std::vector<std::string> warnings = geometry_warnings(job.molecule);
   try {
     basis = make_basis(job.molecule, job.parameters, job.overrides);
     symmetry_options.kinds = atom_kinds(*basis);
   } catch (const Error& error) {
     // The group does not need parameters; what does is refused only where asked for.
-    if (options.sections.salcs || options.transitions) throw;
-    const std::string message = error.what();
-    warnings.push_back("no reductions of orbitals: " + message.substr(0, message.find('\n')));
+    if (options.asks_for_salcs() || options.transitions) throw;
+    warnings.push_back("no reductions of orbitals: " + first_words(error));
   }
-  MolecularSymmetry symmetry = find_symmetry(job.molecule, symmetry_options);
-  std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
-  std::vector<AtomSet> named_sets = atom_sets(symmetry);
-  auto frames = frames_of_sets(symmetry, sets);
-  SymmetryResult result{job.title,
-                        job.molecule,
-                        std::move(symmetry),
-                        symmetry_options.limit_angstrom,
-                        symmetry_ladder(job.molecule, symmetry_options),
-                        {},
-                        symmetry_options.z || symmetry_options.x,
-                        std::move(sets),
-                        std::move(named_sets),
-                        std::move(frames),
-                        {},
-                        {},
-                        {},
-                        {},
-                        {},
-                        std::move(warnings)};
-  if (result.user_axes) {
-    SymmetryOptions by_convention = symmetry_options;
-    by_convention.z.reset();
-    by_convention.x.reset();
-    result.axis_effect = axis_effect(find_symmetry(job.molecule, by_convention), result.symmetry);
+  SymmetryResult result = symmetry_of(job.molecule, symmetry_options, basis);
+  const bool is_json = chosen_format(options.output) == Format::Json;
+  // A program that reads JSON picks what it needs; all that is cheap is there.
+  if (basis && (options.asks_for_salcs() || is_json)) {
+    result.orbitals->salcs = options.local
+                                 ? salc_table(result.symmetry, *basis, result.sets, result.frames)
+                                 : salc_table(result.symmetry, *basis, result.sets);
   }
-  if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
-  result.displacements = displacement_irreps(result.symmetry);
-  if (basis) compute_orbitals(result, job, *basis, options);
-  result.answers = answer_group(result.symmetry.group, options.products, options.terms,
-                                options.descents);
-  return result;
+  if (basis && (options.transitions || is_json)) {
+    try {
+      Levels levels = solve_levels(result.symmetry, *basis, job.hueckel);
+      warnings.insert(warnings.end(), levels.warnings.begin(), levels.warnings.end());
+      result.frontier = frontier_symmetry(result.symmetry, std::move(levels));
+    } catch (const Error& error) {
+      if (options.transitions) throw;
+      warnings.push_back("no transitions and terms: " + first_words(error));
+    }
+  }
+  return {std::move(result), std::move(warnings)};
+}
+
+// Adds the file or the option as the place of any error.
+template <typename Action>
+auto for_place(const std::string& place, Action action) {
+  try {
+    return action();
+  } catch (const Error& error) {
+    throw error_at(place, error);
+  }
+}
+
+// The questions of the command line, each with its option as the place of any error.
+GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
+  return {for_place("--product", [&] { return answer_products(group, options.products); }),
+          for_place("--terms", [&] { return answer_terms(group, options.terms); }),
+          for_place("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -110,57 +104,50 @@ std::string symmetrised_xyz(const Job& job, const SymmetryCommandOptions& option
   return xyz_text(job.molecule.with_positions(positions), job.title);
 }
 
-std::string written(const SymmetryResult& result, const SymmetryCommandOptions& options) {
-  switch (chosen_format(options.output)) {
-    case Format::Json:
-      return symmetry_json(result);
-    case Format::Csv:
-      return symmetry_csv(result);
-    case Format::Markdown:
-      return report_markdown(symmetry_report(result, options.sections, 1000));
-    case Format::Text:
-    case Format::Latex:
-    case Format::Yaml:
-      break;
-  }
-  const int width = text_width(options.output);
-  return report_text(symmetry_report(result, options.sections, width), width);
-}
-
-std::string written(const PointGroup& group, const GroupAnswers& answers,
+std::string written(const SymmetryResult& result, const SymmetryHeadings& headings,
                     const SymmetryCommandOptions& options) {
   switch (chosen_format(options.output)) {
     case Format::Json:
-      return group_json(group, answers);
+      return symmetry_json(result, headings);
     case Format::Csv:
-      return group_csv(group, answers);
+      return symmetry_csv(result);
     case Format::Markdown:
-      return report_markdown(group_report(group, answers, 1000));
+      return report_markdown(symmetry_report(result, headings, options.sections, 1000));
     case Format::Text:
     case Format::Latex:
     case Format::Yaml:
       break;
   }
   const int width = text_width(options.output);
-  return report_text(group_report(group, answers, width), width);
+  return report_text(symmetry_report(result, headings, options.sections, width), width);
 }
 
-void run_group(const SymmetryCommandOptions& options) {
-  const PointGroup group = [&] {
-    try {
-      return PointGroup(parse_schoenflies(options.group));
-    } catch (const Error& error) {
-      throw error_at("--group", error);
-    }
-  }();
-  const GroupAnswers answers =
-      answer_group(group, options.products, options.terms, options.descents);
-  emit(options.output, written(group, answers, options));
+std::string written(const PointGroup& group, const GroupAnswers& asked,
+                    const SymmetryCommandOptions& options) {
+  switch (chosen_format(options.output)) {
+    case Format::Json:
+      return group_json(group, asked);
+    case Format::Csv:
+      return group_csv(group, asked);
+    case Format::Markdown:
+      return report_markdown(group_report(group, asked, 1000));
+    case Format::Text:
+    case Format::Latex:
+    case Format::Yaml:
+      break;
+  }
+  const int width = text_width(options.output);
+  return report_text(group_report(group, asked, width), width);
 }
 
 void check_usage(const SymmetryCommandOptions& options) {
-  if (options.job.file.empty() == options.group.empty()) {
+  if (options.job.file.empty() && options.group.empty()) {
     throw CLI::ValidationError("give a FILE, or --group for a group without a molecule");
+  }
+  if (!options.job.file.empty() && !options.group.empty()) {
+    throw CLI::ValidationError(
+        "--group is for a group without a molecule; leave it or the FILE out (--symmetry makes the "
+        "structure exact in a group)");
   }
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
@@ -175,23 +162,26 @@ void run(SymmetryCommandOptions options) {
   }
   if (options.local) options.sections.salcs = true;
   if (options.transitions) options.sections.vibrations = true;
-  // A program that reads JSON picks what it needs; all that is cheap is there.
-  if (chosen_format(options.output) == Format::Json && options.group.empty()) {
-    options.sections.salcs = options.transitions = true;
-  }
   check_usage(options);
-  if (!options.group.empty()) return run_group(options);
+  if (!options.group.empty()) {
+    const PointGroup group(for_place("--group", [&] { return parse_schoenflies(options.group); }));
+    return emit(options.output, written(group, answers(group, options), options));
+  }
+  if (!options.symmetrise.empty()) {
+    options.symmetrise =
+        for_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
+  }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
-  try {
-    if (!options.symmetrise.empty()) return emit(options.output, symmetrised_xyz(job, options));
-    const SymmetryResult result = compute(job, options);
-    const std::string text = written(result, options);
-    print_warnings(options.output, result.warnings);
-    emit(options.output, text);
-  } catch (const Error& error) {
-    throw error_at(options.job.file, error);
+  if (!options.symmetrise.empty()) {
+    return emit(options.output,
+                for_place(options.job.file, [&] { return symmetrised_xyz(job, options); }));
   }
+  Computed computed = for_place(options.job.file, [&] { return compute(job, options); });
+  computed.result.answers = answers(computed.result.symmetry.group, options);
+  const std::string text = written(computed.result, {job.title, computed.warnings}, options);
+  print_warnings(options.output, computed.warnings);
+  emit(options.output, text);
 }
 
 }  // namespace
@@ -206,7 +196,8 @@ Command add_symmetry(CLI::App& program) {
   const auto flag = [&](const char* name, bool& value, const char* help) {
     app->add_flag(name, value, help)->group("Sections");
   };
-  flag("--operations", options->sections.operations, "Each operation and what it does to the atoms");
+  flag("--operations", options->sections.operations,
+       "Each operation and what it does to the atoms");
   flag("--salcs", options->sections.salcs, "SALCs of each set, shell and irrep");
   flag("--local", options->local, "SALCs in each atom's own frame: σ and π about the centre");
   flag("--transitions", options->transitions,

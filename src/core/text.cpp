@@ -33,8 +33,7 @@ std::string nearest_word(std::string_view word, std::span<const std::string> kno
   std::size_t best_distance = 0;
   for (const std::string& candidate : known) {
     const std::size_t distance = edit_distance(word, candidate);
-    const std::size_t limit =
-        std::max<std::size_t>(2, std::max(word.size(), candidate.size()) / 3);
+    const std::size_t limit = std::max<std::size_t>(2, std::max(word.size(), candidate.size()) / 3);
     if (distance <= limit && (best.empty() || distance < best_distance)) {
       best = candidate;
       best_distance = distance;

@@ -47,11 +47,10 @@ EnergyWindow frontier_window(const std::vector<DiagramColumn>& columns) {
     };
     const double low = reach(occupied, below_ev, 3, 14);
     const double high = reach(empty, above_ev, 2, 10);
-    const auto front = [](const std::vector<double>& energies) {
-      return energies.empty() ? std::nan("") : energies.front();
-    };
-    for (const double energy : {low, high, front(occupied), front(empty)}) {
-      if (std::isnan(energy)) continue;
+    const double homo = reach(occupied, 0.0, 1, 1);
+    const double lumo = reach(empty, 0.0, 1, 1);
+    for (const double energy : {low, homo, lumo, high}) {
+      if (std::isnan(energy)) continue;  // a molecule without empty levels
       window.from_ev = std::min(window.from_ev, energy);
       window.to_ev = std::max(window.to_ev, energy);
     }

@@ -19,6 +19,14 @@ Matrix hamiltonian(const Matrix& mapped, const std::vector<Salc>& salcs, const B
 
 }  // namespace
 
+SymmetryBlock hamiltonian_block(const SymmetryBlock& mapped_off_site,
+                                const std::vector<Salc>& salcs, const Basis& basis,
+                                const OffDiagonalRule& rule) {
+  return std::visit(
+      [&](const auto& mapped) { return SymmetryBlock(hamiltonian(mapped, salcs, basis, rule)); },
+      mapped_off_site);
+}
+
 std::vector<HueckelBlock> hueckel_blocks(const MolecularSymmetry& symmetry, const Basis& basis,
                                          const SalcBasis& salcs, const OffDiagonalRule& rule) {
   const std::vector<SymmetryBlock> overlaps = off_site_blocks(symmetry, basis, salcs);

@@ -21,4 +21,10 @@ struct HueckelBlock {
                                                        const Basis& basis, const SalcBasis& salcs,
                                                        const OffDiagonalRule& rule);
 
+/// H of one irrep from what the rule makes of the overlaps, as `off_site_blocks` gives it: for
+/// those who solve again with other H_ii and keep the overlaps.
+[[nodiscard]] SymmetryBlock hamiltonian_block(const SymmetryBlock& mapped_off_site,
+                                              const std::vector<Salc>& salcs, const Basis& basis,
+                                              const OffDiagonalRule& rule);
+
 }  // namespace irrepwise

@@ -25,7 +25,8 @@ Eigen::MatrixXd off_site(const Molecule& molecule, const Basis& basis, const Ove
             for (double& overlap : overlaps) overlap = map(overlap);
           }
           const OverlapBlock block = frame.block(overlaps, shell_a.l, shell_b.l);
-          matrix.block(shell_a.first_orbital, shell_b.first_orbital, block.rows(), block.cols()) = block;
+          matrix.block(shell_a.first_orbital, shell_b.first_orbital, block.rows(), block.cols()) =
+              block;
           matrix.block(shell_b.first_orbital, shell_a.first_orbital, block.cols(), block.rows()) =
               block.transpose();
         }

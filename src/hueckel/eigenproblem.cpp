@@ -36,7 +36,9 @@ Eigenpairs<Scalar> solve(const typename Eigenpairs<Scalar>::Matrix& hamiltonian,
   const Eigen::LLT<Matrix> cholesky(overlap);
   pairs.positive = cholesky.info() == Eigen::Success;
   if (!pairs.positive) return pairs;
-  pairs.reciprocal_condition = cholesky.rcond();
+  // Eigen estimates the norm of the inverse and divides by that of S: take the latter out again.
+  const Matrix full = overlap.template selfadjointView<Eigen::Lower>();
+  pairs.smallest_overlap = cholesky.rcond() * full.cwiseAbs().colwise().sum().maxCoeff();
 
   // L^-1 H L^-H, whose eigenvectors y give c = L^-H y.
   Matrix standard = hamiltonian.template selfadjointView<Eigen::Lower>();

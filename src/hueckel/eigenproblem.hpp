@@ -11,10 +11,10 @@ template <typename Scalar>
 struct Eigenpairs {
   using Matrix = Eigen::Matrix<Scalar, Eigen::Dynamic, Eigen::Dynamic>;
 
-  bool positive = true;         // whether S is positive definite; if not, the rest is empty
-  double reciprocal_condition = 1.0;  // estimate for S
-  Eigen::VectorXd energies;     // ascending
-  Matrix vectors;               // columns, C^H S C = 1
+  bool positive = true;           // whether S is positive definite; if not, the rest is empty
+  double smallest_overlap = 1.0;  // smallest eigenvalue of S, to within a small factor
+  Eigen::VectorXd energies;       // ascending
+  Matrix vectors;                 // columns, C^H S C = 1
 };
 
 /// By Cholesky's factor of S. Large blocks go to LAPACK's divide and conquer where it was found

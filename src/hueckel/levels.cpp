@@ -62,16 +62,18 @@ void judge_overlap(const HueckelBlock& block, const MolecularSymmetry& symmetry,
   const SmallestOverlap smallest =
       smallest_overlap(block.overlap, symmetry, basis, result.salcs, irrep);
   if (!positive || smallest.eigenvalue <= 1e-12) {
-    throw Error(fmt::format(
-        "the overlap of {} is not positive definite (smallest eigenvalue {:.1e}), through {}; atoms "
-        "stand too close, or exponents are too small",
-        irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
+    throw Error(
+        fmt::format("the overlap of {} is not positive definite (smallest eigenvalue {:.1e}), "
+                    "through {}; atoms "
+                    "stand too close, or exponents are too small",
+                    irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
   }
   if (smallest.eigenvalue < near_singular_overlap) {
-    result.warnings.push_back(fmt::format(
-        "the overlap of {} is nearly singular (smallest eigenvalue {:.1e}), through {}; its highest "
-        "levels cannot be trusted",
-        irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
+    result.warnings.push_back(
+        fmt::format("the overlap of {} is nearly singular (smallest eigenvalue {:.1e}), through "
+                    "{}; its highest "
+                    "levels cannot be trusted",
+                    irrep_label(symmetry, irrep), smallest.eigenvalue, smallest.behind));
   }
 }
 
@@ -81,9 +83,8 @@ void solve_irrep(const HueckelBlock& block, const MolecularSymmetry& symmetry, c
       [&](const auto& overlap) {
         using Matrix = std::decay_t<decltype(overlap)>;
         auto pairs = solve_generalised(std::get<Matrix>(block.hamiltonian_ev), overlap);
-        // The estimate of the condition is cheap, the smallest eigenvalue itself is not; the
-        // estimate errs by a small factor only.
-        if (!pairs.positive || pairs.reciprocal_condition < 1e3 * near_singular_overlap) {
+        // The estimate is cheap, the smallest eigenvalue itself is not.
+        if (!pairs.positive || pairs.smallest_overlap < 1e3 * near_singular_overlap) {
           judge_overlap(block, symmetry, basis, irrep, pairs.positive, result);
         }
         for (Eigen::Index k = 0; k < pairs.energies.size(); ++k) {

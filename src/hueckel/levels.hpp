@@ -16,8 +16,8 @@
 namespace irrepwise {
 
 struct Level {
-  int irrep = 0;            // index in the group's irreps
-  int number = 1;           // in order of energy within the irrep, from 1
+  int irrep = 0;   // index in the group's irreps
+  int number = 1;  // in order of energy within the irrep, from 1
   double energy_ev = 0.0;
   int degeneracy = 1;
   double occupation = 0.0;  // electrons in the whole level, 0 to 2 * degeneracy

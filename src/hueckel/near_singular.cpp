@@ -5,8 +5,8 @@
 #include <utility>
 #include <vector>
 
-#include <Eigen/Eigenvalues>
 #include <fmt/format.h>
+#include <Eigen/Eigenvalues>
 
 #include "core/text.hpp"
 
@@ -22,7 +22,7 @@ std::string set_name(const MolecularSymmetry& symmetry, const EquivalentAtoms& s
     names.resize(most_atoms);
     return fmt::format("{} …", fmt::join(names, ", "));
   }
-  return fmt::format("{}", fmt::join(names, ", "));
+  return joined(names);
 }
 
 template <typename Matrix>

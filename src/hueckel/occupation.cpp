@@ -19,9 +19,8 @@ void fill_from_below(std::vector<Level>& levels, int electrons) {
 }
 
 void fill_by_multiplicity(std::vector<Level>& levels, int electrons, int multiplicity) {
-  const int orbitals = std::accumulate(levels.begin(), levels.end(), 0, [](int sum, const Level& l) {
-    return sum + l.degeneracy;
-  });
+  const int orbitals = std::accumulate(levels.begin(), levels.end(), 0,
+                                       [](int sum, const Level& l) { return sum + l.degeneracy; });
   if (multiplicity < 1) {
     throw Error(fmt::format("multiplicity = {}, expected 2S + 1, that is 1 or more", multiplicity));
   }
@@ -35,9 +34,9 @@ void fill_by_multiplicity(std::vector<Level>& levels, int electrons, int multipl
   int doubly = (electrons - unpaired) / 2;
   int singly = unpaired;
   if (doubly < 0 || doubly + singly > orbitals) {
-    throw Error(fmt::format("multiplicity {} is impossible: {} electrons in {} orbitals allow at most {}",
-                            multiplicity, electrons, orbitals,
-                            std::min(electrons, 2 * orbitals - electrons) + 1));
+    throw Error(fmt::format(
+        "multiplicity {} is impossible: {} electrons in {} orbitals allow at most {}", multiplicity,
+        electrons, orbitals, std::min(electrons, 2 * orbitals - electrons) + 1));
   }
   for (Level& level : levels) {
     const int full = std::min(doubly, level.degeneracy);
@@ -85,13 +84,15 @@ void occupy(std::vector<Level>& levels, const PointGroup& group, int electrons,
   int room = 0;
   for (const Level& level : levels) room += 2 * level.degeneracy;
   if (electrons < 1) {
-    throw Error(fmt::format("the charge leaves {} valence electrons, expected at least 1; check the "
-                            "charge",
-                            electrons));
+    throw Error(
+        fmt::format("the charge leaves {} valence electrons, expected at least 1; check the "
+                    "charge",
+                    electrons));
   }
   if (electrons > room) {
-    throw Error(fmt::format("{} valence electrons, but the orbitals hold {} at most; check the charge",
-                            electrons, room));
+    throw Error(
+        fmt::format("{} valence electrons, but the orbitals hold {} at most; check the charge",
+                    electrons, room));
   }
   if (options.multiplicity && !options.electrons_by_irrep.empty()) {
     throw Error("both a multiplicity and occupations by irrep are given; keep one of them");

@@ -16,9 +16,12 @@ double OffDiagonalRule::factor(double h_i_ev, double h_j_ev) const {
       const double square = delta * delta;
       return (k + square + (1.0 - k) * square * square) * mean;
     }
-    case Rule::WolfsbergHelmholz: return k * mean;
-    case Rule::GeometricMean: return -k * std::sqrt(h_i_ev * h_j_ev);
-    case Rule::Cusachs: return mean;
+    case Rule::WolfsbergHelmholz:
+      return k * mean;
+    case Rule::GeometricMean:
+      return -k * std::sqrt(h_i_ev * h_j_ev);
+    case Rule::Cusachs:
+      return mean;
   }
   return 0.0;
 }

@@ -32,10 +32,17 @@ std::map<std::string, int> read_occupations(const YamlNode& node) {
 
 }  // namespace
 
-HueckelOptions read_hueckel(const YamlNode& job) {
+HueckelOptions read_hueckel(const YamlNode& job, const YamlNode* variant) {
+  const auto says = [&](const char* key) { return variant && variant->find(key); };
+  // What the variant says makes the job's own words of no account, also of what they go with: its K
+  // was meant for its rule, its occupations for its irreps.
+  const auto find = [&](const char* key, const char* with) -> const YamlNode* {
+    if (says(key)) return variant->find(key);
+    return says(with) ? nullptr : job.find(key);
+  };
   HueckelOptions options;
-  if (const YamlNode* const rule = job.find("rule")) options.rule = read_rule(*rule);
-  if (const YamlNode* const k = job.find("k")) {
+  if (const YamlNode* const rule = find("rule", "")) options.rule = read_rule(*rule);
+  if (const YamlNode* const k = find("k", "rule")) {
     options.k = k->number("a number");
     if (!default_k(options.rule)) {
       k->fail(fmt::format("the rule {} has no K; remove this line", rule_name(options.rule)));
@@ -46,8 +53,8 @@ HueckelOptions read_hueckel(const YamlNode& job) {
           fmt::format("found K = {}, expected more than 0 and at most {}", *options.k, largest_k));
     }
   }
-  const YamlNode* const occupations = job.find("occupations");
-  if (const YamlNode* const multiplicity = job.find("multiplicity")) {
+  const YamlNode* const occupations = find("occupations", "multiplicity");
+  if (const YamlNode* const multiplicity = find("multiplicity", "occupations")) {
     options.multiplicity = multiplicity->whole_number("a multiplicity 2S + 1");
     if (*options.multiplicity < 1) {
       multiplicity->fail(

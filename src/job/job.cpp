@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <filesystem>
+#include <string_view>
 #include <system_error>
 #include <utility>
 
@@ -36,18 +37,89 @@ std::string read_named(const YamlNode& from, const std::string& path) {
 // The molecule with its own title, and defaults for all else.
 Job job_of(Molecule molecule) {
   std::string title = molecule.title();
-  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}};
+  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}, {}, {}};
+}
+
+// What a variant says in place of the job.
+const YamlNode* find_in(const YamlNode* variant, const char* key) {
+  return variant ? variant->find(key) : nullptr;
+}
+const YamlNode* find_in(const YamlNode& job, const YamlNode* variant, const char* key) {
+  const YamlNode* const own = find_in(variant, key);
+  return own ? own : job.find(key);
+}
+
+void read_charge(const YamlNode& node, ComplexSpec& complex) {
+  complex.charge = node.whole_number("a whole number of charges");
+  complex.charge_place = node.place();
+}
+
+BuiltComplex built_at(const ComplexSpec& complex, const YamlNode& section,
+                      const std::string& path) {
+  try {
+    return build_complex(complex);
+  } catch (const Error& error) {
+    // Where no value of the section is to blame, the section is.
+    const bool has_place = std::string_view(error.what()).starts_with(path);
+    if (has_place) throw;
+    throw error_at(section.place(), error);
+  }
+}
+
+ComplexSpec replaced(const ComplexSpec& complex, const YamlNode& replace, const std::string& path) {
+  const Substitution change = read_substitution(replace);
+  try {
+    return substituted(complex, change);
+  } catch (const Error& error) {
+    const bool has_place = std::string_view(error.what()).starts_with(path);
+    if (has_place) throw;
+    throw error_at(replace.place(), error);
+  }
+}
+
+// The molecule from `geometry` or `build`, the latter with what the variant replaces.
+Job read_structure(const YamlNode& node, const YamlNode* variant, const std::string& path,
+                   FileChain& files) {
+  const YamlNode* const build = node.find("build");
+  const YamlNode* const replace = find_in(variant, "replace");
+  const YamlNode* const other = find_in(variant, "geometry");
+  if (replace && (!build || other)) {
+    replace->fail("`replace` changes what `build` makes; use `geometry` for a structure in a file");
+  }
+  if (other) return job_of(read_geometry(*other, path, files));
+  if (!build) return job_of(read_geometry(node.at("geometry"), path, files));
+  if (const YamlNode* const geometry = node.find("geometry")) {
+    geometry->fail("`geometry` and `build` exclude each other; keep one");
+  }
+  ComplexSpec complex = read_build(*build, path, files);
+  if (const YamlNode* const charge = node.find("charge")) read_charge(*charge, complex);
+  if (replace) complex = replaced(complex, *replace, path);
+  if (const YamlNode* const charge = find_in(variant, "charge")) read_charge(*charge, complex);
+  BuiltComplex built = built_at(complex, replace ? *replace : *build, path);
+  Job job = job_of(built.molecule);
+  job.complex = std::move(complex);
+  job.built = std::move(built);
+  return job;
 }
 
 Job parse_job(const std::string& text, const std::string& path, FileChain& files) {
+  return read_job_node(YamlNode::parse(text, path), nullptr, path, files);
+}
+
+}  // namespace
+
+Job read_job_node(const YamlNode& node, const YamlNode* variant, const std::string& path,
+                  FileChain& files) {
   files.open.push_back(path);
   files.read.push_back(path);
-  const YamlNode node = YamlNode::parse(text, path);
-  node.expect_keys("a job", {"title", "geometry", "charge", "multiplicity", "occupations",
-                             "parameters", "overrides", "rule", "k", "symmetry"});
-  Job job = job_of(read_geometry(node.at("geometry"), path, files));
-  if (const YamlNode* const title = node.find("title")) job.title = title->word("a title");
-  if (const YamlNode* const charge = node.find("charge")) {
+  node.expect_keys("a job", {"title", "geometry", "build", "charge", "multiplicity", "occupations",
+                             "parameters", "overrides", "rule", "k", "symmetry", "variants"});
+  Job job = read_structure(node, variant, path, files);
+  if (const YamlNode* const title = find_in(node, variant, "title")) {
+    job.title = title->word("a title");
+  }
+  const YamlNode* const charge = find_in(node, variant, "charge");
+  if (charge && !job.built) {
     const int value = charge->whole_number("a whole number of charges");
     try {
       job.molecule = job.molecule.with_charge(value);
@@ -55,22 +127,27 @@ Job parse_job(const std::string& text, const std::string& path, FileChain& files
       throw error_at(charge->place(), error);
     }
   }
-  if (const YamlNode* const parameters = node.find("parameters")) {
+  if (const YamlNode* const parameters = find_in(node, variant, "parameters")) {
     job.parameters = read_job_parameters(*parameters, path, files);
   }
   if (const YamlNode* const overrides = node.find("overrides")) {
-    job.overrides = read_overrides(*overrides, job.molecule, job.parameters);
+    // What the job says of an element concerns the variants that have it.
+    const AbsentElement absent = variant ? AbsentElement::Skipped : AbsentElement::Refused;
+    job.overrides = read_overrides(*overrides, job.molecule, job.parameters, absent);
   }
-  if (const YamlNode* const symmetry = node.find("symmetry")) {
+  if (const YamlNode* const overrides = find_in(variant, "overrides")) {
+    for (ParameterOverride& change : read_overrides(*overrides, job.molecule, job.parameters)) {
+      job.overrides.push_back(std::move(change));
+    }
+  }
+  if (const YamlNode* const symmetry = find_in(node, variant, "symmetry")) {
     job.symmetry = read_symmetry(*symmetry, job.molecule);
   }
-  job.hueckel = read_hueckel(node);
+  job.hueckel = read_hueckel(node, variant);
   files.open.pop_back();
   job.source_files = files.read;
   return job;
 }
-
-}  // namespace
 
 Molecule read_geometry_file(const YamlNode& from, const std::string& path, FileChain& files) {
   if (!is_job_file(path)) {

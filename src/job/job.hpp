@@ -8,6 +8,8 @@
 
 #include "basis/basis.hpp"
 #include "basis/parameter_set.hpp"
+#include "complex/build.hpp"
+#include "complex/spec.hpp"
 #include "hueckel/options.hpp"
 #include "molecule/molecule.hpp"
 #include "symmetry/options.hpp"
@@ -23,6 +25,9 @@ struct Job {
   HueckelOptions hueckel;
   // The job file and every file it read, so that no output overwrites an input.
   std::vector<std::string> source_files;
+  // Of a job that builds its complex: what it says, and what came of it.
+  std::optional<ComplexSpec> complex;
+  std::optional<BuiltComplex> built;
 };
 
 /// Reads a job: a name that ends in .yaml or .yml is a job file, any other an XYZ file.

@@ -10,8 +10,10 @@
 
 #include "basis/basis.hpp"
 #include "basis/parameter_set.hpp"
+#include "complex/spec.hpp"
 #include "core/yaml.hpp"
 #include "hueckel/options.hpp"
+#include "job/job.hpp"
 #include "molecule/molecule.hpp"
 #include "symmetry/options.hpp"
 
@@ -30,20 +32,40 @@ struct FileChain {
 [[nodiscard]] Molecule read_geometry(const YamlNode& node, const std::string& beside,
                                      FileChain& files);
 
+/// `build`: a metal, a polyhedron and ligands, or two centres with bridges, in place of `geometry`.
+/// @param beside  the job file, beside which a library of ligands is looked for
+[[nodiscard]] ComplexSpec read_build(const YamlNode& node, const std::string& beside,
+                                     FileChain& files);
+
+/// One ligand: its name, or a map with `ligand`, `vertices` and more.
+[[nodiscard]] LigandRequest read_ligand_request(const YamlNode& node);
+
+/// A change of a complex: `metal`, `oxidation`, `polyhedron`, `ligands` with the vertices that they
+/// take over, `distances` by vertex.
+[[nodiscard]] Substitution read_substitution(const YamlNode& node);
+
 /// `parameters`: `published`, the name of a file, or a parameter set in place.
 [[nodiscard]] ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
                                                FileChain& files);
 
+enum class AbsentElement { Refused, Skipped };
+
 /// `overrides`: a list, each for an `element` or an `atom`.
-[[nodiscard]] std::vector<ParameterOverride> read_overrides(const YamlNode& node,
-                                                            const Molecule& molecule,
-                                                            const ParameterSet& parameters);
+/// @param absent  what to do with an override of an element that the molecule lacks
+[[nodiscard]] std::vector<ParameterOverride> read_overrides(
+    const YamlNode& node, const Molecule& molecule, const ParameterSet& parameters,
+    AbsentElement absent = AbsentElement::Refused);
 
 /// `symmetry`: `tolerance`, `limit`, `axes`, `group`, `subgroup`.
 [[nodiscard]] SymmetryOptions read_symmetry(const YamlNode& node, const Molecule& molecule);
 
-/// `rule`, `k`, `multiplicity` and `occupations` of the job itself.
-[[nodiscard]] HueckelOptions read_hueckel(const YamlNode& job);
+/// `rule`, `k`, `multiplicity` and `occupations` of the job itself, unless the variant has its own.
+[[nodiscard]] HueckelOptions read_hueckel(const YamlNode& job, const YamlNode* variant = nullptr);
+
+/// A whole job, with the keys of one of its `variants` in place of its own.
+/// @param variant  null for the job as it is
+[[nodiscard]] Job read_job_node(const YamlNode& node, const YamlNode* variant,
+                                const std::string& path, FileChain& files);
 
 /// The atoms of a job or an XYZ file, through a chain of files.
 /// @param from  the value that names the file; its place is blamed where the file cannot be read

@@ -14,6 +14,19 @@
 namespace irrepwise {
 namespace {
 
+bool has_element(const Molecule& molecule, int z) {
+  return std::any_of(molecule.atoms().begin(), molecule.atoms().end(),
+                     [&](const Atom& atom) { return atom.atomic_number == z; });
+}
+
+bool concerns_absent_element(const YamlNode& node, const Molecule& molecule) {
+  const YamlNode* const element =
+      node.kind() == YamlNode::Kind::Map ? node.find("element") : nullptr;
+  if (!element || element->kind() != YamlNode::Kind::Word) return false;
+  const std::optional<int> z = atomic_number(element->word());
+  return z && !has_element(molecule, *z);
+}
+
 void read_target(const YamlNode& node, const Molecule& molecule, ParameterOverride& change) {
   const YamlNode* const element = node.find("element");
   const YamlNode* const atom = node.find("atom");
@@ -33,10 +46,7 @@ void read_target(const YamlNode& node, const Molecule& molecule, ParameterOverri
   if (!change.atomic_number) {
     element->fail(fmt::format("{} is not an element{}", quoted(symbol), symbol_hint(symbol)));
   }
-  const bool there =
-      std::any_of(molecule.atoms().begin(), molecule.atoms().end(),
-                  [&](const Atom& a) { return a.atomic_number == *change.atomic_number; });
-  if (!there) {
+  if (!has_element(molecule, *change.atomic_number)) {
     element->fail(fmt::format("there is no {} in {}", element_symbol(*change.atomic_number),
                               hill_formula(molecule)));
   }
@@ -93,9 +103,11 @@ ParameterOverride read_override(const YamlNode& node, const Molecule& molecule,
 }  // namespace
 
 std::vector<ParameterOverride> read_overrides(const YamlNode& node, const Molecule& molecule,
-                                              const ParameterSet& parameters) {
+                                              const ParameterSet& parameters,
+                                              AbsentElement absent) {
   std::vector<ParameterOverride> overrides;
   for (const YamlNode& item : node.list("a list of overrides")) {
+    if (absent == AbsentElement::Skipped && concerns_absent_element(item, molecule)) continue;
     overrides.push_back(read_override(item, molecule, parameters));
   }
   return overrides;

@@ -28,9 +28,12 @@ struct Notation {
 int root_of_unity(const Schoenflies& symbol) {
   switch (symbol.family) {
     case Family::T:
-    case Family::Th: return 3;
-    case Family::S2n: return 2 * symbol.n;
-    default: return symbol.n;
+    case Family::Th:
+      return 3;
+    case Family::S2n:
+      return 2 * symbol.n;
+    default:
+      return symbol.n;
   }
 }
 
@@ -68,8 +71,7 @@ std::string complex_text(const std::complex<double>& value, Notation& notation) 
 
 // Characters of the continuous groups depend on the angle: 2 cos mφ.
 std::string infinite_text(const Schoenflies& symbol, const ConjugacyClass& conjugacy,
-                          const Irrep& irrep, double value,
-                          Notation& notation) {
+                          const Irrep& irrep, double value, Notation& notation) {
   const bool by_angle = conjugacy.symbol.find("phi") != std::string::npos;
   if (!by_angle || symbol.is_finite() || irrep.dimension == 1) return real_text(value, notation);
   int m = 0;
@@ -157,8 +159,7 @@ std::vector<Table> character_tables(const PointGroup& group, int width) {
       }
       used += 2 + column_width;
       if (used > width && next > first) break;
-      table.columns.push_back(
-          {group.classes()[next].symbol, header, "", Align::Right, 0, false});
+      table.columns.push_back({group.classes()[next].symbol, header, "", Align::Right, 0, false});
     }
     for (const Line& line : lines) {
       Row row{{SymmetryLabel{line.label}}};

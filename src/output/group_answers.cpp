@@ -77,8 +77,8 @@ std::vector<Table> descent_tables(const PointGroup& group,
     for (std::size_t i = 0; i < group.irreps().size(); ++i) {
       Row row{{SymmetryLabel{group.irreps()[i].label}}};
       for (std::size_t d = first; d < next; ++d) {
-        row.cells.emplace_back(readable_states(
-            reduction_of(descents[d].embedding.subgroup, descents[d].times[i])));
+        row.cells.emplace_back(
+            readable_states(reduction_of(descents[d].embedding.subgroup, descents[d].times[i])));
       }
       table.lines.emplace_back(std::move(row));
     }
@@ -108,19 +108,22 @@ Table transition_table(const PointGroup& group, const FrontierSymmetry& frontier
              SymmetryLabel{level_name(group, levels[transition.to])},
              axes.empty() ? "forbidden" : axes, transition.rule.two_photon ? "active" : "–"}});
   }
-  table.notes.push_back("Spin is not considered; a transition may borrow intensity from vibrations.");
+  table.notes.push_back(
+      "Spin is not considered; a transition may borrow intensity from vibrations.");
   return table;
 }
 
 std::string distortion_words(const TermDistortion& distortion) {
   switch (distortion.kind) {
-    case DistortionKind::None: return "none: not degenerate";
+    case DistortionKind::None:
+      return "none: not degenerate";
     case DistortionKind::JahnTeller:
       return distortion.modes.empty() ? "Jahn–Teller, but this molecule has no such mode"
                                       : "Jahn–Teller along " + readable_reduction(distortion.modes);
     case DistortionKind::RennerTeller:
-      return distortion.modes.empty() ? "Renner–Teller, but this molecule cannot bend"
-                                      : "Renner–Teller along " + readable_reduction(distortion.modes);
+      return distortion.modes.empty()
+                 ? "Renner–Teller, but this molecule cannot bend"
+                 : "Renner–Teller along " + readable_reduction(distortion.modes);
   }
   return {};
 }

@@ -36,7 +36,7 @@ std::string group_words(const MolecularSymmetry& symmetry) {
   if (!symmetry.full_group.empty() && symmetry.full_group != name) {
     words += ", a subgroup of " + readable_group(symmetry.full_group);
   }
-  return fmt::format("{} at tolerance {} Å; largest shift of an atom {:.4f} Å", words,
+  return fmt::format("{} at tolerance {:.4g} Å; largest shift of an atom {:.4f} Å", words,
                      symmetry.tolerance_angstrom, symmetry.largest_shift_angstrom);
 }
 

@@ -7,11 +7,15 @@
 
 #include "core/exact_number.hpp"
 #include "core/text.hpp"
+#include "output/display_width.hpp"
+#include "output/equivalence.hpp"
 
 namespace irrepwise {
 namespace {
 
 constexpr int most_atoms_in_columns = 8;
+constexpr int most_partners_in_columns = 5;
+constexpr int widest = 98;  // columns of text
 
 using Functions = std::vector<const SalcFunction*>;  // of one part of one set
 
@@ -25,7 +29,8 @@ std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
   for (const int component : salc.components) {
     names.push_back(salc_orbital_name(shell, component, salc.local));
   }
-  return fmt::format("SALCs of {} on {}{}", joined(names), result.named_sets[salc.set].name,
+  return fmt::format("SALCs of {} on {}{}", joined(names),
+                     atom_sets(result.symmetry)[salc.set].name,
                      salc.part == Part::PiInPlane      ? " (in plane)"
                      : salc.part == Part::PiOutOfPlane ? " (out of plane)"
                                                        : "");
@@ -66,7 +71,8 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
       const Eigen::VectorXd column = salc->coefficients.col(static_cast<Eigen::Index>(i));
       if (column.isZero(0.0)) continue;
       Row row{{SymmetryLabel{label}, partner}};
-      if (!one_orbital) row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
+      if (!one_orbital)
+        row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
       for (const double value : column) row.cells.emplace_back(coefficient_text(value));
       table.lines.emplace_back(std::move(row));
       label.clear();
@@ -76,11 +82,7 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
   return table;
 }
 
-Table partners_in_columns(const SymmetryResult& result, const Functions& functions, int irrep) {
-  Functions chosen;
-  for (const SalcFunction* salc : functions) {
-    if (salc->irrep == irrep) chosen.push_back(salc);
-  }
+Table partners_in_columns(const SymmetryResult& result, const Functions& chosen, bool several) {
   const SalcFunction& first = *chosen.front();
   const Shell& shell = result.orbitals->basis.shells[first.shell];
   const std::string label = irrep_label(result, first);
@@ -88,7 +90,6 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& functio
   table.caption = caption(result, first) + ": " + readable_label(label);
   table.columns = {{"atom", "atom", "", Align::Left, 0, false},
                    {"orbital", "orbital", "", Align::Left, 0, false}};
-  const bool several = several_in(functions, irrep);
   for (const SalcFunction* salc : chosen) {
     const std::string words = partner_words(result, *salc, several);
     const std::string header = readable_label(label) + (words.empty() ? "" : " " + words);
@@ -101,8 +102,8 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& functio
       Row row{{name, salc_orbital_name(shell, first.components[i], first.local)}};
       bool any = false;
       for (const SalcFunction* salc : chosen) {
-        const double value = salc->coefficients(static_cast<Eigen::Index>(atom),
-                                                static_cast<Eigen::Index>(i));
+        const double value =
+            salc->coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         any = any || value != 0.0;
         row.cells.emplace_back(coefficient_text(value));
       }
@@ -112,6 +113,41 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& functio
     }
   }
   return table;
+}
+
+// The partners of one SALC stand together; non-degenerate ones fill a table five at a time.
+std::vector<Table> tables_by_irrep(const SymmetryResult& result, const Functions& functions) {
+  std::vector<Table> tables;
+  Functions chosen;
+  for (std::size_t i = 0; i < functions.size(); ++i) {
+    chosen.push_back(functions[i]);
+    const int irrep = functions[i]->irrep;
+    const bool last = i + 1 == functions.size();
+    const int with_next =
+        static_cast<int>(chosen.size()) + result.symmetry.group.irreps()[irrep].dimension;
+    const bool next_is_partner = !last && functions[i + 1]->partner > 1;
+    const bool next_fits =
+        !last && functions[i + 1]->irrep == irrep && with_next <= most_partners_in_columns;
+    if (next_is_partner || next_fits) continue;
+    tables.push_back(partners_in_columns(result, chosen, several_in(functions, irrep)));
+    chosen.clear();
+  }
+  return tables;
+}
+
+// Columns that a table fills at most, as text.
+int width_of(const Table& table) {
+  int width = 2;
+  for (std::size_t i = 0; i < table.columns.size(); ++i) {
+    int column = display_width(table.columns[i].header);
+    for (const auto& line : table.lines) {
+      if (const Row* row = std::get_if<Row>(&line)) {
+        column = std::max(column, display_width(cell_text(row->cells[i])));
+      }
+    }
+    width += column + 2;
+  }
+  return width;
 }
 
 }  // namespace
@@ -136,23 +172,29 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
     const int size = result.sets[first.set].size();
     if (size == 1) continue;
     if (size <= most_atoms_in_columns) {
-      tables.push_back(atoms_in_columns(result, functions));
-      continue;
+      Table table = atoms_in_columns(result, functions);
+      if (width_of(table) <= widest) {
+        tables.push_back(std::move(table));
+        continue;
+      }
     }
-    int last = -1;
-    for (const SalcFunction* salc : functions) {
-      if (salc->irrep == last) continue;
-      last = salc->irrep;
-      tables.push_back(partners_in_columns(result, functions, last));
-    }
+    for (Table& table : tables_by_irrep(result, functions)) tables.push_back(std::move(table));
   }
-  const bool local = std::any_of(salcs.begin(), salcs.end(),
-                                 [](const SalcFunction& salc) { return salc.local; });
+  const bool local =
+      std::any_of(salcs.begin(), salcs.end(), [](const SalcFunction& salc) { return salc.local; });
+  const bool several = std::any_of(salcs.begin(), salcs.end(), [&](const SalcFunction& salc) {
+    return salc.number > 1 && result.sets[salc.set].size() > 1;
+  });
   if (!tables.empty()) {
-    tables.back().notes.push_back(
-        local ? "Orbitals of each atom's own frame: z towards the centre, x and y across it; y points "
-                "along +z of the molecule where it can."
-              : "Orbitals of the standard frame.");
+    if (several) {
+      tables.back().notes.push_back(
+          "2.1: the first partner of the second SALC of that irrep; without a point the number "
+          "alone.");
+    }
+    tables.back().notes.push_back(local ? "Orbitals of each atom's own frame: z towards the "
+                                          "centre, x and y across it; y points "
+                                          "along +z of the molecule where it can."
+                                        : "Orbitals of the standard frame.");
   }
   return tables;
 }

@@ -3,7 +3,7 @@
 
 #include <vector>
 
-#include "output/symmetry_result.hpp"
+#include "analysis/symmetry_result.hpp"
 #include "output/table.hpp"
 
 namespace irrepwise {

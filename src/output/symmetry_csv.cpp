@@ -23,8 +23,8 @@ class Rows {
     }
   }
   void add(const Subject& of, Cell value) {
-    table_.lines.emplace_back(Row{{of.section, of.set, of.part, of.irrep, of.partner, of.atom,
-                                   of.name, std::move(value)}});
+    table_.lines.emplace_back(Row{
+        {of.section, of.set, of.part, of.irrep, of.partner, of.atom, of.name, std::move(value)}});
   }
   void add(const Subject& of, const Reduction& reduction) {
     for (const IrrepCount& part : reduction) {
@@ -71,13 +71,16 @@ void add_answers(Rows& rows, const PointGroup& group, const GroupAnswers& answer
   }
   for (const TermsAnswer& answer : answers.terms) {
     for (const Term& term : answer.terms) {
-      rows.add({.section = "term", .part = answer.configuration, .name = term_text({term.multiplicity, term.irrep, term.dimension, 1})},
+      rows.add({.section = "term",
+                .part = answer.configuration,
+                .name = term_text({term.multiplicity, term.irrep, term.dimension, 1})},
                Number{double(term.count), 0});
     }
   }
   for (const DescentAnswer& descent : answers.descents) {
     for (std::size_t i = 0; i < descent.times.size(); ++i) {
-      rows.add({.section = "descent", .part = level_label(group.irreps()[i].label),
+      rows.add({.section = "descent",
+                .part = level_label(group.irreps()[i].label),
                 .name = descent.embedding.name},
                reduction_of(descent.embedding.subgroup, descent.times[i]));
     }
@@ -87,7 +90,8 @@ void add_answers(Rows& rows, const PointGroup& group, const GroupAnswers& answer
 void add_orbitals(Rows& rows, const SymmetryResult& result) {
   for (const OrbitalReduction& reduction : result.orbitals->reductions) {
     const int l = result.orbitals->basis.shells[reduction.shells.front()].l;
-    rows.add({.section = "reduction", .set = atoms_text(result.sets[reduction.set].atoms),
+    rows.add({.section = "reduction",
+              .set = atoms_text(result.sets[reduction.set].atoms),
               .part = part_key(reduction.part, l)},
              reduction_of(result.symmetry.group, reduction.times));
   }
@@ -96,8 +100,8 @@ void add_orbitals(Rows& rows, const SymmetryResult& result) {
     const std::vector<int>& atoms = result.sets[salc.set].atoms;
     for (std::size_t atom = 0; atom < atoms.size(); ++atom) {
       for (std::size_t i = 0; i < salc.components.size(); ++i) {
-        const double value = salc.coefficients(static_cast<Eigen::Index>(atom),
-                                               static_cast<Eigen::Index>(i));
+        const double value =
+            salc.coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         if (value == 0.0) continue;
         rows.add({"salc", atoms_text(atoms), part_key(salc.part, shell.l),
                   level_label(result.symmetry.group.irreps()[salc.irrep].label),
@@ -124,8 +128,9 @@ void add_frontier(Rows& rows, const PointGroup& group, const FrontierSymmetry& f
              Number{transition.rule.two_photon ? 1.0 : 0.0, 0});
   }
   for (const Term& term : frontier.terms) {
-    rows.add({.section = "term", .name = term_text({term.multiplicity, term.irrep, term.dimension, 1})},
-             Number{double(term.count), 0});
+    rows.add(
+        {.section = "term", .name = term_text({term.multiplicity, term.irrep, term.dimension, 1})},
+        Number{double(term.count), 0});
   }
 }
 

@@ -1,5 +1,7 @@
 #include "output/symmetry_json.hpp"
 
+#include <cmath>
+
 #include <nlohmann/json.hpp>
 
 #include "core/exact_number.hpp"
@@ -16,6 +18,12 @@ Json counts_json(const Reduction& reduction) {
   Json counts = Json::object();
   for (const IrrepCount& part : reduction) counts[level_label(part.label)] = part.count;
   return counts;
+}
+
+// Rounding of the matrices kept out of characters that are whole or half numbers.
+double tidy(double value) {
+  const double halves = std::round(2.0 * value) / 2.0;
+  return finite_number(std::abs(value - halves) < 1e-12 ? halves : value);
 }
 
 Json vector_json(const Eigen::Ref<const Eigen::VectorXd>& values) {
@@ -46,10 +54,10 @@ Json irreps_json(const PointGroup& group) {
     Json characters = Json::array(), complex = Json::array(), names = Json::array();
     for (const ConjugacyClass& conjugacy : group.classes()) {
       const int g = conjugacy.operations.front();
-      characters.push_back(finite_number(irrep.characters[g]));
+      characters.push_back(tidy(irrep.characters[g]));
       if (!irrep.complex_pair) continue;
       const std::complex<double> value = complex_character(irrep, g);
-      complex.push_back({finite_number(value.real()), finite_number(value.imag())});
+      complex.push_back({tidy(value.real()), tidy(value.imag())});
     }
     for (const FunctionSet& set : functions[i]) names.push_back(function_text(set));
     Json entry = {{"label", level_label(irrep.label)},
@@ -86,7 +94,8 @@ void add_group(Json& document, const PointGroup& group) {
 void add_answers(Json& document, const PointGroup& group, const GroupAnswers& answers) {
   document["products"] = Json::array();
   for (const ProductAnswer& answer : answers.products) {
-    Json entry = {{"product", factors_text(answer.factors)}, {"irreps", counts_json(answer.product)}};
+    Json entry = {{"product", factors_text(answer.factors)},
+                  {"irreps", counts_json(answer.product)}};
     if (answer.has_parts) {
       entry["symmetric"] = counts_json(answer.symmetric);
       entry["antisymmetric"] = counts_json(answer.antisymmetric);
@@ -173,8 +182,8 @@ Json salcs_json(const SymmetryResult& result) {
     Json coefficients = Json::array();
     for (std::size_t atom = 0; atom < atoms.size(); ++atom) {
       for (std::size_t i = 0; i < salc.components.size(); ++i) {
-        const double value = salc.coefficients(static_cast<Eigen::Index>(atom),
-                                               static_cast<Eigen::Index>(i));
+        const double value =
+            salc.coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         if (value == 0.0) continue;
         Json entry = {{"atom", atoms[atom] + 1},
                       {"orbital", salc_orbital_name(shell, salc.components[i], salc.local)},
@@ -227,11 +236,11 @@ Json changes_json(const std::vector<Relabelled>& changes, bool irreps) {
 
 }  // namespace
 
-std::string symmetry_json(const SymmetryResult& result) {
+std::string symmetry_json(const SymmetryResult& result, const SymmetryHeadings& headings) {
   const MolecularSymmetry& symmetry = result.symmetry;
   const PointGroup& group = symmetry.group;
   Json document = {{"schema", "irrepwise.symmetry.1"},
-                   {"title", result.title},
+                   {"title", headings.title},
                    {"formula", hill_formula(result.molecule)},
                    {"charge", result.molecule.charge()}};
   add_group(document, group);
@@ -266,7 +275,7 @@ std::string symmetry_json(const SymmetryResult& result) {
     document["transitions"] = document["terms"] = document["ground_terms"] = Json::array();
   }
   add_answers(document, group, result.answers);
-  document["warnings"] = result.warnings;
+  document["warnings"] = headings.warnings;
   return json_text(document);
 }
 

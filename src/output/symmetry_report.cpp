@@ -1,6 +1,7 @@
 #include "output/symmetry_report.hpp"
 
 #include <iterator>
+#include <string_view>
 #include <utility>
 
 #include <fmt/format.h>
@@ -24,6 +25,19 @@ std::string group_words(const MolecularSymmetry& symmetry) {
   return words + fmt::format(" at tolerance {:.4g} Å", symmetry.tolerance_angstrom);
 }
 
+// Lines break between the rungs only, after an arrow.
+std::string unbroken_rungs(std::string words) {
+  for (const auto& [breaks, keeps] :
+       {std::pair<std::string_view, std::string_view>{" at ", "\u00a0at\u00a0"},
+        {" Å", "\u00a0Å"},
+        {" →", "\u00a0→"}}) {
+    for (std::size_t at = words.find(breaks); at != std::string::npos; at = words.find(breaks)) {
+      words.replace(at, breaks.size(), keeps);
+    }
+  }
+  return words;
+}
+
 // "B1g and B2g change places", or "B1g → B3g" for longer cycles.
 std::vector<std::string> effect_words(const AxisEffect& effect) {
   std::vector<std::string> lines;
@@ -32,13 +46,16 @@ std::vector<std::string> effect_words(const AxisEffect& effect) {
     for (std::size_t i = 0; i < changes.size(); ++i) {
       bool swapped = false, counted = false;
       for (std::size_t j = 0; j < changes.size(); ++j) {
-        const bool back = changes[j].before == changes[i].after && changes[j].after == changes[i].before;
+        const bool back =
+            changes[j].before == changes[i].after && changes[j].after == changes[i].before;
         swapped = swapped || back;
         counted = counted || (back && j < i);
       }
       if (counted) continue;
-      words += (words.empty() ? "" : ", ") + readable(changes[i].before) +
-               (swapped ? " ↔ " : " → ") + readable(changes[i].after);
+      const bool turn_over = swapped && changes[i].after < changes[i].before;
+      words +=
+          (words.empty() ? "" : ", ") + readable(turn_over ? changes[i].after : changes[i].before) +
+          (swapped ? " ↔ " : " → ") + readable(turn_over ? changes[i].before : changes[i].after);
     }
     return words;
   };
@@ -60,7 +77,7 @@ std::vector<Fact> header(const SymmetryResult& result) {
                    {fmt::format("largest {:.4f} Å, root mean square {:.4f} Å",
                                 symmetry.largest_shift_angstrom, symmetry.rms_shift_angstrom)}});
   facts.push_back({"ladder",
-                   {ladder_words(result.ladder),
+                   {unbroken_rungs(ladder_words(result.ladder)),
                     fmt::format("searched to {} Å", result.limit_angstrom)}});
   facts.push_back({"axes", symmetry.axes});
   if (result.user_axes) {
@@ -74,6 +91,14 @@ std::vector<Fact> header(const SymmetryResult& result) {
   return facts;
 }
 
+std::string irrep_count_words(const PointGroup& group) {
+  int pairs = 0;
+  for (const Irrep& irrep : group.irreps()) pairs += irrep.complex_pair ? 1 : 0;
+  const int all = static_cast<int>(group.irreps().size()) + pairs;
+  if (pairs == 0) return std::to_string(all);
+  return fmt::format("{}, of which {} are pairs of complex conjugates", all, 2 * pairs);
+}
+
 void append(std::vector<Table>& tables, std::vector<Table> more) {
   tables.insert(tables.end(), std::make_move_iterator(more.begin()),
                 std::make_move_iterator(more.end()));
@@ -81,9 +106,10 @@ void append(std::vector<Table>& tables, std::vector<Table> more) {
 
 }  // namespace
 
-Report symmetry_report(const SymmetryResult& result, const SymmetrySections& sections, int width) {
+Report symmetry_report(const SymmetryResult& result, const SymmetryHeadings& headings,
+                       const SymmetrySections& sections, int width) {
   Report report;
-  report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+  report.title = headings.title.empty() ? charged_formula(result.molecule) : headings.title;
   report.facts = header(result);
   const PointGroup& group = result.symmetry.group;
   append(report.tables, character_tables(group, width));
@@ -100,13 +126,16 @@ Report symmetry_report(const SymmetryResult& result, const SymmetrySections& sec
   }
   if (result.frontier) append(report.tables, frontier_tables(group, *result.frontier));
   append(report.tables, answer_tables(group, result.answers));
-  report.warnings = result.warnings;
+  report.warnings = headings.warnings;
   return report;
 }
 
 Report group_report(const PointGroup& group, const GroupAnswers& answers, int width) {
   Report report;
-  report.title = group.symbol().name();
+  report.title = "Point group " + group.symbol().name();
+  report.facts = {
+      {"order", {group.symbol().is_finite() ? std::to_string(group.order()) : "infinite"}},
+      {"irreps", {group.symbol().is_finite() ? irrep_count_words(group) : "infinitely many"}}};
   append(report.tables, character_tables(group, width));
   report.tables.push_back(function_table(group));
   append(report.tables, answer_tables(group, answers));

@@ -5,6 +5,7 @@
 #include <fmt/format.h>
 
 #include "core/text.hpp"
+#include "output/equivalence.hpp"
 #include "output/symmetry_words.hpp"
 #include "symmetry/operation.hpp"
 
@@ -14,7 +15,8 @@ namespace {
 std::string direction_words(const Eigen::Vector3d& axis) {
   static constexpr const char* names[] = {"x", "y", "z"};
   for (int i = 0; i < 3; ++i) {
-    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9) return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
+    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9)
+      return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
   }
   std::string words;
   for (int i = 0; i < 3; ++i) {
@@ -26,11 +28,16 @@ std::string direction_words(const Eigen::Vector3d& axis) {
 
 const char* kind_words(const SymmetryOperation& operation) {
   switch (operation.kind) {
-    case OperationKind::Identity: return "identity";
-    case OperationKind::Rotation: return "rotation about";
-    case OperationKind::Inversion: return "inversion";
-    case OperationKind::Reflection: return "reflection across";
-    case OperationKind::Rotoreflection: return "rotoreflection about";
+    case OperationKind::Identity:
+      return "identity";
+    case OperationKind::Rotation:
+      return "rotation about";
+    case OperationKind::Inversion:
+      return "inversion";
+    case OperationKind::Reflection:
+      return "reflection across";
+    case OperationKind::Rotoreflection:
+      return "rotoreflection about";
   }
   return "";
 }
@@ -42,9 +49,13 @@ std::string cycle_words(const Molecule& molecule, const std::vector<int>& images
   for (std::size_t start = 0; start < images.size(); ++start) {
     if (seen[start] || images[start] == static_cast<int>(start)) continue;
     std::string cycle;
+    int length = 0;
     for (std::size_t atom = start; !seen[atom]; atom = static_cast<std::size_t>(images[atom])) {
       seen[atom] = true;
-      cycle += (cycle.empty() ? "" : "\u00a0") + atom_name(molecule, static_cast<int>(atom));
+      // Short cycles stay on one line; long ones may break.
+      const char* space = length % 6 == 0 ? " " : "\u00a0";
+      ++length;
+      cycle += (cycle.empty() ? "" : space) + atom_name(molecule, static_cast<int>(atom));
     }
     words += (words.empty() ? "(" : " (") + cycle + ")";
   }
@@ -67,11 +78,12 @@ std::string list_or_dash(const std::vector<std::string>& names) {
 }
 
 // Whether the irrep can bond, or who holds it alone.
-std::string verdict(const SymmetryResult& result, const BondingIrrep& row) {
+std::string verdict(const SymmetryResult& result, const std::vector<AtomSet>& names,
+                    const BondingIrrep& row) {
   if (row.can_bond) return result.central_atom ? "can bond" : "can mix";
   std::vector<std::string> holders;
   for (std::size_t s = 0; s < row.parts.size(); ++s) {
-    if (!row.parts[s].empty()) holders.push_back(result.named_sets[s].name);
+    if (!row.parts[s].empty()) holders.push_back(names[s].name);
   }
   return "non-bonding: " + joined(holders) + " only";
 }
@@ -97,7 +109,8 @@ Table operation_table(const SymmetryResult& result) {
                cycle_words(result.symmetry.molecule, result.symmetry.images[g])}});
     }
   }
-  table.notes.push_back("Axes in the standard frame; in brackets atoms go round: each to the next.");
+  table.notes.push_back(
+      "Axes in the standard frame; in brackets atoms go round: each to the next.");
   if (!group.symbol().is_finite()) {
     table.notes.push_back("The group is infinite: turns by multiples of 45° stand for all.");
   }
@@ -106,6 +119,7 @@ Table operation_table(const SymmetryResult& result) {
 
 Table equivalent_atoms_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = "Sets of equivalent atoms";
   table.columns = {{"set", "set", "", Align::Left, 0, false},
                    {"size", "atoms", "", Align::Right, 0, false},
@@ -114,7 +128,7 @@ Table equivalent_atoms_table(const SymmetryResult& result) {
                    {"atoms", "which", "", Align::Left, 0, true}};
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
     table.lines.emplace_back(
-        Row{{result.named_sets[s].name, Number{double(result.sets[s].size()), 0},
+        Row{{names[s].name, Number{double(result.sets[s].size()), 0},
              site_symbol(result.symmetry.group, result.sets[s]).name(),
              atom_name(result.symmetry.molecule, result.sets[s].representative()),
              atom_list(result.symmetry.molecule, result.sets[s].atoms)}});
@@ -124,13 +138,20 @@ Table equivalent_atoms_table(const SymmetryResult& result) {
 
 std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction) {
   switch (reduction.part) {
-    case Part::Shell: break;
-    case Part::Sigma: return "σ";
-    case Part::Pi: return "π";
-    case Part::PiInPlane: return "π in plane";
-    case Part::PiOutOfPlane: return "π out of plane";
-    case Part::Delta: return "δ";
-    case Part::Phi: return "φ";
+    case Part::Shell:
+      break;
+    case Part::Sigma:
+      return "σ";
+    case Part::Pi:
+      return "π";
+    case Part::PiInPlane:
+      return "π in plane";
+    case Part::PiOutOfPlane:
+      return "π out of plane";
+    case Part::Delta:
+      return "δ";
+    case Part::Phi:
+      return "φ";
   }
   const Shell& shell = result.orbitals->basis.shells[reduction.shells.front()];
   return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
@@ -138,6 +159,7 @@ std::string part_words(const SymmetryResult& result, const OrbitalReduction& red
 
 Table reduction_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = "What the valence orbitals span";
   table.columns = {{"set", "set", "", Align::Left, 0, false},
                    {"part", "orbitals", "", Align::Left, 0, false},
@@ -160,8 +182,8 @@ Table reduction_table(const SymmetryResult& result) {
     const bool first = reduction.set != last_set;
     last_set = reduction.set;
     table.lines.emplace_back(
-        Row{{first ? result.named_sets[reduction.set].name : "", part_words(result, reduction),
-             shells, Number{double(reduction.orbitals), 0},
+        Row{{first ? names[reduction.set].name : "", part_words(result, reduction), shells,
+             Number{double(reduction.orbitals), 0},
              readable_reduction(reduction_of(result.symmetry.group, reduction.times))}});
   }
   table.notes.push_back(
@@ -169,30 +191,31 @@ Table reduction_table(const SymmetryResult& result) {
   bool has_parts = false;
   for (const auto& frames : result.frames) has_parts = has_parts || frames;
   if (has_parts) {
-    table.notes.push_back(fmt::format(
-        "σ: along the line to {}; π: across it.",
-        result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
-                            : std::string("the centre")));
+    table.notes.push_back(
+        fmt::format("σ: along the line to {}; π: across it.",
+                    result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
+                                        : std::string("the centre")));
   }
   return table;
 }
 
 Table bonding_table(const SymmetryResult& result) {
   Table table;
+  const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = result.central_atom
                       ? fmt::format("What can bond with {} by symmetry",
                                     atom_name(result.symmetry.molecule, *result.central_atom))
                       : "What can mix by symmetry";
   table.columns.push_back({"irrep", "irrep", "", Align::Left, 0, false});
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
-    table.columns.push_back({result.named_sets[s].name, result.named_sets[s].name, "", Align::Left,
+    table.columns.push_back({names[s].name, names[s].name, "", Align::Left,
                              static_cast<int>(s) > 3 ? static_cast<int>(s) : 0, true});
   }
   table.columns.push_back({"verdict", "by symmetry", "", Align::Left, 0, true});
   for (const BondingIrrep& row : bonding_by_irrep(result)) {
     Row line{{SymmetryLabel{level_label(result.symmetry.group.irreps()[row.irrep].label)}}};
     for (const auto& parts : row.parts) line.cells.emplace_back(list_or_dash(parts));
-    line.cells.emplace_back(verdict(result, row));
+    line.cells.emplace_back(verdict(result, names, row));
     table.lines.emplace_back(std::move(line));
   }
   return table;
@@ -209,9 +232,9 @@ Table vibration_table(const SymmetryResult& result) {
   const std::string symmetric = group.irreps().front().label;
   for (const IrrepCount& mode : result.displacements.vibrations) {
     const TransitionRule rule = transition_rule(group, symmetric, mode.label);
-    table.lines.emplace_back(Row{{SymmetryLabel{level_label(mode.label)},
-                                  Number{double(mode.count), 0},
-                                  list_or_dash(rule.dipole_axes), rule.two_photon ? "yes" : "–"}});
+    table.lines.emplace_back(
+        Row{{SymmetryLabel{level_label(mode.label)}, Number{double(mode.count), 0},
+             list_or_dash(rule.dipole_axes), rule.two_photon ? "yes" : "–"}});
   }
   table.notes.push_back("Fundamentals: allowed in the infrared along the axes named, or in Raman.");
   return table;

@@ -1,7 +1,7 @@
 // Tables of what the group does to the molecule: operations, sets, reductions, bonding.
 #pragma once
 
-#include "output/symmetry_result.hpp"
+#include "analysis/symmetry_result.hpp"
 #include "output/table.hpp"
 
 namespace irrepwise {
@@ -22,6 +22,7 @@ namespace irrepwise {
 [[nodiscard]] Table vibration_table(const SymmetryResult& result);
 
 /// @returns  "σ", "π in plane", "3p": for people
-[[nodiscard]] std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction);
+[[nodiscard]] std::string part_words(const SymmetryResult& result,
+                                     const OrbitalReduction& reduction);
 
 }  // namespace irrepwise

@@ -12,7 +12,7 @@ namespace irrepwise {
 namespace {
 
 constexpr std::array<std::string_view, 10> superscripts = {"⁰", "¹", "²", "³", "⁴",
-                                                            "⁵", "⁶", "⁷", "⁸", "⁹"};
+                                                           "⁵", "⁶", "⁷", "⁸", "⁹"};
 
 std::string sum_words(const Reduction& reduction, bool of_levels) {
   std::string words;
@@ -36,8 +36,8 @@ std::string superscript(int number) {
 
 std::string readable_class(std::string_view symbol) {
   std::string text(symbol);
-  for (const auto& [ascii, letter] : {std::pair<std::string_view, std::string_view>{"sigma", "σ"},
-                                      {"phi", "(φ)"}}) {
+  for (const auto& [ascii, letter] :
+       {std::pair<std::string_view, std::string_view>{"sigma", "σ"}, {"phi", "(φ)"}}) {
     if (const std::size_t at = text.find(ascii); at != std::string::npos) {
       text.replace(at, ascii.size(), letter);
     }
@@ -51,12 +51,19 @@ std::string readable_class(std::string_view symbol) {
 }
 
 std::string readable_functions(const FunctionSet& set) {
+  std::string ascii = function_text(set);
+  for (const auto& [name, letter] :
+       {std::pair<std::string_view, std::string_view>{"phi*", "φ"}, {"phi", "φ"}}) {
+    for (std::size_t at = ascii.find(name); at != std::string::npos; at = ascii.find(name)) {
+      ascii.replace(at, name.size(), letter);
+    }
+  }
   std::string text;
-  for (const char c : function_text(set)) {
+  for (const char c : ascii) {
     if (std::isdigit(static_cast<unsigned char>(c)) != 0) {
       // A digit behind a letter is a power, in front of one a factor.
-      const bool is_power = !text.empty() && (std::isalpha(static_cast<unsigned char>(text.back())) != 0 ||
-                                              text.back() == ')');
+      const bool is_power =
+          !text.empty() && std::string_view("(,/−+ ").find(text.back()) == std::string_view::npos;
       text += is_power ? std::string(superscripts[static_cast<std::size_t>(c - '0')])
                        : std::string(1, c);
     } else {

@@ -14,8 +14,8 @@
 namespace irrepwise {
 namespace {
 
-constexpr int max_n = SlaterRadial::max_n;
-constexpr int max_degree = 2 * max_n;
+constexpr int max_n = largest_overlap_n;
+constexpr int max_degree = SlaterRadial::max_n + largest_overlap_n;
 constexpr int size = max_degree + 1;
 
 double factorial(int k) { return boost::math::factorial<double>(static_cast<unsigned>(k)); }
@@ -223,6 +223,7 @@ class TableStore {
 const OverlapTable& overlap_table(EtaBasis basis, int n_a, int l_a, int n_b, int l_b) {
   assert(l_a >= 0 && l_a <= max_l && l_a < n_a && n_a <= max_n);
   assert(l_b >= 0 && l_b <= max_l && l_b < n_b && n_b <= max_n);
+  assert(n_a + n_b <= max_degree);
   static TableStore store;
   return store.get(basis, n_a, l_a, n_b, l_b);
 }

@@ -4,7 +4,12 @@
 
 #include <vector>
 
+#include "basis/slater_radial.hpp"
+
 namespace irrepwise {
+
+/// One more than shells have, for derivatives with respect to exponents.
+inline constexpr int largest_overlap_n = SlaterRadial::max_n + 1;
 
 /// In prolate spheroidal coordinates xi = (r_a + r_b)/R, eta = (r_a - r_b)/R, the overlap of two
 /// Slater functions is, with N = n_a + n_b, alpha = R (zeta_a + zeta_b)/2, beta = R (zeta_a -
@@ -31,7 +36,7 @@ struct OverlapTable {
 /// Made when first asked for, then kept: the tables are constants, and too many to make them all.
 /// Safe to call from any number of threads.
 ///
-/// @param n_a, l_a, n_b, l_b  0 <= l < n <= 7, l <= 3
+/// @param n_a, l_a, n_b, l_b  0 <= l < n <= 8, l <= 3, n_a + n_b <= 15
 /// @accuracy                  each coefficient to 1 eps
 /// @source                    form of the integrand: Mulliken, Rieke, Orloff and Orloff, J. Chem.
 ///                            Phys. 17, 1248 (1949); these expansions are our own derivation

@@ -12,7 +12,7 @@
 namespace irrepwise {
 namespace {
 
-constexpr int max_degree = 2 * SlaterRadial::max_n;
+constexpr int max_degree = SlaterRadial::max_n + largest_overlap_n;
 
 using Moments = std::array<double, max_degree + 2>;
 
@@ -139,24 +139,24 @@ constexpr double largest_exponent = 1000.0;
 constexpr double large_beta_per_degree = 0.5;
 
 // Two single functions, zeta_a >= zeta_b.
-DiatomicOverlaps ordered_overlaps(const SlaterRadial& a, int l_a, const SlaterRadial& b, int l_b,
-                                  double distance) {
+DiatomicOverlaps ordered_overlaps(const SlaterFunction& a, int l_a, const SlaterFunction& b,
+                                  int l_b, double distance) {
   DiatomicOverlaps sums{};
-  const double tail = distance * b.zeta();  // alpha - beta: the overlap falls as e^-tail
+  const double tail = distance * b.zeta;  // alpha - beta: the overlap falls as e^-tail
   if (tail > largest_exponent) return sums;
-  const double alpha = distance * (a.zeta() + b.zeta()) / 2;
-  const double beta = distance * (a.zeta() - b.zeta()) / 2;
-  const double inverse = 2.0 / (a.zeta() + b.zeta());
-  const double t_a = a.zeta() * inverse, t_b = b.zeta() * inverse;
-  double scale = power(t_a, a.n()) * power(t_b, b.n()) * std::sqrt(t_a * t_b);
-  const int degree = a.n() + b.n();
+  const double alpha = distance * (a.zeta + b.zeta) / 2;
+  const double beta = distance * (a.zeta - b.zeta) / 2;
+  const double inverse = 2.0 / (a.zeta + b.zeta);
+  const double t_a = a.zeta * inverse, t_b = b.zeta * inverse;
+  double scale = power(t_a, a.n) * power(t_b, b.n) * std::sqrt(t_a * t_b);
+  const int degree = a.n + b.n;
   if (beta < large_beta_per_degree * degree) {
     scale *= std::exp(-alpha);
-    contract(overlap_table(EtaBasis::Legendre, a.n(), l_a, b.n(), l_b),
+    contract(overlap_table(EtaBasis::Legendre, a.n, l_a, b.n, l_b),
              legendre_moments(degree, beta), alpha, sums);
   } else {
     scale *= std::exp(-tail);
-    contract(overlap_table(EtaBasis::FromFirst, a.n(), l_a, b.n(), l_b), near_moments(degree, beta),
+    contract(overlap_table(EtaBasis::FromFirst, a.n, l_a, b.n, l_b), near_moments(degree, beta),
              alpha, sums);
   }
   for (double& sum : sums) sum *= scale;
@@ -165,19 +165,28 @@ DiatomicOverlaps ordered_overlaps(const SlaterRadial& a, int l_a, const SlaterRa
 
 }  // namespace
 
+DiatomicOverlaps slater_overlaps(const SlaterFunction& a, int l_a, const SlaterFunction& b, int l_b,
+                                 double distance_bohr) {
+  assert(distance_bohr > 0.0 && std::isfinite(distance_bohr));
+  assert(a.n + b.n <= max_degree);
+  if (a.zeta >= b.zeta) return ordered_overlaps(a, l_a, b, l_b, distance_bohr);
+  DiatomicOverlaps overlaps = ordered_overlaps(b, l_b, a, l_a, distance_bohr);
+  if ((l_a + l_b) % 2 != 0) {
+    for (double& overlap : overlaps) overlap = -overlap;
+  }
+  return overlaps;
+}
+
 DiatomicOverlaps diatomic_overlaps(const ContractedRadial& radial_a, int l_a,
                                    const ContractedRadial& radial_b, int l_b,
                                    double distance_bohr) {
-  assert(distance_bohr > 0.0 && std::isfinite(distance_bohr));
-  const double reversed = (l_a + l_b) % 2 == 0 ? 1.0 : -1.0;
   DiatomicOverlaps total{};
   for (const ContractedRadial::Term& a : radial_a.terms()) {
     for (const ContractedRadial::Term& b : radial_b.terms()) {
-      const bool in_order = a.function.zeta() >= b.function.zeta();
       const DiatomicOverlaps part =
-          in_order ? ordered_overlaps(a.function, l_a, b.function, l_b, distance_bohr)
-                   : ordered_overlaps(b.function, l_b, a.function, l_a, distance_bohr);
-      const double factor = a.coefficient * b.coefficient * (in_order ? 1.0 : reversed);
+          slater_overlaps({a.function.n(), a.function.zeta()}, l_a,
+                          {b.function.n(), b.function.zeta()}, l_b, distance_bohr);
+      const double factor = a.coefficient * b.coefficient;
       for (std::size_t m = 0; m < total.size(); ++m) total[m] += factor * part[m];
     }
   }

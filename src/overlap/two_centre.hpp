@@ -8,6 +8,19 @@
 
 namespace irrepwise {
 
+/// One normalised Slater function. Unlike `SlaterRadial` it may have n = 8, which derivatives with
+/// respect to the exponent of a 7s or 7p shell lead to.
+struct SlaterFunction {
+  int n = 1;
+  double zeta = 1.0;  // 1/bohr
+};
+
+/// Overlaps of two single functions, as below.
+/// @param a, b  no more than one of them with n = 8
+[[nodiscard]] DiatomicOverlaps slater_overlaps(const SlaterFunction& a, int l_a,
+                                               const SlaterFunction& b, int l_b,
+                                               double distance_bohr);
+
 /// Overlaps in the diatomic frame: both frames parallel, z from a to b, so the sigma overlap of two
 /// p shells far apart is negative. Exchanging a and b changes the sign by (-1)^(l_a + l_b), and
 /// nothing else but rounding.

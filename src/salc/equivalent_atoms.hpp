@@ -9,9 +9,10 @@
 namespace irrepwise {
 
 struct EquivalentAtoms {
-  std::vector<int> atoms;                // ascending; the first is the representative
-  std::vector<int> from_representative;  // per atom: an operation that takes the representative to it
-  std::vector<int> site_group;           // operations that keep the representative in place
+  std::vector<int> atoms;  // ascending; the first is the representative
+  std::vector<int>
+      from_representative;      // per atom: an operation that takes the representative to it
+  std::vector<int> site_group;  // operations that keep the representative in place
 
   [[nodiscard]] int representative() const { return atoms.front(); }
   [[nodiscard]] int size() const { return static_cast<int>(atoms.size()); }

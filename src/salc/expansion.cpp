@@ -26,7 +26,8 @@ Eigen::MatrixXd expand(const MolecularSymmetry& symmetry, const Basis& basis,
     const Salc& first = list[i];
     Eigen::MatrixXd sum = scaled(column[static_cast<Eigen::Index>(i)], first.representative);
     std::size_t next = i + 1;
-    for (; next < list.size() && list[next].set == first.set && list[next].shell == first.shell; ++next) {
+    for (; next < list.size() && list[next].set == first.set && list[next].shell == first.shell;
+         ++next) {
       sum += scaled(column[static_cast<Eigen::Index>(next)], list[next].representative);
     }
     i = next;

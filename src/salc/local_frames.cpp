@@ -11,7 +11,8 @@
 namespace irrepwise {
 namespace {
 
-constexpr double same = 1e-6;  // of unit vectors; coordinates are exact here
+constexpr int least_neighbours = 2;  // fewer make no centre
+constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
 
 bool fixes_one_point(Family family) {
   switch (family) {
@@ -19,7 +20,8 @@ bool fixes_one_point(Family family) {
     case Family::Cs:
     case Family::Cn:
     case Family::Cnv:
-    case Family::Cinfv: return false;
+    case Family::Cinfv:
+      return false;
     case Family::Ci:
     case Family::Cnh:
     case Family::Dn:
@@ -34,7 +36,8 @@ bool fixes_one_point(Family family) {
     case Family::I:
     case Family::Ih:
     case Family::Dinfh:
-    case Family::Kh: return true;
+    case Family::Kh:
+      return true;
   }
   return false;
 }
@@ -54,10 +57,9 @@ int neighbours(const Molecule& molecule, int atom) {
 
 int atoms_in_plane(const Molecule& molecule, const Eigen::Vector3d& point,
                    const Eigen::Vector3d& normal) {
-  return static_cast<int>(
-      std::count_if(molecule.atoms().begin(), molecule.atoms().end(), [&](const Atom& atom) {
-        return std::abs(normal.dot(atom.position - point)) < 1e-4;
-      }));
+  return static_cast<int>(std::count_if(
+      molecule.atoms().begin(), molecule.atoms().end(),
+      [&](const Atom& atom) { return std::abs(normal.dot(atom.position - point)) < 1e-4; }));
 }
 
 // The sign for which the first component from z over y to x that is not zero is positive.
@@ -116,12 +118,12 @@ Eigen::Matrix3d frame_of(const Eigen::Vector3d& y, const Eigen::Vector3d& z) {
 // The mirror plane that makes "in plane" mean something: σh, or the plane of a planar molecule.
 std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry) {
   const Family family = symmetry.group.symbol().family;
-  const bool has_sigma_h =
-      family == Family::Cs || family == Family::Cnh || family == Family::Dnh;
+  const bool has_sigma_h = family == Family::Cs || family == Family::Cnh || family == Family::Dnh;
   const Eigen::Vector3d point = symmetry.molecule.atoms().front().position;
   for (const Eigen::Matrix3d& g : symmetry.group.operations()) {
     const SymmetryOperation operation = classify_operation(g);
-    if (operation.kind != OperationKind::Reflection || !symmetry.group.symbol().is_finite()) continue;
+    if (operation.kind != OperationKind::Reflection || !symmetry.group.symbol().is_finite())
+      continue;
     if (atoms_in_plane(symmetry.molecule, point, operation.axis) == symmetry.molecule.size()) {
       return operation.axis;
     }
@@ -134,18 +136,19 @@ std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry
 
 std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   const Molecule& molecule = symmetry.molecule;
+  const bool one_point = fixes_one_point(symmetry.group.symbol().family);
   std::optional<int> best;
-  std::pair<int, int> best_merit;
+  std::pair<int, int> best_merit = {one_point ? -1 : least_neighbours, 0};
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
     const std::pair merit = {neighbours(molecule, atom), molecule.atoms()[atom].atomic_number};
-    if (!best || merit > best_merit) {
-      best = atom;
-      best_merit = merit;
-    }
+    if (merit == best_merit) best.reset();  // two alike: neither is the centre
+    if (merit <= best_merit) continue;
+    best = atom;
+    best_merit = merit;
   }
   if (best) return Centre{molecule.atoms()[*best].position, best};
-  if (fixes_one_point(symmetry.group.symbol().family)) return Centre{};
+  if (one_point) return Centre{};
   return std::nullopt;
 }
 
@@ -155,13 +158,14 @@ std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
   if (centre.atom == set.representative()) return std::nullopt;
   if (centre.atom && !are_bonded(molecule, *centre.atom, set.representative())) return std::nullopt;
   const Eigen::Vector3d at = molecule.atoms()[set.representative()].position;
+  constexpr double at_centre_angstrom = 1e-4;  // an atom there has no line to the centre
+  if ((centre.position - at).norm() < at_centre_angstrom) return std::nullopt;
   const Eigen::Vector3d z = (centre.position - at).normalized();
   const Eigen::Vector3d x = frame_of(first_y(symmetry, set, z), z).col(0);
 
   LocalFrames local;
   for (const int atom : set.atoms) {
-    const Eigen::Vector3d atom_z =
-        (centre.position - molecule.atoms()[atom].position).normalized();
+    const Eigen::Vector3d atom_z = (centre.position - molecule.atoms()[atom].position).normalized();
     std::optional<Eigen::Matrix3d> best;
     Merit best_merit{};
     for (int g = 0; g < symmetry.group.order(); ++g) {

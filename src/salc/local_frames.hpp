@@ -16,8 +16,9 @@ struct Centre {
   std::optional<int> atom;                             // the atom there, if any
 };
 
-/// The atom that every operation keeps in place and that has most neighbours (of equal ones the
-/// heaviest); where no atom is kept, the one point that is; nothing where neither exists.
+/// The atom at the one point that every operation keeps, or that point, if the group has just one;
+/// otherwise, of the atoms that every operation keeps in place, the one with most neighbours, two
+/// at least (of equal ones the heaviest, which must be one alone).
 [[nodiscard]] std::optional<Centre> find_centre(const MolecularSymmetry& symmetry);
 
 struct LocalFrames {

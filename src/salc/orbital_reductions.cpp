@@ -18,8 +18,9 @@ std::vector<int> times_of(const PointGroup& group, const EquivalentAtoms& set,
   return times;
 }
 
-OrbitalReduction reduction(const MolecularSymmetry& symmetry, const std::vector<EquivalentAtoms>& sets,
-                    int set, Part part, const SiteFunctions& functions) {
+OrbitalReduction reduction(const MolecularSymmetry& symmetry,
+                           const std::vector<EquivalentAtoms>& sets, int set, Part part,
+                           const SiteFunctions& functions) {
   OrbitalReduction result{set, part, {}, 0, times_of(symmetry.group, sets[set], functions)};
   result.orbitals = static_cast<int>(functions.span.cols()) * sets[set].size();
   int spanned = 0;
@@ -36,7 +37,8 @@ OrbitalReduction reduction(const MolecularSymmetry& symmetry, const std::vector<
 
 std::vector<int> part_components(Part part, int l) {
   switch (part) {
-    case Part::Shell: break;
+    case Part::Shell:
+      break;
     case Part::Sigma:
       if (l == 1) return {2};
       return {0};
@@ -64,13 +66,20 @@ std::vector<int> part_components(Part part, int l) {
 
 std::string part_key(Part part, int l) {
   switch (part) {
-    case Part::Shell: return std::string(1, shell_letter(l));
-    case Part::Sigma: return "sigma";
-    case Part::Pi: return "pi";
-    case Part::PiInPlane: return "pi_in_plane";
-    case Part::PiOutOfPlane: return "pi_out_of_plane";
-    case Part::Delta: return "delta";
-    case Part::Phi: return "phi";
+    case Part::Shell:
+      return std::string(1, shell_letter(l));
+    case Part::Sigma:
+      return "sigma";
+    case Part::Pi:
+      return "pi";
+    case Part::PiInPlane:
+      return "pi_in_plane";
+    case Part::PiOutOfPlane:
+      return "pi_out_of_plane";
+    case Part::Delta:
+      return "delta";
+    case Part::Phi:
+      return "phi";
   }
   return {};
 }
@@ -109,16 +118,15 @@ std::vector<std::optional<LocalFrames>> frames_of_sets(const MolecularSymmetry& 
   return frames;
 }
 
-std::vector<OrbitalReduction> orbital_reductions(const MolecularSymmetry& symmetry, const Basis& basis,
-                                  const std::vector<EquivalentAtoms>& sets,
-                                  const std::vector<std::optional<LocalFrames>>& frames) {
+std::vector<OrbitalReduction> orbital_reductions(
+    const MolecularSymmetry& symmetry, const Basis& basis, const std::vector<EquivalentAtoms>& sets,
+    const std::vector<std::optional<LocalFrames>>& frames) {
   std::vector<OrbitalReduction> list;
   for (int s = 0; s < static_cast<int>(sets.size()); ++s) {
     const int first = basis.first_shell[sets[s].representative()];
     const int end = basis.first_shell[sets[s].representative() + 1];
     for (int shell = first; shell < end; ++shell) {
-      const SiteFunctions functions =
-          whole_shell(symmetry.group, sets[s], basis.shells[shell].l);
+      const SiteFunctions functions = whole_shell(symmetry.group, sets[s], basis.shells[shell].l);
       list.push_back(reduction(symmetry, sets, s, Part::Shell, functions));
       list.back().shells = {shell};
     }

@@ -1,4 +1,5 @@
-// Projection on one site: which combinations of an atom's functions belong to an irrep of the group.
+// Projection on one site: which combinations of an atom's functions belong to an irrep of the
+// group.
 #pragma once
 
 #include <vector>

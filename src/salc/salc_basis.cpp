@@ -45,12 +45,11 @@ SalcBasis make_salcs(const MolecularSymmetry& symmetry, const Basis& basis) {
       for (int shell = first; shell < last; ++shell) {
         const int l = basis.shells[shell].l;
         const std::vector<Eigen::MatrixXd> found =
-            spherical ? spherical_invariants(static_cast<int>(i), l)
-                      : site_invariants(irrep, set, functions[l],
-                                        multiplicity(irrep, set, functions[l]));
+            spherical
+                ? spherical_invariants(static_cast<int>(i), l)
+                : site_invariants(irrep, set, functions[l], multiplicity(irrep, set, functions[l]));
         for (const Eigen::MatrixXd& x : found) {
-          salcs.by_irrep[i].push_back(
-              {static_cast<int>(s), shell, tidy(scale * x.normalized())});
+          salcs.by_irrep[i].push_back({static_cast<int>(s), shell, tidy(scale * x.normalized())});
           orbitals += irrep.dimension;
         }
       }

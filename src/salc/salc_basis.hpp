@@ -39,8 +39,9 @@ struct SalcBasis {
 
 /// @returns  the coefficients of all partners over the atom's shell, `dimension x (2l + 1)`
 /// @param position  index of the atom in its set
-[[nodiscard]] Eigen::MatrixXd salc_on_atom(const MolecularSymmetry& symmetry, const SalcBasis& salcs,
-                                           int irrep, const Eigen::MatrixXd& representative, int set,
+[[nodiscard]] Eigen::MatrixXd salc_on_atom(const MolecularSymmetry& symmetry,
+                                           const SalcBasis& salcs, int irrep,
+                                           const Eigen::MatrixXd& representative, int set,
                                            int position, int l);
 
 }  // namespace irrepwise

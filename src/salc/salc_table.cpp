@@ -37,9 +37,9 @@ class Writer {
   // All partners of the SALCs of one part of a shell.
   void add(std::vector<SalcFunction>& list, SalcFunction blank, int l) const {
     const bool spherical = group_.symbol().family == Family::Kh;
-    const SiteFunctions functions =
-        blank.local ? part_functions(group_, set_, *frames_, blank.part, l)
-                    : whole_shell(group_, set_, l);
+    const SiteFunctions functions = blank.local
+                                        ? part_functions(group_, set_, *frames_, blank.part, l)
+                                        : whole_shell(group_, set_, l);
     blank.components = part_components(blank.part, l);
     for (int i = 0; i < static_cast<int>(group_.irreps().size()); ++i) {
       const Irrep& irrep = group_.irreps()[i];
@@ -63,8 +63,8 @@ class Writer {
   void add_partners(std::vector<SalcFunction>& list, const SalcFunction& blank, int l,
                     const Eigen::MatrixXd& representative) const {
     const auto columns = static_cast<Eigen::Index>(blank.components.size());
-    std::vector<Eigen::MatrixXd> partners(
-        static_cast<std::size_t>(representative.rows()), Eigen::MatrixXd(set_.size(), columns));
+    std::vector<Eigen::MatrixXd> partners(static_cast<std::size_t>(representative.rows()),
+                                          Eigen::MatrixXd(set_.size(), columns));
     for (int position = 0; position < set_.size(); ++position) {
       const int g = set_.from_representative[position];
       Eigen::MatrixXd on_atom = group_.irreps()[blank.irrep].matrices[g] * representative *
@@ -72,8 +72,8 @@ class Writer {
       if (blank.local) on_atom = (on_atom * harmonic_rotation(l, frames_->frames[position])).eval();
       for (std::size_t r = 0; r < partners.size(); ++r) {
         for (Eigen::Index i = 0; i < columns; ++i) {
-          partners[r](position, i) = on_atom(static_cast<Eigen::Index>(r),
-                                             blank.components[static_cast<std::size_t>(i)]);
+          partners[r](position, i) =
+              on_atom(static_cast<Eigen::Index>(r), blank.components[static_cast<std::size_t>(i)]);
         }
       }
     }

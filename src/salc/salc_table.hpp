@@ -19,9 +19,9 @@ struct SalcFunction {
   Part part = Part::Shell;
   bool local = false;  // over orbitals of each atom's own frame
   int irrep = 0;
-  int number = 1;   // of the SALCs of this part and irrep
-  int partner = 1;  // from 1
-  std::vector<int> components;  // which orbitals of the shell the columns stand for
+  int number = 1;                // of the SALCs of this part and irrep
+  int partner = 1;               // from 1
+  std::vector<int> components;   // which orbitals of the shell the columns stand for
   Eigen::MatrixXd coefficients;  // `n_atoms of the set x n_components`; sum of squares 1
 };
 

@@ -106,8 +106,10 @@ class BlockBuilder {
           bohr_in_angstrom;
       const int g = b.from_representative[position];
       int largest_l = 0;
-      for (int i = 0; i < count_a; ++i) largest_l = std::max(largest_l, basis_.shells[first_a + i].l);
-      for (int j = 0; j < count_b; ++j) largest_l = std::max(largest_l, basis_.shells[first_b + j].l);
+      for (int i = 0; i < count_a; ++i)
+        largest_l = std::max(largest_l, basis_.shells[first_a + i].l);
+      for (int j = 0; j < count_b; ++j)
+        largest_l = std::max(largest_l, basis_.shells[first_b + j].l);
       const DiatomicFrame frame(displacement, largest_l);
       const double distance = displacement.norm();
       for (int i = 0; i < count_a; ++i) {
@@ -154,9 +156,9 @@ class BlockBuilder {
         const Eigen::MatrixXd& d = irrep.matrices[operations[b]];
         k += std::complex(d(0, 0), d(1, 0)) * turned[b];
       }
-      put<Eigen::MatrixXcd>(std::get<Eigen::MatrixXcd>(blocks_[irrep_index]), rows, columns,
-                            atoms * complex_row(salcs, rows, ma).adjoint() * k *
-                                complex_row(salcs, columns, mb));
+      put<Eigen::MatrixXcd>(
+          std::get<Eigen::MatrixXcd>(blocks_[irrep_index]), rows, columns,
+          atoms * complex_row(salcs, rows, ma).adjoint() * k * complex_row(salcs, columns, mb));
       return;
     }
     const Eigen::Index d = irrep.dimension;

@@ -2,8 +2,8 @@
 
 #include <cmath>
 
-#include <Eigen/Geometry>
 #include <fmt/format.h>
+#include <Eigen/Geometry>
 
 #include "core/text.hpp"
 
@@ -17,7 +17,8 @@ template <typename Distance>
 std::string through_atoms(const Molecule& molecule, Distance distance) {
   std::vector<std::string> names;
   for (int i = 0; i < molecule.size(); ++i) {
-    if (distance(molecule.atoms()[i].position) < on_element) names.push_back(atom_name(molecule, i));
+    if (distance(molecule.atoms()[i].position) < on_element)
+      names.push_back(atom_name(molecule, i));
   }
   if (names.empty()) return "";
   if (names.size() == static_cast<std::size_t>(molecule.size()) && names.size() > 2) {
@@ -33,18 +34,16 @@ std::string through_atoms(const Molecule& molecule, Distance distance) {
 
 std::string axis_phrase(const char* name, const std::string& symbol, const Molecule& molecule,
                         const Eigen::Vector3d& axis) {
-  return fmt::format("{} = {}{}", name, symbol,
-                     through_atoms(molecule, [&](const Eigen::Vector3d& r) {
-                       return axis.cross(r).norm();
-                     }));
+  return fmt::format(
+      "{} = {}{}", name, symbol,
+      through_atoms(molecule, [&](const Eigen::Vector3d& r) { return axis.cross(r).norm(); }));
 }
 
 std::string plane_phrase(const char* name, const std::string& symbol, const Molecule& molecule,
                          const Eigen::Vector3d& normal) {
-  return fmt::format("{} = {}{}", name, symbol,
-                     through_atoms(molecule, [&](const Eigen::Vector3d& r) {
-                       return std::abs(normal.dot(r));
-                     }));
+  return fmt::format(
+      "{} = {}{}", name, symbol,
+      through_atoms(molecule, [&](const Eigen::Vector3d& r) { return std::abs(normal.dot(r)); }));
 }
 
 // Cn, Cnh, S2n: x was laid towards an atom; which one is found again by its direction.
@@ -80,15 +79,27 @@ std::vector<std::string> axis_words(const PointGroup& group, const Molecule& mol
   switch (symbol.family) {
     case Family::C1:
     case Family::Ci:
-    case Family::Kh: words = {"axes as in the input"}; break;
-    case Family::Cs: words = {plane_phrase("xy", "mirror plane", molecule, z)}; break;
+    case Family::Kh:
+      words = {"axes as in the input"};
+      break;
+    case Family::Cs:
+      words = {plane_phrase("xy", "mirror plane", molecule, z)};
+      break;
     case Family::Cinfv:
-    case Family::Dinfh: words = {"z = molecular axis"}; break;
+    case Family::Dinfh:
+      words = {"z = molecular axis"};
+      break;
     case Family::T:
-    case Family::Th: cubic("C2"); break;
-    case Family::Td: cubic("S4"); break;
+    case Family::Th:
+      cubic("C2");
+      break;
+    case Family::Td:
+      cubic("S4");
+      break;
     case Family::O:
-    case Family::Oh: cubic("C4"); break;
+    case Family::Oh:
+      cubic("C4");
+      break;
     case Family::I:
     case Family::Ih:
       cubic("C2");
@@ -124,9 +135,10 @@ std::vector<std::string> axis_words(const PointGroup& group, const Molecule& mol
       }
       break;
     case Family::Dnd:
-      words = {axis_phrase("z", symbol.n == 2 ? "S4" : fmt::format("C{} (S{})", symbol.n, 2 * symbol.n),
-                           molecule, z),
-               axis_phrase("x", "C2'", molecule, x)};
+      words = {
+          axis_phrase("z", symbol.n == 2 ? "S4" : fmt::format("C{} (S{})", symbol.n, 2 * symbol.n),
+                      molecule, z),
+          axis_phrase("x", "C2'", molecule, x)};
       break;
   }
   return words;

@@ -12,6 +12,7 @@ namespace irrepwise {
 /// @param molecule  exactly symmetric, in the standard frame
 /// @returns         a phrase for each axis that the group fixes: "z = C4 through Pt1",
 ///                  "x = C2' through Cl2 and Cl4", "yz = mirror plane through O1, H2 and H3"
-[[nodiscard]] std::vector<std::string> axis_words(const PointGroup& group, const Molecule& molecule);
+[[nodiscard]] std::vector<std::string> axis_words(const PointGroup& group,
+                                                  const Molecule& molecule);
 
 }  // namespace irrepwise

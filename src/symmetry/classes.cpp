@@ -24,7 +24,8 @@ bool along_z(const Eigen::Vector3d& axis) { return std::abs(axis[2]) > 0.99; }
 std::string axial_mark(const SymmetryOperation& op, const Schoenflies& symbol) {
   if (op.kind == OperationKind::Reflection && symbol.family == Family::Cs) return "h";
   if (op.kind == OperationKind::Rotation && op.n == 2 && !along_z(op.axis)) {
-    if (symbol.n == 2 && symbol.family != Family::Dnd) return std::abs(op.axis[0]) > 0.99 ? "(x)" : "(y)";
+    if (symbol.n == 2 && symbol.family != Family::Dnd)
+      return std::abs(op.axis[0]) > 0.99 ? "(x)" : "(y)";
     const double steps = std::atan2(op.axis[1], op.axis[0]) / (M_PI / (2.0 * symbol.n));
     const bool between = symbol.family != Family::Dnd && symbol.n % 2 == 0 &&
                          std::lround(steps) % 4 != 0 && std::lround(steps) % 2 == 0;
@@ -57,7 +58,8 @@ std::string cubic_mark(const SymmetryOperation& op, Family family) {
   return along_axis ? "h" : "d";
 }
 
-std::tuple<int, int, int, std::string> sort_key(const SymmetryOperation& op, const std::string& mark) {
+std::tuple<int, int, int, std::string> sort_key(const SymmetryOperation& op,
+                                                const std::string& mark) {
   static constexpr int order_of_kind[] = {0, 1, 2, 4, 3};  // as OperationKind: mirrors last
   const int kind = order_of_kind[static_cast<int>(op.kind)];
   const bool mirror = op.kind == OperationKind::Reflection;
@@ -81,11 +83,21 @@ std::vector<ConjugacyClass> linear_classes(const std::vector<Eigen::Matrix3d>& o
   for (int g = 0; g < static_cast<int>(operations.size()); ++g) {
     const SymmetryOperation op = classify_operation(operations[g]);
     switch (op.kind) {
-      case OperationKind::Identity: put("E", g); break;
-      case OperationKind::Inversion: put("i", g); break;
-      case OperationKind::Rotoreflection: put("2Sphi", g); break;
-      case OperationKind::Rotation: put(along_z(op.axis) ? "2Cphi" : "∞C2", g); break;
-      case OperationKind::Reflection: put(along_z(op.axis) ? "sigmah" : "∞sigmav", g); break;
+      case OperationKind::Identity:
+        put("E", g);
+        break;
+      case OperationKind::Inversion:
+        put("i", g);
+        break;
+      case OperationKind::Rotoreflection:
+        put("2Sphi", g);
+        break;
+      case OperationKind::Rotation:
+        put(along_z(op.axis) ? "2Cphi" : "∞C2", g);
+        break;
+      case OperationKind::Reflection:
+        put(along_z(op.axis) ? "sigmah" : "∞sigmav", g);
+        break;
     }
   }
   return classes;
@@ -135,13 +147,21 @@ std::vector<ConjugacyClass> find_classes(const Schoenflies& symbol,
     }
     if (symbol.family == Family::T || symbol.family == Family::Th) {
       // C3 and C3^2 are different classes: tell them by the turn about (1, 1, 1).
-      if (name_giver.n % 3 == 0 && name_giver.axis.prod() < 0) name_giver.k = name_giver.n - name_giver.k;
+      if (name_giver.n % 3 == 0 && name_giver.axis.prod() < 0)
+        name_giver.k = name_giver.n - name_giver.k;
+    }
+    // S5^7 turns as S5^3 does the other way round; where both are in the class, handbooks write the
+    // smaller power.
+    if (name_giver.kind == OperationKind::Rotoreflection && name_giver.n % 2 == 1 &&
+        name_giver.k % 2 == 0 && marked.members.operations.size() == 2) {
+      name_giver.k = name_giver.n - name_giver.k;
     }
     const std::string mark = is_cubic(symbol.family) ? cubic_mark(name_giver, symbol.family)
                                                      : axial_mark(name_giver, symbol);
     const std::size_t size = marked.members.operations.size();
     marked.key = sort_key(name_giver, mark);
-    marked.members.symbol = (size > 1 ? fmt::format("{}", size) : "") + operation_symbol(name_giver) + mark;
+    marked.members.symbol =
+        (size > 1 ? fmt::format("{}", size) : "") + operation_symbol(name_giver) + mark;
     found.push_back(std::move(marked));
   }
   std::stable_sort(found.begin(), found.end(),

@@ -26,14 +26,6 @@ double linear_character(const AngularIrrep& irrep, const Eigen::Matrix3d& operat
   return mirror ? 0.0 : sign * 2.0 * std::cos(irrep.m * std::atan2(g(1, 0), g(0, 0)));
 }
 
-double character_at(const PointGroup& group, std::size_t irrep, const Eigen::Matrix3d& operation) {
-  if (group.symbol().family == Family::Kh) {
-    return harmonic_rotation(static_cast<int>(irrep), operation).trace();
-  }
-  return linear_character(parse_angular_label(group.symbol(), group.irreps()[irrep].label),
-                          operation);
-}
-
 // Names compare without case and blanks, " as ''.
 std::string comparable(std::string_view text) {
   std::string result;
@@ -49,7 +41,7 @@ std::string comparable(std::string_view text) {
 std::string names_of(const std::vector<Embedding>& ways) {
   std::vector<std::string> names;
   for (const Embedding& way : ways) names.push_back(way.name);
-  return joined(names);
+  return joined(names, "or");
 }
 
 // What might be a subgroup by its order alone, by falling order.
@@ -83,6 +75,15 @@ std::vector<Schoenflies> candidates(const PointGroup& group) {
 }
 
 }  // namespace
+
+double continuous_character(const PointGroup& group, std::size_t irrep,
+                            const Eigen::Matrix3d& operation) {
+  if (group.symbol().family == Family::Kh) {
+    return harmonic_rotation(static_cast<int>(irrep), operation).trace();
+  }
+  return linear_character(parse_angular_label(group.symbol(), group.irreps()[irrep].label),
+                          operation);
+}
 
 Embedding find_embedding(const PointGroup& group, std::string_view text) {
   const std::string_view symbol_part = trimmed(text.substr(0, text.find('(')));
@@ -118,7 +119,7 @@ std::vector<std::vector<int>> correlate(const PointGroup& group, const Embedding
     std::vector<double> characters;
     for (int h = 0; h < subgroup.order(); ++h) {
       characters.push_back(embedding.operations.empty()
-                               ? character_at(group, i,
+                               ? continuous_character(group, i,
                                               embedding.rotation.transpose() *
                                                   subgroup.operations()[h] * embedding.rotation)
                                : group.irreps()[i].characters[embedding.operations[h]]);

@@ -1,6 +1,7 @@
 // What becomes of the irreps when symmetry is lowered to a subgroup.
 #pragma once
 
+#include <cstddef>
 #include <string>
 #include <string_view>
 #include <vector>
@@ -43,6 +44,10 @@ struct Embedding {
 /// @returns  [irrep of the group][irrep of the subgroup]: how often
 [[nodiscard]] std::vector<std::vector<int>> correlate(const PointGroup& group,
                                                       const Embedding& embedding);
+
+/// Character of an irrep of an infinite group under any operation that the group has.
+[[nodiscard]] double continuous_character(const PointGroup& group, std::size_t irrep,
+                                          const Eigen::Matrix3d& operation);
 
 /// The subgroups conjugate to the embedding, as sets of operations of a finite group.
 [[nodiscard]] std::vector<Subset> conjugates(const PointGroup& group, const Embedding& embedding);

@@ -45,8 +45,8 @@ double bonds_across(const Molecule& molecule, const Eigen::Vector3d& axis) {
     for (int b = a + 1; b < molecule.size(); ++b) {
       const Eigen::Vector3d& from = molecule.atoms()[a].position;
       const Eigen::Vector3d& to = molecule.atoms()[b].position;
-      const bool crosses = axis.cross(0.5 * (from + to)).norm() < on_element &&
-                           axis.cross(from).norm() > on_element;
+      const bool crosses =
+          axis.cross(0.5 * (from + to)).norm() < on_element && axis.cross(from).norm() > on_element;
       if (crosses && are_bonded(molecule, a, b)) bonds += 1.0;
     }
   }
@@ -97,7 +97,8 @@ std::vector<double> frame_merit(const Schoenflies& symbol, const Molecule& molec
     case Family::Cnv:
       if (symbol.n == 2) return plane_merit(molecule, x);
       return even ? plane_merit(molecule, y) : std::vector<double>{};
-    default: return {};
+    default:
+      return {};
   }
 }
 

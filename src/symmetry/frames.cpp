@@ -4,8 +4,8 @@
 #include <cmath>
 #include <numbers>
 
-#include <Eigen/Geometry>
 #include <fmt/format.h>
+#include <Eigen/Geometry>
 
 #include "core/error.hpp"
 #include "symmetry/frame_merit.hpp"
@@ -61,17 +61,19 @@ std::vector<Eigen::Matrix3d> turns_towards_atoms(const Molecule& molecule) {
 }
 
 Error not_an_axis(const char* name, const Schoenflies& symbol) {
-  return Error(fmt::format(
-      "the wanted {} axis is no axis that {} can have there (to within {}°); leave it out, or choose "
-      "a symmetry axis that the conventions allow as {}",
-      name, symbol.name(), wish_degrees, name));
+  return Error(
+      fmt::format("the wanted {} axis is no axis that {} can have there (to within {}°); leave it "
+                  "out, or choose "
+                  "a symmetry axis that the conventions allow as {}",
+                  name, symbol.name(), wish_degrees, name));
 }
 
 // z fixed up to its sign, x free: the wish, else an atom, else the smallest turn.
 std::vector<Eigen::Matrix3d> free_turns(const Schoenflies& symbol, const Molecule& molecule,
                                         const Eigen::Matrix3d& rotation, const WantedAxes& wanted) {
   std::vector<Eigen::Matrix3d> found;
-  for (const Eigen::Matrix3d& over : {Eigen::Matrix3d(Eigen::Matrix3d::Identity()), turned_over()}) {
+  for (const Eigen::Matrix3d& over :
+       {Eigen::Matrix3d(Eigen::Matrix3d::Identity()), turned_over()}) {
     const Eigen::Matrix3d base = over * rotation;
     if (wanted.x) {
       const Eigen::Vector3d x = base * *wanted.x;
@@ -124,9 +126,10 @@ Eigen::Vector3d direction_of(const AxisDirection& wish, const char* name, const 
     if (atoms.size() == 3) direction = (at(1) - at(0)).cross(at(2) - at(0));
   }
   if (!direction.allFinite() || direction.norm() < 1e-6) {
-    throw Error(fmt::format("the {} axis has no direction: a null vector, an atom at the origin, or "
-                            "atoms on one line; name others",
-                            name));
+    throw Error(
+        fmt::format("the {} axis has no direction: a null vector, an atom at the origin, or "
+                    "atoms on one line; name others",
+                    name));
   }
   return direction.normalized();
 }
@@ -144,14 +147,17 @@ std::vector<Eigen::Matrix3d> standard_turns(const Schoenflies& symbol) {
     case Family::Td:
     case Family::Th:
     case Family::O:
-    case Family::Oh: return standard_operations({Family::O, 1});
+    case Family::Oh:
+      return standard_operations({Family::O, 1});
     case Family::I:
-    case Family::Ih: return standard_operations({Family::I, 1});
+    case Family::Ih:
+      return standard_operations({Family::I, 1});
     case Family::Dn:
     case Family::Dnh:
       if (symbol.n == 2) return standard_operations({Family::O, 1});
       break;
-    default: break;
+    default:
+      break;
   }
   return standard_operations({Family::Dn, 2 * symbol.n});
 }

@@ -1,11 +1,10 @@
 #include "symmetry/held_operations.hpp"
 
 #include <algorithm>
-#include <array>
 #include <cmath>
-#include <map>
 #include <optional>
 #include <set>
+#include <unordered_map>
 
 #include <Eigen/Eigenvalues>
 #include <Eigen/Geometry>
@@ -75,6 +74,8 @@ std::optional<ReferencePair> reference_pair(const std::vector<std::vector<int>>&
     for (std::size_t j = 0; j < sets.size(); ++j) {
       for (int b : sets[j]) {
         const int a = sets[i].front();
+        // The first atom sets a direction, which errors turn the more the nearer it is.
+        if (positions.col(a).norm() < 0.5 * positions.col(b).norm()) continue;
         const double sharp = sharpness(positions.col(a), positions.col(b));
         sharpest = std::max(sharpest, sharp);
         pairs.push_back({sharp, {a, b, i, j}});
@@ -126,7 +127,17 @@ class Matcher {
  public:
   Matcher(const Eigen::Matrix3Xd& positions, const std::vector<std::vector<int>>& sets,
           double tolerance)
-      : positions_(positions), sets_(sets), tolerance_(tolerance) {}
+      : positions_(positions), tolerance_(tolerance) {
+    // Along a generic direction, so that symmetric atoms lie apart on it.
+    direction_ = Eigen::Vector3d(0.642, 0.531, 0.553).normalized();
+    height_ = direction_.transpose() * positions;
+    for (const std::vector<int>& set : sets) {
+      std::vector<int> sorted = set;
+      std::sort(sorted.begin(), sorted.end(),
+                [&](int a, int b) { return height_[a] < height_[b]; });
+      sets_.push_back(std::move(sorted));
+    }
+  }
 
   // The operation fitted to the atoms, or nothing where it does not hold.
   [[nodiscard]] std::optional<HeldOperation> held(const Eigen::Matrix3d& rough) const {
@@ -137,9 +148,9 @@ class Matcher {
     HeldOperation operation{rough, {}, 0.0};
     for (int pass = 0; pass < 3 && images; ++pass) {
       const bool settled = operation.images == *images;
+      if (settled) break;
       operation.images = *images;
       operation.matrix = best_fit(positions_, operation.images, handedness);
-      if (settled) break;
       images = match(operation.matrix, 2.0 * tolerance_ + 1e-6);
     }
     if (!images) return std::nullopt;
@@ -162,9 +173,13 @@ class Matcher {
     for (const std::vector<int>& set : sets_) {
       for (int atom : set) {
         const Eigen::Vector3d target = matrix * positions_.col(atom);
+        const double height = direction_.dot(target);
         int nearest = -1;
         double nearest_squared = reach * reach;
-        for (int other : set) {
+        auto at = std::lower_bound(set.begin(), set.end(), height - reach,
+                                   [&](int other, double value) { return height_[other] < value; });
+        for (; at != set.end() && height_[*at] <= height + reach; ++at) {
+          const int other = *at;
           const double squared = (positions_.col(other) - target).squaredNorm();
           if (squared <= nearest_squared) {
             nearest = other;
@@ -180,8 +195,10 @@ class Matcher {
   }
 
   const Eigen::Matrix3Xd& positions_;
-  const std::vector<std::vector<int>>& sets_;
   double tolerance_;
+  Eigen::Vector3d direction_;
+  Eigen::RowVectorXd height_;           // of each atom along the direction
+  std::vector<std::vector<int>> sets_;  // candidate sets, each from low to high
 };
 
 }  // namespace
@@ -222,7 +239,13 @@ std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
   const auto pair = reference_pair(sets, positions);
   if (!pair) return operations;
   const Eigen::Vector3d a = positions.col(pair->a), b = positions.col(pair->b);
-  const Eigen::Matrix3d from = pair_frame(a, b);
+  // The longer of the two sets the x axis, as the error of a direction is that of the atom over its
+  // distance.
+  const bool swapped = b.norm() > a.norm();
+  const auto frame_of = [&](const Eigen::Vector3d& first, const Eigen::Vector3d& second) {
+    return swapped ? pair_frame(second, first) : pair_frame(first, second);
+  };
+  const Eigen::Matrix3d from = frame_of(a, b);
   const double length = (a - b).norm();
   const double slack = 2.0 * tolerance_angstrom + 1e-9;
 
@@ -232,7 +255,7 @@ std::vector<HeldOperation> find_held_operations(const Molecule& molecule,
       const Eigen::Vector3d to_a = positions.col(image_a), to_b = positions.col(image_b);
       if (std::abs((to_a - to_b).norm() - length) > slack) continue;
       if (sharpness(to_a, to_b) < 0.2 * sharpness(a, b)) continue;
-      const Eigen::Matrix3d to = pair_frame(to_a, to_b);
+      const Eigen::Matrix3d to = frame_of(to_a, to_b);
       for (int handedness : {1, -1}) {
         const Eigen::Matrix3d rough =
             to * Eigen::Vector3d(1, 1, handedness).asDiagonal() * from.transpose();
@@ -250,37 +273,33 @@ std::vector<int> partial_products(const Molecule& molecule,
                                   const std::vector<HeldOperation>& operations) {
   // Two atoms not on one line with the centroid tell operations apart; which two does not matter.
   const Eigen::Matrix3Xd positions = centred(molecule);
-  int atom_a = 0, atom_b = 0;
-  double best = -1.0;
-  for (int i = 0; i < molecule.size(); ++i) {
-    const int far = [&] {
-      Eigen::Index index = 0;
-      positions.colwise().norm().maxCoeff(&index);
-      return static_cast<int>(index);
-    }();
-    const double area = positions.col(far).cross(positions.col(i)).norm();
-    if (area > best) {
-      best = area;
-      atom_a = far;
+  Eigen::Index atom_a = 0, atom_b = 0;
+  positions.colwise().norm().maxCoeff(&atom_a);
+  double largest_area = -1.0;
+  for (Eigen::Index i = 0; i < positions.cols(); ++i) {
+    const double area = positions.col(atom_a).cross(positions.col(i)).norm();
+    if (area > largest_area) {
+      largest_area = area;
       atom_b = i;
     }
   }
-  using Key = std::array<int, 3>;
-  std::map<Key, int> index;
+  const auto key = [&](int image_a, int image_b, int handedness) {
+    return (static_cast<long>(image_a) * molecule.size() + image_b) * 2 + (handedness > 0 ? 1 : 0);
+  };
+  std::unordered_map<long, int> index;
   std::vector<int> handedness;
   for (std::size_t g = 0; g < operations.size(); ++g) {
     handedness.push_back(determinant_sign(operations[g].matrix));
-    index[{operations[g].images[atom_a], operations[g].images[atom_b], handedness.back()}] =
+    index[key(operations[g].images[atom_a], operations[g].images[atom_b], handedness.back())] =
         static_cast<int>(g);
   }
   const std::size_t size = operations.size();
   std::vector<int> products(size * size, -1);
   for (std::size_t g = 0; g < size; ++g) {
     for (std::size_t h = 0; h < size; ++h) {
-      const Key key = {operations[g].images[operations[h].images[atom_a]],
-                       operations[g].images[operations[h].images[atom_b]],
-                       handedness[g] * handedness[h]};
-      const auto found = index.find(key);
+      const auto found = index.find(key(operations[g].images[operations[h].images[atom_a]],
+                                        operations[g].images[operations[h].images[atom_b]],
+                                        handedness[g] * handedness[h]));
       if (found != index.end()) products[g * size + h] = found->second;
     }
   }

@@ -22,8 +22,8 @@ enum class Shape { SingleAtom, Linear, General };
 /// element, fitted to the atoms (least squares).
 struct HeldOperation {
   Eigen::Matrix3d matrix;
-  std::vector<int> images;         // [atom] -> atom it lands on
-  double displacement = 0.0;       // Å, largest distance between an image and its atom
+  std::vector<int> images;    // [atom] -> atom it lands on
+  double displacement = 0.0;  // Å, largest distance between an image and its atom
 };
 
 /// All operations that hold, the identity first: one non-collinear pair of atoms is mapped onto

@@ -34,8 +34,8 @@ std::vector<Element> elements_of(const PartialTable& table,
   std::vector<Element> elements;
   for (int g : subset) {
     const Eigen::Matrix3d& matrix = operations[g];
-    elements.push_back({order_of(table, g), determinant_sign(matrix) > 0, operation_axis(matrix),
-                        matrix.trace()});
+    elements.push_back(
+        {order_of(table, g), determinant_sign(matrix) > 0, operation_axis(matrix), matrix.trace()});
   }
   return elements;
 }
@@ -148,11 +148,14 @@ Eigen::Matrix3d some_standard_frame(const Schoenflies& symbol, const PartialTabl
   switch (symbol.family) {
     case Family::T:
     case Family::Th:
-    case Family::Td: return perpendicular_frame(distinct_axes(elements, true, 2));
+    case Family::Td:
+      return perpendicular_frame(distinct_axes(elements, true, 2));
     case Family::O:
-    case Family::Oh: return perpendicular_frame(distinct_axes(elements, true, 4));
+    case Family::Oh:
+      return perpendicular_frame(distinct_axes(elements, true, 4));
     case Family::I:
-    case Family::Ih: return icosahedral_frame(elements);
+    case Family::Ih:
+      return icosahedral_frame(elements);
     case Family::Cs: {
       const Eigen::Vector3d z = distinct_axes(elements, false, 2).front();
       return frame_of(z, any_perpendicular(z));
@@ -169,7 +172,8 @@ Eigen::Matrix3d some_standard_frame(const Schoenflies& symbol, const PartialTabl
         }
       }
       break;
-    default: break;
+    default:
+      break;
   }
   if (symbol.n == 1) return Eigen::Matrix3d::Identity();  // C1, Ci
   const Eigen::Vector3d z = highest_rotation(elements).axis;

@@ -16,10 +16,10 @@ std::string level_label(const std::string& irrep_label) {
 
 std::string readable_label(const std::string& ascii_label) {
   static constexpr std::pair<std::string_view, std::string_view> greek[] = {
-      {"Sigma", "Σ"}, {"sigma", "σ"}, {"Pi", "Π"},  {"pi", "π"},   {"Delta", "Δ"},
-      {"delta", "δ"}, {"Phi", "Φ"},   {"phi", "φ"}, {"Gamma", "Γ"}, {"gamma", "γ"},
+      {"Sigma", "Σ"},  {"sigma", "σ"},  {"Pi", "Π"},    {"pi", "π"},    {"Delta", "Δ"},
+      {"delta", "δ"},  {"Phi", "Φ"},    {"phi", "φ"},   {"Gamma", "Γ"}, {"gamma", "γ"},
       {"Lambda", "Λ"}, {"lambda", "λ"}, {"Kappa", "Κ"}, {"kappa", "κ"}, {"Iota", "Ι"},
-      {"iota", "ι"},   {"Eta", "Η"},   {"eta", "η"}};
+      {"iota", "ι"},   {"Eta", "Η"},    {"eta", "η"}};
   for (const auto& [ascii, letter] : greek) {
     const std::size_t at = ascii_label.find(ascii);
     if (at == std::string::npos) continue;

@@ -12,8 +12,10 @@ std::vector<Irrep> generate_irreps(const Schoenflies& symbol,
     case Family::Oh:
     case Family::I:
     case Family::Ih:
-    case Family::Kh: return polyhedral_irreps(symbol, operations);
-    default: return axial_irreps(symbol, operations);
+    case Family::Kh:
+      return polyhedral_irreps(symbol, operations);
+    default:
+      return axial_irreps(symbol, operations);
   }
 }
 

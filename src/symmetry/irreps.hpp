@@ -15,8 +15,8 @@ namespace irrepwise {
 /// Sigma-.
 ///
 /// Axial groups: an operation is a turn or flip M of the xy plane and a sign s of z; every irrep is
-/// the restriction of one of the functions 1, det M, or the pair cos kφ, sin kφ, times 1 or s. Cubic
-/// and icosahedral groups: from the real harmonics of l = 1, 2, 3.
+/// the restriction of one of the functions 1, det M, or the pair cos kφ, sin kφ, times 1 or s.
+/// Cubic and icosahedral groups: from the real harmonics of l = 1, 2, 3.
 ///
 /// @param operations  those of `standard_operations(symbol)`
 /// @source            derived by us from the definition of an irrep; labels as in the conventions

@@ -6,9 +6,9 @@
 #include <numbers>
 #include <optional>
 
+#include <fmt/format.h>
 #include <boost/math/special_functions/cos_pi.hpp>
 #include <boost/math/special_functions/sin_pi.hpp>
-#include <fmt/format.h>
 
 #include "symmetry/irreps.hpp"
 
@@ -17,8 +17,8 @@ namespace {
 
 // An operation as it acts on the azimuth and on z: φ -> φ + a, or φ -> 2t - φ, and z -> s z.
 struct PlaneAction {
-  bool flips;      // det M = -1
-  double angle;    // a or 2t, in units of π
+  bool flips;    // det M = -1
+  double angle;  // a or 2t, in units of π
   int z_sign;
 };
 
@@ -41,9 +41,9 @@ Eigen::Matrix2d pair_matrix(const PlaneAction& action, int k) {
 }
 
 struct AxialShape {
-  int n = 1;                // order of the cyclic group that numbers the irreps
-  bool flips = false;       // vertical mirrors or perpendicular C2 axes
-  bool doubled = false;     // times {1, s}: a horizontal mirror or an inversion beside the axis
+  int n = 1;                    // order of the cyclic group that numbers the irreps
+  bool flips = false;           // vertical mirrors or perpendicular C2 axes
+  bool doubled = false;         // times {1, s}: a horizontal mirror or an inversion beside the axis
   bool rotoreflection = false;  // the generator is S_n rather than C_n
   bool linear = false;
 };
@@ -52,23 +52,33 @@ AxialShape shape_of(const Schoenflies& symbol) {
   const int n = symbol.n;
   const bool odd = n % 2 == 1;
   switch (symbol.family) {
-    case Family::C1: return {.n = 1};
+    case Family::C1:
+      return {.n = 1};
     case Family::Ci:
-    case Family::Cs: return {.n = 1, .doubled = true};
-    case Family::Cn: return {.n = n};
-    case Family::Cnv: return {.n = n, .flips = true};
-    case Family::Cnh: return {.n = n, .doubled = true};
-    case Family::Dn: return {.n = n, .flips = true};
-    case Family::Dnh: return {.n = n, .flips = true, .doubled = true};
+    case Family::Cs:
+      return {.n = 1, .doubled = true};
+    case Family::Cn:
+      return {.n = n};
+    case Family::Cnv:
+      return {.n = n, .flips = true};
+    case Family::Cnh:
+      return {.n = n, .doubled = true};
+    case Family::Dn:
+      return {.n = n, .flips = true};
+    case Family::Dnh:
+      return {.n = n, .flips = true, .doubled = true};
     case Family::Dnd:
       return odd ? AxialShape{.n = n, .flips = true, .doubled = true}
                  : AxialShape{.n = 2 * n, .flips = true, .rotoreflection = true};
     case Family::S2n:
       return odd ? AxialShape{.n = n, .doubled = true}
                  : AxialShape{.n = 2 * n, .rotoreflection = true};
-    case Family::Cinfv: return {.flips = true, .linear = true};
-    case Family::Dinfh: return {.flips = true, .doubled = true, .linear = true};
-    default: return {};
+    case Family::Cinfv:
+      return {.flips = true, .linear = true};
+    case Family::Dinfh:
+      return {.flips = true, .doubled = true, .linear = true};
+    default:
+      return {};
   }
 }
 
@@ -85,10 +95,9 @@ std::vector<Candidate> candidates_of(const AxialShape& shape) {
                        bool complex_pair = false) {
     found.push_back({k, matrix, complex_pair});
     if (shape.doubled) {
-      found.push_back({k, [matrix](const PlaneAction& a) -> Eigen::MatrixXd {
-                         return a.z_sign * matrix(a);
-                       },
-                       complex_pair});
+      found.push_back(
+          {k, [matrix](const PlaneAction& a) -> Eigen::MatrixXd { return a.z_sign * matrix(a); },
+           complex_pair});
     }
   };
   const auto number = [](double value) { return Eigen::MatrixXd::Constant(1, 1, value); };
@@ -99,9 +108,11 @@ std::vector<Candidate> candidates_of(const AxialShape& shape) {
   for (int k = 1; k <= last_k; ++k) {
     if (!shape.linear && 2 * k == shape.n) {
       add(k, [=](const PlaneAction& a) { return number(std::round(pair_matrix(a, k)(0, 0))); });
-      if (shape.flips) add(k, [=](const PlaneAction& a) { return number(std::round(pair_matrix(a, k)(1, 1))); });
+      if (shape.flips)
+        add(k, [=](const PlaneAction& a) { return number(std::round(pair_matrix(a, k)(1, 1))); });
     } else {
-      add(k, [k](const PlaneAction& a) { return Eigen::MatrixXd(pair_matrix(a, k)); },
+      add(
+          k, [k](const PlaneAction& a) { return Eigen::MatrixXd(pair_matrix(a, k)); },
           !shape.flips);
     }
   }
@@ -110,8 +121,8 @@ std::vector<Candidate> candidates_of(const AxialShape& shape) {
 
 // Operations that decide the labels.
 struct Landmarks {
-  std::optional<std::size_t> principal;   // C_n or S_n that generates the cyclic part
-  std::optional<std::size_t> flip;        // C2' along x, or the mirror xz where there is no C2'
+  std::optional<std::size_t> principal;  // C_n or S_n that generates the cyclic part
+  std::optional<std::size_t> flip;       // C2' along x, or the mirror xz where there is no C2'
   std::optional<std::size_t> inversion;
   std::optional<std::size_t> horizontal;  // σh
   std::optional<std::size_t> c2y;         // C2 along y, for D2 and D2h
@@ -147,8 +158,13 @@ std::string label_of(const Irrep& irrep, int k, const Schoenflies& symbol, const
   const std::string parity = parity_of(irrep, marks);
   if (shape.linear) {
     static constexpr const char* letters[] = {"Sigma", "Pi", "Delta", "Phi"};
-    const std::string sign = k > 0 ? "" : irrep.characters[*marks.flip] *
-                (symbol.family == Family::Dinfh && parity == "u" ? -1 : 1) > 0 ? "+" : "-";
+    const std::string sign =
+        k > 0 ? ""
+        : irrep.characters[*marks.flip] *
+                    (symbol.family == Family::Dinfh && parity == "u" ? -1 : 1) >
+                0
+            ? "+"
+            : "-";
     return letters[k] + parity + sign;
   }
   if (irrep.dimension == 2) return (only_e ? "E" : fmt::format("E{}", k)) + parity;

@@ -152,7 +152,8 @@ std::vector<std::pair<std::string, MatrixOf>> icosahedral(
 
 std::vector<Irrep> polyhedral_irreps(const Schoenflies& symbol,
                                      const std::vector<Eigen::Matrix3d>& operations) {
-  const std::pair<std::string, MatrixOf> a = {"A", [](const Eigen::Matrix3d&) { return number(1.0); }};
+  const std::pair<std::string, MatrixOf> a = {"A",
+                                              [](const Eigen::Matrix3d&) { return number(1.0); }};
   const std::pair<std::string, MatrixOf> a1 = {"A1", a.second};
   const std::pair<std::string, MatrixOf> a2 = {
       "A2", [](const Eigen::Matrix3d& r) { return number(xyz_sign(r)); }};
@@ -161,18 +162,28 @@ std::vector<Irrep> polyhedral_irreps(const Schoenflies& symbol,
 
   std::vector<Irrep> irreps;
   switch (symbol.family) {
-    case Family::T: add(irreps, operations, {a, e, {"T", vector}}, false, "E"); break;
-    case Family::Th: add(irreps, operations, {a, e, {"T", vector}}, true, "E"); break;
+    case Family::T:
+      add(irreps, operations, {a, e, {"T", vector}}, false, "E");
+      break;
+    case Family::Th:
+      add(irreps, operations, {a, e, {"T", vector}}, true, "E");
+      break;
     case Family::O:
       add(irreps, operations, {a1, a2, e, {"T1", vector}, {"T2", t2_matrix}}, false);
       break;
     case Family::Oh:
       add(irreps, operations, {a1, a2, e, {"T1", vector}, {"T2", t2_matrix}}, true);
       break;
-    case Family::Td: return tetrahedral_td(operations);
-    case Family::I: add(irreps, operations, icosahedral(operations), false); break;
-    case Family::Ih: add(irreps, operations, icosahedral(operations), true); break;
-    default: return spherical(operations);
+    case Family::Td:
+      return tetrahedral_td(operations);
+    case Family::I:
+      add(irreps, operations, icosahedral(operations), false);
+      break;
+    case Family::Ih:
+      add(irreps, operations, icosahedral(operations), true);
+      break;
+    default:
+      return spherical(operations);
   }
   return irreps;
 }

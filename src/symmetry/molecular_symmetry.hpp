@@ -14,11 +14,11 @@ namespace irrepwise {
 
 struct MolecularSymmetry {
   PointGroup group;
-  Molecule molecule;                     // symmetrised, in the standard frame, atoms in input order
-  Eigen::Matrix3d rotation;              // r_standard = rotation (r_input - origin)
-  Eigen::Vector3d origin;                // Å, input frame
+  Molecule molecule;         // symmetrised, in the standard frame, atoms in input order
+  Eigen::Matrix3d rotation;  // r_standard = rotation (r_input - origin)
+  Eigen::Vector3d origin;    // Å, input frame
   double tolerance_angstrom = 0.0;
-  double largest_shift_angstrom = 0.0;   // of an atom, from the input to the exact structure
+  double largest_shift_angstrom = 0.0;  // of an atom, from the input to the exact structure
   double rms_shift_angstrom = 0.0;
   std::vector<std::vector<int>> images;  // [operation][atom] -> atom it lands on
   std::vector<std::string> axes;         // words: "z = C4 through Pt1"

@@ -4,8 +4,8 @@
 #include <numbers>
 #include <numeric>
 
-#include <Eigen/Geometry>
 #include <fmt/format.h>
+#include <Eigen/Geometry>
 
 namespace irrepwise {
 namespace {
@@ -45,7 +45,8 @@ Eigen::Vector3d rotation_axis(const Eigen::Matrix3d& rotation) {
   const Eigen::Vector3d skew(rotation(2, 1) - rotation(1, 2), rotation(0, 2) - rotation(2, 0),
                              rotation(1, 0) - rotation(0, 1));
   if (skew.norm() > 1e-3) return skew.normalized();
-  const Eigen::Matrix3d outer = 0.5 * (rotation + rotation.transpose()) + Eigen::Matrix3d::Identity();
+  const Eigen::Matrix3d outer =
+      0.5 * (rotation + rotation.transpose()) + Eigen::Matrix3d::Identity();
   Eigen::Index column = 0;
   outer.colwise().norm().maxCoeff(&column);
   return upward(outer.col(column).normalized());
@@ -105,11 +106,16 @@ std::string operation_symbol(const SymmetryOperation& operation) {
                             : fmt::format("{}{}^{}", letter, operation.n, operation.k);
   };
   switch (operation.kind) {
-    case OperationKind::Identity: return "E";
-    case OperationKind::Inversion: return "i";
-    case OperationKind::Reflection: return "sigma";
-    case OperationKind::Rotation: return powered('C');
-    case OperationKind::Rotoreflection: return powered('S');
+    case OperationKind::Identity:
+      return "E";
+    case OperationKind::Inversion:
+      return "i";
+    case OperationKind::Reflection:
+      return "sigma";
+    case OperationKind::Rotation:
+      return powered('C');
+    case OperationKind::Rotoreflection:
+      return powered('S');
   }
   return {};
 }

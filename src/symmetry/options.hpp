@@ -22,7 +22,7 @@ struct SymmetryOptions {
   // tolerance, up to the limit.
   std::optional<std::string> group;
   double limit_angstrom = 0.5;
-  std::optional<std::string> subgroup;  // Schoenflies symbol of a subgroup to work in
+  std::optional<std::string> subgroup;  // to work in: symbol, or one way to it, "C2v(C2')"
   // Per atom: atoms of different kinds are never images of each other, though of one element (they
   // have other parameters, say). Empty: the element alone decides.
   std::vector<int> kinds;

@@ -14,7 +14,9 @@
 namespace irrepwise {
 
 PointGroup::PointGroup(const Schoenflies& symbol)
-    : symbol_(symbol), operations_(standard_operations(symbol)), products_(product_table(operations_)) {
+    : symbol_(symbol),
+      operations_(standard_operations(symbol)),
+      products_(product_table(operations_)) {
   inverses_.resize(operations_.size());
   for (int g = 0; g < order(); ++g) {
     for (int h = 0; h < order(); ++h) {

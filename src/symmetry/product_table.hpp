@@ -22,7 +22,8 @@ class OperationIndex {
   std::vector<std::pair<double, int>> keys_;  // ascending
 };
 
-/// @returns  [g * order + h]: index of g after h; the list must be closed (asserted)
+/// @returns  [g * order + h]: index of g after h; the list must be closed
+///           (asserted) and begin with the identity
 [[nodiscard]] std::vector<int> product_table(const std::vector<Eigen::Matrix3d>& operations);
 
 }  // namespace irrepwise

@@ -14,11 +14,11 @@ namespace irrepwise {
 namespace {
 
 constexpr std::pair<std::string_view, Family> named_groups[] = {
-    {"C1", Family::C1},       {"S1", Family::Cs},       {"Ci", Family::Ci},
-    {"Cs", Family::Cs},       {"T", Family::T},         {"Td", Family::Td},
-    {"Th", Family::Th},       {"O", Family::O},         {"Oh", Family::Oh},
-    {"I", Family::I},         {"Ih", Family::Ih},       {"Cinfv", Family::Cinfv},
-    {"C∞v", Family::Cinfv},   {"Dinfh", Family::Dinfh}, {"D∞h", Family::Dinfh},
+    {"C1", Family::C1},     {"S1", Family::Cs},       {"Ci", Family::Ci},
+    {"Cs", Family::Cs},     {"T", Family::T},         {"Td", Family::Td},
+    {"Th", Family::Th},     {"O", Family::O},         {"Oh", Family::Oh},
+    {"I", Family::I},       {"Ih", Family::Ih},       {"Cinfv", Family::Cinfv},
+    {"C∞v", Family::Cinfv}, {"Dinfh", Family::Dinfh}, {"D∞h", Family::Dinfh},
     {"Kh", Family::Kh}};
 
 Error unknown_group(std::string_view text) {
@@ -31,9 +31,10 @@ Error unknown_group(std::string_view text) {
     if (n % 2 == 0) known.push_back(fmt::format("S{}", n));
   }
   const std::string nearest = nearest_word(text, known);
-  return Error(fmt::format("unknown point group '{}'; {}write a Schoenflies symbol such as C2v, D4h, "
-                           "D5d, S6, Td, Oh, Ih or Cinfv",
-                           text, nearest.empty() ? "" : fmt::format("did you mean {}? ", nearest)));
+  return Error(
+      fmt::format("unknown point group '{}'; {}write a Schoenflies symbol such as C2v, D4h, "
+                  "D5d, S6, Td, Oh, Ih or Cinfv",
+                  text, nearest.empty() ? "" : fmt::format("did you mean {}? ", nearest)));
 }
 
 bool same_ignoring_case(std::string_view a, std::string_view b) {
@@ -76,26 +77,46 @@ Schoenflies numbered_group(char letter, int n, char suffix, std::string_view tex
 
 std::string Schoenflies::name() const {
   switch (family) {
-    case Family::C1: return "C1";
-    case Family::Ci: return "Ci";
-    case Family::Cs: return "Cs";
-    case Family::Cn: return fmt::format("C{}", n);
-    case Family::Cnv: return fmt::format("C{}v", n);
-    case Family::Cnh: return fmt::format("C{}h", n);
-    case Family::Dn: return fmt::format("D{}", n);
-    case Family::Dnh: return fmt::format("D{}h", n);
-    case Family::Dnd: return fmt::format("D{}d", n);
-    case Family::S2n: return fmt::format("S{}", 2 * n);
-    case Family::T: return "T";
-    case Family::Td: return "Td";
-    case Family::Th: return "Th";
-    case Family::O: return "O";
-    case Family::Oh: return "Oh";
-    case Family::I: return "I";
-    case Family::Ih: return "Ih";
-    case Family::Cinfv: return "Cinfv";
-    case Family::Dinfh: return "Dinfh";
-    case Family::Kh: return "Kh";
+    case Family::C1:
+      return "C1";
+    case Family::Ci:
+      return "Ci";
+    case Family::Cs:
+      return "Cs";
+    case Family::Cn:
+      return fmt::format("C{}", n);
+    case Family::Cnv:
+      return fmt::format("C{}v", n);
+    case Family::Cnh:
+      return fmt::format("C{}h", n);
+    case Family::Dn:
+      return fmt::format("D{}", n);
+    case Family::Dnh:
+      return fmt::format("D{}h", n);
+    case Family::Dnd:
+      return fmt::format("D{}d", n);
+    case Family::S2n:
+      return fmt::format("S{}", 2 * n);
+    case Family::T:
+      return "T";
+    case Family::Td:
+      return "Td";
+    case Family::Th:
+      return "Th";
+    case Family::O:
+      return "O";
+    case Family::Oh:
+      return "Oh";
+    case Family::I:
+      return "I";
+    case Family::Ih:
+      return "Ih";
+    case Family::Cinfv:
+      return "Cinfv";
+    case Family::Dinfh:
+      return "Dinfh";
+    case Family::Kh:
+      return "Kh";
   }
   return {};
 }
@@ -115,8 +136,8 @@ Schoenflies parse_schoenflies(std::string_view text) {
   const auto rest = static_cast<std::size_t>(text.data() + text.size() - end);
   if (status != std::errc() || rest > 1 || n < 1) throw unknown_group(text);
   if (n > Schoenflies::max_n) {
-    throw Error(fmt::format("point group '{}': n = {}, expected 1 to {}", text, n,
-                            Schoenflies::max_n));
+    throw Error(
+        fmt::format("point group '{}': n = {}, expected 1 to {}", text, n, Schoenflies::max_n));
   }
   const char suffix =
       rest == 0 ? '\0' : static_cast<char>(std::tolower(static_cast<unsigned char>(*end)));

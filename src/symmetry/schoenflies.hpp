@@ -7,7 +7,26 @@
 namespace irrepwise {
 
 enum class Family {
-  C1, Ci, Cs, Cn, Cnv, Cnh, Dn, Dnh, Dnd, S2n, T, Td, Th, O, Oh, I, Ih, Cinfv, Dinfh, Kh
+  C1,
+  Ci,
+  Cs,
+  Cn,
+  Cnv,
+  Cnh,
+  Dn,
+  Dnh,
+  Dnd,
+  S2n,
+  T,
+  Td,
+  Th,
+  O,
+  Oh,
+  I,
+  Ih,
+  Cinfv,
+  Dinfh,
+  Kh
 };
 
 /// A group by family and n. For S2n, n is half the order of the axis: S4 has n = 2.
@@ -25,7 +44,8 @@ struct Schoenflies {
   friend bool operator==(const Schoenflies&, const Schoenflies&) = default;
 };
 
-/// @param text    "D4h", "d4h", "S4", "Cinfv", "C∞v"; C2h and the like for any n up to max_n. C1v and
+/// @param text    "D4h", "d4h", "S4", "Cinfv", "C∞v"; C2h and the like for any n up to max_n. C1v
+/// and
 ///                C1h mean Cs, S2 means Ci, D1 means C2, D1h C2v, D1d C2h, C1 and S1 as usual
 /// @throws Error  with the nearest known symbol
 [[nodiscard]] Schoenflies parse_schoenflies(std::string_view text);

@@ -60,10 +60,16 @@ Operations axial(const Schoenflies& symbol) {
   Operations operations;
   add_turns(operations, n, 1);
   switch (symbol.family) {
-    case Family::Cnv: add_flips(operations, n, 1); break;
+    case Family::Cnv:
+      add_flips(operations, n, 1);
+      break;
     case Family::Cs:
-    case Family::Cnh: add_turns(operations, n, -1); break;
-    case Family::Dn: add_flips(operations, n, -1); break;
+    case Family::Cnh:
+      add_turns(operations, n, -1);
+      break;
+    case Family::Dn:
+      add_flips(operations, n, -1);
+      break;
     case Family::Dnh:
       add_flips(operations, n, -1);
       add_turns(operations, n, -1);
@@ -75,8 +81,11 @@ Operations axial(const Schoenflies& symbol) {
       add_flips(operations, n, 1, true);
       break;
     case Family::Ci:
-    case Family::S2n: add_odd_rotoreflections(operations, n); break;
-    default: break;  // C1 and Cn have only the turns; other families do not come here
+    case Family::S2n:
+      add_odd_rotoreflections(operations, n);
+      break;
+    default:
+      break;  // C1 and Cn have only the turns; other families do not come here
   }
   return operations;
 }
@@ -96,7 +105,7 @@ Operations signed_permutations(Keep keep) {
         sign_product *= sign;
         matrix(permutations[p][column], column) = sign;
       }
-      if (keep(p < 3, sign_product > 0)) operations.push_back(matrix);
+      if (keep(p<3, sign_product> 0)) operations.push_back(matrix);
     }
   }
   return operations;
@@ -106,7 +115,8 @@ Operations signed_permutations(Keep keep) {
 double tidy_icosahedral(double value) {
   constexpr double phi = std::numbers::phi;
   for (double exact : {0.0, 1.0, 0.5, phi / 2.0, 0.5 / phi}) {
-    if (std::abs(std::abs(value) - exact) < 1e-9) return std::copysign(exact, exact == 0 ? 1 : value);
+    if (std::abs(std::abs(value) - exact) < 1e-9)
+      return std::copysign(exact, exact == 0 ? 1 : value);
   }
   return value;
 }
@@ -115,7 +125,8 @@ Operations icosahedral_rotations() {
   const Operations generators = [] {
     Operations found = signed_permutations([](bool even, bool plus) { return even && plus; });
     const Eigen::Vector3d axis = Eigen::Vector3d(0, 1, std::numbers::phi).normalized();
-    const double c = std::cos(2.0 * std::numbers::pi / 5.0), s = std::sin(2.0 * std::numbers::pi / 5.0);
+    const double c = std::cos(2.0 * std::numbers::pi / 5.0),
+                 s = std::sin(2.0 * std::numbers::pi / 5.0);
     Eigen::Matrix3d cross;
     cross << 0, -axis[2], axis[1], axis[2], 0, -axis[0], -axis[1], axis[0], 0;
     found.push_back(c * Eigen::Matrix3d::Identity() + s * cross +
@@ -149,17 +160,28 @@ Operations with_inversion(Operations operations) {
 
 std::vector<Eigen::Matrix3d> standard_operations(const Schoenflies& symbol) {
   switch (symbol.family) {
-    case Family::T: return signed_permutations([](bool even, bool plus) { return even && plus; });
-    case Family::Td: return signed_permutations([](bool, bool plus) { return plus; });
-    case Family::Th: return signed_permutations([](bool even, bool) { return even; });
-    case Family::O: return signed_permutations([](bool even, bool plus) { return even == plus; });
-    case Family::Oh: return signed_permutations([](bool, bool) { return true; });
-    case Family::I: return icosahedral_rotations();
-    case Family::Ih: return with_inversion(icosahedral_rotations());
-    case Family::Cinfv: return axial({Family::Cnv, linear_quadrature_angles});
-    case Family::Dinfh: return axial({Family::Dnh, linear_quadrature_angles});
-    case Family::Kh: return {Eigen::Matrix3d::Identity(), -Eigen::Matrix3d::Identity()};
-    default: return axial(symbol);
+    case Family::T:
+      return signed_permutations([](bool even, bool plus) { return even && plus; });
+    case Family::Td:
+      return signed_permutations([](bool, bool plus) { return plus; });
+    case Family::Th:
+      return signed_permutations([](bool even, bool) { return even; });
+    case Family::O:
+      return signed_permutations([](bool even, bool plus) { return even == plus; });
+    case Family::Oh:
+      return signed_permutations([](bool, bool) { return true; });
+    case Family::I:
+      return icosahedral_rotations();
+    case Family::Ih:
+      return with_inversion(icosahedral_rotations());
+    case Family::Cinfv:
+      return axial({Family::Cnv, linear_quadrature_angles});
+    case Family::Dinfh:
+      return axial({Family::Dnh, linear_quadrature_angles});
+    case Family::Kh:
+      return {Eigen::Matrix3d::Identity(), -Eigen::Matrix3d::Identity()};
+    default:
+      return axial(symbol);
   }
 }
 

@@ -9,10 +9,9 @@ namespace irrepwise {
 namespace {
 
 // For each standard operation the images of the held operation nearest to it.
-std::vector<std::vector<int>> images_by_operation(const PointGroup& group,
-                                                  const Eigen::Matrix3d& rotation,
-                                                  const std::vector<Eigen::Matrix3d>& held,
-                                                  const std::vector<std::vector<int>>& held_images) {
+std::vector<std::vector<int>> images_by_operation(
+    const PointGroup& group, const Eigen::Matrix3d& rotation,
+    const std::vector<Eigen::Matrix3d>& held, const std::vector<std::vector<int>>& held_images) {
   std::vector<std::vector<int>> images;
   for (const Eigen::Matrix3d& operation : group.operations()) {
     const Eigen::Matrix3d in_input_frame = rotation.transpose() * operation * rotation;

@@ -10,8 +10,8 @@
 namespace irrepwise {
 
 struct SymmetrisedPositions {
-  Eigen::Matrix3d rotation;    // refined: from the input frame to the standard one
-  Eigen::Matrix3Xd positions;  // Å, standard frame, exactly symmetric
+  Eigen::Matrix3d rotation;              // refined: from the input frame to the standard one
+  Eigen::Matrix3Xd positions;            // Å, standard frame, exactly symmetric
   std::vector<std::vector<int>> images;  // [operation of the group][atom]
 };
 
@@ -22,9 +22,10 @@ struct SymmetrisedPositions {
 /// @param rotation   a frame in which the group is roughly standard
 /// @param held       matrices of the operations found, input frame, one for each of the group
 /// @param held_images  [held operation][atom]
-[[nodiscard]] SymmetrisedPositions symmetrise(
-    const PointGroup& group, const Eigen::Ref<const Eigen::Matrix3Xd>& positions,
-    const Eigen::Matrix3d& rotation, const std::vector<Eigen::Matrix3d>& held,
-    const std::vector<std::vector<int>>& held_images);
+[[nodiscard]] SymmetrisedPositions symmetrise(const PointGroup& group,
+                                              const Eigen::Ref<const Eigen::Matrix3Xd>& positions,
+                                              const Eigen::Matrix3d& rotation,
+                                              const std::vector<Eigen::Matrix3d>& held,
+                                              const std::vector<std::vector<int>>& held_images);
 
 }  // namespace irrepwise

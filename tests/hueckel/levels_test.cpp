@@ -5,8 +5,8 @@
 #include <string>
 #include <vector>
 
-#include <Eigen/Eigenvalues>
 #include <doctest/doctest.h>
+#include <Eigen/Eigenvalues>
 
 #include "harmonics/real_harmonics.hpp"
 #include "hueckel/dense.hpp"
@@ -31,9 +31,8 @@ Eigen::VectorXd repeated_energies(const Levels& levels) {
 // By another road: all orbitals at once, Eigen's generalised solver, no symmetry.
 Eigen::VectorXd dense_energies(const Molecule& molecule, const Basis& basis, Rule rule) {
   const DenseMatrices dense = dense_matrices(molecule, basis, rule);
-  return Eigen::GeneralizedSelfAdjointEigenSolver<Eigen::MatrixXd>(dense.hamiltonian_ev,
-                                                                   dense.overlap,
-                                                                   Eigen::EigenvaluesOnly)
+  return Eigen::GeneralizedSelfAdjointEigenSolver<Eigen::MatrixXd>(
+             dense.hamiltonian_ev, dense.overlap, Eigen::EigenvaluesOnly)
       .eigenvalues();
 }
 
@@ -69,7 +68,8 @@ Eigen::MatrixXd transformed(const Run& r, int g, const Eigen::MatrixXd& orbitals
 
 }  // namespace
 
-TEST_CASE("levels of every molecule of the corpus are those of the dense problem without symmetry") {
+TEST_CASE(
+    "levels of every molecule of the corpus are those of the dense problem without symmetry") {
   double worst = 0.0;
   for (const TestMolecule& test : test_molecules()) {
     const std::string name = test.name;
@@ -100,7 +100,8 @@ TEST_CASE("every rule gives the levels of its dense problem") {
   }
 }
 
-TEST_CASE("orbitals are orthonormal, solve the eigenproblem, and partners turn as their irrep says") {
+TEST_CASE(
+    "orbitals are orthonormal, solve the eigenproblem, and partners turn as their irrep says") {
   for (const TestMolecule& test : test_molecules()) {
     const std::string name = test.name;
     CAPTURE(name);
@@ -117,7 +118,8 @@ TEST_CASE("orbitals are orthonormal, solve the eigenproblem, and partners turn a
     double worst = 0.0;
     for (std::size_t k = 0; k < r.levels.levels.size(); ++k) {
       const Irrep& irrep = r.symmetry.group.irreps()[r.levels.levels[k].irrep];
-      const Eigen::MatrixXd partners = level_orbitals(r.symmetry, r.basis, r.levels, static_cast<int>(k));
+      const Eigen::MatrixXd partners =
+          level_orbitals(r.symmetry, r.basis, r.levels, static_cast<int>(k));
       for (int g = 0; g < r.symmetry.group.order(); ++g) {
         const Eigen::MatrixXd error = transformed(r, g, partners) - partners * irrep.matrices[g];
         worst = std::max(worst, error.cwiseAbs().maxCoeff());
@@ -204,9 +206,9 @@ TEST_CASE("methane as worked in a textbook: overlap, energies and labels") {
   const auto shell = [&](int n, int l, double h, double zeta) {
     return ShellParameters{n, l, h * hartree, ContractedRadial({{SlaterRadial(n, zeta), 1.0}}), ""};
   };
-  const ParameterSet parameters("textbook", {{1, {1, {shell(1, 0, -0.5, 1.2)}}},
-                                             {6, {4, {shell(2, 0, -0.7144, 1.625),
-                                                      shell(2, 1, -0.3921, 1.625)}}}});
+  const ParameterSet parameters(
+      "textbook", {{1, {1, {shell(1, 0, -0.5, 1.2)}}},
+                   {6, {4, {shell(2, 0, -0.7144, 1.625), shell(2, 1, -0.3921, 1.625)}}}});
   HueckelOptions options;
   options.rule = Rule::WolfsbergHelmholz;
   const Run r = run(methane(1.1), options, {}, parameters);
@@ -229,9 +231,9 @@ TEST_CASE("ethane prefers the staggered form by 4.0 kcal/mol in the first paper'
     const auto shell = [](int n, int l, double h, double zeta) {
       return ShellParameters{n, l, h, ContractedRadial({{SlaterRadial(n, zeta), 1.0}}), ""};
     };
-    return ParameterSet("first paper", {{1, {1, {shell(1, 0, -13.6, 1.0)}}},
-                                        {6, {4, {shell(2, 0, -21.4, 1.625),
-                                                 shell(2, 1, -11.4, 1.625)}}}});
+    return ParameterSet("first paper",
+                        {{1, {1, {shell(1, 0, -13.6, 1.0)}}},
+                         {6, {4, {shell(2, 0, -21.4, 1.625), shell(2, 1, -11.4, 1.625)}}}});
   }();
   HueckelOptions options;
   options.rule = Rule::WolfsbergHelmholz;
@@ -239,6 +241,7 @@ TEST_CASE("ethane prefers the staggered form by 4.0 kcal/mol in the first paper'
   const Run eclipsed = run(ethane(1.54, 1.10, EthaneForm::Eclipsed), options, {}, parameters);
   constexpr double kcal_per_mol_in_ev = 23.0605;  // CODATA 2022, F / 4184
   const double barrier =
-      (eclipsed.levels.sum_of_occupied_ev - staggered.levels.sum_of_occupied_ev) * kcal_per_mol_in_ev;
+      (eclipsed.levels.sum_of_occupied_ev - staggered.levels.sum_of_occupied_ev) *
+      kcal_per_mol_in_ev;
   CHECK(barrier == doctest::Approx(4.0).epsilon(0.05 / 4.0).scale(0));
 }

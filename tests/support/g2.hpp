@@ -9,7 +9,7 @@
 struct G2Molecule {
   std::string name;
   irrepwise::Molecule molecule;
-  std::string point_group;     // published, Schoenflies; holds at 0.0001, 0.01 and 0.05 Å
+  std::string point_group;     // published, Schoenflies; see the header of the file
   int unpaired_electrons = 0;  // as published
   std::string note;            // why the group is not the one that the source states; mostly empty
 };

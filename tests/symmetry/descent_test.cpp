@@ -11,6 +11,8 @@
 
 #include "core/error.hpp"
 #include "support/groups.hpp"
+#include "support/molecules.hpp"
+#include "symmetry/vibrations.hpp"
 
 using namespace irrepwise;
 
@@ -194,10 +196,44 @@ TEST_CASE("where the frame can stay, it stays") {
 TEST_CASE("an unclear or impossible wish is refused, and the choices are named") {
   const PointGroup d4h = group_of("D4h");
   CHECK_THROWS_WITH_AS((void)find_embedding(d4h, "D2h"),
-                       "'D2h': D2h lies in D4h in 2 ways; choose D2h(C2') and D2h(C2'')", Error);
+                       "'D2h': D2h lies in D4h in 2 ways; choose D2h(C2') or D2h(C2'')", Error);
   CHECK_THROWS_WITH_AS((void)find_embedding(d4h, "C4v(C2)"),
                        "'C4v(C2)': there is only one way from D4h to C4v; write C4v", Error);
   CHECK_THROWS_WITH_AS((void)find_embedding(group_of("C3v"), "D3"),
                        "D3 is no subgroup of C3v; its subgroups are C3, Cs and C1", Error);
   CHECK_THROWS_AS((void)find_embedding(d4h, "Q7"), Error);
+}
+
+TEST_CASE("a molecule is laid in the very way named") {
+  // The number of displacements that keep all symmetry does not depend on axes or labels, but on
+  // which operations are kept: from the correlation, and counted again in the subgroup.
+  for (const char* name : {"tetrachloroplatinate(II)", "benzene", "sulfur hexafluoride", "methane",
+                           "carbon dioxide", "water", "ammonia"}) {
+    const Molecule& molecule = test_molecule(name).molecule;
+    const MolecularSymmetry whole = find_symmetry(molecule);
+    const Reduction displacements = displacement_irreps(whole).displacements;
+    for (const char* symbol : {"C2v", "Cs", "C2", "D2h", "D2", "C2h", "D2d", "C3v", "D3d", "D3h"}) {
+      for (const Embedding& way : embeddings(whole.group, parse_schoenflies(symbol))) {
+        const std::string molecule_name = name, way_name = way.name;
+        CAPTURE(molecule_name);
+        CAPTURE(way_name);
+        SymmetryOptions options;
+        options.subgroup = way.name;
+        const MolecularSymmetry lowered = find_symmetry(molecule, options);
+        CHECK(lowered.group.symbol().name() == symbol);
+        const std::vector<std::vector<int>> counts = correlate(whole.group, way);
+        int expected = 0;
+        for (const IrrepCount& irrep : displacements) {
+          expected += irrep.count * counts[whole.group.irrep_index(irrep.label)][0];
+        }
+        const std::string& trivial = lowered.group.irreps().front().label;
+        CHECK(count_of(displacement_irreps(lowered).displacements, trivial) == expected);
+      }
+    }
+  }
+  const Molecule& square = test_molecule("tetrachloroplatinate(II)").molecule;
+  SymmetryOptions options;
+  options.subgroup = "D2h(C3)";
+  CHECK_THROWS_WITH_AS((void)find_symmetry(square, options),
+                       "'D2h(C3)': D2h lies in D4h in 2 ways; choose D2h(C2') or D2h(C2'')", Error);
 }

@@ -5,8 +5,8 @@
 #include <string>
 #include <vector>
 
-#include <Eigen/LU>
 #include <doctest/doctest.h>
+#include <Eigen/LU>
 
 #include "core/error.hpp"
 #include "support/molecules.hpp"
@@ -31,7 +31,9 @@ double worst_image_error(const MolecularSymmetry& symmetry) {
 
 }  // namespace
 
-TEST_CASE("the group of every molecule of the corpus is found, as given and turned, shifted, renumbered") {
+TEST_CASE(
+    "the group of every molecule of the corpus is found, as given and turned, shifted, "
+    "renumbered") {
   for (const TestMolecule& test : test_molecules()) {
     const std::string name = test.name;
     CAPTURE(name);

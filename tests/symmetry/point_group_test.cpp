@@ -12,7 +12,8 @@
 
 using namespace irrepwise;
 
-TEST_CASE("every group is closed and its irreps are homomorphisms that obey the orthogonality theorem") {
+TEST_CASE(
+    "every group is closed and its irreps are homomorphisms that obey the orthogonality theorem") {
   for (const Schoenflies& symbol : all_groups(12)) {
     if (!symbol.is_finite()) continue;
     const PointGroup group(symbol);
@@ -59,7 +60,8 @@ TEST_CASE("every group is closed and its irreps are homomorphisms that obey the 
     CHECK(worst_product < 1e-13);
     CHECK(worst_orthogonality < 1e-11);
     int members = 0;
-    for (const ConjugacyClass& c : group.classes()) members += static_cast<int>(c.operations.size());
+    for (const ConjugacyClass& c : group.classes())
+      members += static_cast<int>(c.operations.size());
     CHECK(members == group.order());
     std::size_t complex_irreps = 0;
     for (const Irrep& irrep : group.irreps()) complex_irreps += irrep.complex_pair ? 2 : 1;

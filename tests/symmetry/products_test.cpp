@@ -56,7 +56,8 @@ TEST_CASE("cubic and axial products are those of the textbooks") {
   CHECK(product("Oh", "eg", "t2g") == "T1g + T2g");
   CHECK(symmetric("Oh", "t2g") == "A1g + Eg + T2g");
   CHECK(antisymmetric("Oh", "t2g") == "T1g");
-  // The cube's antisymmetric part is the determinant: 1 for turns of (Rx, Ry, Rz), and T2g = T1g A2g.
+  // The cube's antisymmetric part is the determinant: 1 for turns of (Rx, Ry, Rz), and T2g = T1g
+  // A2g.
   CHECK(antisymmetric("Oh", "t1g", 3) == "A1g");
   CHECK(antisymmetric("Oh", "t2g", 3) == "A2g");
   CHECK(product("D4h", "eg", "eu") == "A1u + A2u + B1u + B2u");

@@ -1,23 +1,30 @@
-#include "output/symmetry_result.hpp"
+#include "analysis/symmetry_result.hpp"
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 #include "harmonics/real_harmonics.hpp"
-#include "output/levels_result.hpp"
 
 namespace irrepwise {
 namespace {
 
 const char* part_letter(Part part) {
   switch (part) {
-    case Part::Shell: return "";
-    case Part::Sigma: return "σ";
-    case Part::Pi: return "π";
-    case Part::PiInPlane: return "π in plane";
-    case Part::PiOutOfPlane: return "π out of plane";
-    case Part::Delta: return "δ";
-    case Part::Phi: return "φ";
+    case Part::Shell:
+      return "";
+    case Part::Sigma:
+      return "σ";
+    case Part::Pi:
+      return "π";
+    case Part::PiInPlane:
+      return "π in plane";
+    case Part::PiOutOfPlane:
+      return "π out of plane";
+    case Part::Delta:
+      return "δ";
+    case Part::Phi:
+      return "φ";
   }
   return "";
 }
@@ -35,12 +42,12 @@ std::vector<std::string> orbitals_in_irrep(const SymmetryResult& result, const B
   HarmonicMatrix projector = HarmonicMatrix::Zero(shell.size(), shell.size());
   for (std::size_t h = 0; h < set.site_group.size(); ++h) {
     const int g = set.site_group[h];
-    projector += group.irreps()[irrep].characters[g] *
-                 harmonic_rotation(shell.l, group.operations()[g]);
+    projector +=
+        group.irreps()[irrep].characters[g] * harmonic_rotation(shell.l, group.operations()[g]);
   }
   std::vector<std::string> names;
   for (int m = 0; m < shell.size(); ++m) {
-    if (std::abs(projector(m, m)) > 1e-6) names.push_back(shell_orbital_name(shell, m));
+    if (std::abs(projector(m, m)) > 1e-6) names.push_back(salc_orbital_name(shell, m, false));
   }
   return names;
 }
@@ -91,24 +98,77 @@ std::vector<BondingIrrep> bonding_by_irrep(const SymmetryResult& result) {
   return list;
 }
 
-GroupAnswers answer_group(const PointGroup& group, const std::vector<std::string>& products,
-                          const std::vector<std::string>& configurations,
-                          const std::vector<std::string>& subgroups) {
-  GroupAnswers answers;
-  for (const std::string& question : products) {
-    answers.products.push_back(answer_product(group, question));
+SymmetryResult symmetry_of(const Molecule& molecule, const SymmetryOptions& options,
+                           const std::optional<Basis>& basis) {
+  MolecularSymmetry symmetry = find_symmetry(molecule, options);
+  std::vector<EquivalentAtoms> sets = equivalent_atoms(symmetry);
+  auto frames = frames_of_sets(symmetry, sets);
+  DisplacementIrreps displacements = displacement_irreps(symmetry);
+  SymmetryResult result{molecule,
+                        std::move(symmetry),
+                        options.limit_angstrom,
+                        symmetry_ladder(molecule, options),
+                        {},
+                        options.z || options.x,
+                        std::move(sets),
+                        std::move(frames),
+                        {},
+                        {},
+                        {},
+                        std::move(displacements),
+                        {}};
+  if (result.user_axes) {
+    SymmetryOptions by_convention = options;
+    by_convention.z.reset();
+    by_convention.x.reset();
+    result.axis_effect = axis_effect(find_symmetry(molecule, by_convention), result.symmetry);
   }
+  if (const auto centre = find_centre(result.symmetry)) result.central_atom = centre->atom;
+  if (basis) {
+    result.orbitals = OrbitalSymmetry{
+        *basis, orbital_reductions(result.symmetry, *basis, result.sets, result.frames), {}};
+  }
+  return result;
+}
+
+FrontierSymmetry frontier_symmetry(const MolecularSymmetry& symmetry, Levels levels) {
+  FrontierSymmetry frontier{std::move(levels), {}, {}, {}, {}};
+  frontier.transitions = frontier_transitions(symmetry.group, frontier.levels);
+  frontier.open = open_levels(symmetry.group, frontier.levels);
+  if (!frontier.open.empty()) {
+    frontier.terms = find_terms(symmetry.group, frontier.open);
+    frontier.ground = ground_terms(symmetry, frontier.terms);
+  }
+  return frontier;
+}
+
+std::vector<ProductAnswer> answer_products(const PointGroup& group,
+                                           const std::vector<std::string>& questions) {
+  std::vector<ProductAnswer> answers;
+  for (const std::string& question : questions) answers.push_back(answer_product(group, question));
+  return answers;
+}
+
+std::vector<TermsAnswer> answer_terms(const PointGroup& group,
+                                      const std::vector<std::string>& configurations) {
+  std::vector<TermsAnswer> answers;
   for (const std::string& configuration : configurations) {
-    answers.terms.push_back(
+    answers.push_back(
         {configuration, find_terms(group, parse_configuration(group, configuration))});
   }
+  return answers;
+}
+
+std::vector<DescentAnswer> answer_descents(const PointGroup& group,
+                                           const std::vector<std::string>& subgroups) {
+  std::vector<DescentAnswer> answers;
   for (const std::string& name : subgroups) {
     std::vector<Embedding> ways;
     if (name.find('(') == std::string::npos) ways = embeddings(group, parse_schoenflies(name));
     if (ways.empty()) ways.push_back(find_embedding(group, name));  // or says why there is none
     for (Embedding& way : ways) {
       auto times = correlate(group, way);
-      answers.descents.push_back({std::move(way), std::move(times)});
+      answers.push_back({std::move(way), std::move(times)});
     }
   }
   return answers;

@@ -1,4 +1,4 @@
-// Everything that one run of `symmetry` found, ready for the writers.
+// What symmetry says of a molecule: its group and ladder, sets, reductions, selection rules.
 #pragma once
 
 #include <optional>
@@ -8,7 +8,6 @@
 #include "analysis/transitions.hpp"
 #include "hueckel/levels.hpp"
 #include "molecule/molecule.hpp"
-#include "output/equivalence.hpp"
 #include "salc/salc_table.hpp"
 #include "symmetry/descent.hpp"
 #include "symmetry/ladder.hpp"
@@ -39,11 +38,16 @@ struct GroupAnswers {
   std::vector<DescentAnswer> descents;
 };
 
-/// @throws Error  for unknown irreps and groups, with the nearest names
-[[nodiscard]] GroupAnswers answer_group(const PointGroup& group,
-                                        const std::vector<std::string>& products,
-                                        const std::vector<std::string>& configurations,
-                                        const std::vector<std::string>& subgroups);
+/// @throws Error  for unknown irreps, with the nearest name
+[[nodiscard]] std::vector<ProductAnswer> answer_products(const PointGroup& group,
+                                                         const std::vector<std::string>& questions);
+[[nodiscard]] std::vector<TermsAnswer> answer_terms(const PointGroup& group,
+                                                    const std::vector<std::string>& configurations);
+
+/// All ways to each subgroup, or the one that is named.
+/// @throws Error  for unknown groups and ways, with the nearest name
+[[nodiscard]] std::vector<DescentAnswer> answer_descents(const PointGroup& group,
+                                                         const std::vector<std::string>& subgroups);
 
 /// What needs the valence orbitals.
 struct OrbitalSymmetry {
@@ -56,13 +60,12 @@ struct OrbitalSymmetry {
 struct FrontierSymmetry {
   Levels levels;
   std::vector<Transition> transitions;
-  std::vector<OpenLevel> open;      // empty for a closed shell
-  std::vector<Term> terms;          // of the open shell
+  std::vector<OpenLevel> open;  // empty for a closed shell
+  std::vector<Term> terms;      // of the open shell
   std::vector<GroundTerm> ground;
 };
 
 struct SymmetryResult {
-  std::string title;
   Molecule molecule;  // as read, in the input frame
   MolecularSymmetry symmetry;
   double limit_angstrom = 0.5;
@@ -70,22 +73,21 @@ struct SymmetryResult {
   AxisEffect axis_effect;  // against the axes of the conventions
   bool user_axes = false;
   std::vector<EquivalentAtoms> sets;
-  std::vector<AtomSet> named_sets;  // the same sets
   std::vector<std::optional<LocalFrames>> frames;
   std::optional<int> central_atom;
   std::optional<OrbitalSymmetry> orbitals;  // nothing where parameters are lacking
   std::optional<FrontierSymmetry> frontier;
   DisplacementIrreps displacements;
   GroupAnswers answers;
-  std::vector<std::string> warnings;
 };
 
-/// Which of the longer sections to print.
-struct SymmetrySections {
-  bool operations = false;
-  bool salcs = false;
-  bool vibrations = false;
-};
+/// All but SALCs, frontier and answers, which are for those who ask.
+/// @param basis   nothing where parameters are lacking
+/// @throws Error  as `find_symmetry`
+[[nodiscard]] SymmetryResult symmetry_of(const Molecule& molecule, const SymmetryOptions& options,
+                                         const std::optional<Basis>& basis);
+
+[[nodiscard]] FrontierSymmetry frontier_symmetry(const MolecularSymmetry& symmetry, Levels levels);
 
 /// @returns  counts by irrep of the group as a reduction
 [[nodiscard]] Reduction reduction_of(const PointGroup& group, const std::vector<int>& times);

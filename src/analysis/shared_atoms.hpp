@@ -1,0 +1,34 @@
+// Which atoms two molecules have in common, when one is laid over the other.
+#pragma once
+
+#include <utility>
+#include <vector>
+
+#include <Eigen/Core>
+
+#include "basis/basis.hpp"
+#include "symmetry/molecular_symmetry.hpp"
+
+namespace irrepwise {
+
+/// Farther apart, atoms of one element are not the same atom. Above the change of a bond between
+/// variants, below the distance between neighbours.
+inline constexpr double same_atom_angstrom = 0.7;
+
+struct SharedAtoms {
+  std::vector<std::pair<int, int>> atoms;  // atom of the first, atom of the second; by the first
+  Eigen::Matrix3d turn;  // proper, from the standard frame of the second to that of the first
+};
+
+/// Lays the second molecule over the first, metal on metal (without metals: centroid on centroid),
+/// so that as many donors as possible meet one of their element, then as many as possible meet any,
+/// then as many atoms as possible meet one of their element. The way the
+/// input files have them is kept unless another is better.
+///
+/// @source  derived by us
+[[nodiscard]] SharedAtoms find_shared_atoms(const MolecularSymmetry& first,
+                                            const Basis& first_basis,
+                                            const MolecularSymmetry& second,
+                                            const Basis& second_basis);
+
+}  // namespace irrepwise

@@ -1,0 +1,227 @@
+#include "output/compare_columns.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <cstddef>
+#include <functional>
+#include <numeric>
+#include <optional>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "core/error.hpp"
+#include "core/parse.hpp"
+#include "core/text.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr double same_value = 1e-9;  // apart by rounding only: keeps the order
+
+using Reader = std::function<Cell(const VariantResult&)>;
+
+struct SummaryColumn {
+  Column column;
+  Reader read;
+};
+
+Cell level_cell(const VariantResult& variant, const std::optional<int>& level) {
+  return level ? Cell(SymmetryLabel{name_of_level(variant, *level)}) : Cell();
+}
+
+Cell energy_cell(const VariantResult& variant, const std::optional<int>& level) {
+  if (!level) return {};
+  return Number{variant.levels.levels.levels[static_cast<std::size_t>(*level)].energy_ev, 3};
+}
+
+Cell gap_cell(const VariantResult& variant) {
+  const Frontier& frontier = variant.levels.levels.frontier;
+  if (!frontier.homo || !frontier.lumo) return {};
+  const auto& levels = variant.levels.levels.levels;
+  return Number{levels[static_cast<std::size_t>(*frontier.lumo)].energy_ev -
+                    levels[static_cast<std::size_t>(*frontier.homo)].energy_ev,
+                3};
+}
+
+Cell bond_cell(const VariantResult& variant, const std::string& element) {
+  if (!variant.metal) return {};
+  for (const MetalBonds& bonds : variant.metal->bonds) {
+    if (bonds.element == element) return Number{bonds.overlap_population, 3};
+  }
+  return {};
+}
+
+std::vector<std::string> donor_elements(const Comparison& comparison) {
+  std::vector<std::string> elements;
+  for (const VariantResult& variant : comparison.variants) {
+    if (!variant.metal) continue;
+    for (const MetalBonds& bonds : variant.metal->bonds) {
+      if (std::find(elements.begin(), elements.end(), bonds.element) == elements.end()) {
+        elements.push_back(bonds.element);
+      }
+    }
+  }
+  return elements;
+}
+
+std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
+  using V = VariantResult;
+  std::vector<SummaryColumn> columns = {
+      {{"name", "variant", "", Align::Left, 0, true}, [](const V& v) { return Cell(v.name); }},
+      {{"point_group", "group", "", Align::Left, 0, false},
+       [](const V& v) { return Cell(v.levels.symmetry.group.symbol().name()); }},
+      {{"homo", "HOMO", "", Align::Right, 0, false},
+       [](const V& v) { return level_cell(v, v.levels.levels.frontier.homo); }},
+      {{"homo_ev", "HOMO", "eV", Align::Decimal, 0, false},
+       [](const V& v) { return energy_cell(v, v.levels.levels.frontier.homo); }},
+      {{"lumo", "LUMO", "", Align::Right, 0, false},
+       [](const V& v) { return level_cell(v, v.levels.levels.frontier.lumo); }},
+      {{"lumo_ev", "LUMO", "eV", Align::Decimal, 0, false},
+       [](const V& v) { return energy_cell(v, v.levels.levels.frontier.lumo); }},
+      {{"gap_ev", "gap", "eV", Align::Decimal, 0, false}, gap_cell},
+      {{"metal_charge", "metal charge", "e", Align::Decimal, 2, false},
+       [](const V& v) {
+         return v.metal ? Cell(Number{v.metal->charge, 3, true}) : Cell();
+       }},
+      {{"d_population", "d electrons", "", Align::Decimal, 2, false}, [](const V& v) {
+         return v.metal ? Cell(Number{v.metal->d_population, 3}) : Cell();
+       }}};
+  for (const std::string& element : donor_elements(comparison)) {
+    columns.push_back({{"bond_" + element, "M–" + element, "", Align::Decimal, 3, false},
+                       [element](const V& v) { return bond_cell(v, element); }});
+  }
+  columns.push_back(
+      {{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 4, false}, [](const V& v) {
+         return Cell(Number{v.levels.levels.sum_of_occupied_ev, 2});
+       }});
+  columns.push_back({{"fragile", "frontier", "", Align::Left, 1, false},
+                     [](const V& v) { return Cell(v.robustness.fragile() ? "fragile" : ""); }});
+  return columns;
+}
+
+const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns,
+                                 const std::string& key) {
+  std::vector<std::string> known;
+  for (const SummaryColumn& column : columns) {
+    if (column.column.key == key) return column;
+    known.push_back(column.column.key);
+  }
+  const std::string nearest = nearest_word(key, known);
+  throw Error(fmt::format("there is no column {}{}; columns are {}", irrepwise::quoted(key),
+                          nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
+                          joined(known)));
+}
+
+std::vector<SummaryColumn> chosen_columns(const Comparison& comparison,
+                                          const SummaryChoice& choice) {
+  std::vector<SummaryColumn> all = all_columns(comparison);
+  if (choice.columns.empty()) return all;
+  std::vector<SummaryColumn> chosen;
+  for (const std::string& key : choice.columns) chosen.push_back(find_column(all, key));
+  return chosen;
+}
+
+std::optional<double> number_in(const Cell& cell) {
+  const Number* number = std::get_if<Number>(&cell);
+  return number ? std::optional<double>(number->value) : std::nullopt;
+}
+
+// Whether the first comes before the second: numbers by size, all else by its text, nothing last.
+bool comes_before(const Cell& a, const Cell& b, bool descending) {
+  if (a.index() != b.index() || std::holds_alternative<std::monostate>(a)) {
+    return b.index() == 0 && a.index() != 0;
+  }
+  if (const std::optional<double> x = number_in(a), y = number_in(b); x && y) {
+    if (std::abs(*x - *y) < same_value) return false;
+    return (*x < *y) != descending;
+  }
+  const std::string x = cell_exact(a), y = cell_exact(b);
+  return descending ? y < x : x < y;
+}
+
+std::vector<std::size_t> row_order(const Comparison& comparison, const SummaryChoice& choice) {
+  std::vector<std::size_t> order(comparison.variants.size());
+  std::iota(order.begin(), order.end(), std::size_t{0});
+  if (choice.sort_by.empty()) return order;
+  const std::vector<SummaryColumn> all = all_columns(comparison);
+  const SummaryColumn& column = find_column(all, choice.sort_by);
+  std::stable_sort(order.begin(), order.end(), [&](std::size_t a, std::size_t b) {
+    return comes_before(column.read(comparison.variants[a]), column.read(comparison.variants[b]),
+                        choice.descending);
+  });
+  return order;
+}
+
+Cell difference(const Cell& cell, const Cell& reference) {
+  const std::optional<double> value = number_in(cell), from = number_in(reference);
+  if (!value || !from) return {};
+  return Number{*value - *from, std::get<Number>(cell).digits, true};
+}
+
+bool holds_numbers(const SummaryColumn& column, const Comparison& comparison) {
+  return std::any_of(comparison.variants.begin(), comparison.variants.end(),
+                     [&](const VariantResult& v) { return number_in(column.read(v)).has_value(); });
+}
+
+}  // namespace
+
+Table summary_table(const Comparison& comparison, const SummaryChoice& choice) {
+  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice);
+  const VariantResult& reference =
+      comparison.variants[static_cast<std::size_t>(comparison.reference)];
+  std::vector<const SummaryColumn*> differing;
+  Table table;
+  table.caption = "Summary";
+  for (const SummaryColumn& column : columns) {
+    table.columns.push_back(column.column);
+    if (choice.differences && holds_numbers(column, comparison)) differing.push_back(&column);
+  }
+  for (const SummaryColumn* column : differing) {
+    Column own = column->column;
+    own.key = "delta_" + own.key;
+    own.header = "Δ " + own.header;
+    table.columns.push_back(std::move(own));
+  }
+  for (const std::size_t i : row_order(comparison, choice)) {
+    const VariantResult& variant = comparison.variants[i];
+    Row row;
+    for (const SummaryColumn& column : columns) row.cells.push_back(column.read(variant));
+    for (const SummaryColumn* column : differing) {
+      row.cells.push_back(difference(column->read(variant), column->read(reference)));
+    }
+    table.lines.emplace_back(std::move(row));
+  }
+  table.notes = {
+      "M–X: mean overlap population of the bonds from the metal to donor atoms X. occupied: sum of "
+      "the energies of all electrons, which is not a total energy: no reaction energy follows from "
+      "differences of it."};
+  return table;
+}
+
+Table difference_table(const Comparison& comparison, const SummaryChoice& choice) {
+  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice);
+  const auto at = static_cast<std::size_t>(comparison.reference);
+  const VariantResult& reference = comparison.variants[at];
+  Table table;
+  table.caption = "Differences from " + reference.name;
+  table.columns.push_back({"name", "variant", "", Align::Left, 0, true});
+  std::vector<const SummaryColumn*> numbers;
+  for (const SummaryColumn& column : columns) {
+    if (!holds_numbers(column, comparison)) continue;
+    numbers.push_back(&column);
+    table.columns.push_back(column.column);
+  }
+  for (const std::size_t i : row_order(comparison, choice)) {
+    if (i == at) continue;
+    Row row{{comparison.variants[i].name}};
+    for (const SummaryColumn* column : numbers) {
+      row.cells.push_back(
+          difference(column->read(comparison.variants[i]), column->read(reference)));
+    }
+    table.lines.emplace_back(std::move(row));
+  }
+  return table;
+}
+
+}  // namespace irrepwise

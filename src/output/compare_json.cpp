@@ -1,0 +1,202 @@
+#include "output/compare_json.hpp"
+
+#include <optional>
+#include <utility>
+
+#include "molecule/molecule.hpp"
+#include "output/json_text.hpp"
+#include "output/table_csv.hpp"
+
+namespace irrepwise {
+namespace {
+
+Json level_json(const VariantResult& variant, const std::optional<int>& level) {
+  return level ? Json(name_of_level(variant, *level)) : Json(nullptr);
+}
+
+double energy_ev(const VariantResult& variant, int level) {
+  return finite_number(variant.levels.levels.levels[static_cast<std::size_t>(level)].energy_ev);
+}
+
+Json frontier_json(const VariantResult& variant) {
+  const Frontier& frontier = variant.levels.levels.frontier;
+  const auto energy = [&](const std::optional<int>& level) {
+    return level ? Json(energy_ev(variant, *level)) : Json(nullptr);
+  };
+  Json gap;
+  if (frontier.homo && frontier.lumo) {
+    gap = energy_ev(variant, *frontier.lumo) - energy_ev(variant, *frontier.homo);
+  }
+  return {{"homo", level_json(variant, frontier.homo)},
+          {"lumo", level_json(variant, frontier.lumo)},
+          {"homo_ev", energy(frontier.homo)},
+          {"lumo_ev", energy(frontier.lumo)},
+          {"gap_ev", gap},
+          {"open_shell", frontier.open_shell}};
+}
+
+Json metal_levels_json(const VariantResult& variant) {
+  Json list = Json::array();
+  if (!variant.d_block) return list;
+  for (const DLevel& entry : variant.d_block->levels) {
+    list.push_back(
+        {{"label", name_of_level(variant, entry.level)},
+         {"parent_label", entry.parent_label.empty() ? Json(nullptr) : Json(entry.parent_label)},
+         {"energy_ev", energy_ev(variant, entry.level)},
+         {"d_share", finite_number(entry.d_share)},
+         {"parent_weight", finite_number(entry.parent_weight)},
+         {"occupation",
+          finite_number(
+              variant.levels.levels.levels[static_cast<std::size_t>(entry.level)].occupation)}});
+  }
+  return list;
+}
+
+Json parent_json(const VariantResult& variant) {
+  if (!variant.d_block || variant.d_block->parent_group.empty()) return nullptr;
+  Json parent = {{"point_group", variant.d_block->parent_group}};
+  if (variant.d_block->shape) {
+    const PolyhedronFit& shape = *variant.d_block->shape;
+    parent["polyhedron"] = shape.symbol;
+    parent["name"] = shape.name;
+    parent["deviation_degrees"] = finite_number(shape.deviation_degrees);
+  }
+  return parent;
+}
+
+Json bonds_json(const VariantResult& variant) {
+  Json list = Json::array();
+  if (!variant.metal) return list;
+  for (const MetalBonds& bonds : variant.metal->bonds) {
+    list.push_back({{"element", bonds.element},
+                    {"count", bonds.count},
+                    {"overlap_population", finite_number(bonds.overlap_population)},
+                    {"distance_angstrom", finite_number(bonds.distance_angstrom)}});
+  }
+  return list;
+}
+
+Json flip_json(const VariantResult& variant, const std::optional<LevelFlip>& flip) {
+  if (!flip) return nullptr;
+  const std::vector<Parameter>& parameters = variant.robustness.parameters;
+  Json json = {
+      {"upper", name_of_level(variant, flip->upper)},
+      {"lower", name_of_level(variant, flip->lower)},
+      {"gap_ev", finite_number(flip->gap_ev)},
+      {"parameter", parameters[static_cast<std::size_t>(flip->parameter)].name},
+      {"first_order_ev", finite_number(flip->first_order_ev)},
+      {"change_ev", flip->change_ev ? Json(finite_number(*flip->change_ev)) : Json(nullptr)},
+      {"fragile", flip->fragile}};
+  if (flip->other) {
+    json["other_parameter"] = parameters[static_cast<std::size_t>(*flip->other)].name;
+    json["other_relative_change"] = finite_number(flip->other_relative);
+  }
+  return json;
+}
+
+Json sensitivities_json(const Robustness& robustness) {
+  Json list = Json::array();
+  for (std::size_t p = 0; p < robustness.parameters.size(); ++p) {
+    const Parameter& parameter = robustness.parameters[p];
+    const auto row = robustness.slopes.row(static_cast<Eigen::Index>(p));
+    list.push_back({{"parameter", parameter.name},
+                    {"unit", parameter.unit},
+                    {"value", finite_number(parameter.value)},
+                    {"homo", finite_number(row[0])},
+                    {"lumo", finite_number(row[1])},
+                    {"gap", finite_number(row[2])}});
+  }
+  return list;
+}
+
+Json variant_json(const VariantResult& variant) {
+  const LevelsResult& result = variant.levels;
+  return {
+      {"name", variant.name},
+      {"formula", hill_formula(result.molecule)},
+      {"charge", result.molecule.charge()},
+      {"point_group", result.symmetry.group.symbol().name()},
+      {"frontier", frontier_json(variant)},
+      {"metal",
+       variant.metal ? Json(atom_name(result.molecule, variant.metal->atom)) : Json(nullptr)},
+      {"metal_charge", variant.metal ? Json(finite_number(variant.metal->charge)) : Json(nullptr)},
+      {"d_population",
+       variant.metal ? Json(finite_number(variant.metal->d_population)) : Json(nullptr)},
+      {"bonds", bonds_json(variant)},
+      {"parent", parent_json(variant)},
+      {"metal_levels", metal_levels_json(variant)},
+      {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
+      {"fragile", variant.robustness.fragile()},
+      {"robustness",
+       {{"occupied", flip_json(variant, variant.robustness.occupied)},
+        {"empty", flip_json(variant, variant.robustness.empty)}}},
+      {"sensitivities", sensitivities_json(variant.robustness)},
+      {"warnings", result.warnings}};
+}
+
+Json matches_json(const Comparison& comparison) {
+  const VariantResult& reference =
+      comparison.variants[static_cast<std::size_t>(comparison.reference)];
+  Json list = Json::array();
+  for (std::size_t i = 0; i < comparison.variants.size(); ++i) {
+    if (static_cast<int>(i) == comparison.reference) continue;
+    const VariantResult& variant = comparison.variants[i];
+    const Matching& matching = comparison.matchings[i];
+    Json pairs = Json::array();
+    for (const LevelMatch& match : matching.matches) {
+      pairs.push_back({{"reference", name_of_level(reference, match.reference)},
+                       {"variant", name_of_level(variant, match.variant)},
+                       {"irrep", match.irrep},
+                       {"overlap", finite_number(match.overlap)},
+                       {"shift_ev", finite_number(energy_ev(variant, match.variant) -
+                                                  energy_ev(reference, match.reference))}});
+    }
+    Json crossings = Json::array();
+    for (const FrontierSide side : {FrontierSide::Homo, FrontierSide::Lumo}) {
+      std::string words = crossing_words(comparison, static_cast<int>(i), side);
+      if (!words.empty()) crossings.push_back(std::move(words));
+    }
+    list.push_back({{"reference", reference.name},
+                    {"variant", variant.name},
+                    {"common_group", matching.common_group},
+                    {"shared_atoms", matching.shared_atoms},
+                    {"levels", std::move(pairs)},
+                    {"crossings", std::move(crossings)}});
+  }
+  return list;
+}
+
+Json splittings_json(const Comparison& comparison) {
+  Json list = Json::array();
+  for (const VariantResult& variant : comparison.variants) {
+    if (!variant.d_block) continue;
+    const std::vector<ParentMean>& means = variant.d_block->means;
+    for (std::size_t i = 0; i + 1 < means.size(); ++i) {
+      list.push_back({{"variant", variant.name},
+                      {"from", means[i].label},
+                      {"to", means[i + 1].label},
+                      {"value_ev", finite_number(means[i + 1].energy_ev - means[i].energy_ev)}});
+    }
+  }
+  return list;
+}
+
+}  // namespace
+
+std::string compare_json(const Comparison& comparison) {
+  Json variants = Json::array();
+  for (const VariantResult& variant : comparison.variants)
+    variants.push_back(variant_json(variant));
+  return json_text(
+      {{"schema", "irrepwise.compare.1"},
+       {"reference", comparison.variants[static_cast<std::size_t>(comparison.reference)].name},
+       {"variants", std::move(variants)},
+       {"matches", matches_json(comparison)},
+       {"splittings", splittings_json(comparison)}});
+}
+
+std::string compare_csv(const Comparison& comparison, const SummaryChoice& choice) {
+  return table_csv(summary_table(comparison, choice));
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,132 @@
+#include "output/compare_result.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "analysis/donors.hpp"
+#include "molecule/element.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr double weak_match = 0.3;  // below it, "is now" would say too much
+
+MetalFacts metal_facts(const LevelsResult& result, int metal) {
+  MetalFacts facts;
+  facts.atom = metal;
+  facts.charge = result.populations.charge[metal];
+  for (const Shell& shell : result.basis.shells) {
+    if (shell.atom != metal || shell.l != 2) continue;
+    facts.d_population +=
+        result.populations.gross_by_orbital.segment(shell.first_orbital, shell.size()).sum();
+  }
+  const Molecule& molecule = result.symmetry.molecule;
+  std::vector<int> donors;
+  for (const DonorSite& site : donor_sites(molecule, result.basis, metal)) {
+    donors.insert(donors.end(), site.atoms.begin(), site.atoms.end());
+  }
+  for (const OverlapPopulation& pair : result.populations.overlap_populations) {
+    if (pair.atom_a != metal && pair.atom_b != metal) continue;
+    const int donor = pair.atom_a == metal ? pair.atom_b : pair.atom_a;
+    if (std::find(donors.begin(), donors.end(), donor) == donors.end()) continue;
+    const std::string element(
+        element_symbol(molecule.atoms()[static_cast<std::size_t>(donor)].atomic_number));
+    auto bonds = std::find_if(facts.bonds.begin(), facts.bonds.end(),
+                              [&](const MetalBonds& known) { return known.element == element; });
+    if (bonds == facts.bonds.end()) bonds = facts.bonds.insert(bonds, {element, 0, 0.0, 0.0});
+    ++bonds->count;
+    bonds->overlap_population += pair.value;
+    bonds->distance_angstrom += pair.distance_angstrom;
+  }
+  for (MetalBonds& bonds : facts.bonds) {
+    bonds.overlap_population /= bonds.count;
+    bonds.distance_angstrom /= bonds.count;
+  }
+  return facts;
+}
+
+std::optional<int> frontier_level(const VariantResult& variant, FrontierSide side) {
+  const Frontier& frontier = variant.levels.levels.frontier;
+  return side == FrontierSide::Homo ? frontier.homo : frontier.lumo;
+}
+
+double energy_of(const VariantResult& variant, int level) {
+  return variant.levels.levels.levels[static_cast<std::size_t>(level)].energy_ev;
+}
+
+}  // namespace
+
+std::string name_of_level(const VariantResult& variant, int level) {
+  return level_name(variant.levels.symmetry.group,
+                    variant.levels.levels.levels[static_cast<std::size_t>(level)]);
+}
+
+VariantResult analysed(std::string name, LevelsResult levels) {
+  Robustness robustness = find_robustness(levels.symmetry, levels.basis, levels.levels);
+  VariantResult result{std::move(name), std::move(levels), std::move(robustness), {}, {}};
+  const LevelsResult& of = result.levels;
+  const std::vector<int> metals = metal_atoms(of.symmetry.molecule, of.basis);
+  if (!metals.empty()) {
+    result.metal = metal_facts(of, metals.front());
+    result.d_block = find_d_block(of.symmetry, of.basis, of.levels, of.populations, metals.front());
+  }
+  return result;
+}
+
+std::optional<FrontierFate> frontier_fate(const Comparison& comparison, int variant,
+                                          FrontierSide side) {
+  const VariantResult& reference =
+      comparison.variants[static_cast<std::size_t>(comparison.reference)];
+  const std::optional<int> level = frontier_level(reference, side);
+  if (!level) return {};
+  FrontierFate fate;
+  fate.reference_level = *level;
+  fate.now = frontier_level(comparison.variants[static_cast<std::size_t>(variant)], side);
+  double best_now = 0.0;
+  for (const LevelMatch& match : comparison.matchings[static_cast<std::size_t>(variant)].matches) {
+    if (match.reference == *level) {
+      if (!fate.match || match.overlap > fate.match->overlap) fate.match = match;
+      if (match.variant == fate.now) fate.stays = true;
+    }
+    if (match.variant == fate.now && match.overlap > best_now) {
+      best_now = match.overlap;
+      fate.now_was = match.reference;
+    }
+  }
+  return fate;
+}
+
+std::string crossing_words(const Comparison& comparison, int variant, FrontierSide side) {
+  const std::optional<FrontierFate> fate = frontier_fate(comparison, variant, side);
+  if (!fate || fate->stays || !fate->now) return {};
+  const VariantResult& reference =
+      comparison.variants[static_cast<std::size_t>(comparison.reference)];
+  const VariantResult& other = comparison.variants[static_cast<std::size_t>(variant)];
+  const char* const which = side == FrontierSide::Homo ? "HOMO" : "LUMO";
+  const auto readable = [](const VariantResult& of, int level) {
+    return readable_label(name_of_level(of, level));
+  };
+  std::string words = fmt::format("{} of {}: ", which, other.name);
+  const std::string was = readable(reference, fate->reference_level);
+  if (fate->match) {
+    const double apart = energy_of(other, fate->match->variant) - energy_of(other, *fate->now);
+    const std::string found = readable(other, fate->match->variant);
+    words += fate->match->overlap < weak_match
+                 ? fmt::format("what resembles {} of {} most is {} ({:.0f} %)", was, reference.name,
+                               found, 100.0 * fate->match->overlap)
+                 : fmt::format("{} of {} is now {}", was, reference.name, found);
+    words += fmt::format(", {:.3f} eV {} the {} {}", std::abs(apart),
+                         apart < 0.0 ? "below" : "above", which, readable(other, *fate->now));
+  } else {
+    words += fmt::format("nothing resembles {} of {}; the {} is {}", was, reference.name, which,
+                         readable(other, *fate->now));
+  }
+  return words + (fate->now_was
+                      ? fmt::format(", which was {}.", readable(reference, *fate->now_was))
+                      : ", which has no counterpart there.");
+}
+
+}  // namespace irrepwise

@@ -1,0 +1,68 @@
+// Several molecules side by side: what each run of `compare` found, ready for the writers.
+#pragma once
+
+#include <optional>
+#include <string>
+#include <vector>
+
+#include "analysis/d_block.hpp"
+#include "analysis/level_flips.hpp"
+#include "analysis/matching.hpp"
+#include "output/levels_result.hpp"
+
+namespace irrepwise {
+
+/// The bonds from the metal to donor atoms of one element.
+struct MetalBonds {
+  std::string element;
+  int count = 0;
+  double overlap_population = 0.0;  // mean
+  double distance_angstrom = 0.0;   // mean
+};
+
+struct MetalFacts {
+  int atom = 0;  // the first metal of the molecule
+  double charge = 0.0;
+  double d_population = 0.0;
+  std::vector<MetalBonds> bonds;  // in the order of the first donor of each element
+};
+
+struct VariantResult {
+  std::string name;
+  LevelsResult levels;
+  Robustness robustness;
+  std::optional<MetalFacts> metal;  // absent where there is no metal with a d shell
+  std::optional<DBlock> d_block;
+};
+
+struct Comparison {
+  std::vector<VariantResult> variants;
+  int reference = 0;                // index of the variant that the others are matched with
+  std::vector<Matching> matchings;  // per variant, with the reference (itself included)
+};
+
+[[nodiscard]] VariantResult analysed(std::string name, LevelsResult levels);
+
+/// What became of the reference's HOMO or LUMO in a variant.
+struct FrontierFate {
+  int reference_level = 0;
+  std::optional<LevelMatch> match;  // its best, absent where nothing in the variant resembles it
+  bool stays = false;               // one of its matches is the variant's HOMO (LUMO)
+  std::optional<int> now;           // the variant's HOMO (LUMO)
+  std::optional<int> now_was;       // the reference's level that this one was
+};
+
+enum class FrontierSide { Homo, Lumo };
+
+/// @returns  nothing where the reference has no such level
+[[nodiscard]] std::optional<FrontierFate> frontier_fate(const Comparison& comparison, int variant,
+                                                        FrontierSide side);
+
+/// The same in a sentence, where the identity changed: "HOMO of trans: 2b2g of the reference is now
+/// 3b2, 0.31 eV below the HOMO 5a1, which was 3a1g." Empty where it stays.
+[[nodiscard]] std::string crossing_words(const Comparison& comparison, int variant,
+                                         FrontierSide side);
+
+[[nodiscard]] std::string name_of_level(const VariantResult& variant, int level);
+
+}  // namespace irrepwise

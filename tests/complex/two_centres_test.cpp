@@ -1,0 +1,130 @@
+// Complexes of two metals that share bridging ligands.
+#include <cmath>
+#include <string>
+#include <vector>
+
+#include <Eigen/Geometry>
+
+#include <doctest/doctest.h>
+
+#include "complex/build.hpp"
+#include "core/error.hpp"
+#include "molecule/element.hpp"
+#include "support/complexes.hpp"
+
+using namespace irrepwise;
+
+namespace {
+
+BridgeRequest bridge(const std::string& ligand, int vertex) {
+  BridgeRequest request;
+  request.ligand = ligand;
+  request.vertices = {vertex, vertex};
+  return request;
+}
+
+// Two equal centres; the bridges hold the vertices named.
+ComplexSpec pair_of(const std::string& metal, const std::string& polyhedron, int oxidation,
+                    const std::vector<std::string>& ligands, const std::string& bridging,
+                    const std::vector<int>& vertices) {
+  ComplexSpec spec = spec_of(metal, polyhedron, oxidation, ligands);
+  spec.centres.push_back(spec.centres[0]);
+  for (const int vertex : vertices) spec.bridges.push_back(bridge(bridging, vertex));
+  return spec;
+}
+
+double metal_distance(const BuiltComplex& built) {
+  return (built.molecule.atoms()[0].position - built.molecule.atoms()[1].position).norm();
+}
+
+}  // namespace
+
+TEST_CASE("squares that share an edge lie in one plane") {
+  const BuiltComplex built = build_complex(pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 2}));
+  CHECK(built.point_group == "D2h");  // as [Pd2Cl6]2- in crystals: common practice
+  CHECK(built.molecule.charge() == -2);
+  CHECK(built.molecule.size() == 8);
+  CHECK(built.centres[0].electrons.total == 16);
+  const double pd_cl = *covalent_radius_angstrom(46) + *covalent_radius_angstrom(17);
+  // A square of two metals and two bridges: its diagonal.
+  CHECK(std::abs(metal_distance(built) - std::sqrt(2.0) * pd_cl) < 1e-6);
+  const std::vector<double> bonds = distances(built.molecule, 46, 17, pd_cl + 0.2);
+  CHECK(bonds.size() == 8);
+  for (const double bond : bonds) CHECK(std::abs(bond - pd_cl) < 1e-9);
+}
+
+TEST_CASE("octahedra that share a face or a corner have the groups of the textbooks") {
+  const BuiltComplex face =
+      build_complex(pair_of("W", "OC-6", 3, {"Cl", "Cl", "Cl"}, "Cl", {1, 2, 3}));
+  CHECK(face.point_group == "D3h");  // [W2Cl9]3-: common practice
+  CHECK(face.molecule.charge() == -3);
+  // Faces of octahedra: the metals are 2 d / √3 apart.
+  const double w_cl = *covalent_radius_angstrom(74) + *covalent_radius_angstrom(17);
+  CHECK(std::abs(metal_distance(face) - 2.0 * w_cl / std::sqrt(3.0)) < 1e-6);
+
+  const BuiltComplex corner =
+      build_complex(pair_of("Ru", "OC-6", 4, {"Cl", "Cl", "Cl", "Cl", "Cl"}, "O", {1}));
+  CHECK(corner.point_group == "D4h");  // [Ru2OCl10]4-: common practice
+  CHECK(corner.molecule.charge() == -4);
+  CHECK(corner.centres[1].electrons.total == 4 + 5 * 2 + 2);
+}
+
+TEST_CASE("a bent single bridge has the angle and torsion asked for") {
+  ComplexSpec spec = pair_of("Ru", "OC-6", 4, {"Cl", "Cl", "Cl", "Cl", "Cl"}, "O", {1});
+  spec.bridge_angle_degrees = 150.0;
+  spec.torsion_degrees = 45.0;
+  for (BridgeRequest& request : spec.bridges) request.distances_angstrom = {2.2, 2.2};
+  const BuiltComplex built = build_complex(spec);
+  const int oxygen = built.ligands.back().atoms[0];
+  CHECK(std::abs(angle(built.molecule, 0, oxygen, 1) - 150.0) < 1e-6);
+}
+
+TEST_CASE("carbonyls bridge two metals with one electron to each") {
+  ComplexSpec spec = pair_of("Co", "OC-6", 0, {"CO", "CO", "CO", "CO"}, "CO", {1, 2});
+  const BuiltComplex built = build_complex(spec);
+  CHECK(built.molecule.charge() == 0);
+  CHECK(built.centres[0].electrons.total == 9 + 4 * 2 + 2 * 1);
+  CHECK(built.point_group == "D2h");
+  // Oxygen lies on the line from the middle of the metals through the bridging carbon.
+  const std::vector<int>& atoms = built.ligands.back().atoms;
+  const auto at = [&](int i) {
+    return built.molecule.atoms()[static_cast<std::size_t>(i)].position;
+  };
+  const Eigen::Vector3d middle = 0.5 * (at(0) + at(1));
+  CHECK((at(atoms[0]) - middle).normalized().cross((at(atoms[1]) - middle).normalized()).norm() <
+        1e-6);
+}
+
+TEST_CASE("different metals keep both distances") {
+  ComplexSpec spec = pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 2});
+  spec.centres[1].atomic_number = 78;
+  for (BridgeRequest& request : spec.bridges) request.distances_angstrom = {2.3, 2.45};
+  const BuiltComplex built = build_complex(spec);
+  for (std::size_t i = 4; i < 6; ++i) {
+    const Eigen::Vector3d donor =
+        built.molecule.atoms()[static_cast<std::size_t>(built.ligands[i].atoms[0])].position;
+    CHECK(std::abs((donor - built.molecule.atoms()[0].position).norm() - 2.3) < 1e-6);
+    CHECK(std::abs((donor - built.molecule.atoms()[1].position).norm() - 2.45) < 1e-6);
+  }
+  CHECK(built.point_group == "C2v");
+}
+
+TEST_CASE("bridges that cannot be are refused") {
+  CHECK_THROWS_WITH_AS(
+      static_cast<void>(build_complex(pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "NH3", {1, 2}))),
+      "NH3 does not bridge metals in the library; its entry needs `bridging`, the electrons that "
+      "each metal counts from it",
+      Error);
+  CHECK_THROWS_WITH_AS(
+      static_cast<void>(build_complex(pair_of("Co", "T-4", 0, {"CO", "CO", "CO"}, "CO", {1}))),
+      "CO cannot lie straight between two metals; give `bridge_angle`", Error);
+  CHECK_THROWS_WITH_AS(
+      static_cast<void>(build_complex(pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 3}))),
+      "the bridges lie too far apart for the second metal to reach them all; give longer distances, "
+      "or vertices that lie nearer to each other",
+      Error);
+  ComplexSpec alone = spec_of("Pd", "SP-4", 2, {"Cl", "Cl", "Cl", "Cl"});
+  alone.centres.push_back(alone.centres[0]);
+  CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(alone)),
+                       "two centres need at least one bridge", Error);
+}
