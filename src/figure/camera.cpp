@@ -100,7 +100,7 @@ Camera best_camera(std::span<const Scene> scenes) {
   double best_score = -1.0;
   // Rings of elevation, turned by odd angles so that no view hides equivalent atoms exactly behind
   // each other; views from somewhat above come first and win ties.
-  for (const double elevation : {20.0, 35.0, 10.0, 50.0, -20.0, 65.0, 80.0}) {
+  for (const double elevation : {28.0, 15.0, 42.0, -20.0, 60.0, 80.0}) {
     const int steps = elevation < 60.0 ? 24 : 12;
     for (int step = 0; step < steps; ++step) {
       const double azimuth = (-67.0 + 360.0 * step / steps) * std::numbers::pi / 180.0;

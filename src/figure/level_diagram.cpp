@@ -6,8 +6,8 @@
 
 #include <fmt/format.h>
 
-#include "core/error.hpp"
 #include "figure/font.hpp"
+#include "figure/level_diagram_words.hpp"
 #include "figure/level_lanes.hpp"
 #include "figure/level_placing.hpp"
 #include "figure/palette.hpp"
@@ -164,38 +164,6 @@ Group links_group(const LevelDiagram& diagram, const std::vector<PlacedColumn>& 
   return group;
 }
 
-std::string count_words(int n, const char* where) {
-  return fmt::format("{} {} {}", n, n == 1 ? "level" : "levels", where);
-}
-
-// What the window leaves out, so that nobody takes the picture for the whole.
-std::string left_out(const LevelDiagram& diagram) {
-  int below = 0;
-  int above = 0;
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      below += level.energy_ev < diagram.from_ev ? 1 : 0;
-      above += level.energy_ev > diagram.to_ev ? 1 : 0;
-    }
-  }
-  std::string words;
-  if (below > 0) words = count_words(below, "below");
-  if (above > 0) words += (words.empty() ? "" : ", ") + count_words(above, "above");
-  return words.empty() ? words : words + " the range shown";
-}
-
-std::string fractions_note(const LevelDiagram& diagram) {
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      if (is_shown(diagram, level) &&
-          std::abs(level.occupation - std::round(level.occupation)) > 1e-9) {
-        return fmt::format("{} holds {:g} electrons, spread evenly", level.label, level.occupation);
-      }
-    }
-  }
-  return {};
-}
-
 Text words(Point2 at, const std::string& text, double size, Colour colour) {
   return text_at(at, plain_text(text), size, colour);
 }
@@ -265,44 +233,6 @@ Pictures picture_groups(const PlacedColumn& column, double x, double top) {
   return out;
 }
 
-std::string description(const LevelDiagram& diagram) {
-  std::string text = fmt::format("Orbital energies from {} to {}. ",
-                                 energy_words(diagram.from_ev, 1), energy_words(diagram.to_ev, 1));
-  for (const DiagramColumn& column : diagram.columns) {
-    if (!column.title.empty()) text += column.title + ": ";
-    for (auto level = column.levels.rbegin(); level != column.levels.rend(); ++level) {
-      if (!is_shown(diagram, *level)) continue;
-      text += fmt::format("{} at {}, {:g} electrons{}; ", level->label,
-                          energy_words(level->energy_ev, 2), level->occupation,
-                          level->frontier == FrontierMark::Homo   ? " (HOMO)"
-                          : level->frontier == FrontierMark::Lumo ? " (LUMO)"
-                                                                  : "");
-    }
-  }
-  if (text.ends_with("; ")) text.replace(text.size() - 2, 2, ".");
-  return text;
-}
-
-void check_window(const LevelDiagram& diagram) {
-  if (!(diagram.to_ev > diagram.from_ev)) {
-    throw Error(
-        fmt::format("the range of energies runs from {} to {} eV; its end must lie above "
-                    "its start",
-                    diagram.from_ev, diagram.to_ev));
-  }
-  double lowest = std::numeric_limits<double>::infinity();
-  double highest = -lowest;
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      if (is_shown(diagram, level)) return;
-      lowest = std::min(lowest, level.energy_ev);
-      highest = std::max(highest, level.energy_ev);
-    }
-  }
-  throw Error(fmt::format("no level lies between {} and {} eV; they run from {:.3f} to {:.3f} eV",
-                          diagram.from_ev, diagram.to_ev, lowest, highest));
-}
-
 double add_heading(Figure& figure, const LevelDiagram& diagram, const Font& font, double width) {
   Group group;
   group.kind = "heading";
@@ -363,7 +293,7 @@ double add_notes(Figure& figure, const LevelDiagram& diagram, const Font& font, 
                  double y) {
   Group group;
   group.kind = "notes";
-  for (const std::string& note : {left_out(diagram), fractions_note(diagram)}) {
+  for (const std::string& note : {words_on_left_out(diagram), words_on_fractions(diagram)}) {
     for (const RichText& line : wrapped(font, plain_text(note), small_size, width)) {
       y += line_height;
       group.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
@@ -384,7 +314,7 @@ Figure level_diagram_figure(const LevelDiagram& diagram) {
       std::max(least_width, placed_body(diagram, font, 0.0, per_ev).right - margin);
   Figure figure;
   figure.title = diagram.title;
-  figure.description = description(diagram);
+  figure.description = spoken_levels(diagram);
   const double top = add_heading(figure, diagram, font, width) + 28.0;
   Body body = placed_body(diagram, font, top, per_ev);
   figure.groups.push_back(axis(diagram, margin + axis_width, top, per_ev));

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <functional>
+#include <utility>
 
 #include <fmt/format.h>
 
@@ -159,26 +160,84 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
   return grid;
 }
 
-double enclosing_isovalue(const OrbitalGrid& grid, int orbital, double share) {
+namespace {
+
+// The value at which the densities, each of one small volume, add up to the wanted part.
+double value_at_share(std::vector<double>& densities, double volume, double wanted) {
+  std::sort(densities.begin(), densities.end(), std::greater<>());
+  double sum = 0.0;
+  for (const double density : densities) {
+    sum += density * volume;
+    if (sum >= wanted) return std::sqrt(density);
+  }
+  return std::sqrt(densities.back());
+}
+
+// Lower corners of the cells of the grid in which |psi| may exceed a value.
+std::vector<std::array<int, 3>> cells_above(const OrbitalGrid& grid, std::size_t orbital,
+                                            double value) {
+  const GridShape& shape = grid.shape;
+  const std::vector<double>& values = grid.values[orbital];
+  std::vector<std::array<int, 3>> cells;
+  for (int k = 0; k + 1 < shape.size[2]; ++k) {
+    for (int j = 0; j + 1 < shape.size[1]; ++j) {
+      for (int i = 0; i + 1 < shape.size[0]; ++i) {
+        double largest = 0.0;
+        for (int corner = 0; corner < 8; ++corner) {
+          const std::size_t p =
+              shape.index(i + (corner & 1), j + (corner >> 1 & 1), k + (corner >> 2));
+          largest = std::max(largest, std::abs(values[p]));
+        }
+        if (largest > value) cells.push_back({i, j, k});
+      }
+    }
+  }
+  return cells;
+}
+
+// At the middles of `parts`^3 equal parts of each cell.
+std::vector<double> densities_within(const OrbitalField& field, const GridShape& shape,
+                                     const std::vector<std::array<int, 3>>& cells, int orbital,
+                                     int parts) {
+  std::vector<double> densities;
+  const double step = shape.spacing_angstrom / parts;
+  for (const auto& [i, j, k] : cells) {
+    const Eigen::Vector3d corner = shape.point(i, j, k);
+    for (int part = 0; part < parts * parts * parts; ++part) {
+      const Eigen::Vector3d inside(part % parts + 0.5, part / parts % parts + 0.5,
+                                   part / (parts * parts) + 0.5);
+      const double value = field.value(corner + step * inside, orbital);
+      densities.push_back(value * value);
+    }
+  }
+  return densities;
+}
+
+}  // namespace
+
+double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
+                          double share) {
   if (!(share > 0.0 && share < 1.0)) {
     throw Error(
         fmt::format("share of the density: found {}, expected more than 0 and less than 1", share));
   }
+  constexpr double enough_points = 60'000;  // inside the surface or near it
+  constexpr int most_parts = 8;
+  constexpr double near = 0.6;  // cells with less than this part of the value lie outside
   const auto o = static_cast<std::size_t>(orbital);
   const double volume = std::pow(grid.shape.spacing_angstrom / bohr_in_angstrom, 3);
-  std::vector<double> density;
-  density.reserve(grid.values[o].size());
+  std::vector<double> densities;
+  densities.reserve(grid.values[o].size());
   for (const double value : grid.values[o]) {
-    if (value * value * volume > 1e-12) density.push_back(value * value);
+    if (value * value * volume > 1e-12) densities.push_back(value * value);
   }
-  std::sort(density.begin(), density.end(), std::greater<>());
-  const double wanted = share * grid.integrals[o] / volume;
-  double sum = 0.0;
-  for (const double value : density) {
-    sum += value;
-    if (sum >= wanted) return std::sqrt(value);
-  }
-  return std::sqrt(density.back());
+  const double rough = value_at_share(densities, volume, share * grid.integrals[o]);
+  const std::vector<std::array<int, 3>> cells = cells_above(grid, o, near * rough);
+  const double wanted_parts = std::cbrt(enough_points / static_cast<double>(cells.size()));
+  const int parts = std::clamp(static_cast<int>(std::ceil(wanted_parts)), 1, most_parts);
+  if (parts == 1) return rough;
+  densities = densities_within(field, grid.shape, cells, orbital, parts);
+  return value_at_share(densities, volume / (parts * parts * parts), share);
 }
 
 }  // namespace irrepwise

@@ -9,6 +9,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int samples = 3;  // along each side of a pixel
+constexpr float touching_angstrom = 0.02f;
 
 struct Layer {
   std::vector<float> depth;
@@ -132,7 +133,9 @@ Raster rendered(const Scene& scene, const Camera& camera, const Frame& frame, in
             static_cast<std::size_t>(y * samples + s / samples) * static_cast<std::size_t>(width) +
             static_cast<std::size_t>(x * samples + s % samples);
         const double behind = solid.opacity[at];
-        const bool veiled = veil.depth[at] > solid.depth[at];
+        // What all but touches counts as in front, so that surfaces just below do not show in
+        // specks.
+        const bool veiled = veil.depth[at] + touching_angstrom > solid.depth[at];
         const double front = veiled ? veil.opacity[at] : 0.0;
         for (std::size_t c = 0; c < 3; ++c) {
           sum[c] += front * veil.colour[at][c] + (1.0 - front) * behind * solid.colour[at][c];
