@@ -128,8 +128,8 @@ std::string camera_words(const Camera& camera) {
   std::string words = "seen from (";
   for (int axis = 0; axis < 3; ++axis) {
     const double value = std::round(100.0 * camera.towards(axis)) / 100.0;
-    words +=
-        fmt::format("{}{}{:.2f}", axis == 0 ? "" : ", ", value < 0.0 ? "−" : "", std::abs(value));
+    words += fmt::format("{}{}{:.2f}", axis == 0 ? "" : ",\u00A0", value < 0.0 ? "−" : "",
+                         std::abs(value));
   }
   return words + ")";
 }

@@ -18,11 +18,13 @@ constexpr double in_plane_angstrom = 0.15;  // atoms nearer than this count as l
 // From the plane to the cell: equal scale along both, y turned down.
 struct Scale {
   double px_per_angstrom = 1.0;
-  Point2 middle;      // of the plane's region, Å
-  double half = 0.0;  // px
+  Point2 middle;                       // of the plane's region, Å
+  double half = 0.0;                   // px
+  static constexpr double lift = 9.0;  // px, above the scale bar
 
   [[nodiscard]] Point2 operator()(const Point2& p) const {
-    return {half + (p.x - middle.x) * px_per_angstrom, half - (p.y - middle.y) * px_per_angstrom};
+    return {half + (p.x - middle.x) * px_per_angstrom,
+            half - lift - (p.y - middle.y) * px_per_angstrom};
   }
 };
 
@@ -49,7 +51,8 @@ Scale scale_for(const ContourMap& map, const Molecule& molecule, const Plane& pl
   }
   Scale scale;
   const double size = std::max(box.right - box.left, box.top - box.bottom);
-  scale.px_per_angstrom = (cell_size - 20.0) / size;
+  constexpr double rim = 34.0;  // px in all; the lower part holds the scale bar
+  scale.px_per_angstrom = (cell_size - rim) / size;
   scale.middle = {0.5 * (box.left + box.right), 0.5 * (box.top + box.bottom)};
   scale.half = 0.5 * cell_size;
   return scale;

@@ -168,24 +168,37 @@ Text words(Point2 at, const std::string& text, double size, Colour colour) {
   return text_at(at, plain_text(text), size, colour);
 }
 
-// The gap as a measure between the two frontier levels, to the right of a single column.
-Group gap_group(const PlacedColumn& column, double x) {
+struct Gap {
   Group group;
-  group.kind = "gap";
+  double right = 0.0;
+};
+
+// The gap as a measure between the two frontier levels, beside the main lane: no other level stands
+// between them, so that its words have room, unless they are very close. Then it stands beside all.
+Gap gap_group(const PlacedColumn& column, const Font& font) {
+  constexpr double room = 52.0;  // px in height that the words need
+  Gap out;
+  out.group.kind = "gap";
+  out.right = column.right;
   const PlacedLevel* homo = nullptr;
   const PlacedLevel* lumo = nullptr;
   for (const PlacedLevel& drawn : column.levels) {
     if (drawn.level->frontier == FrontierMark::Homo) homo = &drawn;
     if (drawn.level->frontier == FrontierMark::Lumo) lumo = &drawn;
   }
-  if (homo == nullptr || lumo == nullptr || homo->y <= lumo->y) return group;
-  group.elements.emplace_back(line(x - 4, homo->y, x + 4, homo->y, palette::muted, 1.0));
-  group.elements.emplace_back(line(x - 4, lumo->y, x + 4, lumo->y, palette::muted, 1.0));
-  group.elements.emplace_back(line(x, homo->y, x, lumo->y, palette::muted, 1.0));
-  const double gap = lumo->level->energy_ev - homo->level->energy_ev;
-  group.elements.emplace_back(words({x + 9.0, 0.5 * (homo->y + lumo->y) + 0.35 * small_size},
-                                    "gap " + energy_words(gap, 2), small_size, palette::muted));
-  return group;
+  if (homo == nullptr || lumo == nullptr || homo->y <= lumo->y) return out;
+  const bool has_room = homo->y - lumo->y > room;
+  const double x = (has_room ? column.main_right : column.right) + 18.0;
+  std::vector<Element>& elements = out.group.elements;
+  elements.emplace_back(line(x - 4, homo->y, x + 4, homo->y, palette::muted, 1.0));
+  elements.emplace_back(line(x - 4, lumo->y, x + 4, lumo->y, palette::muted, 1.0));
+  elements.emplace_back(line(x, homo->y, x, lumo->y, palette::muted, 1.0));
+  const std::string text =
+      "gap " + energy_words(lumo->level->energy_ev - homo->level->energy_ev, 2);
+  elements.emplace_back(words({x + 9.0, 0.5 * (homo->y + lumo->y) + 0.35 * small_size}, text,
+                              small_size, palette::muted));
+  out.right = std::max(out.right, x + 9.0 + font.width(plain_text(text), small_size));
+  return out;
 }
 
 struct Pictures {
@@ -268,8 +281,11 @@ Body placed_body(const LevelDiagram& diagram, const Font& font, double top, doub
     x = body.columns.back().right + column_gap;
   }
   body.right = body.columns.back().right;
-  if (body.columns.size() == 1) body.gap = gap_group(body.columns.front(), body.right + 22.0);
-  if (!body.gap.elements.empty()) body.right += 22.0 + 80.0;
+  if (body.columns.size() == 1) {
+    Gap gap = gap_group(body.columns.front(), font);
+    body.gap = std::move(gap.group);
+    body.right = gap.right;
+  }
   body.pictures = picture_groups(body.columns.back(), body.right + 20.0, top);
   if (!body.pictures.groups.empty()) body.right = body.pictures.right;
   return body;

@@ -10,9 +10,10 @@ namespace {
 
 constexpr double least_apart = level_arrow_height + 5.0;  // of two levels in one lane
 constexpr double lane_gap = 18.0;
+constexpr double strip = 36.0;          // after the main lane, for the measure of the gap
 constexpr double least_height = 460.0;  // of the energy range
-constexpr double most_height = 1200.0;
-constexpr int wanted_lanes = 3;  // the range grows until so many are enough
+constexpr double most_height = 900.0;
+constexpr int wanted_lanes = 4;  // the range grows until so many are enough
 
 double bars_width(const DiagramLevel& level) {
   return level.degeneracy * level_bar_length + (level.degeneracy - 1) * level_bar_gap;
@@ -80,9 +81,10 @@ PlacedColumn place_column(const LevelDiagram& diagram, const DiagramColumn& colu
   std::vector<double> centres;
   double x = left;
   for (std::size_t lane = 0; lane < bars.size(); ++lane) {
-    if (lane > 0) x += lane_gap;
+    if (lane > 0) x += lane == 1 ? strip : lane_gap;
     centres.push_back(x + 0.5 * bars[lane]);
     x += bars[lane] + level_label_gap + labels[lane];
+    if (lane == 0) out.main_right = x;
   }
   out.right = x;
   for (PlacedLevel& drawn : out.levels) {

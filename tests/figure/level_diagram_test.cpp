@@ -54,7 +54,10 @@ std::string first_collision(const Figure& figure) {
   for (const Group& group : figure.groups) {
     for (const Element& element : group.elements) {
       const auto* path = std::get_if<Path>(&element);
-      if (path != nullptr && group.kind == "level") strokes.push_back({group.name, box_of(*path)});
+      const bool counts = group.kind == "level" || group.kind == "gap";
+      if (path != nullptr && counts) {
+        strokes.push_back({group.kind + " " + group.name, box_of(*path)});
+      }
     }
   }
   for (std::size_t i = 0; i < strokes.size(); ++i) {
