@@ -18,6 +18,7 @@
 #include "figure/level_diagram.hpp"
 #include "figure/orbital_sheets.hpp"
 #include "figure/paint.hpp"
+#include "figure/rich_text.hpp"
 #include "figure/svg.hpp"
 #include "figure/vti.hpp"
 
@@ -36,13 +37,19 @@ auto named(const char* option, Action action) {
   }
 }
 
-SheetWords heading(const LevelsResult& result) {
+std::string method_words(const LevelsResult& result) {
   const Levels& levels = result.levels;
-  std::string method = fmt::format(
-      "{} · {} · extended Hückel, {} rule{} · parameters: {}", charged_formula(result.molecule),
-      result.symmetry.group.symbol().name(), rule_name(levels.rule),
-      levels.k ? fmt::format(", K = {}", *levels.k) : "", result.parameter_set);
-  return {result.title.empty() ? charged_formula(result.molecule) : result.title, method};
+  return fmt::format("extended Hückel, {} rule{} · parameters: {}", rule_name(levels.rule),
+                     levels.k ? fmt::format(", K\u00A0=\u00A0{}", *levels.k) : "",
+                     result.parameter_set);
+}
+
+SheetWords heading(const LevelsResult& result) {
+  RichText method = formula_text(result.molecule) + plain_text(" · ") +
+                    group_text(result.symmetry.group.symbol().name()) +
+                    plain_text(" · " + method_words(result));
+  return {result.title.empty() ? charged_formula(result.molecule) : result.title,
+          std::move(method)};
 }
 
 struct Chosen {
@@ -260,7 +267,9 @@ Drawn draw_mesh(const LevelsResult& result, const Chosen& chosen, const DrawOpti
       {"share_enclosed", fmt::format("{}", scene.share)},
       {"density_integral", fmt::format("{}", scene.integral)},
       {"unit_of_length", "angstrom"},
-      {"method", heading(result).method}};
+      {"molecule", charged_formula(result.molecule)},
+      {"point_group", result.symmetry.group.symbol().name()},
+      {"method", method_words(result)}};
   return {glb_bytes(scene.scene, facts), surfaces.remarks};
 }
 
@@ -353,7 +362,7 @@ Command add_draw(CLI::App& program) {
       "the lobes show best",
       "Surfaces and grids");
   add("--spacing", options->spacing_angstrom, "Å",
-      "Between points of the grid; by default 0.15 or as fine as the density asks for",
+      "Between points of the grid; by default 0.07 to 0.15 by the size of the molecule",
       "Surfaces and grids");
   app->footer(
       "Axes and partners are those of the standard frame, as `irrepwise levels` states them.\n"

@@ -13,11 +13,11 @@
 namespace irrepwise {
 namespace {
 
-constexpr double stick_radius_angstrom = 0.085;
+constexpr double stick_radius_angstrom = 0.07;
 constexpr Colour stick_colour{0x9a, 0xa3, 0xac};
 
 double ball_radius_angstrom(int atomic_number) {
-  return 0.14 + 0.16 * covalent_radius_angstrom(atomic_number).value_or(1.5);
+  return 0.11 + 0.13 * covalent_radius_angstrom(atomic_number).value_or(1.5);
 }
 
 void append(Mesh& to, const Mesh& more) {

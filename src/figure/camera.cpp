@@ -100,7 +100,7 @@ Camera best_camera(std::span<const Scene> scenes) {
   double best_score = -1.0;
   // Rings of elevation, turned by odd angles so that no view hides equivalent atoms exactly behind
   // each other; views from somewhat above come first and win ties.
-  for (const double elevation : {20.0, 35.0, 10.0, 50.0, -20.0, 65.0, 80.0}) {
+  for (const double elevation : {28.0, 15.0, 42.0, -20.0, 60.0, 80.0}) {
     const int steps = elevation < 60.0 ? 24 : 12;
     for (int step = 0; step < steps; ++step) {
       const double azimuth = (-67.0 + 360.0 * step / steps) * std::numbers::pi / 180.0;
@@ -128,8 +128,8 @@ std::string camera_words(const Camera& camera) {
   std::string words = "seen from (";
   for (int axis = 0; axis < 3; ++axis) {
     const double value = std::round(100.0 * camera.towards(axis)) / 100.0;
-    words +=
-        fmt::format("{}{}{:.2f}", axis == 0 ? "" : ", ", value < 0.0 ? "−" : "", std::abs(value));
+    words += fmt::format("{}{}{:.2f}", axis == 0 ? "" : ",\u00A0", value < 0.0 ? "−" : "",
+                         std::abs(value));
   }
   return words + ")";
 }

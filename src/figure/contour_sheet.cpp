@@ -18,11 +18,13 @@ constexpr double in_plane_angstrom = 0.15;  // atoms nearer than this count as l
 // From the plane to the cell: equal scale along both, y turned down.
 struct Scale {
   double px_per_angstrom = 1.0;
-  Point2 middle;      // of the plane's region, Å
-  double half = 0.0;  // px
+  Point2 middle;                       // of the plane's region, Å
+  double half = 0.0;                   // px
+  static constexpr double lift = 9.0;  // px, above the scale bar
 
   [[nodiscard]] Point2 operator()(const Point2& p) const {
-    return {half + (p.x - middle.x) * px_per_angstrom, half - (p.y - middle.y) * px_per_angstrom};
+    return {half + (p.x - middle.x) * px_per_angstrom,
+            half - lift - (p.y - middle.y) * px_per_angstrom};
   }
 };
 
@@ -49,7 +51,8 @@ Scale scale_for(const ContourMap& map, const Molecule& molecule, const Plane& pl
   }
   Scale scale;
   const double size = std::max(box.right - box.left, box.top - box.bottom);
-  scale.px_per_angstrom = (cell_size - 20.0) / size;
+  constexpr double rim = 34.0;  // px in all; the lower part holds the scale bar
+  scale.px_per_angstrom = (cell_size - rim) / size;
   scale.middle = {0.5 * (box.left + box.right), 0.5 * (box.top + box.bottom)};
   scale.half = 0.5 * cell_size;
   return scale;
@@ -200,9 +203,13 @@ Figure contour_sheet(const SheetWords& words, const Molecule& molecule,
   sheet.legend = {{"positive phase", palette::homo, false, true},
                   {"negative phase", palette::negative_line, true, true}};
   const std::string levels = level_words(maps);
-  if (!levels.empty()) sheet.notes.push_back("Lines at " + levels + " bohr^(−3/2).");
+  if (!levels.empty()) {
+    sheet.notes.push_back(plain_text("Lines at " + levels + "\u00A0bohr") +
+                          RichText{{"−3/2", Script::Super}} + plain_text("."));
+  }
   sheet.notes.push_back(
-      "Discs with symbols are atoms in the plane; small rings are atoms in front of it or behind.");
+      plain_text("Discs with symbols are atoms in the plane; small rings are atoms in front of it "
+                 "or behind."));
   return sheet_figure(sheet);
 }
 

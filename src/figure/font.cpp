@@ -160,7 +160,7 @@ double Font::width(const RichText& runs, double size) const {
 }
 
 Box Font::box(const Text& text) const {
-  constexpr double ascent = 0.76;   // capitals and ascenders stay below, in em
+  constexpr double ascent = 0.88;   // in em; even the ring of Å stays below
   constexpr double descent = 0.22;  // of letters such as g
   double top = ascent * text.size;
   double bottom = descent * text.size;

@@ -3,16 +3,14 @@
 #include <cmath>
 #include <unordered_map>
 #include <utility>
-#include <vector>
-
-#include <Eigen/Geometry>
 
 namespace irrepwise {
 namespace {
 
-// The six tetrahedra of a cube share its diagonal 0-7; corner bits are steps along x, y, z.
-constexpr int tetrahedra[6][4] = {{0, 1, 3, 7}, {0, 1, 5, 7}, {0, 2, 3, 7},
-                                  {0, 2, 6, 7}, {0, 4, 5, 7}, {0, 4, 6, 7}};
+// The six tetrahedra of a cube share its diagonal 0-7; corner bits are steps along x, y, z. Each is
+// listed so that its corners 1, 2, 3 run counter-clockwise seen from beyond them, from corner 0.
+constexpr int tetrahedra[6][4] = {{0, 1, 3, 7}, {0, 1, 7, 5}, {0, 2, 7, 3},
+                                  {0, 2, 6, 7}, {0, 4, 5, 7}, {0, 4, 7, 6}};
 
 class Surface {
  public:
@@ -53,45 +51,40 @@ class Surface {
     }
   }
 
+  // The winding follows from the order of the corners alone, so that neighbours always agree.
   void tetrahedron(const std::array<std::size_t, 4>& corners) {
-    std::vector<std::size_t> in;
-    std::vector<std::size_t> out;
-    for (const std::size_t c : corners) (inside(c) > 0.0 ? in : out).push_back(c);
-    if (in.empty() || out.empty()) return;
-    const Eigen::Vector3d outwards = centre(out) - centre(in);
-    if (in.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[0], out[1]), vertex(in[0], out[2]), outwards);
-    } else if (out.size() == 1) {
-      triangle(vertex(in[0], out[0]), vertex(in[1], out[0]), vertex(in[2], out[0]), outwards);
+    std::array<std::size_t, 4> ordered;  // those inside first
+    std::size_t n_inside = 0;
+    bool odd = false;
+    for (std::size_t i = 0; i < 4; ++i) {
+      if (!(inside(corners[i]) > 0.0)) continue;
+      odd ^= (i - n_inside) % 2 == 1;  // it passes so many corners that lie outside
+      ordered[n_inside++] = corners[i];
+    }
+    if (n_inside == 0 || n_inside == 4) return;
+    std::size_t n = n_inside;
+    for (const std::size_t c : corners) {
+      if (!(inside(c) > 0.0)) ordered[n++] = c;
+    }
+    if (odd && n_inside < 3) std::swap(ordered[2], ordered[3]);  // both outside
+    if (odd && n_inside == 3) std::swap(ordered[0], ordered[1]);
+    const auto& [p, q, r, s] = ordered;
+    if (n_inside == 1) {
+      triangle(vertex(p, q), vertex(p, r), vertex(p, s));
+    } else if (n_inside == 2) {
+      const std::uint32_t a = vertex(p, r);
+      const std::uint32_t b = vertex(p, s);
+      const std::uint32_t c = vertex(q, s);
+      const std::uint32_t d = vertex(q, r);
+      triangle(a, b, c);
+      triangle(a, c, d);
     } else {
-      const std::uint32_t a = vertex(in[0], out[0]);
-      const std::uint32_t b = vertex(in[0], out[1]);
-      const std::uint32_t c = vertex(in[1], out[1]);
-      const std::uint32_t d = vertex(in[1], out[0]);
-      triangle(a, b, c, outwards);
-      triangle(a, c, d, outwards);
+      triangle(vertex(p, s), vertex(q, s), vertex(r, s));
     }
   }
 
-  [[nodiscard]] Eigen::Vector3d centre(const std::vector<std::size_t>& points) const {
-    Eigen::Vector3d sum = Eigen::Vector3d::Zero();
-    for (const std::size_t point : points) sum += position(point);
-    return sum / static_cast<double>(points.size());
-  }
-
-  // The middles of the edges decide which way round: they never coincide, as vertices may where the
-  // surface touches a grid point, so neighbours always agree and the surface closes.
-  void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c,
-                const Eigen::Vector3d& outwards) {
-    const Eigen::Vector3d across =
-        (middles_[b] - middles_[a]).cross(middles_[c] - middles_[a]);
-    if (across.dot(outwards) < 0.0) std::swap(b, c);
+  void triangle(std::uint32_t a, std::uint32_t b, std::uint32_t c) {
     mesh_.triangles.push_back({a, b, c});
-  }
-
-  [[nodiscard]] Eigen::Vector3d position(std::size_t point) const {
-    const std::array<int, 3> at = lattice(point);
-    return shape_.point(at[0], at[1], at[2]);
   }
 
   [[nodiscard]] std::array<int, 3> lattice(std::size_t point) const {
@@ -161,7 +154,6 @@ class Surface {
     const double length = normal.norm();
     normal =
         length > 0.0 ? Eigen::Vector3d(normal / length) : Eigen::Vector3d((q - p).normalized());
-    middles_.push_back(0.5 * (p + q));
     mesh_.vertices.push_back((p + t * (q - p)).cast<float>());
     mesh_.normals.push_back(normal.cast<float>());
     return place->second;
@@ -174,7 +166,6 @@ class Surface {
   double isovalue_;
   double sign_;
   Mesh mesh_;
-  std::vector<Eigen::Vector3d> middles_;  // by vertex: the middle of its edge
   std::unordered_map<std::uint64_t, std::uint32_t> known_;
 };
 

@@ -6,8 +6,8 @@
 
 #include <fmt/format.h>
 
-#include "core/error.hpp"
 #include "figure/font.hpp"
+#include "figure/level_diagram_words.hpp"
 #include "figure/level_lanes.hpp"
 #include "figure/level_placing.hpp"
 #include "figure/palette.hpp"
@@ -23,7 +23,7 @@ constexpr double small_size = 11.5;
 constexpr double title_size = 17.0;
 constexpr double line_height = 16.0;
 constexpr double column_gap = 70.0;
-constexpr double axis_width = 62.0;
+constexpr double axis_width = 66.0;
 constexpr double least_width = 420.0;  // room for the title
 constexpr double picture_size = 118.0;
 constexpr double picture_gap = 8.0;
@@ -104,7 +104,7 @@ Group level_group(const PlacedLevel& drawn) {
 
 double tick_step(double per_ev) {
   for (const double step : {0.1, 0.2, 0.5, 1.0, 2.0, 5.0, 10.0, 20.0, 50.0}) {
-    if (step * per_ev >= 36.0) return step;
+    if (step * per_ev >= 44.0) return step;
   }
   return 100.0;
 }
@@ -132,7 +132,7 @@ Group axis(const LevelDiagram& diagram, double x, double top, double per_ev) {
     group.elements.emplace_back(std::move(text));
   }
   Text title;
-  title.at = {x - 42.0, 0.5 * (top + bottom)};
+  title.at = {x - 48.0, 0.5 * (top + bottom)};
   title.runs = plain_text("orbital energy / eV");
   title.size = small_size;
   title.colour = palette::muted;
@@ -164,60 +164,41 @@ Group links_group(const LevelDiagram& diagram, const std::vector<PlacedColumn>& 
   return group;
 }
 
-std::string count_words(int n, const char* where) {
-  return fmt::format("{} {} {}", n, n == 1 ? "level" : "levels", where);
-}
-
-// What the window leaves out, so that nobody takes the picture for the whole.
-std::string left_out(const LevelDiagram& diagram) {
-  int below = 0;
-  int above = 0;
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      below += level.energy_ev < diagram.from_ev ? 1 : 0;
-      above += level.energy_ev > diagram.to_ev ? 1 : 0;
-    }
-  }
-  std::string words;
-  if (below > 0) words = count_words(below, "below");
-  if (above > 0) words += (words.empty() ? "" : ", ") + count_words(above, "above");
-  return words.empty() ? words : words + " the range shown";
-}
-
-std::string fractions_note(const LevelDiagram& diagram) {
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      if (is_shown(diagram, level) &&
-          std::abs(level.occupation - std::round(level.occupation)) > 1e-9) {
-        return fmt::format("{} holds {:g} electrons, spread evenly", level.label, level.occupation);
-      }
-    }
-  }
-  return {};
-}
-
 Text words(Point2 at, const std::string& text, double size, Colour colour) {
   return text_at(at, plain_text(text), size, colour);
 }
 
-// The gap as a measure between the two frontier levels, to the right of a single column.
-Group gap_group(const PlacedColumn& column, double x) {
+struct Gap {
   Group group;
-  group.kind = "gap";
+  double right = 0.0;
+};
+
+// The gap as a measure between the two frontier levels, beside the main lane: no other level stands
+// between them, so that its words have room, unless they are very close. Then it stands beside all.
+Gap gap_group(const PlacedColumn& column, const Font& font) {
+  constexpr double room = 52.0;  // px in height that the words need
+  Gap out;
+  out.group.kind = "gap";
+  out.right = column.right;
   const PlacedLevel* homo = nullptr;
   const PlacedLevel* lumo = nullptr;
   for (const PlacedLevel& drawn : column.levels) {
     if (drawn.level->frontier == FrontierMark::Homo) homo = &drawn;
     if (drawn.level->frontier == FrontierMark::Lumo) lumo = &drawn;
   }
-  if (homo == nullptr || lumo == nullptr || homo->y <= lumo->y) return group;
-  group.elements.emplace_back(line(x - 4, homo->y, x + 4, homo->y, palette::muted, 1.0));
-  group.elements.emplace_back(line(x - 4, lumo->y, x + 4, lumo->y, palette::muted, 1.0));
-  group.elements.emplace_back(line(x, homo->y, x, lumo->y, palette::muted, 1.0));
-  const double gap = lumo->level->energy_ev - homo->level->energy_ev;
-  group.elements.emplace_back(words({x + 9.0, 0.5 * (homo->y + lumo->y) + 0.35 * small_size},
-                                    "gap " + energy_words(gap, 2), small_size, palette::muted));
-  return group;
+  if (homo == nullptr || lumo == nullptr || homo->y <= lumo->y) return out;
+  const bool has_room = homo->y - lumo->y > room;
+  const double x = (has_room ? column.main_right : column.right) + 18.0;
+  std::vector<Element>& elements = out.group.elements;
+  elements.emplace_back(line(x - 4, homo->y, x + 4, homo->y, palette::muted, 1.0));
+  elements.emplace_back(line(x - 4, lumo->y, x + 4, lumo->y, palette::muted, 1.0));
+  elements.emplace_back(line(x, homo->y, x, lumo->y, palette::muted, 1.0));
+  const std::string text =
+      "gap " + energy_words(lumo->level->energy_ev - homo->level->energy_ev, 2);
+  elements.emplace_back(words({x + 9.0, 0.5 * (homo->y + lumo->y) + 0.35 * small_size}, text,
+                              small_size, palette::muted));
+  out.right = std::max(out.right, x + 9.0 + font.width(plain_text(text), small_size));
+  return out;
 }
 
 struct Pictures {
@@ -255,7 +236,8 @@ Pictures picture_groups(const PlacedColumn& column, double x, double top) {
       left += picture_size + picture_gap;
     }
     Text text = words({x, centres[i] + 0.5 * picture_size + 12.0}, "", small_size, palette::ink);
-    text.runs = label_text(level.label) + plain_text("   " + energy_words(level.energy_ev, 2));
+    text.runs =
+        label_text(level.label) + plain_text("\u00A0\u00A0 " + energy_words(level.energy_ev, 2));
     group.elements.emplace_back(std::move(text));
     out.right = std::max(out.right, left);
     out.bottom = std::max(out.bottom, centres[i] + 0.5 * picture_size + picture_caption);
@@ -264,56 +246,18 @@ Pictures picture_groups(const PlacedColumn& column, double x, double top) {
   return out;
 }
 
-std::string description(const LevelDiagram& diagram) {
-  std::string text = fmt::format("Orbital energies from {} to {}. ",
-                                 energy_words(diagram.from_ev, 1), energy_words(diagram.to_ev, 1));
-  for (const DiagramColumn& column : diagram.columns) {
-    if (!column.title.empty()) text += column.title + ": ";
-    for (auto level = column.levels.rbegin(); level != column.levels.rend(); ++level) {
-      if (!is_shown(diagram, *level)) continue;
-      text += fmt::format("{} at {}, {:g} electrons{}; ", level->label,
-                          energy_words(level->energy_ev, 2), level->occupation,
-                          level->frontier == FrontierMark::Homo   ? " (HOMO)"
-                          : level->frontier == FrontierMark::Lumo ? " (LUMO)"
-                                                                  : "");
-    }
-  }
-  if (text.ends_with("; ")) text.replace(text.size() - 2, 2, ".");
-  return text;
-}
-
-void check_window(const LevelDiagram& diagram) {
-  if (!(diagram.to_ev > diagram.from_ev)) {
-    throw Error(
-        fmt::format("the range of energies runs from {} to {} eV; its end must lie above "
-                    "its start",
-                    diagram.from_ev, diagram.to_ev));
-  }
-  double lowest = std::numeric_limits<double>::infinity();
-  double highest = -lowest;
-  for (const DiagramColumn& column : diagram.columns) {
-    for (const DiagramLevel& level : column.levels) {
-      if (is_shown(diagram, level)) return;
-      lowest = std::min(lowest, level.energy_ev);
-      highest = std::max(highest, level.energy_ev);
-    }
-  }
-  throw Error(fmt::format("no level lies between {} and {} eV; they run from {:.3f} to {:.3f} eV",
-                          diagram.from_ev, diagram.to_ev, lowest, highest));
-}
-
 double add_heading(Figure& figure, const LevelDiagram& diagram, const Font& font, double width) {
   Group group;
   group.kind = "heading";
   double y = margin - 4.0;
-  for (const std::string& line : wrapped(font, diagram.title, title_size, width)) {
+  for (const RichText& line : wrapped(font, plain_text(diagram.title), title_size, width)) {
     y += title_size + 3.0;
-    group.elements.emplace_back(words({margin, y}, line, title_size, palette::ink));
+    group.elements.emplace_back(text_at({margin, y}, line, title_size, palette::ink));
   }
   y += 4.0;
-  for (const std::string& line : wrapped(font, diagram.method, small_size, width)) {
+  for (const RichText& line : wrapped(font, diagram.method, small_size, width)) {
     y += line_height;
-    group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+    group.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
   }
   figure.groups.push_back(std::move(group));
   return y;
@@ -337,8 +281,11 @@ Body placed_body(const LevelDiagram& diagram, const Font& font, double top, doub
     x = body.columns.back().right + column_gap;
   }
   body.right = body.columns.back().right;
-  if (body.columns.size() == 1) body.gap = gap_group(body.columns.front(), body.right + 22.0);
-  if (!body.gap.elements.empty()) body.right += 22.0 + 80.0;
+  if (body.columns.size() == 1) {
+    Gap gap = gap_group(body.columns.front(), font);
+    body.gap = std::move(gap.group);
+    body.right = gap.right;
+  }
   body.pictures = picture_groups(body.columns.back(), body.right + 20.0, top);
   if (!body.pictures.groups.empty()) body.right = body.pictures.right;
   return body;
@@ -362,10 +309,10 @@ double add_notes(Figure& figure, const LevelDiagram& diagram, const Font& font, 
                  double y) {
   Group group;
   group.kind = "notes";
-  for (const std::string& note : {left_out(diagram), fractions_note(diagram)}) {
-    for (const std::string& line : wrapped(font, note, small_size, width)) {
+  for (const std::string& note : {words_on_left_out(diagram), words_on_fractions(diagram)}) {
+    for (const RichText& line : wrapped(font, plain_text(note), small_size, width)) {
       y += line_height;
-      group.elements.emplace_back(words({margin, y}, line, small_size, palette::muted));
+      group.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
     }
   }
   if (!group.elements.empty()) figure.groups.push_back(std::move(group));
@@ -383,7 +330,7 @@ Figure level_diagram_figure(const LevelDiagram& diagram) {
       std::max(least_width, placed_body(diagram, font, 0.0, per_ev).right - margin);
   Figure figure;
   figure.title = diagram.title;
-  figure.description = description(diagram);
+  figure.description = spoken_levels(diagram);
   const double top = add_heading(figure, diagram, font, width) + 28.0;
   Body body = placed_body(diagram, font, top, per_ev);
   figure.groups.push_back(axis(diagram, margin + axis_width, top, per_ev));

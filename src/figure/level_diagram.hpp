@@ -39,7 +39,7 @@ struct DiagramLink {
 
 struct LevelDiagram {
   std::string title;
-  std::string method;  // a line below the title
+  RichText method;  // a line below the title
   std::vector<DiagramColumn> columns;
   std::vector<DiagramLink> links;
   double from_ev = 0.0;  // levels outside are counted in a note, not drawn

@@ -5,16 +5,24 @@
 
 namespace irrepwise {
 
-std::vector<int> level_lanes(const std::vector<double>& heights, double least_apart) {
-  std::vector<double> last;  // per lane, the height of the level put there last
-  std::vector<int> lanes;
-  for (const double height : heights) {
-    std::size_t lane = 0;
-    while (lane < last.size() && std::abs(height - last[lane]) < least_apart) ++lane;
-    if (lane == last.size()) last.push_back(height);
-    last[lane] = height;
-    lanes.push_back(static_cast<int>(lane));
-  }
+std::vector<int> level_lanes(const std::vector<double>& heights, double least_apart,
+                             const std::vector<std::size_t>& served_first) {
+  constexpr int none = -1;
+  std::vector<int> lanes(heights.size(), none);
+  const auto choose = [&](std::size_t i) {
+    if (lanes[i] != none) return;
+    std::vector<bool> taken(heights.size() + 1, false);
+    for (std::size_t j = 0; j < heights.size(); ++j) {
+      if (lanes[j] != none && std::abs(heights[i] - heights[j]) < least_apart) {
+        taken[static_cast<std::size_t>(lanes[j])] = true;
+      }
+    }
+    int lane = 0;
+    while (taken[static_cast<std::size_t>(lane)]) ++lane;
+    lanes[i] = lane;
+  };
+  for (const std::size_t i : served_first) choose(i);
+  for (std::size_t i = 0; i < heights.size(); ++i) choose(i);
   return lanes;
 }
 

@@ -10,9 +10,10 @@ namespace {
 
 constexpr double least_apart = level_arrow_height + 5.0;  // of two levels in one lane
 constexpr double lane_gap = 18.0;
+constexpr double strip = 36.0;          // after the main lane, for the measure of the gap
 constexpr double least_height = 460.0;  // of the energy range
-constexpr double most_height = 1200.0;
-constexpr int wanted_lanes = 3;  // the range grows until so many are enough
+constexpr double most_height = 900.0;
+constexpr int wanted_lanes = 4;  // the range grows until so many are enough
 
 double bars_width(const DiagramLevel& level) {
   return level.degeneracy * level_bar_length + (level.degeneracy - 1) * level_bar_gap;
@@ -34,8 +35,8 @@ int lanes_needed(const LevelDiagram& diagram, double per_ev) {
 
 RichText level_words(const DiagramLevel& level) {
   RichText words = label_text(level.label);
-  if (level.frontier == FrontierMark::Homo) return words + plain_text("  HOMO");
-  if (level.frontier == FrontierMark::Lumo) return words + plain_text("  LUMO");
+  if (level.frontier == FrontierMark::Homo) return words + plain_text("\u00A0\u00A0HOMO");
+  if (level.frontier == FrontierMark::Lumo) return words + plain_text("\u00A0\u00A0LUMO");
   return words;
 }
 
@@ -58,7 +59,12 @@ PlacedColumn place_column(const LevelDiagram& diagram, const DiagramColumn& colu
     out.levels.push_back(drawn);
     heights.push_back(drawn.y);
   }
-  const std::vector<int> lanes = level_lanes(heights, least_apart);
+  // The frontier stands in the main lane.
+  std::vector<std::size_t> first;
+  for (std::size_t i = 0; i < out.levels.size(); ++i) {
+    if (out.levels[i].level->frontier != FrontierMark::None) first.push_back(i);
+  }
+  const std::vector<int> lanes = level_lanes(heights, least_apart, first);
   std::vector<double> bars;
   std::vector<double> labels;
   for (std::size_t i = 0; i < out.levels.size(); ++i) {
@@ -75,9 +81,10 @@ PlacedColumn place_column(const LevelDiagram& diagram, const DiagramColumn& colu
   std::vector<double> centres;
   double x = left;
   for (std::size_t lane = 0; lane < bars.size(); ++lane) {
-    if (lane > 0) x += lane_gap;
+    if (lane > 0) x += lane == 1 ? strip : lane_gap;
     centres.push_back(x + 0.5 * bars[lane]);
     x += bars[lane] + level_label_gap + labels[lane];
+    if (lane == 0) out.main_right = x;
   }
   out.right = x;
   for (PlacedLevel& drawn : out.levels) {

@@ -27,6 +27,7 @@ struct PlacedLevel {
 struct PlacedColumn {
   std::vector<PlacedLevel> levels;  // ascending energy
   double left = 0.0;
+  double main_right = 0.0;  // where the main lane ends; a free strip of 36 px follows
   double right = 0.0;
 };
 

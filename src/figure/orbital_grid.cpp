@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <functional>
+#include <utility>
 
 #include <fmt/format.h>
 
@@ -13,20 +14,39 @@ namespace irrepwise {
 namespace {
 
 constexpr std::size_t most_points = 24'000'000;
-constexpr double usual_spacing_angstrom = 0.15;
-constexpr double wanted_error = 0.005;  // of an integral, without a wish of the user
+constexpr double coarsest_spacing_angstrom = 0.15;  // without a wish of the user
+constexpr double finest_spacing_angstrom = 0.07;
+constexpr double wanted_points = 300'000;  // small molecules get a finer grid
+constexpr double wanted_error = 0.005;     // of an integral, without a wish of the user
 constexpr double refused_error = 0.01;
 constexpr int finer_tries = 4;
 constexpr double finer = 0.8;
 
-GridShape shape_around(const OrbitalField& field, double spacing) {
-  Eigen::Vector3d low = Eigen::Vector3d::Constant(1e9);
-  Eigen::Vector3d high = -low;
+struct Region {
+  Eigen::Vector3d low = Eigen::Vector3d::Constant(1e9);  // Å
+  Eigen::Vector3d high = Eigen::Vector3d::Constant(-1e9);
+};
+
+Region region_of(const OrbitalField& field) {
+  Region region;
   for (const OrbitalField::Centre& centre : field.centres()) {
     const Eigen::Vector3d reach = Eigen::Vector3d::Constant(centre.density_angstrom);
-    low = low.cwiseMin(centre.position_angstrom - reach);
-    high = high.cwiseMax(centre.position_angstrom + reach);
+    region.low = region.low.cwiseMin(centre.position_angstrom - reach);
+    region.high = region.high.cwiseMax(centre.position_angstrom + reach);
   }
+  return region;
+}
+
+// In hundredths of Å.
+double usual_spacing(const OrbitalField& field) {
+  const Region region = region_of(field);
+  const double spacing = std::cbrt((region.high - region.low).prod() / wanted_points);
+  return std::clamp(std::round(100.0 * spacing) / 100.0, finest_spacing_angstrom,
+                    coarsest_spacing_angstrom);
+}
+
+GridShape shape_around(const OrbitalField& field, double spacing) {
+  const auto [low, high] = region_of(field);
   GridShape shape;
   shape.spacing_angstrom = spacing;
   double points = 1.0;
@@ -124,7 +144,7 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
     throw Error(
         fmt::format("spacing of the grid: found {}, expected 0.02 to 1 Å", *spacing_angstrom));
   }
-  double spacing = spacing_angstrom.value_or(usual_spacing_angstrom);
+  double spacing = spacing_angstrom.value_or(usual_spacing(field));
   OrbitalGrid grid = sampled(field, shape_around(field, spacing));
   if (!spacing_angstrom) {
     for (int i = 0; i < finer_tries && worst_error(grid) > wanted_error; ++i) {
@@ -140,26 +160,84 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
   return grid;
 }
 
-double enclosing_isovalue(const OrbitalGrid& grid, int orbital, double share) {
+namespace {
+
+// The value at which the densities, each of one small volume, add up to the wanted part.
+double value_at_share(std::vector<double>& densities, double volume, double wanted) {
+  std::sort(densities.begin(), densities.end(), std::greater<>());
+  double sum = 0.0;
+  for (const double density : densities) {
+    sum += density * volume;
+    if (sum >= wanted) return std::sqrt(density);
+  }
+  return std::sqrt(densities.back());
+}
+
+// Lower corners of the cells of the grid in which |psi| may exceed a value.
+std::vector<std::array<int, 3>> cells_above(const OrbitalGrid& grid, std::size_t orbital,
+                                            double value) {
+  const GridShape& shape = grid.shape;
+  const std::vector<double>& values = grid.values[orbital];
+  std::vector<std::array<int, 3>> cells;
+  for (int k = 0; k + 1 < shape.size[2]; ++k) {
+    for (int j = 0; j + 1 < shape.size[1]; ++j) {
+      for (int i = 0; i + 1 < shape.size[0]; ++i) {
+        double largest = 0.0;
+        for (int corner = 0; corner < 8; ++corner) {
+          const std::size_t p =
+              shape.index(i + (corner & 1), j + (corner >> 1 & 1), k + (corner >> 2));
+          largest = std::max(largest, std::abs(values[p]));
+        }
+        if (largest > value) cells.push_back({i, j, k});
+      }
+    }
+  }
+  return cells;
+}
+
+// At the middles of `parts`^3 equal parts of each cell.
+std::vector<double> densities_within(const OrbitalField& field, const GridShape& shape,
+                                     const std::vector<std::array<int, 3>>& cells, int orbital,
+                                     int parts) {
+  std::vector<double> densities;
+  const double step = shape.spacing_angstrom / parts;
+  for (const auto& [i, j, k] : cells) {
+    const Eigen::Vector3d corner = shape.point(i, j, k);
+    for (int part = 0; part < parts * parts * parts; ++part) {
+      const Eigen::Vector3d inside(part % parts + 0.5, part / parts % parts + 0.5,
+                                   part / (parts * parts) + 0.5);
+      const double value = field.value(corner + step * inside, orbital);
+      densities.push_back(value * value);
+    }
+  }
+  return densities;
+}
+
+}  // namespace
+
+double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
+                          double share) {
   if (!(share > 0.0 && share < 1.0)) {
     throw Error(
         fmt::format("share of the density: found {}, expected more than 0 and less than 1", share));
   }
+  constexpr double enough_points = 60'000;  // inside the surface or near it
+  constexpr int most_parts = 8;
+  constexpr double near = 0.6;  // cells with less than this part of the value lie outside
   const auto o = static_cast<std::size_t>(orbital);
   const double volume = std::pow(grid.shape.spacing_angstrom / bohr_in_angstrom, 3);
-  std::vector<double> density;
-  density.reserve(grid.values[o].size());
+  std::vector<double> densities;
+  densities.reserve(grid.values[o].size());
   for (const double value : grid.values[o]) {
-    if (value * value * volume > 1e-12) density.push_back(value * value);
+    if (value * value * volume > 1e-12) densities.push_back(value * value);
   }
-  std::sort(density.begin(), density.end(), std::greater<>());
-  const double wanted = share * grid.integrals[o] / volume;
-  double sum = 0.0;
-  for (const double value : density) {
-    sum += value;
-    if (sum >= wanted) return std::sqrt(value);
-  }
-  return std::sqrt(density.back());
+  const double rough = value_at_share(densities, volume, share * grid.integrals[o]);
+  const std::vector<std::array<int, 3>> cells = cells_above(grid, o, near * rough);
+  const double wanted_parts = std::cbrt(enough_points / static_cast<double>(cells.size()));
+  const int parts = std::clamp(static_cast<int>(std::ceil(wanted_parts)), 1, most_parts);
+  if (parts == 1) return rough;
+  densities = densities_within(field, grid.shape, cells, orbital, parts);
+  return value_at_share(densities, volume / (parts * parts * parts), share);
 }
 
 }  // namespace irrepwise

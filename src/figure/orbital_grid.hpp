@@ -29,18 +29,23 @@ struct OrbitalGrid {
   std::vector<double> integrals;            // per orbital, of the density over the grid
 };
 
-/// @param spacing_angstrom  as the user wants it; without it, 0.15 Å, finer where the integral of
-///                          some density is otherwise further than 0.005 from 1
+/// @param spacing_angstrom  as the user wants it; without it, 0.07 to 0.15 Å by the size of the
+///                          molecule, finer where the integral of some density is otherwise
+///                          further than 0.005 from 1
 /// @throws Error  where the grid would need more than 24 million points (with the spacing that
 ///                does not), or an integral is further than 0.01 from 1
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
                                  std::optional<double> spacing_angstrom = {});
 
 /// The value of |psi| on the surface that encloses the given part of the density, by adding up the
-/// density from its largest values down.
-/// @param share    between 0 and 1
-/// @throws Error   for any other share
-/// @returns        bohr^(-3/2)
-[[nodiscard]] double enclosing_isovalue(const OrbitalGrid& grid, int orbital, double share);
+/// density from its largest values down: on the grid, and where few points of it lie inside, on
+/// finer points within its cells.
+///
+/// @param share     between 0 and 1
+/// @throws Error    for any other share
+/// @returns         bohr^(-3/2)
+/// @accuracy        about 0.5 % for a share of 0.5, measured on Slater functions
+[[nodiscard]] double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid,
+                                        int orbital, double share);
 
 }  // namespace irrepwise

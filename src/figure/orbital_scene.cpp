@@ -10,7 +10,7 @@ OrbitalScene orbital_scene(const Molecule& molecule, const OrbitalField& field,
   constexpr double lobe_opacity = 0.82;  // the molecule shows through, the shape stays clear
   OrbitalScene out;
   out.share = share;
-  out.isovalue = enclosing_isovalue(grid, orbital, share);
+  out.isovalue = enclosing_isovalue(field, grid, orbital, share);
   out.integral = grid.integrals[static_cast<std::size_t>(orbital)];
   out.scene.bodies.push_back({"positive phase", isosurface(field, grid, orbital, out.isovalue),
                               palette::positive, lobe_opacity});

@@ -52,8 +52,15 @@ Frame joint_frame(std::span<const OrbitalScene> scenes, const Camera& camera) {
 // The axes as the camera sees them, in a square of 60 px.
 std::vector<Element> axes_corner(const Camera& camera) {
   constexpr double length = 20.0;
+  constexpr double least_between_names = 13.0;
   constexpr Point2 centre = {28.0, 32.0};
   std::vector<Element> elements;
+  std::vector<Point2> names;
+  const auto is_free = [&](const Point2& at) {
+    return std::none_of(names.begin(), names.end(), [&](const Point2& other) {
+      return std::hypot(at.x - other.x, at.y - other.y) < least_between_names;
+    });
+  };
   for (int axis = 0; axis < 3; ++axis) {
     const double dx = camera.right(axis);
     const double dy = -camera.up(axis);
@@ -71,9 +78,13 @@ std::vector<Element> axes_corner(const Camera& camera) {
       path.lines = {{centre, {centre.x + length * dx, centre.y + length * dy}}};
       path.stroke = Stroke{palette::muted, 1.4, {}};
       elements.emplace_back(std::move(path));
-      const double reach = length * size + 8.0;
-      text.at = {centre.x + reach * dx / size, centre.y + reach * dy / size + 4.0};
+      double reach = length * size + 8.0;
+      do {  // the name of an axis just beside another steps outwards
+        text.at = {centre.x + reach * dx / size, centre.y + reach * dy / size + 4.0};
+        reach += 3.0;
+      } while (!is_free(text.at));
     }
+    names.push_back(text.at);
     elements.emplace_back(std::move(text));
   }
   return elements;
@@ -90,8 +101,8 @@ std::string heading_words(std::span<const OrbitalCaption> captions) {
 std::vector<RichText> caption_lines(const OrbitalCaption& caption) {
   RichText first = label_text(caption.label);
   if (caption.degeneracy > 1) {
-    first =
-        first + plain_text(fmt::format("   partner {} of {}", caption.partner, caption.degeneracy));
+    first = first + plain_text(fmt::format("\u00A0\u00A0 partner {} of {}", caption.partner,
+                                           caption.degeneracy));
   }
   std::string second = energy_words(caption.energy_ev);
   if (caption.occupation > 0.0) {
@@ -143,10 +154,8 @@ Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
     if (body.opacity < 1.0 || body.name == "bonds") continue;
     sheet.legend.push_back({body.name, body.colour, false, false});
   }
-  sheet.notes = {
-      fmt::format("Surfaces enclose {} of the density; {}; lobes let the molecule show "
-                  "through.",
-                  share_words(scenes.front().share), camera_words(camera))};
+  sheet.notes = {plain_text(fmt::format("Surfaces enclose {} of the density; {}.",
+                                        share_words(scenes.front().share), camera_words(camera)))};
   sheet.corner = axes_corner(camera);
   sheet.description =
       fmt::format("Orbital surfaces of {}. {}", hill_formula(molecule), heading_words(captions));

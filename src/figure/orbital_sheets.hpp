@@ -24,7 +24,7 @@ struct OrbitalCaption {
 
 struct SheetWords {
   std::string title;
-  std::string method;
+  RichText method;
 };
 
 /// @param scenes  one per caption; all are drawn to one scale, from one side

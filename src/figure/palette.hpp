@@ -9,8 +9,8 @@ inline constexpr Colour ink{0x1f, 0x29, 0x33};       // text, occupied levels
 inline constexpr Colour muted{0x62, 0x6d, 0x79};     // what explains: axes, method
 inline constexpr Colour faint{0xb9, 0xc1, 0xc9};     // leaders, links, grids
 inline constexpr Colour empty{0x8a, 0x95, 0xa1};     // levels without electrons
-inline constexpr Colour homo{0x0b, 0x4f, 0x9e};      // dark blue
-inline constexpr Colour lumo{0xc9, 0x6a, 0x00};      // lighter orange
+inline constexpr Colour homo{0x08, 0x3f, 0x80};      // dark blue
+inline constexpr Colour lumo{0xb8, 0x5c, 0x00};      // lighter orange
 inline constexpr Colour positive{0x2b, 0x6c, 0xb8};  // dark blue
 inline constexpr Colour negative{0xf2, 0xb1, 0x3c};  // light amber
 inline constexpr Colour positive_pale{0xa9, 0xc6, 0xe6};

@@ -9,6 +9,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int samples = 3;  // along each side of a pixel
+constexpr float touching_angstrom = 0.02f;
 
 struct Layer {
   std::vector<float> depth;
@@ -29,9 +30,9 @@ std::array<std::uint8_t, 3> shaded(const Colour& colour, const Eigen::Vector3d& 
   static const Eigen::Vector3d halfway = (light + Eigen::Vector3d(0.0, 0.0, 1.0)).normalized();
   const double diffuse = std::max(0.0, n.dot(light));
   const double from_above = 0.5 + 0.5 * n.y();
-  const double shine = 0.30 * std::pow(std::max(0.0, n.dot(halfway)), 40.0);
+  const double shine = 0.24 * std::pow(std::max(0.0, n.dot(halfway)), 40.0);
   const double rim = std::clamp(n.z() / 0.38, 0.0, 1.0);
-  const double brightness = (0.40 + 0.10 * from_above + 0.62 * diffuse) * (0.45 + 0.55 * rim);
+  const double brightness = (0.56 + 0.12 * from_above + 0.42 * diffuse) * (0.55 + 0.45 * rim);
   const double white = 255.0 * shine;
   return {channel(colour.red * brightness + white), channel(colour.green * brightness + white),
           channel(colour.blue * brightness + white)};
@@ -132,7 +133,9 @@ Raster rendered(const Scene& scene, const Camera& camera, const Frame& frame, in
             static_cast<std::size_t>(y * samples + s / samples) * static_cast<std::size_t>(width) +
             static_cast<std::size_t>(x * samples + s % samples);
         const double behind = solid.opacity[at];
-        const bool veiled = veil.depth[at] > solid.depth[at];
+        // What all but touches counts as in front, so that surfaces just below do not show in
+        // specks.
+        const bool veiled = veil.depth[at] + touching_angstrom > solid.depth[at];
         const double front = veiled ? veil.opacity[at] : 0.0;
         for (std::size_t c = 0; c < 3; ++c) {
           sum[c] += front * veil.colour[at][c] + (1.0 - front) * behind * solid.colour[at][c];

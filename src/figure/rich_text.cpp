@@ -3,6 +3,7 @@
 #include <cctype>
 #include <cmath>
 #include <cstddef>
+#include <cstdlib>
 #include <string_view>
 
 #include <fmt/format.h>
@@ -65,6 +66,28 @@ RichText label_text(const std::string& ascii) {
 }
 
 RichText plain_text(const std::string& text) { return {{text, Script::Normal}}; }
+
+RichText formula_text(const Molecule& molecule) {
+  RichText runs;
+  for (const char c : hill_formula(molecule)) {
+    add(runs, std::string(1, c), is_digit(c) ? Script::Sub : Script::Normal);
+  }
+  const int charge = molecule.charge();
+  if (charge != 0) {
+    const std::string size = std::abs(charge) == 1 ? "" : std::to_string(std::abs(charge));
+    add(runs, size + (charge > 0 ? "+" : "−"), Script::Super);
+  }
+  return runs;
+}
+
+RichText group_text(const std::string& symbol) {
+  RichText runs;
+  add(runs, symbol.substr(0, 1), Script::Normal);
+  std::string rest = symbol.substr(1);
+  if (rest.starts_with("inf")) rest.replace(0, 3, "∞");
+  add(runs, rest, Script::Sub);
+  return runs;
+}
 
 std::string energy_words(double energy_ev, int digits) {
   const std::string size = fmt::format("{:.{}f}", std::abs(energy_ev), digits);

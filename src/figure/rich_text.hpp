@@ -4,6 +4,7 @@
 #include <string>
 
 #include "figure/figure.hpp"
+#include "molecule/molecule.hpp"
 
 namespace irrepwise {
 
@@ -11,6 +12,13 @@ namespace irrepwise {
 [[nodiscard]] RichText label_text(const std::string& ascii);
 
 [[nodiscard]] RichText plain_text(const std::string& text);
+
+/// @returns  the formula in Hill order with its numbers below and its charge above the line
+[[nodiscard]] RichText formula_text(const Molecule& molecule);
+
+/// @param symbol  "D4h", "Dinfh"
+/// @returns       D with 4h or ∞h below the line
+[[nodiscard]] RichText group_text(const std::string& symbol);
 
 /// @returns  "-11.304 eV" with a true minus sign
 [[nodiscard]] std::string energy_words(double energy_ev, int digits = 3);

@@ -93,15 +93,13 @@ Figure sheet_figure(const Sheet& sheet) {
   Group heading;
   heading.kind = "heading";
   double y = margin;
-  for (const std::string& line : wrapped(font, sheet.title, title_size, width)) {
+  for (const RichText& line : wrapped(font, plain_text(sheet.title), title_size, width)) {
     y += title_size + 3.0;
-    heading.elements.emplace_back(
-        text_at({margin, y - 4.0}, plain_text(line), title_size, palette::ink));
+    heading.elements.emplace_back(text_at({margin, y - 4.0}, line, title_size, palette::ink));
   }
-  for (const std::string& line : wrapped(font, sheet.method, small_size, width)) {
+  for (const RichText& line : wrapped(font, sheet.method, small_size, width)) {
     y += line_height;
-    heading.elements.emplace_back(
-        text_at({margin, y}, plain_text(line), small_size, palette::muted));
+    heading.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
   }
   figure.groups.push_back(std::move(heading));
   y += 20.0;
@@ -134,11 +132,10 @@ Figure sheet_figure(const Sheet& sheet) {
   const double foot_width = sheet.corner.empty() ? width : width - corner_size - 20.0;
   const double foot_top = y;
   if (!sheet.legend.empty()) y = add_legend(foot, font, sheet.legend, y + 8.0, foot_width);
-  for (const std::string& note : sheet.notes) {
-    for (const std::string& line : wrapped(font, note, small_size, foot_width)) {
+  for (const RichText& note : sheet.notes) {
+    for (const RichText& line : wrapped(font, note, small_size, foot_width)) {
       y += line_height;
-      foot.elements.emplace_back(
-          text_at({margin, y}, plain_text(line), small_size, palette::muted));
+      foot.elements.emplace_back(text_at({margin, y}, line, small_size, palette::muted));
     }
   }
   if (!sheet.corner.empty()) {

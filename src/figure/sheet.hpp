@@ -24,13 +24,13 @@ struct LegendItem {
 
 struct Sheet {
   std::string title;
-  std::string method;
+  RichText method;
   std::string description;   // for screen readers
   double cell_size = 260.0;  // px, cells are square
   std::vector<SheetCell> cells;
   std::vector<LegendItem> legend;
   std::vector<Element> corner;  // drawn at the right of the legend, 60 px square; may be empty
-  std::vector<std::string> notes;
+  std::vector<RichText> notes;
 };
 
 /// Up to four cells in a row; long lines are broken between words.

@@ -145,7 +145,7 @@ std::string svg_document(const Figure& figure) {
       "<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n"
       "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"{0}\" height=\"{1}\" "
       "viewBox=\"0 0 {0} {1}\" role=\"img\" aria-labelledby=\"figure-title figure-description\" "
-      "font-family=\"{2}\">\n"
+      "font-family=\"{2}\" xml:space=\"preserve\">\n"
       "<title id=\"figure-title\">{3}</title>\n"
       "<desc id=\"figure-description\">{4}</desc>\n"
       "<rect width=\"{0}\" height=\"{1}\" fill=\"#ffffff\"/>\n",

@@ -81,7 +81,7 @@ TEST_CASE("vertices of both phases lie on the isovalue of a molecular orbital") 
       level_orbitals(r.symmetry, r.basis, r.levels, *r.levels.frontier.homo).leftCols(1);
   const OrbitalField field(r.symmetry.molecule, r.basis, c);
   const OrbitalGrid grid = sample(field);
-  const double isovalue = enclosing_isovalue(grid, 0, 0.5);
+  const double isovalue = enclosing_isovalue(field, grid, 0, 0.5);
   for (const double phase : {1.0, -1.0}) {
     const Mesh mesh = isosurface(field, grid, 0, phase * isovalue);
     REQUIRE(!mesh.vertices.empty());

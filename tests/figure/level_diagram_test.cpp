@@ -9,6 +9,7 @@
 
 #include "core/error.hpp"
 #include "figure/collisions.hpp"
+#include "figure/rich_text.hpp"
 #include "support/molecules.hpp"
 #include "support/run.hpp"
 
@@ -20,7 +21,7 @@ LevelDiagram diagram_of(const Molecule& molecule) {
   const Run r = run(molecule);
   LevelDiagram diagram;
   diagram.title = "title";
-  diagram.method = "method";
+  diagram.method = plain_text("method");
   diagram.columns = {diagram_column(r.symmetry.group, r.levels)};
   const EnergyWindow window = frontier_window(diagram.columns);
   diagram.from_ev = window.from_ev;
@@ -53,7 +54,10 @@ std::string first_collision(const Figure& figure) {
   for (const Group& group : figure.groups) {
     for (const Element& element : group.elements) {
       const auto* path = std::get_if<Path>(&element);
-      if (path != nullptr && group.kind == "level") strokes.push_back({group.name, box_of(*path)});
+      const bool counts = group.kind == "level" || group.kind == "gap";
+      if (path != nullptr && counts) {
+        strokes.push_back({group.kind + " " + group.name, box_of(*path)});
+      }
     }
   }
   for (std::size_t i = 0; i < strokes.size(); ++i) {

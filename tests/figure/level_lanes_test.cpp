@@ -10,6 +10,7 @@ TEST_CASE("levels of one lane are never closer than asked, and a level keeps the
   const std::vector<double> heights = {0, 5, 9, 21, 22, 60};
   const std::vector<int> lanes = level_lanes(heights, 20.0);
   CHECK(lanes == std::vector<int>{0, 1, 2, 0, 3, 0});  // by hand
+  CHECK(level_lanes(heights, 20.0, {4}) == std::vector<int>{0, 1, 2, 3, 0, 0});
 }
 
 TEST_CASE("places spread apart keep their order and mean, and stay where there is room") {

@@ -19,17 +19,29 @@ TEST_CASE("half of a 1s density lies within the radius of the closed form") {
   const double t = 2.674060;
   CHECK(std::abs(std::exp(-t) * (1 + t + t * t / 2) - 0.5) < 1e-6);
   const OrbitalField field = single_orbital(1, 0, zeta, 0);
-  const OrbitalGrid grid = sample(field, 0.08);
-  const double expected = field.value({0, 0, 0.5 * t / zeta * bohr_in_angstrom}, 0);
-  // The density between grid points is not resolved: a few parts in a hundred.
-  CHECK(std::abs(enclosing_isovalue(grid, 0, 0.5) / expected - 1.0) < 0.02);
+  for (const double spacing : {0.07, 0.15}) {
+    const OrbitalGrid grid = sample(field, spacing);
+    const double expected = field.value({0, 0, 0.5 * t / zeta * bohr_in_angstrom}, 0);
+    CHECK(std::abs(enclosing_isovalue(field, grid, 0, 0.5) / expected - 1.0) < 0.005);
+  }
+}
+
+TEST_CASE("a compact d orbital gives the same isovalue on grids of any spacing") {
+  // As of a late 5d shell: its lobes hold few points of the coarser grid.
+  const OrbitalField field = single_orbital(5, 2, 4.0, 2);
+  const double fine = enclosing_isovalue(field, sample(field, 0.06), 0, 0.5);
+  for (const double spacing : {0.09, 0.13}) {
+    const double coarse = enclosing_isovalue(field, sample(field, spacing), 0, 0.5);
+    CHECK(std::abs(coarse / fine - 1.0) < 0.005);
+  }
 }
 
 TEST_CASE("more of the density needs a smaller isovalue") {
-  const OrbitalGrid grid = sample(single_orbital(2, 1, 1.6, 0));
+  const OrbitalField field = single_orbital(2, 1, 1.6, 0);
+  const OrbitalGrid grid = sample(field);
   double last = 1e9;
   for (const double share : {0.1, 0.3, 0.5, 0.7, 0.9, 0.99}) {
-    const double isovalue = enclosing_isovalue(grid, 0, share);
+    const double isovalue = enclosing_isovalue(field, grid, 0, share);
     CHECK(isovalue < last);
     last = isovalue;
   }
@@ -95,11 +107,11 @@ TEST_CASE("the density summed over partners has the symmetry of the square on th
 TEST_CASE("a share outside 0 to 1, or a spacing that cannot serve, is refused") {
   const OrbitalField field = single_orbital(1, 0, 1.3, 0);
   const OrbitalGrid grid = sample(field, 0.2);
-  CHECK_THROWS_WITH_AS(static_cast<void>(enclosing_isovalue(grid, 0, 1.5)),
+  CHECK_THROWS_WITH_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, 1.5)),
                        "share of the density: found 1.5, expected more than 0 and less than 1",
                        Error);
-  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(grid, 0, 0.0)), Error);
-  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(grid, 0, std::nan(""))), Error);
+  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, 0.0)), Error);
+  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, std::nan(""))), Error);
   CHECK_THROWS_WITH_AS(static_cast<void>(sample(field, 5.0)),
                        "spacing of the grid: found 5, expected 0.02 to 1 Å", Error);
 }

@@ -2,6 +2,7 @@
 
 #include "figure/collisions.hpp"
 #include "figure/orbital_sheets.hpp"
+#include "figure/rich_text.hpp"
 #include "figure/sheet.hpp"
 #include "support/molecules.hpp"
 #include "support/run.hpp"
@@ -48,10 +49,9 @@ TEST_CASE("texts on contour sheets never overlap and stay inside; each partner h
     }
     const SheetWords words = {
         std::string(name) +
-            ", with a title that is far too long for one line "
-            "above cells of this width and must be broken",
-        "the method in a line of its own that is long enough to be broken too, "
-        "as it names rule, constant and parameters"};
+            ", with a title that is far too long for one line above cells of this width",
+        plain_text("the method in a line of its own that is long enough to be broken too, as it "
+                   "names rule, constant and parameters")};
     const Figure figure = contour_sheet(words, p.r.symmetry.molecule, p.captions, maps, planes);
     CAPTURE(name);
     CHECK(first_text_collision(figure) == "");
@@ -72,8 +72,8 @@ TEST_CASE("texts on sheets of surfaces never overlap, with the axes seen from an
   }
   for (const Eigen::Vector3d& from : {Eigen::Vector3d(0, 0, 1), Eigen::Vector3d(1, 0, 0),
                                       Eigen::Vector3d(1, 1, 1), Eigen::Vector3d(0.3, -0.9, 0.2)}) {
-    const Figure figure =
-        surface_sheet({"title", "method"}, molecule, p.captions, scenes, camera_from(from));
+    const Figure figure = surface_sheet({"title", plain_text("method")}, molecule, p.captions,
+                                        scenes, camera_from(from));
     CHECK(first_text_collision(figure) == "");
   }
 }

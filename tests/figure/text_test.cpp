@@ -4,6 +4,7 @@
 
 #include "figure/font.hpp"
 #include "figure/rich_text.hpp"
+#include "figure/text_layout.hpp"
 #include "figure/utf8.hpp"
 
 using namespace irrepwise;
@@ -32,6 +33,27 @@ TEST_CASE("labels are set with their number in line, the rest below, primes afte
   CHECK(marked(label_text("Sigmau-")) == "Σ_u|^−|");
   CHECK(marked(label_text("2piu")) == "2π_u|");
   CHECK(marked(label_text("1a")) == "1a");
+}
+
+TEST_CASE("formulas and groups are set as chemists write them") {
+  const Molecule molecule({{78, {0, 0, 0}}, {17, {2.3, 0, 0}}, {17, {-2.3, 0, 0}}}, -2);
+  CHECK(marked(formula_text(molecule)) == "Cl_2|Pt^2−|");
+  CHECK(marked(group_text("D4h")) == "D_4h|");
+  CHECK(marked(group_text("Dinfh")) == "D_∞h|");
+}
+
+TEST_CASE("lines are broken at spaces, keep every word, and are no wider than asked") {
+  const Font font;
+  const RichText text =
+      plain_text("one two D") + RichText{{"4h", Script::Sub}} + plain_text(" three four five");
+  const std::vector<RichText> lines = wrapped(font, text, 12.0, 60.0);
+  CHECK(lines.size() > 1);
+  std::string all;
+  for (const RichText& line : lines) {
+    CHECK(font.width(line, 12.0) <= 60.0);
+    all += (all.empty() ? "" : " ") + marked(line);
+  }
+  CHECK(all == "one two D_4h| three four five");
 }
 
 TEST_CASE("energies have a true minus sign and never a minus zero") {
@@ -65,9 +87,9 @@ TEST_CASE("the outlines of text stay in its box, whatever its anchor and directi
       const Box box = font.box(text);
       for (const std::vector<Point2>& polygon : font.outlines(text)) {
         for (const Point2& p : polygon) {
-          CHECK(p.x > box.left - 4.0);  // in upright text the ring of Å is on this side
-          CHECK(p.x < box.right + 1.5);
-          CHECK(p.y > box.top - 4.0);  // the ring of Å stands above the capitals
+          CHECK(p.x > box.left - 0.5);
+          CHECK(p.x < box.right + 0.5);
+          CHECK(p.y > box.top - 0.5);
           CHECK(p.y < box.bottom + 0.5);
         }
       }

@@ -1,0 +1,87 @@
+#include "figure/level_diagram_words.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <limits>
+
+#include <fmt/format.h>
+
+#include "core/error.hpp"
+#include "figure/level_placing.hpp"
+#include "figure/rich_text.hpp"
+
+namespace irrepwise {
+namespace {
+
+std::string count_words(int n, const char* where) {
+  return fmt::format("{} {} {}", n, n == 1 ? "level" : "levels", where);
+}
+
+}  // namespace
+
+std::string words_on_left_out(const LevelDiagram& diagram) {
+  int below = 0;
+  int above = 0;
+  for (const DiagramColumn& column : diagram.columns) {
+    for (const DiagramLevel& level : column.levels) {
+      below += level.energy_ev < diagram.from_ev ? 1 : 0;
+      above += level.energy_ev > diagram.to_ev ? 1 : 0;
+    }
+  }
+  std::string words;
+  if (below > 0) words = count_words(below, "below");
+  if (above > 0) words += (words.empty() ? "" : ", ") + count_words(above, "above");
+  return words.empty() ? words : words + " the range shown";
+}
+
+std::string words_on_fractions(const LevelDiagram& diagram) {
+  for (const DiagramColumn& column : diagram.columns) {
+    for (const DiagramLevel& level : column.levels) {
+      if (is_shown(diagram, level) &&
+          std::abs(level.occupation - std::round(level.occupation)) > 1e-9) {
+        return fmt::format("{} holds {:g} electrons, spread evenly", level.label, level.occupation);
+      }
+    }
+  }
+  return {};
+}
+
+std::string spoken_levels(const LevelDiagram& diagram) {
+  std::string text = fmt::format("Orbital energies from {} to {}. ",
+                                 energy_words(diagram.from_ev, 1), energy_words(diagram.to_ev, 1));
+  for (const DiagramColumn& column : diagram.columns) {
+    if (!column.title.empty()) text += column.title + ": ";
+    for (auto level = column.levels.rbegin(); level != column.levels.rend(); ++level) {
+      if (!is_shown(diagram, *level)) continue;
+      text += fmt::format("{} at {}, {:g} electrons{}; ", level->label,
+                          energy_words(level->energy_ev, 2), level->occupation,
+                          level->frontier == FrontierMark::Homo   ? " (HOMO)"
+                          : level->frontier == FrontierMark::Lumo ? " (LUMO)"
+                                                                  : "");
+    }
+  }
+  if (text.ends_with("; ")) text.replace(text.size() - 2, 2, ".");
+  return text;
+}
+
+void check_window(const LevelDiagram& diagram) {
+  if (!(diagram.to_ev > diagram.from_ev)) {
+    throw Error(
+        fmt::format("the range of energies runs from {} to {} eV; its end must lie above "
+                    "its start",
+                    diagram.from_ev, diagram.to_ev));
+  }
+  double lowest = std::numeric_limits<double>::infinity();
+  double highest = -lowest;
+  for (const DiagramColumn& column : diagram.columns) {
+    for (const DiagramLevel& level : column.levels) {
+      if (is_shown(diagram, level)) return;
+      lowest = std::min(lowest, level.energy_ev);
+      highest = std::max(highest, level.energy_ev);
+    }
+  }
+  throw Error(fmt::format("no level lies between {} and {} eV; they run from {:.3f} to {:.3f} eV",
+                          diagram.from_ev, diagram.to_ev, lowest, highest));
+}
+
+}  // namespace irrepwise
