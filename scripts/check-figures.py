@@ -5,8 +5,8 @@
 
 For each input: the level diagram and the contour drawing are well-formed SVG with title and
 description; the PNG decodes; of the HOMO, the density on the VTK grid integrates to 1 within 1 %,
-and the vertices of the glTF mesh lie on the isovalue as interpolated from that grid. Two runs give
-the same bytes. Only Python's standard library is needed; where python3-vtk9 is installed, VTK itself
+the isovalue encloses half of it, and the vertices of the glTF mesh lie on that value as interpolated
+from the grid. Two runs give the same bytes. Only Python's standard library is needed; where python3-vtk9 is installed, VTK itself
 reads the grid too.
 """
 import base64
@@ -100,21 +100,27 @@ class Grid:
         return sum(value * value for value in values) * cell
 
     def interpolated(self, place):
-        """Trilinear."""
-        low, part = [], []
+        """By cubics through four points along each axis (Lagrange)."""
+        low, weights = [], []
         for i in range(3):
             at = (place[i] - self.origin[i]) / self.spacing[i]
-            low.append(min(int(at), self.size[i] - 2))
-            part.append(at - low[i])
+            first = max(0, min(int(at) - 1, self.size[i] - 4))
+            t = at - first
+            low.append(first)
+            weights.append((-(t - 1) * (t - 2) * (t - 3) / 6, t * (t - 2) * (t - 3) / 2,
+                            -t * (t - 1) * (t - 3) / 2, t * (t - 1) * (t - 2) / 6))
         total = 0.0
-        for corner in range(8):
-            weight, index = 1.0, 0
-            for i in (2, 1, 0):
-                step = corner >> i & 1
-                weight *= part[i] if step else 1.0 - part[i]
-                index = index * self.size[i] + low[i] + step
-            total += weight * self.values[index]
+        for k in range(4):
+            for j in range(4):
+                row = ((low[2] + k) * self.size[1] + low[1] + j) * self.size[0] + low[0]
+                line = sum(weights[0][i] * self.values[row + i] for i in range(4))
+                total += weights[2][k] * weights[1][j] * line
         return total
+
+    def share_inside(self, isovalue):
+        """Of the density, where the value is at least so large."""
+        inside = sum(value * value for value in self.values if abs(value) >= isovalue)
+        return inside / sum(value * value for value in self.values)
 
 
 def read_glb(data):
@@ -171,11 +177,14 @@ def check_mesh(meshes, extras, grid):
                "glb: normals of length 1")
         sample = vertices[::max(1, len(vertices) // 500)]
         errors = sorted(abs(grid.interpolated(v) - sign * isovalue) / isovalue for v in sample)
-        # Interpolating e^(-zeta r) between points h apart errs by about (h zeta)^2 / 8 of the value:
-        # 6 % for a d orbital (zeta 2.5 per bohr, h 0.28 bohr), more where it curves most.
-        expect(errors[len(errors) // 2] < 0.06,
+        # A cubic through points h apart errs by about (h zeta)^4 / 40 of e^(-zeta r): 0.3 % for the
+        # most compact d orbital here (zeta 3.2 per bohr, h 0.19 bohr).
+        expect(errors[len(errors) // 2] < 0.005 and errors[9 * len(errors) // 10] < 0.03,
                f"glb: {name} does not lie on the isovalue of the grid: median error "
-               f"{errors[len(errors) // 2]:.3f}")
+               f"{errors[len(errors) // 2]:.4f}, nine in ten below {errors[9 * len(errors) // 10]:.4f}")
+    share = grid.share_inside(isovalue)
+    # Each point of the grid stands for its cell, those that the surface cuts included.
+    expect(abs(share - 0.5) < 0.02, f"glb: the isovalue encloses {share:.3f} of the density")
     expect("positive phase" in meshes, "glb: no surface")
 
 
@@ -210,7 +219,7 @@ def check(program, job, folder):
     expect(again == data, "level diagram: two runs differ")
     check_png(draw(program, [job, "--pictures"], path("levels.png"))[0])
 
-    grid_data, remarks = draw(program, [job, "homo", "--spacing", "0.16"], path("homo.vti"))
+    grid_data, remarks = draw(program, [job, "homo", "--spacing", "0.1"], path("homo.vti"))
     expect("integral of the density" in remarks, "grid: the integral is not reported")
     grid = Grid(grid_data)
     for name, values in zip(grid.names, grid.arrays):

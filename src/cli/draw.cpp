@@ -21,11 +21,10 @@
 #include "figure/rich_text.hpp"
 #include "figure/svg.hpp"
 #include "figure/vti.hpp"
+#include "output/orbital_pictures.hpp"
 
 namespace irrepwise::cli {
 namespace {
-
-constexpr double usual_share = 0.5;
 
 // Adds the name of the option as the place of any error.
 template <typename Action>
@@ -37,54 +36,6 @@ auto named(const char* option, Action action) {
   }
 }
 
-std::string method_words(const LevelsResult& result) {
-  const Levels& levels = result.levels;
-  return fmt::format("extended Hückel, {} rule{} · parameters: {}", rule_name(levels.rule),
-                     levels.k ? fmt::format(", K\u00A0=\u00A0{}", *levels.k) : "",
-                     result.parameter_set);
-}
-
-SheetWords heading(const LevelsResult& result) {
-  RichText method = formula_text(result.molecule) + plain_text(" · ") +
-                    group_text(result.symmetry.group.symbol().name()) +
-                    plain_text(" · " + method_words(result));
-  return {result.title.empty() ? charged_formula(result.molecule) : result.title,
-          std::move(method)};
-}
-
-struct Chosen {
-  std::vector<OrbitalChoice> orbitals;
-  std::vector<OrbitalCaption> captions;
-  std::vector<std::string> names;  // "2e1g" or "2e1g:1"
-  Eigen::MatrixXd coefficients;    // a column each
-};
-
-Chosen chosen_orbitals(const LevelsResult& result, std::vector<OrbitalChoice> choices) {
-  Chosen out;
-  out.orbitals = std::move(choices);
-  out.coefficients.resize(result.basis.n_orbitals, static_cast<Eigen::Index>(out.orbitals.size()));
-  for (std::size_t i = 0; i < out.orbitals.size(); ++i) {
-    const OrbitalChoice& choice = out.orbitals[i];
-    const Level& level = result.levels.levels[static_cast<std::size_t>(choice.level)];
-    OrbitalCaption caption;
-    caption.label = level_name(result.symmetry.group, level);
-    caption.partner = choice.partner + 1;
-    caption.degeneracy = level.degeneracy;
-    caption.energy_ev = level.energy_ev;
-    caption.occupation = level.occupation;
-    if (result.levels.frontier.homo == choice.level) caption.mark = "HOMO";
-    if (result.levels.frontier.lumo == choice.level) caption.mark = "LUMO";
-    out.names.push_back(level.degeneracy == 1
-                            ? caption.label
-                            : fmt::format("{}:{}", caption.label, caption.partner));
-    out.captions.push_back(std::move(caption));
-    out.coefficients.col(static_cast<Eigen::Index>(i)) =
-        level_orbitals(result.symmetry, result.basis, result.levels, choice.level)
-            .col(choice.partner);
-  }
-  return out;
-}
-
 struct Drawn {
   std::string bytes;
   std::vector<std::string> remarks;  // a line each on standard output
@@ -92,47 +43,6 @@ struct Drawn {
 
 std::string picture_bytes(const Figure& figure, DrawFormat format) {
   return format == DrawFormat::Svg ? svg_document(figure) : png_bytes(painted(figure));
-}
-
-std::string surface_remark(const std::string& name, const OrbitalScene& scene,
-                           const OrbitalGrid& grid) {
-  const std::array<int, 3>& n = grid.shape.size;
-  return fmt::format(
-      "{}: isovalue {:.4f} bohr^(-3/2) encloses {:g} % of the density; integral on the grid {:.4f} "
-      "({} x {} x {} points, spacing {:.3g} Å)",
-      name, scene.isovalue, 100.0 * scene.share, scene.integral, n[0], n[1], n[2],
-      grid.shape.spacing_angstrom);
-}
-
-struct Surfaces {
-  std::vector<OrbitalScene> scenes;
-  std::vector<std::string> remarks;
-};
-
-// Partners of a level share a grid; each level has one of its own size.
-Surfaces surfaces_of(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
-  const Molecule& molecule = result.symmetry.molecule;
-  const double share = options.share.value_or(usual_share);
-  Surfaces out;
-  const std::size_t n = chosen.orbitals.size();
-  for (std::size_t first = 0; first < n;) {
-    std::size_t end = first + 1;
-    while (end < n && chosen.orbitals[end].level == chosen.orbitals[first].level) ++end;
-    const OrbitalField field(
-        molecule, result.basis,
-        chosen.coefficients.middleCols(static_cast<Eigen::Index>(first),
-                                       static_cast<Eigen::Index>(end - first)));
-    const OrbitalGrid grid =
-        named(chosen.names[first].c_str(), [&] { return sample(field, options.spacing_angstrom); });
-    for (std::size_t i = first; i < end; ++i) {
-      out.scenes.push_back(named("--share", [&] {
-        return orbital_scene(molecule, field, grid, static_cast<int>(i - first), share);
-      }));
-      out.remarks.push_back(surface_remark(chosen.names[i], out.scenes.back(), grid));
-    }
-    first = end;
-  }
-  return out;
 }
 
 Camera camera_for(const LevelsResult& result, const std::vector<OrbitalScene>& scenes,
@@ -172,9 +82,19 @@ Camera camera_for(const LevelsResult& result, const std::vector<OrbitalScene>& s
   return camera_from(towards);
 }
 
+SurfaceChoice surface_choice(const DrawOptions& options) {
+  SurfaceChoice choice;
+  if (options.share) {
+    named("--share", [&] { check_share(*options.share); });
+    choice.share = *options.share;
+  }
+  choice.spacing_angstrom = options.spacing_angstrom;
+  return choice;
+}
+
 Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
   LevelDiagram diagram;
-  const SheetWords words = heading(result);
+  const SheetWords words = sheet_heading(result);
   diagram.title = words.title;
   diagram.method = words.method;
   diagram.columns = {diagram_column(result.symmetry.group, result.levels)};
@@ -187,16 +107,16 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
     for (const std::optional<int>& level :
          {result.levels.frontier.homo, result.levels.frontier.lumo}) {
       if (!level) continue;
-      const int degeneracy = result.levels.levels[static_cast<std::size_t>(*level)].degeneracy;
-      for (int partner = 0; partner < degeneracy; ++partner) choices.push_back({*level, partner});
+      const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
+      choices.insert(choices.end(), partners.begin(), partners.end());
     }
-    const Chosen chosen = chosen_orbitals(result, choices);
-    const Surfaces surfaces = surfaces_of(result, chosen, options);
+    const ChosenOrbitals chosen = chosen_orbitals(result, choices);
+    const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
     const Camera camera =
         named("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
     constexpr int picture_px = 260;
     for (std::size_t i = 0; i < surfaces.scenes.size(); ++i) {
-      const auto level = static_cast<std::size_t>(chosen.orbitals[i].level);
+      const auto level = static_cast<std::size_t>(chosen.choices[i].level);
       diagram.columns[0].levels[level].pictures.push_back(
           std::make_shared<const Raster>(surface_picture(surfaces.scenes[i], camera, picture_px)));
     }
@@ -225,17 +145,19 @@ Plane plane_for(const LevelsResult& result, const OrbitalField& field, int orbit
   return atoms_plane(molecule, {(*atoms)[0], (*atoms)[1], (*atoms)[2]});
 }
 
-Drawn draw_contours(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
+Drawn draw_contours(const LevelsResult& result, const ChosenOrbitals& chosen,
+                    const DrawOptions& options) {
   const Molecule& molecule = result.symmetry.molecule;
   std::vector<Plane> planes;
   std::vector<ContourMap> maps;
-  for (std::size_t i = 0; i < chosen.orbitals.size(); ++i) {
+  for (std::size_t i = 0; i < chosen.choices.size(); ++i) {
     const OrbitalField field(molecule, result.basis,
                              chosen.coefficients.col(static_cast<Eigen::Index>(i)));
     planes.push_back(named("--plane", [&] { return plane_for(result, field, 0, options); }));
     maps.push_back(contour_map(field, 0, planes.back(), contour_levels()));
   }
-  const Figure figure = contour_sheet(heading(result), molecule, chosen.captions, maps, planes);
+  const Figure figure =
+      contour_sheet(sheet_heading(result), molecule, chosen.captions, maps, planes);
   Drawn out;
   out.bytes = picture_bytes(figure, draw_format(options.output));
   for (std::size_t i = 0; i < planes.size(); ++i) {
@@ -244,21 +166,23 @@ Drawn draw_contours(const LevelsResult& result, const Chosen& chosen, const Draw
   return out;
 }
 
-Drawn draw_surfaces(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
-  const Surfaces surfaces = surfaces_of(result, chosen, options);
+Drawn draw_surfaces(const LevelsResult& result, const ChosenOrbitals& chosen,
+                    const DrawOptions& options) {
+  const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
   const Camera camera =
       named("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
-  const Figure figure = surface_sheet(heading(result), result.symmetry.molecule, chosen.captions,
-                                      surfaces.scenes, camera);
+  const Figure figure = surface_sheet(sheet_heading(result), result.symmetry.molecule,
+                                      chosen.captions, surfaces.scenes, camera);
   return {picture_bytes(figure, draw_format(options.output)), surfaces.remarks};
 }
 
-Drawn draw_mesh(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
-  if (chosen.orbitals.size() != 1) {
+Drawn draw_mesh(const LevelsResult& result, const ChosenOrbitals& chosen,
+                const DrawOptions& options) {
+  if (chosen.choices.size() != 1) {
     throw Error(fmt::format("{}: a mesh holds one orbital and {} are meant; choose one, such as {}",
-                            options.output, chosen.orbitals.size(), chosen.names.front()));
+                            options.output, chosen.choices.size(), chosen.names.front()));
   }
-  const Surfaces surfaces = surfaces_of(result, chosen, options);
+  const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
   const OrbitalScene& scene = surfaces.scenes.front();
   const std::vector<std::pair<std::string, std::string>> facts = {
       {"orbital", chosen.names.front()},
@@ -273,7 +197,8 @@ Drawn draw_mesh(const LevelsResult& result, const Chosen& chosen, const DrawOpti
   return {glb_bytes(scene.scene, facts), surfaces.remarks};
 }
 
-Drawn draw_grid(const LevelsResult& result, const Chosen& chosen, const DrawOptions& options) {
+Drawn draw_grid(const LevelsResult& result, const ChosenOrbitals& chosen,
+                const DrawOptions& options) {
   const Molecule& molecule = result.symmetry.molecule;
   const OrbitalField field(molecule, result.basis, chosen.coefficients);
   const OrbitalGrid grid = sample(field, options.spacing_angstrom);
@@ -290,7 +215,7 @@ Drawn draw_grid(const LevelsResult& result, const Chosen& chosen, const DrawOpti
 
 Drawn drawn(const LevelsResult& result, const DrawOptions& options, DrawKind kind) {
   if (kind == DrawKind::Levels) return draw_levels(result, options);
-  const Chosen chosen = chosen_orbitals(
+  const ChosenOrbitals chosen = chosen_orbitals(
       result, choose_orbitals(options.orbitals, result.symmetry.group, result.levels));
   switch (kind) {
     case DrawKind::Levels:

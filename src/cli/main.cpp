@@ -93,10 +93,9 @@ int run(int argc, char** argv) {
       "  irrepwise compare family.yaml --reference chloride\n"
       "  irrepwise parameters Pt Cl\n"
       "Each command has its own help: irrepwise levels --help");
-  const std::vector<cli::Command> commands = {cli::add_levels(program),  cli::add_symmetry(program),
-                                              cli::add_compare(program), cli::add_build(program),
-                                              cli::add_draw(program),
-                                              cli::add_parameters(program)};
+  const std::vector<cli::Command> commands = {
+      cli::add_levels(program), cli::add_symmetry(program), cli::add_compare(program),
+      cli::add_build(program),  cli::add_draw(program),     cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
     for (const cli::Command& command : commands) {

@@ -7,13 +7,9 @@
 #include <vector>
 
 #include "hueckel/levels.hpp"
+#include "output/orbital_pictures.hpp"
 
 namespace irrepwise::cli {
-
-struct OrbitalChoice {
-  int level = 0;    // index in the levels
-  int partner = 0;  // from 0
-};
 
 /// @param words  each a level (then every partner is meant), a partner of it, a range of levels, or
 ///               "frontier" for HOMO and LUMO; homo and lumo count levels, not orbitals

@@ -215,12 +215,16 @@ std::vector<double> densities_within(const OrbitalField& field, const GridShape&
 
 }  // namespace
 
-double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
-                          double share) {
+void check_share(double share) {
   if (!(share > 0.0 && share < 1.0)) {
     throw Error(
         fmt::format("share of the density: found {}, expected more than 0 and less than 1", share));
   }
+}
+
+double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
+                          double share) {
+  check_share(share);
   constexpr double enough_points = 60'000;  // inside the surface or near it
   constexpr int most_parts = 8;
   constexpr double near = 0.6;  // cells with less than this part of the value lie outside

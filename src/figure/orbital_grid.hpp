@@ -37,12 +37,15 @@ struct OrbitalGrid {
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
                                  std::optional<double> spacing_angstrom = {});
 
+/// @throws Error  for a share of the density that is not between 0 and 1
+void check_share(double share);
+
 /// The value of |psi| on the surface that encloses the given part of the density, by adding up the
 /// density from its largest values down: on the grid, and where few points of it lie inside, on
 /// finer points within its cells.
 ///
 /// @param share     between 0 and 1
-/// @throws Error    for any other share
+/// @throws Error    as `check_share`
 /// @returns         bohr^(-3/2)
 /// @accuracy        about 0.5 % for a share of 0.5, measured on Slater functions
 [[nodiscard]] double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid,
