@@ -2,6 +2,7 @@
 #pragma once
 
 #include <functional>
+#include <string>
 
 #include <CLI/CLI.hpp>
 
@@ -17,6 +18,8 @@ struct Command {
 [[nodiscard]] Command add_build(CLI::App& program);
 [[nodiscard]] Command add_levels(CLI::App& program);
 [[nodiscard]] Command add_parameters(CLI::App& program);
+/// @param command  the command line as the user wrote it, which the page repeats
+[[nodiscard]] Command add_report(CLI::App& program, const std::string& command);
 [[nodiscard]] Command add_symmetry(CLI::App& program);
 
 }  // namespace irrepwise::cli

@@ -35,12 +35,19 @@ double in_range(const char* option, double value, double largest) {
 
 }  // namespace
 
+bool JobOptions::is_used() const {
+  return charge || multiplicity || k || tolerance || limit || !parameters.empty() ||
+         !rule.empty() || !z.empty() || !x.empty() || !subgroup.empty() || !group.empty();
+}
+
 void add_job_options(CLI::App& command, JobOptions& options, FileOption file) {
-  command
-      .add_option("file", options.file,
-                  "Coordinates in XYZ format (Å), or a job file that ends in .yaml or .yml")
-      ->required(file == FileOption::Required)
-      ->option_text("FILE");
+  if (file != FileOption::None) {
+    command
+        .add_option("file", options.file,
+                    "Coordinates in XYZ format (Å), or a job file that ends in .yaml or .yml")
+        ->required(file == FileOption::Required)
+        ->option_text("FILE");
+  }
   const auto add = [&](const char* name, auto& value, const char* text, const char* help,
                        const char* group) {
     command.add_option(name, value, help)->option_text(text)->group(group);

@@ -23,9 +23,12 @@ struct JobOptions {
   std::string subgroup;
   std::string group;
   std::optional<double> limit;
+
+  /// Whether any of them, the file aside, was given.
+  [[nodiscard]] bool is_used() const;
 };
 
-enum class FileOption { Required, Optional };
+enum class FileOption { Required, Optional, None };
 
 void add_job_options(CLI::App& command, JobOptions& options,
                      FileOption file = FileOption::Required);

@@ -75,6 +75,26 @@ int answer_parse_error(const CLI::App& program, const CLI::ParseError& error,
                 wrong_usage);
 }
 
+// The command line so that a shell reads it back as the same words.
+std::string repeated(int argc, char** argv) {
+  std::string command = "irrepwise";
+  for (int i = 1; i < argc; ++i) {
+    const std::string word = argv[i];
+    const bool plain = !word.empty() && word.find_first_not_of(
+        "abcdefghijklmnopqrstuvwxyzABCDEFGHIJKLMNOPQRSTUVWXYZ0123456789-_.,:/+=@%") ==
+        std::string::npos;
+    command += ' ';
+    if (plain) {
+      command += word;
+      continue;
+    }
+    command += '\'';
+    for (const char c : word) command += c == '\'' ? "'\\''" : std::string(1, c);
+    command += '\'';
+  }
+  return command;
+}
+
 int run(int argc, char** argv) {
   CLI::App program(
       "Extended Hückel orbitals of molecules, labelled by symmetry.\n"
@@ -91,11 +111,12 @@ int run(int argc, char** argv) {
       "  irrepwise symmetry complex.xyz --salcs --local\n"
       "  irrepwise build Pt SP-4 Cl Cl NH3 NH3 --oxidation 2 --output cis.xyz\n"
       "  irrepwise compare family.yaml --reference chloride\n"
+      "  irrepwise report complex.xyz --output report.html\n"
       "  irrepwise parameters Pt Cl\n"
       "Each command has its own help: irrepwise levels --help");
   const std::vector<cli::Command> commands = {
       cli::add_levels(program), cli::add_symmetry(program), cli::add_compare(program),
-      cli::add_build(program),  cli::add_draw(program),     cli::add_parameters(program)};
+      cli::add_build(program),  cli::add_draw(program), cli::add_report(program, repeated(argc, argv)),     cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
     for (const cli::Command& command : commands) {

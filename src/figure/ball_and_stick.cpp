@@ -13,13 +13,6 @@
 namespace irrepwise {
 namespace {
 
-constexpr double stick_radius_angstrom = 0.07;
-constexpr Colour stick_colour{0x9a, 0xa3, 0xac};
-
-double ball_radius_angstrom(int atomic_number) {
-  return 0.11 + 0.13 * covalent_radius_angstrom(atomic_number).value_or(1.5);
-}
-
 void append(Mesh& to, const Mesh& more) {
   const auto shift = static_cast<std::uint32_t>(to.vertices.size());
   to.vertices.insert(to.vertices.end(), more.vertices.begin(), more.vertices.end());
@@ -84,6 +77,10 @@ bool is_nonmetal(int z) {
 }
 
 }  // namespace
+
+double ball_radius_angstrom(int atomic_number) {
+  return 0.11 + 0.13 * covalent_radius_angstrom(atomic_number).value_or(1.5);
+}
 
 Colour element_colour(int atomic_number) {
   switch (atomic_number) {

@@ -8,6 +8,12 @@
 
 namespace irrepwise {
 
+inline constexpr double stick_radius_angstrom = 0.07;
+inline constexpr Colour stick_colour{0x9a, 0xa3, 0xac};
+
+/// Grows with the covalent radius.
+[[nodiscard]] double ball_radius_angstrom(int atomic_number);
+
 /// @returns  one body per element (its symbol as name), and "bonds" where there are any
 [[nodiscard]] std::vector<SceneBody> ball_and_stick(const Molecule& molecule);
 

@@ -1,6 +1,7 @@
 #include "figure/orbital_grid.hpp"
 
 #include <algorithm>
+#include <cassert>
 #include <cmath>
 #include <functional>
 #include <utility>
@@ -158,6 +159,34 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
         100.0 * worst_error(grid)));
   }
   return grid;
+}
+
+OrbitalGrid thinned(const OrbitalGrid& grid, int step) {
+  assert(step >= 1);
+  OrbitalGrid out;
+  out.integrals = grid.integrals;
+  out.shape.spacing_angstrom = step * grid.shape.spacing_angstrom;
+  std::array<int, 3> skipped{};  // points before the first that is left
+  for (std::size_t axis = 0; axis < 3; ++axis) {
+    const int first = grid.shape.first[axis];
+    const int from_origin = first % step;  // of the sign of `first`
+    skipped[axis] = (from_origin <= 0 ? -from_origin : step - from_origin);
+    out.shape.first[axis] = (first + skipped[axis]) / step;
+    out.shape.size[axis] = (grid.shape.size[axis] - skipped[axis] + step - 1) / step;
+  }
+  for (const std::vector<double>& values : grid.values) {
+    std::vector<double>& left = out.values.emplace_back();
+    left.reserve(out.shape.points());
+    for (int k = 0; k < out.shape.size[2]; ++k) {
+      for (int j = 0; j < out.shape.size[1]; ++j) {
+        for (int i = 0; i < out.shape.size[0]; ++i) {
+          left.push_back(values[grid.shape.index(skipped[0] + step * i, skipped[1] + step * j,
+                                                 skipped[2] + step * k)]);
+        }
+      }
+    }
+  }
+  return out;
 }
 
 namespace {

@@ -37,6 +37,10 @@ struct OrbitalGrid {
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
                                  std::optional<double> spacing_angstrom = {});
 
+/// @param step  1 or more
+/// @returns      every so many points of the same lattice; those that are left keep their values
+[[nodiscard]] OrbitalGrid thinned(const OrbitalGrid& grid, int step);
+
 /// @throws Error  for a share of the density that is not between 0 and 1
 void check_share(double share);
 

@@ -42,16 +42,12 @@ std::string escaped(std::string_view text) {
   return out;
 }
 
-std::string hex(const Colour& c) {
-  return fmt::format("#{:02x}{:02x}{:02x}", c.red, c.green, c.blue);
-}
-
 std::string paint(const std::optional<Colour>& fill, const std::optional<Stroke>& stroke) {
-  std::string text = fmt::format(" fill=\"{}\"", fill ? hex(*fill) : "none");
+  std::string text = fmt::format(" fill=\"{}\"", fill ? colour_code(*fill) : "none");
   if (fill) text += " fill-rule=\"evenodd\"";
   if (!stroke) return text;
   text += fmt::format(" stroke=\"{}\" stroke-width=\"{}\" stroke-linejoin=\"round\"",
-                      hex(stroke->colour), px(stroke->width));
+                      colour_code(stroke->colour), px(stroke->width));
   if (!stroke->dashes.empty()) {
     text += " stroke-dasharray=\"";
     for (std::size_t i = 0; i < stroke->dashes.size(); ++i) {
@@ -107,7 +103,7 @@ std::string_view anchor_word(Anchor anchor) {
 // Scripts are shifted by dy: baseline-shift is not understood everywhere.
 std::string written(const Text& text) {
   std::string out = fmt::format("<text x=\"{}\" y=\"{}\" font-size=\"{}\" fill=\"{}\"",
-                                px(text.at.x), px(text.at.y), px(text.size), hex(text.colour));
+                                px(text.at.x), px(text.at.y), px(text.size), colour_code(text.colour));
   if (text.anchor != Anchor::Start) {
     out += fmt::format(" text-anchor=\"{}\"", anchor_word(text.anchor));
   }
@@ -140,17 +136,15 @@ std::string written(const Picture& picture) {
 
 }  // namespace
 
-std::string svg_document(const Figure& figure) {
+std::string svg_element(const Figure& figure, std::string_view id) {
   std::string out = fmt::format(
-      "<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n"
       "<svg xmlns=\"http://www.w3.org/2000/svg\" width=\"{0}\" height=\"{1}\" "
-      "viewBox=\"0 0 {0} {1}\" role=\"img\" aria-labelledby=\"figure-title figure-description\" "
+      "viewBox=\"0 0 {0} {1}\" role=\"img\" aria-labelledby=\"{5}-title {5}-description\" "
       "font-family=\"{2}\" xml:space=\"preserve\">\n"
-      "<title id=\"figure-title\">{3}</title>\n"
-      "<desc id=\"figure-description\">{4}</desc>\n"
-      "<rect width=\"{0}\" height=\"{1}\" fill=\"#ffffff\"/>\n",
+      "<title id=\"{5}-title\">{3}</title>\n"
+      "<desc id=\"{5}-description\">{4}</desc>\n",
       px(figure.width), px(figure.height), font_families, escaped(figure.title),
-      escaped(figure.description));
+      escaped(figure.description), id);
   for (const Group& group : figure.groups) {
     out += "<g";
     if (!group.kind.empty()) out += fmt::format(" class=\"{}\"", escaped(group.kind));
@@ -163,6 +157,20 @@ std::string svg_document(const Figure& figure) {
     out += "</g>\n";
   }
   return out + "</svg>\n";
+}
+
+std::string svg_document(const Figure& figure) {
+  Figure on_paper = figure;
+  Path paper;
+  paper.lines = {{{0.0, 0.0}, {figure.width, 0.0}, {figure.width, figure.height}, {0.0, figure.height}}};
+  paper.closed = true;
+  paper.fill = Colour{0xff, 0xff, 0xff};
+  on_paper.groups.insert(on_paper.groups.begin(), Group{"paper", "", "", {paper}});
+  return "<?xml version=\"1.0\" encoding=\"UTF-8\"?>\n" + svg_element(on_paper, "figure");
+}
+
+std::string colour_code(const Colour& colour) {
+  return fmt::format("#{:02x}{:02x}{:02x}", colour.red, colour.green, colour.blue);
 }
 
 std::string base64(std::string_view bytes) {

@@ -1,0 +1,84 @@
+#include "page/comparison_page.hpp"
+
+#include <algorithm>
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "output/character_tables.hpp"
+#include "output/compare_report.hpp"
+#include "output/population_tables.hpp"
+#include "output/table_html.hpp"
+#include "output/variant_diagram.hpp"
+#include "page/page_parts.hpp"
+#include "page/page_surfaces.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
+constexpr int levels_around_frontier = 2;
+
+std::string character_tables_html(const Comparison& comparison) {
+  std::string html;
+  std::vector<std::string> done;
+  for (const VariantResult& variant : comparison.variants) {
+    const PointGroup& group = variant.levels.symmetry.group;
+    const std::string name = group.symbol().name();
+    if (std::find(done.begin(), done.end(), name) != done.end()) continue;
+    done.push_back(name);
+    html += tables_html(character_tables(group, all_columns));
+  }
+  return html;
+}
+
+std::string variants_html(const Comparison& comparison) {
+  std::string html;
+  for (const VariantResult& variant : comparison.variants) {
+    const std::vector<AtomSet> sets = atom_sets(variant.levels.symmetry);
+    std::vector<Table> tables = {geometry_table(variant.levels),
+                                 charge_table(variant.levels, sets, Grouping::Equivalent),
+                                 overlap_population_table(variant.levels, Grouping::Equivalent)};
+    for (Table& table : tables) table.caption = variant.name + ": " + table.caption;
+    std::erase_if(tables, [](const Table& table) { return table.lines.empty(); });
+    html += tables_html(tables);
+  }
+  return html;
+}
+
+}  // namespace
+
+std::string comparison_page(const Comparison& comparison, const Provenance& provenance,
+                            const PageOptions& options) {
+  const Report report = compare_report(comparison, {.differences = comparison.variants.size() > 1});
+  LevelDiagram diagram = variant_diagram(comparison);
+  if (options.from_ev) diagram.from_ev = *options.from_ev;
+  if (options.to_ev) diagram.to_ev = *options.to_ev;
+
+  std::vector<PageMolecule> molecules;
+  for (const VariantResult& variant : comparison.variants) {
+    molecules.push_back(
+        page_molecule(variant.name, variant.levels, {diagram.from_ev, diagram.to_ev}));
+  }
+  add_surfaces(molecules, levels_around_frontier, options.threads);
+
+  HtmlPage page;
+  page.title = report.title;
+  page.generator = generator_words(provenance);
+  page.head_html = facts_html(report.facts) + warnings_html(report.warnings);
+  page.sections.push_back(
+      {"summary", "Summary", tables_html({report.tables.begin(), report.tables.begin() + 1})});
+  page.sections.push_back(levels_section(level_diagram_figure(diagram), DiagramRoom::Above));
+  page.sections.push_back(
+      {"comparison", "d block, frontier, robustness",
+       tables_html({report.tables.begin() + 1, report.tables.end()})});
+  page.sections.push_back({"symmetry", "Symmetry", character_tables_html(comparison)});
+  page.sections.push_back(
+      {"variants", "Geometry, charges and bonds of each variant", variants_html(comparison)});
+  page.sections.push_back(method_section(molecules, report.remarks));
+  page.sections.push_back(repeat_section(provenance));
+  page.data = page_data(molecules);
+  return html_document(page);
+}
+
+}  // namespace irrepwise

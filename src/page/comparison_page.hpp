@@ -1,0 +1,16 @@
+// The page of a comparison: what `compare` says, with the levels of every variant to be looked at.
+#pragma once
+
+#include <string>
+
+#include "output/compare_result.hpp"
+#include "page/molecule_page.hpp"
+
+namespace irrepwise {
+
+/// @throws Error  as `level_diagram_figure`, and for more variants than fit side by side
+[[nodiscard]] std::string comparison_page(const Comparison& comparison,
+                                          const Provenance& provenance,
+                                          const PageOptions& options);
+
+}  // namespace irrepwise

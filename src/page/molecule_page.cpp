@@ -1,0 +1,87 @@
+#include "page/molecule_page.hpp"
+
+#include <utility>
+
+#include <fmt/format.h>
+
+#include "figure/level_diagram.hpp"
+#include "figure/svg.hpp"
+#include "output/html_text.hpp"
+#include "output/levels_report.hpp"
+#include "output/orbital_pictures.hpp"
+#include "output/symmetry_report.hpp"
+#include "page/page_parts.hpp"
+#include "page/page_surfaces.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
+constexpr int every_level = 1'000'000;
+
+LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) {
+  LevelDiagram diagram;
+  diagram.columns = {diagram_column(result.symmetry.group, result.levels)};
+  const EnergyWindow window = frontier_window(diagram.columns);
+  diagram.from_ev = options.from_ev.value_or(window.from_ev);
+  diagram.to_ev = options.to_ev.value_or(window.to_ev);
+  const SheetWords words = sheet_heading(result);
+  diagram.title = words.title;
+  diagram.method = words.method;
+  return diagram;
+}
+
+// The pictures of HOMO and LUMO stand in the page also where no script runs, and on paper.
+std::string frontier_figure(const LevelsResult& result) {
+  std::vector<OrbitalChoice> choices;
+  for (const std::optional<int>& level :
+       {result.levels.frontier.homo, result.levels.frontier.lumo}) {
+    if (!level) continue;
+    const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
+    choices.insert(choices.end(), partners.begin(), partners.end());
+  }
+  const ChosenOrbitals chosen = chosen_orbitals(result, std::move(choices));
+  const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, {});
+  std::vector<Scene> scenes;
+  for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
+  const Figure figure =
+      surface_sheet(sheet_heading(result), result.symmetry.molecule, chosen.captions,
+                    surfaces.scenes, best_camera(scenes));
+  return "<figure class=\"scroll\">\n" + svg_element(figure, "frontier") + "</figure>\n";
+}
+
+}  // namespace
+
+std::string molecule_page(const LevelsResult& result, const SymmetryResult& symmetry,
+                          const Provenance& provenance, const PageOptions& options) {
+  const Report levels = levels_report(result, {.all = true});
+  const Report summary = levels_report(result);
+  const Report about_symmetry = symmetry_report(symmetry, {}, {}, all_columns);
+  const LevelDiagram diagram = diagram_of(result, options);
+
+  std::vector<PageMolecule> molecules = {
+      page_molecule(charged_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
+  add_surfaces(molecules, every_level, options.threads);
+
+  HtmlPage page;
+  page.title = levels.title;
+  page.generator = generator_words(provenance);
+  page.head_html = facts_html(levels.facts) + warnings_html(levels.warnings);
+  page.sections.push_back(
+      levels_section(level_diagram_figure(diagram), DiagramRoom::Beside));
+  page.sections.push_back({"frontier", "Frontier orbitals", frontier_figure(result)});
+  page.sections.push_back({"energies", "Energies and compositions", tables_html({levels.tables.front()})});
+  page.sections.push_back(
+      {"populations", "Charges and bonds",
+       tables_html({summary.tables.begin() + 1, summary.tables.end()})});
+  page.sections.push_back(
+      {"symmetry", "Symmetry",
+       facts_html(about_symmetry.facts) + tables_html(about_symmetry.tables)});
+  page.sections.push_back({"geometry", "Geometry", table_html(geometry_table(result))});
+  page.sections.push_back(method_section(molecules, levels.remarks));
+  page.sections.push_back(repeat_section(provenance));
+  page.data = page_data(molecules);
+  return html_document(page);
+}
+
+}  // namespace irrepwise

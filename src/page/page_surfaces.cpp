@@ -1,0 +1,64 @@
+#include "page/page_surfaces.hpp"
+
+#include <algorithm>
+#include <cstdlib>
+
+#include "core/parallel.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr std::size_t most_characters = 1'700'000;
+constexpr int batch = 8;  // computed before the size is looked at again
+
+struct Task {
+  int rank = 0;  // 0: HOMO or LUMO, 1: the level next to them …
+  std::size_t molecule = 0;
+  std::size_t level = 0;
+};
+
+int rank_of(const Levels& levels, int level) {
+  const int homo = levels.frontier.homo.value_or(-1);
+  const int lumo = levels.frontier.lumo.value_or(static_cast<int>(levels.levels.size()));
+  return std::min(std::abs(level - homo), std::abs(level - lumo));
+}
+
+std::vector<Task> tasks_for(const std::vector<PageMolecule>& molecules, int levels_around) {
+  std::vector<Task> tasks;
+  for (std::size_t m = 0; m < molecules.size(); ++m) {
+    for (std::size_t i = 0; i < molecules[m].levels.size(); ++i) {
+      const int rank = rank_of(molecules[m].result->levels, molecules[m].levels[i].level);
+      if (rank <= levels_around) tasks.push_back({rank, m, i});
+    }
+  }
+  std::stable_sort(tasks.begin(), tasks.end(),
+                   [](const Task& a, const Task& b) { return a.rank < b.rank; });
+  return tasks;
+}
+
+}  // namespace
+
+void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads) {
+  const std::vector<Task> tasks = tasks_for(molecules, levels_around);
+  std::size_t characters = 0;
+  for (std::size_t first = 0; first < tasks.size() && characters < most_characters;
+       first += batch) {
+    const std::size_t end = std::min(tasks.size(), first + batch);
+    std::vector<std::vector<PageOrbital>> found(end - first);
+    run_parallel(static_cast<int>(end - first), threads, [&](int i) {
+      const Task& task = tasks[first + static_cast<std::size_t>(i)];
+      const PageMolecule& molecule = molecules[task.molecule];
+      found[static_cast<std::size_t>(i)] =
+          page_orbitals(*molecule.result, molecule.levels[task.level].level);
+    });
+    for (std::size_t i = first; i < end; ++i) {
+      std::size_t more = 0;
+      for (const PageOrbital& orbital : found[i - first]) more += orbital.bytes();
+      if (characters + more > most_characters) return;
+      characters += more;
+      molecules[tasks[i].molecule].levels[tasks[i].level].orbitals = std::move(found[i - first]);
+    }
+  }
+}
+
+}  // namespace irrepwise
