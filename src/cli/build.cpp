@@ -127,29 +127,15 @@ Built build(const BuildOptions& options) {
   return {std::move(*job.built), job.title, job.source_files};
 }
 
-std::string written(const Report& report, const OutputOptions& output) {
-  switch (chosen_format(output)) {
-    case Format::Csv:
-    case Format::Json:
-    case Format::Yaml:
-    case Format::Text:
-      return report_text(report, text_width(output));
-    case Format::Markdown:
-      return report_markdown(report);
-    case Format::Latex:
-      return report_latex(report);
-  }
-  return {};
-}
-
 void run_list(const BuildOptions& options) {
   if (!options.words.empty()) throw CLI::ValidationError("--list stands alone");
   if (wants_xyz(options.output) || options.output.format == "json") {
-    throw CLI::ValidationError("--list is written as text, markdown or latex");
+    throw CLI::ValidationError("--list is written as text, markdown, latex or html");
   }
   const bool ligands = options.list == "ligands";
   emit(options.output,
-       written(ligands ? ligands_report(library(options)) : polyhedra_report(), options.output));
+       written_report(ligands ? ligands_report(library(options)) : polyhedra_report(),
+                      options.output));
 }
 
 void run(const BuildOptions& options) {
@@ -160,13 +146,13 @@ void run(const BuildOptions& options) {
     const bool json = chosen_format(options.output) == Format::Json;
     return emit(options.output,
                 json ? build_json(built.complex, built.title)
-                     : written(build_report(built.complex, built.title), options.output));
+                     : written_report(build_report(built.complex, built.title), options.output));
   }
   emit(options.output, build_xyz(built.complex, built.title));
   if (options.output.output.empty()) return;
   OutputOptions terminal;
   terminal.width = options.output.width;
-  emit(terminal, written(build_report(built.complex, built.title), terminal));
+  emit(terminal, written_report(build_report(built.complex, built.title), terminal));
 }
 
 }  // namespace
@@ -199,7 +185,7 @@ Command add_build(CLI::App& program) {
       ->check(CLI::IsMember({"ligands", "polyhedra"}))
       ->option_text("WHAT")
       ->group("Complex");
-  add_output_options(*app, options->output, {"text", "xyz", "json", "markdown", "latex"});
+  add_output_options(*app, options->output, {"text", "xyz", "json", "markdown", "latex", "html"});
   app->footer(
       "An output file that ends in .xyz gets the coordinates, and the report is printed.\n\n"
       "Examples:\n"

@@ -30,15 +30,14 @@ std::string written(const Comparison& comparison, const CompareOptions& options)
       choice.differences = options.parts.differences;
       return compare_csv(comparison, choice);
     }
-    case Format::Markdown:
-      return report_markdown(compare_report(comparison, options.parts));
-    case Format::Latex:
-      return report_latex(compare_report(comparison, options.parts));
     case Format::Text:
+    case Format::Markdown:
+    case Format::Latex:
+    case Format::Html:
     case Format::Yaml:
       break;
   }
-  return report_text(compare_report(comparison, options.parts), text_width(options.output));
+  return written_report(compare_report(comparison, options.parts), options.output);
 }
 
 void run(CompareOptions options) {
@@ -85,7 +84,7 @@ Command add_compare(CLI::App& program) {
                   "the same for any number")
       ->check(CLI::Range(1, 256))
       ->option_text("N");
-  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex"});
+  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex", "html"});
   app->footer(
       "CSV holds the summary alone.\n\n"
       "Examples:\n"

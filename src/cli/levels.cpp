@@ -35,7 +35,7 @@ void check_usage(const LevelsOptions& options) {
   const bool has_range = options.window.from_ev || options.window.to_ev;
   if (has_range && (format == Format::Json || format == Format::Csv)) {
     throw CLI::ValidationError(
-        "--from and --to are for text, markdown and latex; json and csv "
+        "--from and --to are for text, markdown, latex and html; json and csv "
         "always hold every level");
   }
 }
@@ -46,15 +46,14 @@ std::string written(const LevelsResult& result, const LevelsOptions& options) {
       return levels_json(result, options.parts);
     case Format::Csv:
       return levels_csv(result);
-    case Format::Markdown:
-      return report_markdown(levels_report(result, options.window));
-    case Format::Latex:
-      return report_latex(levels_report(result, options.window));
     case Format::Text:
+    case Format::Markdown:
+    case Format::Latex:
+    case Format::Html:
     case Format::Yaml:
       break;
   }
-  return report_text(levels_report(result, options.window), text_width(options.output));
+  return written_report(levels_report(result, options.window), options.output);
 }
 
 void run(const LevelsOptions& options) {
@@ -75,7 +74,7 @@ Command add_levels(CLI::App& program) {
   const auto options = std::make_shared<LevelsOptions>();
   app->set_help_flag("-h,--help", "Show this help");
   add_job_options(*app, options->job);
-  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex"});
+  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex", "html"});
   app->add_flag("-a,--all", options->window.all, "Every level, every atom and every pair of atoms")
       ->group("Output");
   app->add_option("--from", options->window.from_ev, "Show levels from this energy on")

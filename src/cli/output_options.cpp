@@ -14,6 +14,7 @@
 
 #include "core/error.hpp"
 #include "core/output_file.hpp"
+#include "core/text.hpp"
 
 namespace irrepwise::cli {
 namespace {
@@ -23,11 +24,12 @@ constexpr int least_width = 40;
 
 const std::map<std::string, Format> formats_by_name = {
     {"text", Format::Text},         {"json", Format::Json},   {"csv", Format::Csv},
-    {"markdown", Format::Markdown}, {"latex", Format::Latex}, {"yaml", Format::Yaml}};
+    {"markdown", Format::Markdown}, {"latex", Format::Latex}, {"html", Format::Html},
+    {"yaml", Format::Yaml}};
 
-const std::map<std::string, Format> formats_by_ending = {
-    {".json", Format::Json}, {".csv", Format::Csv},   {".md", Format::Markdown},
-    {".tex", Format::Latex}, {".yaml", Format::Yaml}, {".yml", Format::Yaml}};
+const std::map<std::string, std::string> names_by_ending = {
+    {".json", "json"}, {".csv", "csv"},  {".md", "markdown"}, {".tex", "latex"},
+    {".html", "html"}, {".htm", "html"}, {".yaml", "yaml"},   {".yml", "yaml"}};
 
 std::string ending(const std::string& path) {
   const std::size_t point = path.rfind('.');
@@ -53,6 +55,7 @@ bool prints_on_terminal(const OutputOptions& options) {
 
 void add_output_options(CLI::App& command, OutputOptions& options,
                         const std::vector<std::string>& formats) {
+  options.formats = formats;
   std::string names;
   for (const std::string& name : formats) names += (names.empty() ? "" : ", ") + name;
   command
@@ -79,8 +82,32 @@ void add_output_options(CLI::App& command, OutputOptions& options,
 
 Format chosen_format(const OutputOptions& options) {
   if (!options.format.empty()) return formats_by_name.at(options.format);
-  const auto by_ending = formats_by_ending.find(ending(options.output));
-  return by_ending == formats_by_ending.end() ? Format::Text : by_ending->second;
+  const auto by_ending = names_by_ending.find(ending(options.output));
+  if (by_ending == names_by_ending.end()) return Format::Text;
+  const std::vector<std::string>& known = options.formats;
+  if (std::find(known.begin(), known.end(), by_ending->second) == known.end()) {
+    throw CLI::ValidationError(
+        fmt::format("{}: this command does not write {}; it writes {}, by --format or the ending",
+                    options.output, by_ending->second, joined(known)));
+  }
+  return formats_by_name.at(by_ending->second);
+}
+
+std::string written_report(const Report& report, const OutputOptions& options) {
+  switch (chosen_format(options)) {
+    case Format::Markdown:
+      return report_markdown(report);
+    case Format::Latex:
+      return report_latex(report);
+    case Format::Html:
+      return report_html(report);
+    case Format::Text:
+    case Format::Json:
+    case Format::Csv:
+    case Format::Yaml:
+      break;
+  }
+  return report_text(report, text_width(options));
 }
 
 int text_width(const OutputOptions& options) {

@@ -53,14 +53,13 @@ std::string written(const ParameterSet& parameters, const std::vector<int>& elem
       return parameters_csv(parameters, elements);
     case Format::Yaml:
       return parameters_yaml(parameters, elements);
-    case Format::Markdown:
-      return report_markdown(parameters_report(parameters, elements));
-    case Format::Latex:
-      return report_latex(parameters_report(parameters, elements));
     case Format::Text:
+    case Format::Markdown:
+    case Format::Latex:
+    case Format::Html:
       break;
   }
-  return report_text(parameters_report(parameters, elements), text_width(options));
+  return written_report(parameters_report(parameters, elements), options);
 }
 
 void run(const ParametersOptions& options) {
@@ -84,7 +83,8 @@ Command add_parameters(CLI::App& program) {
                   "Parameter file (YAML) that replaces or extends the set in the program")
       ->option_text("FILE")
       ->group("Method");
-  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex", "yaml"});
+  add_output_options(*app, options->output,
+                     {"text", "json", "csv", "markdown", "latex", "html", "yaml"});
   app->footer(
       "Examples:\n"
       "  irrepwise parameters Pt Cl\n"

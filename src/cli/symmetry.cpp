@@ -104,6 +104,25 @@ std::string symmetrised_xyz(const Job& job, const SymmetryCommandOptions& option
   return xyz_text(job.molecule.with_positions(positions), job.title);
 }
 
+// Character tables are broken by the width of what they are written for.
+int width_of_tables(const OutputOptions& output) {
+  constexpr int page = 84;         // of a LaTeX page, in columns of text
+  constexpr int unlimited = 1000;  // Markdown and HTML scroll
+  switch (chosen_format(output)) {
+    case Format::Latex:
+      return page;
+    case Format::Markdown:
+    case Format::Html:
+      return unlimited;
+    case Format::Text:
+    case Format::Json:
+    case Format::Csv:
+    case Format::Yaml:
+      break;
+  }
+  return text_width(output);
+}
+
 std::string written(const SymmetryResult& result, const SymmetryHeadings& headings,
                     const SymmetryCommandOptions& options) {
   switch (chosen_format(options.output)) {
@@ -111,15 +130,16 @@ std::string written(const SymmetryResult& result, const SymmetryHeadings& headin
       return symmetry_json(result, headings);
     case Format::Csv:
       return symmetry_csv(result);
-    case Format::Markdown:
-      return report_markdown(symmetry_report(result, headings, options.sections, 1000));
     case Format::Text:
+    case Format::Markdown:
     case Format::Latex:
+    case Format::Html:
     case Format::Yaml:
       break;
   }
-  const int width = text_width(options.output);
-  return report_text(symmetry_report(result, headings, options.sections, width), width);
+  return written_report(
+      symmetry_report(result, headings, options.sections, width_of_tables(options.output)),
+      options.output);
 }
 
 std::string written(const PointGroup& group, const GroupAnswers& asked,
@@ -129,15 +149,15 @@ std::string written(const PointGroup& group, const GroupAnswers& asked,
       return group_json(group, asked);
     case Format::Csv:
       return group_csv(group, asked);
-    case Format::Markdown:
-      return report_markdown(group_report(group, asked, 1000));
     case Format::Text:
+    case Format::Markdown:
     case Format::Latex:
+    case Format::Html:
     case Format::Yaml:
       break;
   }
-  const int width = text_width(options.output);
-  return report_text(group_report(group, asked, width), width);
+  return written_report(group_report(group, asked, width_of_tables(options.output)),
+                        options.output);
 }
 
 void check_usage(const SymmetryCommandOptions& options) {
@@ -192,7 +212,7 @@ Command add_symmetry(CLI::App& program) {
   const auto options = std::make_shared<SymmetryCommandOptions>();
   app->set_help_flag("-h,--help", "Show this help");
   add_job_options(*app, options->job, FileOption::Optional);
-  add_output_options(*app, options->output, {"text", "json", "csv", "markdown"});
+  add_output_options(*app, options->output, {"text", "json", "csv", "markdown", "latex", "html"});
   const auto flag = [&](const char* name, bool& value, const char* help) {
     app->add_flag(name, value, help)->group("Sections");
   };

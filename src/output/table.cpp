@@ -6,7 +6,7 @@
 #include <fmt/format.h>
 
 #include "core/error.hpp"
-#include "symmetry/point_group.hpp"
+#include "symmetry/irrep.hpp"
 
 namespace irrepwise {
 namespace {
@@ -29,7 +29,11 @@ std::string rounded(const Number& number) {
 }  // namespace
 
 std::string column_title(const Column& column) {
-  return column.unit.empty() ? column.header : column.header + " / " + column.unit;
+  std::string title = column.header;
+  if (!column.label.empty()) {
+    title = readable_label(column.label) + (title.empty() ? "" : " " + title);
+  }
+  return column.unit.empty() ? title : title + " / " + column.unit;
 }
 
 std::string cell_text(const Cell& cell) {

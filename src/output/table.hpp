@@ -28,8 +28,9 @@ struct Column {
   std::string header;  // for people: "energy"
   std::string unit;    // "eV"; empty where there is none
   Align align = Align::Left;
-  int priority = 0;    // 0: always kept; a narrow terminal drops the highest first
-  bool wraps = false;  // long text may run over several lines
+  int priority = 0;        // 0: always kept; a narrow terminal drops the highest first
+  bool wraps = false;      // long text may run over several lines
+  std::string label = {};  // symmetry label in ASCII that stands before the header: "2e1g"
 };
 
 /// A line across the table, with a few words in it or none.
@@ -48,7 +49,7 @@ struct Table {
   std::vector<std::string> notes;
 };
 
-/// @returns  "energy / eV"
+/// @returns  "energy / eV", "2e1g 1"
 [[nodiscard]] std::string column_title(const Column& column);
 
 /// For people: numbers with their digits (never "-0.00"), labels in readable form.

@@ -4,6 +4,8 @@
 #include <array>
 #include <utility>
 
+#include "output/label_parts.hpp"
+
 namespace irrepwise {
 namespace {
 
@@ -39,7 +41,23 @@ constexpr std::array<Replacement, 27> replacements = {{
     {">", "\\textgreater{}"},
 }};
 
-constexpr std::array<std::string_view, 6> greek = {"sigma", "pi", "delta", "phi", "gamma", "eta"};
+// Greek letters of labels, in mathematics.
+constexpr std::array<Replacement, 16> letters = {{{"σ", "\\sigma"},
+                                                  {"π", "\\pi"},
+                                                  {"δ", "\\delta"},
+                                                  {"φ", "\\phi"},
+                                                  {"γ", "\\gamma"},
+                                                  {"η", "\\eta"},
+                                                  {"ι", "\\iota"},
+                                                  {"κ", "\\kappa"},
+                                                  {"λ", "\\lambda"},
+                                                  {"Σ", "\\Sigma"},
+                                                  {"Π", "\\Pi"},
+                                                  {"Δ", "\\Delta"},
+                                                  {"Φ", "\\Phi"},
+                                                  {"Γ", "\\Gamma"},
+                                                  {"Λ", "\\Lambda"},
+                                                  {"Η", "\\mathrm{H}"}}};
 
 std::string latex_cell(const Cell& cell, int digits_after) {
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return latex_label(label->ascii);
@@ -79,43 +97,16 @@ std::string latex_text(std::string_view text) {
   return out;
 }
 
-std::string latex_label(std::string_view ascii) {
-  std::string out = "$";
-  while (!ascii.empty() && ascii.front() >= '0' && ascii.front() <= '9') {
-    out += ascii.front();
-    ascii.remove_prefix(1);
-  }
-  bool is_greek = false;
-  for (const std::string_view name : greek) {
-    if (ascii.size() >= name.size() && (ascii.front() | 0x20) == name.front() &&
-        ascii.substr(1).starts_with(name.substr(1))) {
-      out += "\\" + std::string(ascii.substr(0, name.size()));
-      ascii.remove_prefix(name.size());
-      is_greek = true;
-      break;
-    }
-  }
-  if (!is_greek && !ascii.empty()) {
-    out += ascii.front();
-    ascii.remove_prefix(1);
-  }
-  std::string below;
-  std::string above;
-  std::string primes;
-  for (const char c : ascii) {
-    if (c == '\'') {
-      primes += "'";
-    } else if (c == '"') {
-      primes += "''";
-    } else if (c == '+' || c == '-') {
-      above += c;
-    } else {
-      below += c;
-    }
-  }
-  if (!below.empty()) out += "_{" + below + "}";
-  if (!above.empty()) out += "^{" + above + "}";
-  return out + primes + "$";
+std::string latex_label(const std::string& ascii) {
+  const LabelParts parts = label_parts(ascii);
+  const auto* letter = std::find_if(
+      letters.begin(), letters.end(),
+      [&](const Replacement& replacement) { return replacement.first == parts.letter; });
+  std::string out = "$" + parts.number;
+  out += letter == letters.end() ? parts.letter : std::string(letter->second);
+  if (!parts.below.empty()) out += "_{" + parts.below + "}";
+  if (!parts.above.empty()) out += "^{" + parts.above + "}";
+  return out + std::string(static_cast<std::size_t>(parts.primes), '\'') + "$";
 }
 
 std::string table_latex(const Table& table) {

@@ -17,7 +17,7 @@ namespace irrepwise {
 [[nodiscard]] std::string latex_text(std::string_view text);
 
 /// @param ascii  "2e1g", "E1\"", "sigmag+"
-/// @returns      "$2e_{1g}$", "$E_{1}''$", "$\sigma_{g}^{+}$"
-[[nodiscard]] std::string latex_label(std::string_view ascii);
+/// @returns      "$2e_{1g}$", "$E_{1}''$", "$\Sigma_{g}^{+}$"
+[[nodiscard]] std::string latex_label(const std::string& ascii);
 
 }  // namespace irrepwise

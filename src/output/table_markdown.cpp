@@ -3,23 +3,10 @@
 #include <algorithm>
 
 #include "output/display_width.hpp"
+#include "output/figure_spaces.hpp"
 
 namespace irrepwise {
 namespace {
-
-constexpr std::string_view figure_space = "\u2007";       // as wide as a digit
-constexpr std::string_view punctuation_space = "\u2008";  // as wide as a point
-
-std::string filled_up(const std::string& after, int width) {
-  std::string text = after;
-  int missing = width - display_width(after);
-  if (missing > 0 && after.empty()) {
-    text += punctuation_space;
-    --missing;
-  }
-  for (; missing > 0; --missing) text += figure_space;
-  return text;
-}
 
 std::vector<std::string> column_cells(const Table& table, std::size_t index) {
   int after = 0;
@@ -41,7 +28,7 @@ std::vector<std::string> column_cells(const Table& table, std::size_t index) {
     const DecimalParts parts = decimal_parts(cell);
     const bool fill = table.columns[index].align == Align::Decimal && !parts.before.empty();
     cells.push_back(markdown_text(parts.before) +
-                    (fill ? filled_up(parts.after, after) : parts.after));
+                    (fill ? filled_with_figure_spaces(parts.after, after) : parts.after));
   }
   return cells;
 }

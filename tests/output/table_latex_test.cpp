@@ -11,7 +11,8 @@ TEST_CASE("labels are typeset as the trade writes them") {
   CHECK(latex_label("10a1'") == "$10a_{1}'$");
   CHECK(latex_label("1e2\"") == "$1e_{2}''$");
   CHECK(latex_label("E") == "$E$");
-  CHECK(latex_label("1sigmag+") == "$1\\sigma_{g}^{+}$");
+  CHECK(latex_label("1sigmag+") == "$1\\sigma_{g}$");
+  CHECK(latex_label("Sigmag+") == "$\\Sigma_{g}^{+}$");
   CHECK(latex_label("2piu") == "$2\\pi_{u}$");
   CHECK(latex_label("Sigma-") == "$\\Sigma^{-}$");
   CHECK(latex_label("1pg") == "$1p_{g}$");  // of an atom: p, not pi

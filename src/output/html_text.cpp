@@ -1,0 +1,51 @@
+#include "output/html_text.hpp"
+
+#include "output/label_parts.hpp"
+
+namespace irrepwise {
+
+std::string html_text(std::string_view text) {
+  std::string out;
+  for (const char c : text) {
+    switch (c) {
+      case '&':
+        out += "&amp;";
+        break;
+      case '<':
+        out += "&lt;";
+        break;
+      case '>':
+        out += "&gt;";
+        break;
+      case '"':
+        out += "&quot;";
+        break;
+      case '\'':
+        out += "&#39;";
+        break;
+      default: {
+        const auto byte = static_cast<unsigned char>(c);
+        const bool control = (byte < 0x20 && c != '\t' && c != '\n') || byte == 0x7F;
+        if (control) {
+          out += "\uFFFD";
+        } else {
+          out += c;
+        }
+      }
+    }
+  }
+  return out;
+}
+
+std::string html_label(const std::string& ascii) {
+  const LabelParts parts = label_parts(ascii);
+  std::string out = html_text(parts.number);
+  if (!parts.letter.empty()) out += "<i>" + html_text(parts.letter) + "</i>";
+  if (!parts.below.empty()) out += "<sub>" + html_text(parts.below) + "</sub>";
+  if (!parts.above.empty()) out += "<sup>" + std::string(parts.above == "-" ? "−" : "+") + "</sup>";
+  if (parts.primes == 1) out += "′";
+  if (parts.primes > 1) out += "″";
+  return out;
+}
+
+}  // namespace irrepwise
