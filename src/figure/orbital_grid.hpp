@@ -29,13 +29,24 @@ struct OrbitalGrid {
   std::vector<double> integrals;            // per orbital, of the density over the grid
 };
 
-/// @param spacing_angstrom  as the user wants it; without it, 0.07 to 0.15 Å by the size of the
-///                          molecule, finer where the integral of some density is otherwise
-///                          further than 0.005 from 1
+/// How fine a grid is without a wish of the user.
+struct GridQuality {
+  double points = 300'000;          // about, for a molecule of any size …
+  double coarsest_angstrom = 0.15;  // … but no coarser than this
+  double wanted_error = 0.005;    // of every integral of a density; the grid gets finer to reach it
+  double points_inside = 60'000;  // from which an isovalue is found
+};
+
+/// For surfaces that are many and small: isovalues within 2 % of those of the usual quality.
+inline constexpr GridQuality light_quality{50'000, 0.25, 0.03, 15'000};
+
+/// @param spacing_angstrom  as the user wants it; without it, by the quality, at least 0.07 Å
 /// @throws Error  where the grid would need more than 24 million points (with the spacing that
-///                does not), or an integral is further than 0.01 from 1
+///                does not), or an integral is further than 0.01 from 1, or than the wanted error
+///                where that is larger
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
-                                 std::optional<double> spacing_angstrom = {});
+                                 std::optional<double> spacing_angstrom = {},
+                                 const GridQuality& quality = {});
 
 /// @param step  1 or more
 /// @returns      every so many points of the same lattice; those that are left keep their values
@@ -53,6 +64,6 @@ void check_share(double share);
 /// @returns         bohr^(-3/2)
 /// @accuracy        about 0.5 % for a share of 0.5, measured on Slater functions
 [[nodiscard]] double enclosing_isovalue(const OrbitalField& field, const OrbitalGrid& grid,
-                                        int orbital, double share);
+                                        int orbital, double share, const GridQuality& quality = {});
 
 }  // namespace irrepwise

@@ -102,8 +102,9 @@ std::string_view anchor_word(Anchor anchor) {
 
 // Scripts are shifted by dy: baseline-shift is not understood everywhere.
 std::string written(const Text& text) {
-  std::string out = fmt::format("<text x=\"{}\" y=\"{}\" font-size=\"{}\" fill=\"{}\"",
-                                px(text.at.x), px(text.at.y), px(text.size), colour_code(text.colour));
+  std::string out =
+      fmt::format("<text x=\"{}\" y=\"{}\" font-size=\"{}\" fill=\"{}\"", px(text.at.x),
+                  px(text.at.y), px(text.size), colour_code(text.colour));
   if (text.anchor != Anchor::Start) {
     out += fmt::format(" text-anchor=\"{}\"", anchor_word(text.anchor));
   }
@@ -162,7 +163,8 @@ std::string svg_element(const Figure& figure, std::string_view id) {
 std::string svg_document(const Figure& figure) {
   Figure on_paper = figure;
   Path paper;
-  paper.lines = {{{0.0, 0.0}, {figure.width, 0.0}, {figure.width, figure.height}, {0.0, figure.height}}};
+  paper.lines = {
+      {{0.0, 0.0}, {figure.width, 0.0}, {figure.width, figure.height}, {0.0, figure.height}}};
   paper.closed = true;
   paper.fill = Colour{0xff, 0xff, 0xff};
   on_paper.groups.insert(on_paper.groups.begin(), Group{"paper", "", "", {paper}});

@@ -7,6 +7,7 @@
 
 #include "output/character_tables.hpp"
 #include "output/compare_report.hpp"
+#include "output/html_parts.hpp"
 #include "output/population_tables.hpp"
 #include "output/table_html.hpp"
 #include "output/variant_diagram.hpp"
@@ -69,9 +70,8 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
   page.sections.push_back(
       {"summary", "Summary", tables_html({report.tables.begin(), report.tables.begin() + 1})});
   page.sections.push_back(levels_section(level_diagram_figure(diagram), DiagramRoom::Above));
-  page.sections.push_back(
-      {"comparison", "d block, frontier, robustness",
-       tables_html({report.tables.begin() + 1, report.tables.end()})});
+  page.sections.push_back({"comparison", "d block, frontier, robustness",
+                           tables_html({report.tables.begin() + 1, report.tables.end()})});
   page.sections.push_back({"symmetry", "Symmetry", character_tables_html(comparison)});
   page.sections.push_back(
       {"variants", "Geometry, charges and bonds of each variant", variants_html(comparison)});

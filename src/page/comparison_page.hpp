@@ -10,7 +10,6 @@ namespace irrepwise {
 
 /// @throws Error  as `level_diagram_figure`, and for more variants than fit side by side
 [[nodiscard]] std::string comparison_page(const Comparison& comparison,
-                                          const Provenance& provenance,
-                                          const PageOptions& options);
+                                          const Provenance& provenance, const PageOptions& options);
 
 }  // namespace irrepwise

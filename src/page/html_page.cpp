@@ -64,13 +64,14 @@ std::string html_document(const HtmlPage& page) {
       html_text(page.generator), html_text(page.title), themed_figures());
   html += fmt::format(
       "<header>\n<div class=\"top\"><h1>{}</h1>"
-      "<button type=\"button\" id=\"theme\" class=\"quiet\">Dark</button></div>\n{}{}</header>\n"
+      "<button type=\"button\" id=\"theme\">Dark</button></div>\n{}{}</header>\n"
       "<main>\n",
       html_text(page.title), page.head_html, navigation(page.sections));
   for (const PageSection& section : page.sections) {
-    html += fmt::format("<section id=\"{0}\" aria-labelledby=\"{0}-heading\">\n"
-                        "<h2 id=\"{0}-heading\">{1}</h2>\n{2}</section>\n",
-                        section.id, html_text(section.heading), section.html);
+    html += fmt::format(
+        "<section id=\"{0}\" aria-labelledby=\"{0}-heading\">\n"
+        "<h2 id=\"{0}-heading\">{1}</h2>\n{2}</section>\n",
+        section.id, html_text(section.heading), section.html);
   }
   html += fmt::format(
       "</main>\n<footer class=\"small\">{}</footer>\n"
@@ -86,30 +87,6 @@ std::string tables_html(const std::vector<Table>& tables) {
   std::string html;
   for (const Table& table : tables) html += table_html(table);
   return html;
-}
-
-std::string facts_html(const std::vector<Fact>& facts) {
-  std::string html = "<dl class=\"facts\">\n";
-  for (const Fact& fact : facts) {
-    html += "<dt>" + html_text(fact.name) + "</dt><dd>";
-    for (std::size_t i = 0; i < fact.lines.size(); ++i) {
-      html += (i > 0 ? "<br>" : "") + html_text(fact.lines[i]);
-    }
-    html += "</dd>\n";
-  }
-  return html + "</dl>\n";
-}
-
-std::string paragraphs_html(const std::vector<std::string>& texts) {
-  std::string html;
-  for (const std::string& text : texts) html += "<p>" + html_text(text) + "</p>\n";
-  return html;
-}
-
-std::string warnings_html(const std::vector<std::string>& warnings) {
-  if (warnings.empty()) return {};
-  return "<div class=\"warnings\">\n<p><strong>Warnings</strong></p>\n" +
-         paragraphs_html(warnings) + "</div>\n";
 }
 
 }  // namespace irrepwise

@@ -4,7 +4,7 @@
 #include <string>
 #include <vector>
 
-#include "output/report.hpp"
+#include "output/table.hpp"
 
 namespace irrepwise {
 
@@ -27,14 +27,5 @@ struct HtmlPage {
 [[nodiscard]] std::string html_document(const HtmlPage& page);
 
 [[nodiscard]] std::string tables_html(const std::vector<Table>& tables);
-
-/// Names and lines of facts as a list of definitions.
-[[nodiscard]] std::string facts_html(const std::vector<Fact>& facts);
-
-/// Each text as a paragraph.
-[[nodiscard]] std::string paragraphs_html(const std::vector<std::string>& texts);
-
-/// Warnings in a box of their own, or nothing.
-[[nodiscard]] std::string warnings_html(const std::vector<std::string>& warnings);
 
 }  // namespace irrepwise

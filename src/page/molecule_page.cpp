@@ -6,7 +6,7 @@
 
 #include "figure/level_diagram.hpp"
 #include "figure/svg.hpp"
-#include "output/html_text.hpp"
+#include "output/html_parts.hpp"
 #include "output/levels_report.hpp"
 #include "output/orbital_pictures.hpp"
 #include "output/symmetry_report.hpp"
@@ -44,9 +44,8 @@ std::string frontier_figure(const LevelsResult& result) {
   const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, {});
   std::vector<Scene> scenes;
   for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
-  const Figure figure =
-      surface_sheet(sheet_heading(result), result.symmetry.molecule, chosen.captions,
-                    surfaces.scenes, best_camera(scenes));
+  const Figure figure = surface_sheet(sheet_heading(result), result.symmetry.molecule,
+                                      chosen.captions, surfaces.scenes, best_camera(scenes));
   return "<figure class=\"scroll\">\n" + svg_element(figure, "frontier") + "</figure>\n";
 }
 
@@ -67,17 +66,15 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
   page.title = levels.title;
   page.generator = generator_words(provenance);
   page.head_html = facts_html(levels.facts) + warnings_html(levels.warnings);
-  page.sections.push_back(
-      levels_section(level_diagram_figure(diagram), DiagramRoom::Beside));
+  page.sections.push_back(levels_section(level_diagram_figure(diagram), DiagramRoom::Beside));
   page.sections.push_back({"frontier", "Frontier orbitals", frontier_figure(result)});
-  page.sections.push_back({"energies", "Energies and compositions", tables_html({levels.tables.front()})});
   page.sections.push_back(
-      {"populations", "Charges and bonds",
-       tables_html({summary.tables.begin() + 1, summary.tables.end()})});
-  page.sections.push_back(
-      {"symmetry", "Symmetry",
-       facts_html(about_symmetry.facts) + tables_html(about_symmetry.tables)});
-  page.sections.push_back({"geometry", "Geometry", table_html(geometry_table(result))});
+      {"energies", "Energies and compositions", tables_html({levels.tables.front()})});
+  page.sections.push_back({"populations", "Charges and bonds",
+                           tables_html({summary.tables.begin() + 1, summary.tables.end()})});
+  page.sections.push_back({"symmetry", "Symmetry",
+                           facts_html(about_symmetry.facts) + tables_html(about_symmetry.tables)});
+  page.sections.push_back({"geometry", "Geometry", tables_html({geometry_table(result)})});
   page.sections.push_back(method_section(molecules, levels.remarks));
   page.sections.push_back(repeat_section(provenance));
   page.data = page_data(molecules);

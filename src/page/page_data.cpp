@@ -123,8 +123,7 @@ Json molecule_json(const PageMolecule& shown) {
   json["orbitals"] = Json::array();
   for (const Shell& shell : result.basis.shells) {
     for (int component = 0; component < shell.size(); ++component) {
-      json["orbitals"].push_back(
-          {atom_name(molecule, shell.atom), orbital_html(shell, component)});
+      json["orbitals"].push_back({atom_name(molecule, shell.atom), orbital_html(shell, component)});
     }
   }
   const std::vector<AtomSet> sets = atom_sets(result.symmetry);

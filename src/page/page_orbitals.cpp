@@ -8,8 +8,8 @@ namespace irrepwise {
 namespace {
 
 constexpr double share = 0.5;
-constexpr std::size_t many_vertices = 1200;  // of one phase; above it the next coarser grid is used
-constexpr double finest_spacing_angstrom = 0.13;
+constexpr std::size_t many_vertices = 700;  // of one phase; above it the next coarser grid is used
+constexpr double finest_spacing_angstrom = 0.1;
 constexpr double coarsest_spacing_angstrom = 0.4;
 
 std::optional<PackedSurface> packed_phase(const OrbitalField& field, const OrbitalGrid& grid,
@@ -31,11 +31,11 @@ std::optional<PackedSurface> packed_phase(const OrbitalField& field, const Orbit
 std::vector<PageOrbital> page_orbitals(const LevelsResult& result, int level) {
   const OrbitalField field(result.symmetry.molecule, result.basis,
                            level_orbitals(result.symmetry, result.basis, result.levels, level));
-  const OrbitalGrid grid = sample(field);
+  const OrbitalGrid grid = sample(field, {}, light_quality);
   std::vector<PageOrbital> orbitals;
   for (int i = 0; i < field.count(); ++i) {
     PageOrbital orbital;
-    orbital.isovalue = enclosing_isovalue(field, grid, i, share);
+    orbital.isovalue = enclosing_isovalue(field, grid, i, share, light_quality);
     orbital.positive = packed_phase(field, grid, i, orbital.isovalue);
     orbital.negative = packed_phase(field, grid, i, -orbital.isovalue);
     orbitals.push_back(std::move(orbital));

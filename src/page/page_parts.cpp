@@ -7,6 +7,7 @@
 
 #include "figure/svg.hpp"
 #include "molecule/element.hpp"
+#include "output/html_parts.hpp"
 #include "output/html_text.hpp"
 #include "output/table_html.hpp"
 
@@ -22,7 +23,8 @@ std::string rule_html(const Levels& levels) {
           "the weighted rule, <i>H<sub>ij</sub></i> = ½<i>K′S<sub>ij</sub></i>"
           "(<i>H<sub>ii</sub></i> + <i>H<sub>jj</sub></i>) with <i>K′</i> = <i>K</i> + Δ² + "
           "(1 − <i>K</i>)Δ⁴, Δ = (<i>H<sub>ii</sub></i> − <i>H<sub>jj</sub></i>)/"
-          "(<i>H<sub>ii</sub></i> + <i>H<sub>jj</sub></i>), <i>K</i> = {} (Ammeter, Bürgi, Thibeault "
+          "(<i>H<sub>ii</sub></i> + <i>H<sub>jj</sub></i>), <i>K</i> = {} (Ammeter, Bürgi, "
+          "Thibeault "
           "and Hoffmann, J. Am. Chem. Soc. 100, 3686 (1978))",
           k);
     case Rule::WolfsbergHelmholz:
@@ -123,7 +125,8 @@ Table parameters_in_use(std::span<const PageMolecule> molecules) {
 PageSection levels_section(const Figure& diagram, DiagramRoom room) {
   const bool wide = room == DiagramRoom::Above;
   std::string html = fmt::format(
-      "<p>Choose a level by a click, or with the arrow keys once one has the focus, to see its "
+      "<p class=\"hint\">Choose a level by a click, or with the arrow keys once one has the focus, "
+      "to see its "
       "composition, coefficients and orbital.</p>\n<noscript><p>The picture of single levels "
       "needs JavaScript; every table is here without it.</p></noscript>\n"
       "<div class=\"levels{}\">\n<div class=\"scroll\"><figure class=\"diagram{}\">\n",
@@ -152,7 +155,7 @@ PageSection method_section(std::span<const PageMolecule> molecules,
       "different atoms stands ";
   for (std::size_t i = 0; i < rules.size(); ++i) html += (i > 0 ? "; or " : "") + rules[i];
   html += ". Populations are those of Mulliken, J. Chem. Phys. 23, 1833 (1955).</p>\n";
-  html += paragraphs_html(limits) + table_html(parameters_in_use(molecules));
+  html += remarks_html(limits) + table_html(parameters_in_use(molecules));
   return {"method", "Method and limits", std::move(html)};
 }
 

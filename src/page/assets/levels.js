@@ -67,7 +67,7 @@ function partnerButtons(level) {
   const box = element("div", {class: "buttons", role: "group", "aria-label": "Partner shown"});
   if (level.degeneracy < 2 || level.orbitals.length < 2) return box;
   level.orbitals.forEach((_, i) => {
-    const button = element("button", {type: "button", class: "quiet",
+    const button = element("button", {type: "button", class: "choice",
                                       "aria-pressed": i === chosen.partner}, `partner ${i + 1}`);
     button.addEventListener("click", () => {
       chosen.partner = i;
@@ -187,7 +187,7 @@ function prepareView() {
   view = new View(document.getElementById("view"));
   const tools = document.getElementById("view-tools");
   const add = (words, title, action) => {
-    const button = element("button", {type: "button", class: "quiet", title}, words);
+    const button = element("button", {type: "button", class: "choice", title}, words);
     button.addEventListener("click", () => action(button));
     tools.append(button);
   };

@@ -61,7 +61,7 @@ async function copied(text) {
 function copyButton(text) {
   const button = document.createElement("button");
   button.type = "button";
-  button.className = "quiet copy";
+  button.className = "copy";
   button.textContent = "Copy";
   button.addEventListener("click", async () => {
     button.textContent = await copied(text()) ? "Copied" : "Not copied";
