@@ -48,7 +48,7 @@ Figure variants_figure(const Comparison& comparison, const DrawOptions& options)
   if (count > static_cast<std::size_t>(most_columns)) {
     throw Error(fmt::format(
         "{} variants are too many for one diagram, which holds up to {}; name those to draw, with "
-        "commas: --variants {},{}",
+        "commas: --variants \"{},{}\"",
         count, most_columns, comparison.variants[0].name, comparison.variants[1].name));
   }
   return level_diagram_figure(variant_diagram(comparison, choice));
