@@ -8,8 +8,10 @@
 
 #include "cli/axis.hpp"
 #include "cli/commands.hpp"
+#include "cli/compared.hpp"
 #include "cli/computed.hpp"
 #include "cli/draw_kind.hpp"
+#include "cli/draw_variants.hpp"
 #include "cli/orbital_choice.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
@@ -219,6 +221,7 @@ Drawn drawn(const LevelsResult& result, const DrawOptions& options, DrawKind kin
       result, choose_orbitals(options.orbitals, result.symmetry.group, result.levels));
   switch (kind) {
     case DrawKind::Levels:
+    case DrawKind::Variants:
       break;
     case DrawKind::Contours:
       return draw_contours(result, chosen, options);
@@ -232,8 +235,25 @@ Drawn drawn(const LevelsResult& result, const DrawOptions& options, DrawKind kin
   return {};
 }
 
-void run(const DrawOptions& options) {
+void draw_variants(const DrawOptions& options) {
+  std::vector<std::string> files = {options.job.file};
+  files.insert(files.end(), options.others.begin(), options.others.end());
+  const Compared result = compared(files, options.reference);
+  OutputOptions output;
+  output.output = options.output;
+  refuse_to_overwrite(output, result.files_read);
+  const Figure figure = variants_figure(result.comparison, options);
+  print_warnings(output, warnings_of(result.comparison));
+  write_file(options.output, picture_bytes(figure, draw_format(options.output)));
+}
+
+void run(DrawOptions options) {
+  sort_words(options);
   const DrawKind kind = draw_kind(options);
+  if (kind == DrawKind::Variants) {
+    draw_variants(options);
+    return;
+  }
   const Job job = read_job_with(options.job);
   OutputOptions output;
   output.output = options.output;
@@ -255,10 +275,11 @@ Command add_draw(CLI::App& program) {
   const auto options = std::make_shared<DrawOptions>();
   app->set_help_flag("-h,--help", "Show this help");
   add_job_options(*app, options->job);
-  app->add_option("orbitals", options->orbitals,
+  app->add_option("orbitals", options->words,
                   "Levels (2e1g), single partners (2e1g:2), homo, lumo, homo-1, ranges "
-                  "(homo-2..lumo+2) or frontier; without any a level diagram is drawn")
-      ->option_text("ORBITAL ...");
+                  "(homo-2..lumo+2) or frontier; without any a level diagram is drawn. Further "
+                  "files: their levels side by side, as those of a job with `variants:`")
+      ->option_text("ORBITAL ... | FILE ...");
   app->add_option("-o,--output", options->output,
                   "File to write. Level diagrams: .svg, .png. Orbitals: .svg contour lines, .png "
                   "shaded surfaces, .glb mesh (glTF 2.0), .vti grid (VTK ImageData)")
@@ -273,6 +294,12 @@ Command add_draw(CLI::App& program) {
   add("--to", options->to_ev, "eV", "Highest energy shown", "Level diagrams");
   app->add_flag("--pictures", options->pictures, "Show HOMO and LUMO beside their levels")
       ->group("Level diagrams");
+  add("-r,--reference", options->reference, "NAME",
+      "Variant whose HOMO and LUMO are followed; the first by default", "Variants side by side");
+  app->add_option("--variants", options->variants, "Which to draw, in this order, with commas")
+      ->delimiter(',')
+      ->option_text("NAMES")
+      ->group("Variants side by side");
   app->add_flag("--contours", options->contours, "Contour lines also in a .png file")
       ->group("Contour lines");
   add("--plane", options->plane, "PLANE",
@@ -294,6 +321,7 @@ Command add_draw(CLI::App& program) {
       "Exit code: 0 done, 1 something is wrong with input or computation, 2 with the options.\n\n"
       "Examples:\n"
       "  irrepwise draw complex.xyz --charge -2 --output levels.svg\n"
+      "  irrepwise draw family.yaml --reference chloride --output variants.svg\n"
       "  irrepwise draw complex.xyz homo-1..lumo --output orbitals.png\n"
       "  irrepwise draw complex.xyz 2eg --plane xy --output contours.svg\n"
       "  irrepwise draw complex.xyz 2eg:1 --share 0.8 --output orbital.glb");

@@ -7,6 +7,7 @@
 #include <fmt/format.h>
 
 #include "core/error.hpp"
+#include "job/variants.hpp"
 
 namespace irrepwise::cli {
 namespace {
@@ -15,13 +16,34 @@ void refuse(bool given, const char* option, const char* meant_for) {
   if (given) throw CLI::ValidationError(fmt::format("{} is for {} only", option, meant_for));
 }
 
+bool changes_job(const JobOptions& job) {
+  return job.charge || job.multiplicity || !job.parameters.empty() || !job.rule.empty() || job.k ||
+         job.tolerance || !job.z.empty() || !job.x.empty() || !job.subgroup.empty() ||
+         !job.group.empty() || job.limit;
+}
+
+// "../a.xyz" and "a.xyz", but not "homo-1..lumo".
+bool is_file_name(const std::string& word) {
+  return word.find('/') != std::string::npos ||
+         (word.find('.') != std::string::npos && word.find("..") == std::string::npos);
+}
+
 void check_options(const DrawOptions& options, DrawKind kind) {
+  const bool variants = kind == DrawKind::Variants;
   const bool levels = kind == DrawKind::Levels;
   const bool plane = kind == DrawKind::Contours;
   const bool surface = kind == DrawKind::Surfaces || kind == DrawKind::Mesh;
   const bool grid = surface || kind == DrawKind::Grid || (levels && options.pictures);
-  refuse(!levels && (options.from_ev || options.to_ev), "--from or --to", "level diagrams");
-  refuse(!levels && options.pictures, "--pictures", "level diagrams");
+  refuse(!variants && !options.reference.empty(), "--reference", "variants side by side");
+  refuse(!variants && !options.variants.empty(), "--variants", "variants side by side");
+  if (variants && changes_job(options.job)) {
+    throw CLI::ValidationError(
+        "options that change charge, method or symmetry are for one molecule; for variants, write "
+        "it in their job files");
+  }
+  refuse(!levels && !variants && (options.from_ev || options.to_ev), "--from or --to",
+         "level diagrams");
+  refuse(!levels && options.pictures, "--pictures", "the level diagram of one molecule");
   refuse(!plane && !options.plane.empty(), "--plane", "contour drawings");
   refuse(!plane && options.offset_angstrom, "--offset", "contour drawings");
   refuse(!surface && !(levels && options.pictures) && options.share, "--share",
@@ -52,6 +74,12 @@ DrawFormat draw_format(const std::string& output) {
       output));
 }
 
+void sort_words(DrawOptions& options) {
+  for (const std::string& word : options.words) {
+    (is_file_name(word) ? options.others : options.orbitals).push_back(word);
+  }
+}
+
 DrawKind draw_kind(const DrawOptions& options) {
   const DrawFormat format = draw_format(options.output);
   const bool solid = format == DrawFormat::Glb || format == DrawFormat::Vti;
@@ -68,7 +96,14 @@ DrawKind draw_kind(const DrawOptions& options) {
   if (options.orbitals.empty() && plane_asked) {
     throw CLI::ValidationError("--contours and --plane need an orbital, such as homo");
   }
+  if (!options.orbitals.empty() && !options.others.empty()) {
+    throw CLI::ValidationError(
+        "orbitals are drawn of one molecule; give one file with them, or several without");
+  }
   DrawKind kind = DrawKind::Levels;
+  if (!options.others.empty() || (options.orbitals.empty() && has_variants(options.job.file))) {
+    kind = DrawKind::Variants;
+  }
   if (!options.orbitals.empty()) {
     switch (format) {
       case DrawFormat::Svg:

@@ -5,6 +5,7 @@
 #include <memory>
 #include <optional>
 #include <string>
+#include <utility>
 #include <variant>
 #include <vector>
 
@@ -82,6 +83,8 @@ struct Group {
   std::string name;   // "2e1g": which one, in ASCII; in SVG `data-name`
   std::string title;  // what a pointer over it is told; may be empty
   std::vector<Element> elements;
+  std::vector<std::pair<std::string, std::string>> facts = {};  // "column", "chloride": for
+                                                                // scripts; in SVG `data-column`
 };
 
 struct Figure {

@@ -20,18 +20,31 @@ std::string count_words(int n, const char* where) {
 }  // namespace
 
 std::string words_on_left_out(const LevelDiagram& diagram) {
-  int below = 0;
-  int above = 0;
+  struct Range {
+    int least = std::numeric_limits<int>::max();
+    int most = 0;
+  };
+  Range below;
+  Range above;
   for (const DiagramColumn& column : diagram.columns) {
+    int n_below = 0;
+    int n_above = 0;
     for (const DiagramLevel& level : column.levels) {
-      below += level.energy_ev < diagram.from_ev ? 1 : 0;
-      above += level.energy_ev > diagram.to_ev ? 1 : 0;
+      n_below += level.energy_ev < diagram.from_ev ? 1 : 0;
+      n_above += level.energy_ev > diagram.to_ev ? 1 : 0;
     }
+    below = {std::min(below.least, n_below), std::max(below.most, n_below)};
+    above = {std::min(above.least, n_above), std::max(above.most, n_above)};
   }
+  const auto words_on = [](const Range& range, const char* where) {
+    if (range.least == range.most) return count_words(range.most, where);
+    return fmt::format("{} to {} levels {}", range.least, range.most, where);
+  };
   std::string words;
-  if (below > 0) words = count_words(below, "below");
-  if (above > 0) words += (words.empty() ? "" : ", ") + count_words(above, "above");
-  return words.empty() ? words : words + " the range shown";
+  if (below.most > 0) words = words_on(below, "below");
+  if (above.most > 0) words += (words.empty() ? "" : ", ") + words_on(above, "above");
+  if (words.empty()) return words;
+  return words + " the range shown" + (diagram.columns.size() > 1 ? ", in each column" : "");
 }
 
 std::string words_on_fractions(const LevelDiagram& diagram) {
@@ -39,7 +52,9 @@ std::string words_on_fractions(const LevelDiagram& diagram) {
     for (const DiagramLevel& level : column.levels) {
       if (is_shown(diagram, level) &&
           std::abs(level.occupation - std::round(level.occupation)) > 1e-9) {
-        return fmt::format("{} holds {:g} electrons, spread evenly", level.label, level.occupation);
+        const std::string of = diagram.columns.size() > 1 ? " of " + column.title : "";
+        return fmt::format("{}{} holds {:g} electrons, spread evenly", level.label, of,
+                           level.occupation);
       }
     }
   }
@@ -64,7 +79,12 @@ std::string spoken_levels(const LevelDiagram& diagram) {
   return text;
 }
 
-void check_window(const LevelDiagram& diagram) {
+void check_diagram(const LevelDiagram& diagram) {
+  if (diagram.columns.size() > static_cast<std::size_t>(most_columns)) {
+    throw Error(
+        fmt::format("{} columns of levels are too many for one diagram; choose up to {} of them",
+                    diagram.columns.size(), most_columns));
+  }
   if (!(diagram.to_ev > diagram.from_ev)) {
     throw Error(
         fmt::format("the range of energies runs from {} to {} eV; its end must lie above "

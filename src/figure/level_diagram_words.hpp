@@ -16,7 +16,9 @@ namespace irrepwise {
 /// Every level shown, from high to low.
 [[nodiscard]] std::string spoken_levels(const LevelDiagram& diagram);
 
-/// @throws Error  for a window without levels, or whose end is not above its start
-void check_window(const LevelDiagram& diagram);
+/// @throws Error  for a window without levels, or whose end is not above its start, and for too
+/// many
+///                columns
+void check_diagram(const LevelDiagram& diagram);
 
 }  // namespace irrepwise

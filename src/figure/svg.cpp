@@ -150,6 +150,9 @@ std::string svg_element(const Figure& figure, std::string_view id) {
     out += "<g";
     if (!group.kind.empty()) out += fmt::format(" class=\"{}\"", escaped(group.kind));
     if (!group.name.empty()) out += fmt::format(" data-name=\"{}\"", escaped(group.name));
+    for (const auto& [key, value] : group.facts) {
+      out += fmt::format(" data-{}=\"{}\"", key, escaped(value));
+    }
     out += ">\n";
     if (!group.title.empty()) out += "<title>" + escaped(group.title) + "</title>\n";
     for (const Element& element : group.elements) {

@@ -9,7 +9,8 @@
 namespace irrepwise {
 
 /// A whole document with title and description for screen readers. Each group is a <g> with its
-/// kind as class and its name as data-name; pictures are carried inside as PNG.
+/// kind as class, its name as data-name and its facts as further data attributes; pictures are
+/// carried inside as PNG.
 [[nodiscard]] std::string svg_document(const Figure& figure);
 
 /// The same without a background and without the prologue of a document, to stand in a page.

@@ -20,7 +20,15 @@ void check_keys(const YamlNode& variant) {
                     "parameters", "overrides", "rule", "k", "symmetry"});
 }
 
+const YamlNode* find_list(const YamlNode& job) {
+  return job.kind() == YamlNode::Kind::Map ? job.find("variants") : nullptr;
+}
+
 }  // namespace
+
+bool has_variants(const std::string& path) {
+  return is_job_file(path) && find_list(YamlNode::parse(read_text_file(path), path)) != nullptr;
+}
 
 std::vector<VariantJob> variant_jobs(const std::string& path) {
   const auto whole = [&] {
@@ -29,8 +37,7 @@ std::vector<VariantJob> variant_jobs(const std::string& path) {
   };
   if (!is_job_file(path)) return whole();
   const auto node = std::make_shared<const YamlNode>(YamlNode::parse(read_text_file(path), path));
-  const YamlNode* const list =
-      node->kind() == YamlNode::Kind::Map ? node->find("variants") : nullptr;
+  const YamlNode* const list = find_list(*node);
   if (!list) return whole();
   const std::span<const YamlNode> items = list->list("a list of variants");
   if (items.empty()) list->fail("found no variant, expected at least one");

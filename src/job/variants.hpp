@@ -23,4 +23,8 @@ struct VariantJob {
 /// @throws Error  as `read_job`; for a variant without a name, or a name used twice
 [[nodiscard]] std::vector<VariantJob> variant_jobs(const std::string& path);
 
+/// @returns  whether the file is a job with `variants:`
+/// @throws Error  for a job file that cannot be read
+[[nodiscard]] bool has_variants(const std::string& path);
+
 }  // namespace irrepwise

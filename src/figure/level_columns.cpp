@@ -1,0 +1,183 @@
+#include "figure/level_columns.hpp"
+
+#include <algorithm>
+#include <cmath>
+#include <cstddef>
+
+#include "figure/level_lanes.hpp"
+#include "figure/level_placing.hpp"
+#include "figure/rich_text.hpp"
+
+namespace irrepwise {
+namespace {
+
+constexpr double least_bars_width = 54.0;
+constexpr double least_bar = 7.0;
+constexpr double lane_gap = 8.0;   // between levels that share the width
+constexpr double clearance = 2.6;  // px of white between bars one above the other
+constexpr double leader = 14.0;    // room between bars and labels
+
+// What a level needs above and below its line.
+double half_extent(const DiagramLevel& level) {
+  const double half = is_partly_filled(level) ? column_arrow_height : column_bar_thickness;
+  return 0.5 * (half + clearance);
+}
+
+// Levels that touch, directly or through others, by indices into the column; each with its lane.
+struct Cluster {
+  std::vector<std::size_t> members;
+  std::vector<std::size_t> lanes;      // per member
+  std::vector<int> lane_degeneracies;  // per lane, the largest
+};
+
+std::vector<Cluster> clusters_of(const std::vector<ColumnLevel>& levels) {
+  std::vector<Cluster> clusters;
+  double reach = 0.0;  // the highest point, y downwards, that the cluster touches
+  for (std::size_t i = 0; i < levels.size(); ++i) {
+    const double half = half_extent(*levels[i].level);
+    if (clusters.empty() || levels[i].y + half <= reach) {
+      clusters.push_back({});
+      reach = levels[i].y - half;
+    }
+    clusters.back().members.push_back(i);
+    reach = std::min(reach, levels[i].y - half);
+  }
+  for (Cluster& cluster : clusters) {
+    for (const std::size_t i : cluster.members) {
+      std::vector<bool> taken(cluster.members.size() + 1, false);
+      for (std::size_t k = 0; k < cluster.lanes.size(); ++k) {
+        const ColumnLevel& other = levels[cluster.members[k]];
+        const double needed = half_extent(*levels[i].level) + half_extent(*other.level);
+        if (std::abs(levels[i].y - other.y) < needed) taken[cluster.lanes[k]] = true;
+      }
+      std::size_t lane = 0;
+      while (taken[lane]) ++lane;
+      cluster.lanes.push_back(lane);
+      if (cluster.lane_degeneracies.size() <= lane) cluster.lane_degeneracies.push_back(0);
+      int& widest = cluster.lane_degeneracies[lane];
+      widest = std::max(widest, levels[i].level->degeneracy);
+    }
+  }
+  return clusters;
+}
+
+// Of a cluster: what is no bar, and how many bars stand side by side.
+double gaps_width(const Cluster& cluster) {
+  double width = lane_gap * static_cast<double>(cluster.lane_degeneracies.size() - 1);
+  for (const int d : cluster.lane_degeneracies) width += column_bar_gap * (d - 1);
+  return width;
+}
+
+int bars_across(const Cluster& cluster) {
+  int bars = 0;
+  for (const int d : cluster.lane_degeneracies) bars += d;
+  return bars;
+}
+
+std::vector<ColumnLevel> shown_levels(const LevelDiagram& diagram, const DiagramColumn& column,
+                                      double top, double per_ev) {
+  std::vector<ColumnLevel> levels;
+  for (std::size_t i = 0; i < column.levels.size(); ++i) {
+    const DiagramLevel& level = column.levels[i];
+    if (!is_shown(diagram, level)) continue;
+    ColumnLevel drawn;
+    drawn.level = &level;
+    drawn.index = static_cast<int>(i);
+    drawn.y = top + (diagram.to_ev - level.energy_ev) * per_ev;
+    levels.push_back(drawn);
+  }
+  return levels;
+}
+
+// Labels are moved apart; y runs downwards, levels upwards.
+double place_labels(std::vector<ColumnLevel>& levels, const Font& font) {
+  std::vector<std::size_t> labelled;
+  std::vector<double> places;
+  for (std::size_t i = levels.size(); i-- > 0;) {
+    if (!levels[i].level->labelled) continue;
+    labelled.push_back(i);
+    places.push_back(levels[i].y);
+  }
+  const std::vector<double> middles = spread_apart(places, column_label_height);
+  double widest = 0.0;
+  for (std::size_t k = 0; k < labelled.size(); ++k) {
+    ColumnLevel& level = levels[labelled[k]];
+    level.label_y = middles[k];
+    level.label_width = font.width(column_label(*level.level), column_label_size);
+    widest = std::max(widest, level.label_width);
+  }
+  return widest;
+}
+
+}  // namespace
+
+bool is_partly_filled(const DiagramLevel& level) {
+  return level.occupation > 1e-9 && level.occupation < 2.0 * level.degeneracy - 1e-9;
+}
+
+RichText column_label(const DiagramLevel& level) {
+  RichText words = label_text(level.label);
+  if (!level.parent.empty()) {
+    words = words + plain_text("\u00A0(") + label_text(level.parent) + plain_text(")");
+  }
+  if (level.frontier == FrontierMark::Homo) return words + plain_text("\u00A0HOMO");
+  if (level.frontier == FrontierMark::Lumo) return words + plain_text("\u00A0LUMO");
+  return words;
+}
+
+double column_scale(const LevelDiagram& diagram) {
+  constexpr double least_height = 560.0;
+  constexpr double most_height = 900.0;
+  constexpr int wanted_across = 4;
+  const double range = diagram.to_ev - diagram.from_ev;
+  const auto is_dense = [&](double height) {
+    for (const DiagramColumn& column : diagram.columns) {
+      for (const Cluster& cluster :
+           clusters_of(shown_levels(diagram, column, 0.0, height / range))) {
+        if (bars_across(cluster) > wanted_across && cluster.lane_degeneracies.size() > 1) {
+          return true;
+        }
+      }
+    }
+    return false;
+  };
+  double height = least_height;
+  while (height < most_height && is_dense(height)) height += 60.0;
+  return height / range;
+}
+
+LevelColumn place_level_column(const LevelDiagram& diagram, const DiagramColumn& column,
+                               const Font& font, double left, double top, double per_ev) {
+  LevelColumn out;
+  out.left = left;
+  out.levels = shown_levels(diagram, column, top, per_ev);
+  const std::vector<Cluster> clusters = clusters_of(out.levels);
+  double width = least_bars_width;
+  for (const Cluster& cluster : clusters) {
+    width = std::max(width, gaps_width(cluster) + least_bar * bars_across(cluster));
+  }
+  for (const Cluster& cluster : clusters) {
+    const double bar = (width - gaps_width(cluster)) / bars_across(cluster);
+    std::vector<double> lane_left = {left};
+    for (const int d : cluster.lane_degeneracies) {
+      lane_left.push_back(lane_left.back() + d * bar + (d - 1) * column_bar_gap + lane_gap);
+    }
+    for (std::size_t k = 0; k < cluster.members.size(); ++k) {
+      ColumnLevel& level = out.levels[cluster.members[k]];
+      const std::size_t lane = cluster.lanes[k];
+      const int d = level.level->degeneracy;
+      // A level that is narrower than its lane fills it all the same.
+      const double room = lane_left[lane + 1] - lane_gap - lane_left[lane];
+      level.left = lane_left[lane];
+      level.bar = (room - (d - 1) * column_bar_gap) / d;
+      level.right = level.left + room;
+    }
+  }
+  out.bars_right = left + width;
+  out.labels_left = out.bars_right + leader;
+  const double widest = place_labels(out.levels, font);
+  out.right = widest > 0.0 ? out.labels_left + widest + 4.0 : out.bars_right + 4.0;
+  return out;
+}
+
+}  // namespace irrepwise
