@@ -20,6 +20,7 @@
 #include "core/output_file.hpp"
 #include "core/parallel.hpp"
 #include "job/variants.hpp"
+#include "page/comparison_page.hpp"
 #include "page/molecule_page.hpp"
 
 namespace irrepwise::cli {
@@ -74,7 +75,12 @@ Written molecule(const ReportOptions& options, const std::string& command) {
           result.warnings};
 }
 
-Written comparison(const ReportOptions&, const std::string&) { return {}; }
+Written comparison(const ReportOptions& options, const std::string& command) {
+  const Compared result = compared(options.files, options.reference, options.threads);
+  refuse_to_overwrite(options.output, result.files_read);
+  return {comparison_page(result.comparison, provenance(command, result.files_read), options.page),
+          warnings_of(result.comparison)};
+}
 
 void run(ReportOptions options, const std::string& command) {
   if (!options.output.output.ends_with(".html")) {
@@ -82,7 +88,7 @@ void run(ReportOptions options, const std::string& command) {
                             options.output.output));
   }
   options.page.threads = options.threads.value_or(hardware_threads());
-  const bool several = options.files.size() > 1 || false;
+  const bool several = options.files.size() > 1 || has_variants(options.files.front());
   if (several && options.job.is_used()) {
     throw CLI::ValidationError(
         "options of a single job (charge, method, symmetry) cannot hold for a comparison; write "

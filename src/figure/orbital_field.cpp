@@ -10,6 +10,10 @@
 namespace irrepwise {
 namespace {
 
+// Y_00, and what Y_1m is along its own axis.
+const double s_harmonic = real_harmonics(0, Eigen::Vector3d::UnitX())(0);
+const double p_harmonic = real_harmonics(1, Eigen::Vector3d::UnitX())(0);
+
 // N = (2 zeta)^(n + 1/2) / sqrt((2n)!)
 double radial_norm(const SlaterRadial& function) {
   const int n = function.n();
@@ -72,8 +76,9 @@ OrbitalField::OrbitalField(const Molecule& molecule, const Basis& basis,
       const Shell& shell = basis.shells[static_cast<std::size_t>(s)];
       FieldShell field;
       field.l = shell.l;
-      field.coefficients = orbitals.middleRows(shell.first_orbital, shell.size()).transpose();
-      const double largest = field.coefficients.rowwise().norm().maxCoeff();
+      const Eigen::MatrixXd rows = orbitals.middleRows(shell.first_orbital, shell.size());
+      field.coefficients.assign(rows.data(), rows.data() + rows.size());
+      const double largest = rows.colwise().norm().maxCoeff();
       if (largest < 1e-12) continue;
       field.first_term = static_cast<int>(terms_.size());
       for (const auto& term : shell.radial.terms()) {
@@ -94,6 +99,12 @@ OrbitalField::OrbitalField(const Molecule& molecule, const Basis& basis,
 }
 
 void OrbitalField::add(int centre, const Eigen::Vector3d& point_angstrom, double* values) const {
+  add_some(centre, point_angstrom, 0, count_, values);
+}
+
+// Only the orbitals `first` to `end` - 1, the value of the first at values[0].
+void OrbitalField::add_some(int centre, const Eigen::Vector3d& point_angstrom, int first, int end,
+                            double* values) const {
   const auto c = static_cast<std::size_t>(centre);
   const Eigen::Vector3d from_atom =
       (point_angstrom - centres_[c].position_angstrom) / bohr_in_angstrom;
@@ -114,11 +125,27 @@ void OrbitalField::add(int centre, const Eigen::Vector3d& point_angstrom, double
       }
       radial += term.weight * power(r, term.power) * decay;
     }
-    const HarmonicVector harmonics = real_harmonics(shell.l, direction);
-    for (int k = 0; k < count_; ++k) {
-      double angular = 0.0;
-      for (int m = 0; m < 2 * shell.l + 1; ++m) angular += shell.coefficients(k, m) * harmonics(m);
-      values[k] += radial * angular;
+    const double* row = &shell.coefficients[static_cast<std::size_t>(first * (2 * shell.l + 1))];
+    switch (shell.l) {  // s and p, most of all shells, without a call
+      case 0:
+        radial *= s_harmonic;
+        for (int k = first; k < end; ++k) values[k - first] += radial * *row++;
+        break;
+      case 1:
+        radial *= p_harmonic;
+        for (int k = first; k < end; ++k, row += 3) {
+          values[k - first] +=
+              radial * (row[0] * direction.x() + row[1] * direction.y() + row[2] * direction.z());
+        }
+        break;
+      default: {
+        const HarmonicVector harmonics = real_harmonics(shell.l, direction);
+        for (int k = first; k < end; ++k) {
+          double angular = 0.0;
+          for (int m = 0; m < 2 * shell.l + 1; ++m) angular += *row++ * harmonics(m);
+          values[k - first] += radial * angular;
+        }
+      }
     }
   }
 }
@@ -134,7 +161,13 @@ Eigen::VectorXd OrbitalField::values(const Eigen::Vector3d& point_angstrom) cons
 }
 
 double OrbitalField::value(const Eigen::Vector3d& point_angstrom, int orbital) const {
-  return values(point_angstrom)(orbital);
+  double result = 0.0;
+  for (std::size_t c = 0; c < centres_.size(); ++c) {
+    const double distance = (point_angstrom - centres_[c].position_angstrom).norm();
+    if (distance <= centres_[c].reach_angstrom)
+      add_some(static_cast<int>(c), point_angstrom, orbital, orbital + 1, &result);
+  }
+  return result;
 }
 
 }  // namespace irrepwise

@@ -48,8 +48,11 @@ class OrbitalField {
     int l;
     int first_term;
     int end_term;
-    Eigen::MatrixXd coefficients;  // `count x (2l + 1)`
+    std::vector<double> coefficients;  // 2l + 1 for each orbital
   };
+
+  void add_some(int centre, const Eigen::Vector3d& point_angstrom, int first, int end,
+                double* values) const;
 
   int count_ = 0;
   std::vector<Centre> centres_;

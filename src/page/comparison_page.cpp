@@ -19,6 +19,7 @@ namespace {
 
 constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
 constexpr int levels_around_frontier = 2;
+const Eigen::Vector3d usual_eye(0.45, -0.8, 0.4);  // no axis hides behind another
 
 std::string character_tables_html(const Comparison& comparison) {
   std::string html;
@@ -51,10 +52,11 @@ std::string variants_html(const Comparison& comparison) {
 
 std::string comparison_page(const Comparison& comparison, const Provenance& provenance,
                             const PageOptions& options) {
-  const Report report = compare_report(comparison, {.differences = comparison.variants.size() > 1});
-  LevelDiagram diagram = variant_diagram(comparison);
-  if (options.from_ev) diagram.from_ev = *options.from_ev;
-  if (options.to_ev) diagram.to_ev = *options.to_ev;
+  CompareParts parts;
+  parts.differences = comparison.variants.size() > 1;
+  const Report report = compare_report(comparison, parts);
+  const LevelDiagram diagram = variant_diagram(
+      comparison, {.variants = {}, .from_ev = options.from_ev, .to_ev = options.to_ev});
 
   std::vector<PageMolecule> molecules;
   for (const VariantResult& variant : comparison.variants) {
@@ -77,7 +79,7 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
       {"variants", "Geometry, charges and bonds of each variant", variants_html(comparison)});
   page.sections.push_back(method_section(molecules, report.remarks));
   page.sections.push_back(repeat_section(provenance));
-  page.data = page_data(molecules);
+  page.data = page_data(molecules, usual_eye);
   return html_document(page);
 }
 

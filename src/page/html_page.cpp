@@ -23,10 +23,11 @@ extern const std::string_view page_levels_js;
 namespace {
 
 // Colours of figures that follow the page from light to dark, and the variable that each becomes.
-constexpr std::array<std::pair<std::string_view, Colour>, 6> themed = {{
+constexpr std::array<std::pair<std::string_view, Colour>, 7> themed = {{
     {"ink", palette::ink},
     {"muted", palette::muted},
     {"faint", palette::faint},
+    {"grid", palette::grid},
     {"empty", palette::empty},
     {"accent", palette::homo},
     {"lumo", palette::lumo},

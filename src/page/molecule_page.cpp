@@ -32,7 +32,12 @@ LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) 
 }
 
 // The pictures of HOMO and LUMO stand in the page also where no script runs, and on paper.
-std::string frontier_figure(const LevelsResult& result) {
+struct FrontierFigure {
+  std::string html;
+  Eigen::Vector3d eye;  // from where it is seen
+};
+
+FrontierFigure frontier_figure(const LevelsResult& result) {
   std::vector<OrbitalChoice> choices;
   for (const std::optional<int>& level :
        {result.levels.frontier.homo, result.levels.frontier.lumo}) {
@@ -44,9 +49,11 @@ std::string frontier_figure(const LevelsResult& result) {
   const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, {});
   std::vector<Scene> scenes;
   for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
+  const Camera camera = best_camera(scenes);
   const Figure figure = surface_sheet(sheet_heading(result), result.symmetry.molecule,
-                                      chosen.captions, surfaces.scenes, best_camera(scenes));
-  return "<figure class=\"scroll\">\n" + svg_element(figure, "frontier") + "</figure>\n";
+                                      chosen.captions, surfaces.scenes, camera);
+  return {"<figure class=\"scroll\">\n" + svg_element(figure, "frontier") + "</figure>\n",
+          camera.towards};
 }
 
 }  // namespace
@@ -62,12 +69,13 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
       page_molecule(charged_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
   add_surfaces(molecules, every_level, options.threads);
 
+  const FrontierFigure frontier = frontier_figure(result);
   HtmlPage page;
   page.title = levels.title;
   page.generator = generator_words(provenance);
   page.head_html = facts_html(levels.facts) + warnings_html(levels.warnings);
   page.sections.push_back(levels_section(level_diagram_figure(diagram), DiagramRoom::Beside));
-  page.sections.push_back({"frontier", "Frontier orbitals", frontier_figure(result)});
+  page.sections.push_back({"frontier", "Frontier orbitals", frontier.html});
   page.sections.push_back(
       {"energies", "Energies and compositions", tables_html({levels.tables.front()})});
   page.sections.push_back({"populations", "Charges and bonds",
@@ -77,7 +85,7 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
   page.sections.push_back({"geometry", "Geometry", tables_html({geometry_table(result)})});
   page.sections.push_back(method_section(molecules, levels.remarks));
   page.sections.push_back(repeat_section(provenance));
-  page.data = page_data(molecules);
+  page.data = page_data(molecules, frontier.eye);
   return html_document(page);
 }
 

@@ -148,12 +148,18 @@ Json first_json(const std::vector<PageMolecule>& molecules) {
 
 }  // namespace
 
-std::string page_data(const std::vector<PageMolecule>& molecules) {
+std::string page_data(const std::vector<PageMolecule>& molecules, const Eigen::Vector3d& eye) {
   Json json;
-  json["colours"] = {{"positive", colour_json(palette::positive)},
-                     {"negative", colour_json(palette::negative)},
-                     {"stick", colour_json(stick_colour)}};
-  json["stick_radius"] = stick_radius_angstrom;
+  json["look"] = {{"positive", colour_json(palette::positive)},
+                  {"negative", colour_json(palette::negative)},
+                  {"stick", colour_json(stick_colour)},
+                  {"stick_radius", stick_radius_angstrom}};
+  json["eye"] = {rounded(eye.x(), to_length), rounded(eye.y(), to_length),
+                 rounded(eye.z(), to_length)};
+  json["no_surface"] = "The page has no surface of this level: `irrepwise draw` makes its picture.";
+  json["coefficient_note"] =
+      "Coefficients over atomic orbitals in the standard frame, normalised with overlap; left out "
+      "where below 0.05 with a share below 1 %. Shares are Mulliken's, means over the partners.";
   json["first"] = first_json(molecules);
   json["molecules"] = Json::array();
   for (const PageMolecule& molecule : molecules) {

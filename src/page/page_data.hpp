@@ -21,7 +21,9 @@ struct PageMolecule {
 };
 
 /// @param molecules  in the order of the columns of the diagram
+/// @param eye        from where the molecules are seen at first, standard frame
 /// @returns          JSON that may stand inside a <script> element: "</" does not occur in it
-[[nodiscard]] std::string page_data(const std::vector<PageMolecule>& molecules);
+[[nodiscard]] std::string page_data(const std::vector<PageMolecule>& molecules,
+                                    const Eigen::Vector3d& eye);
 
 }  // namespace irrepwise

@@ -8,8 +8,8 @@
 namespace irrepwise {
 namespace {
 
-constexpr std::size_t most_characters = 1'700'000;
-constexpr int batch = 8;  // computed before the size is looked at again
+constexpr std::size_t most_characters = 1'400'000;
+constexpr int batch = 4;  // levels computed before the size is looked at again
 
 struct Task {
   int rank = 0;  // 0: HOMO or LUMO, 1: the level next to them …

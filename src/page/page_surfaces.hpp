@@ -11,7 +11,7 @@ namespace irrepwise {
 /// @param levels_around  how many levels below the HOMO and above the LUMO are of interest
 /// @param threads        changes no result
 /// Fills the surfaces of levels, every molecule's frontier first, until the page holds about
-/// 1.7 million characters of them; the levels left out have none.
+/// 1.4 million characters of them; the levels left out have none.
 void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads);
 
 }  // namespace irrepwise

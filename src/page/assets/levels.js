@@ -128,11 +128,7 @@ function choose(element) {
 
 // Up and down go through a column by energy, left and right to the nearest level of the next.
 function neighbour(from, key) {
-  const middle = g => {
-    const box = g.querySelector(".hit");
-    return [Number(box.getAttribute("x")) + Number(box.getAttribute("width")) / 2,
-            Number(box.getAttribute("y")) + Number(box.getAttribute("height")) / 2];
-  };
+  const left = g => Number(g.querySelector(".hit").getAttribute("x"));
   const column = moleculeOf(from);
   const y = energyOf(from);
   const wanted = key === "ArrowLeft" ? column - 1 : key === "ArrowRight" ? column + 1 : column;
@@ -142,7 +138,7 @@ function neighbour(from, key) {
   }
   const up = key === "ArrowUp";
   const order = levelElements().filter(g => moleculeOf(g) === column)
-    .sort((a, b) => energyOf(a) - energyOf(b) || middle(a)[0] - middle(b)[0]);
+    .sort((a, b) => energyOf(a) - energyOf(b) || left(a) - left(b));
   return order[order.indexOf(from) + (up ? 1 : -1)];
 }
 
@@ -152,15 +148,19 @@ function energyOf(g) {
 
 function prepareLevels() {
   for (const g of levelElements()) {
-    const box = g.getBBox();
-    const hit = document.createElementNS("http://www.w3.org/2000/svg", "rect");
-    hit.setAttribute("class", "hit");
-    hit.setAttribute("x", box.x - 6);
-    hit.setAttribute("y", box.y - 4);
-    hit.setAttribute("width", box.width + 12);
-    hit.setAttribute("height", box.height + 8);
-    hit.setAttribute("rx", 4);
-    g.prepend(hit);
+    // Around each bar and word, not around all of them: a label may stand far from its level.
+    for (const part of [...g.children].reverse()) {
+      const thick = Number(part.getAttribute("stroke-width") ?? 0) >= 2;
+      if (part.tagName !== "text" && !thick) continue;
+      const box = part.getBBox();
+      const hit = document.createElementNS("http://www.w3.org/2000/svg", "rect");
+      hit.setAttribute("class", "hit");
+      hit.setAttribute("x", box.x - 5);
+      hit.setAttribute("y", box.y + box.height / 2 - Math.max(7, box.height / 2 + 2));
+      hit.setAttribute("width", box.width + 10);
+      hit.setAttribute("height", Math.max(14, box.height + 4));
+      g.prepend(hit);
+    }
     g.setAttribute("role", "button");
     g.setAttribute("tabindex", -1);
     g.setAttribute("aria-label", g.querySelector("title")?.textContent ?? g.dataset.name);
@@ -184,7 +184,7 @@ function prepareLevels() {
 }
 
 function prepareView() {
-  view = new View(document.getElementById("view"));
+  view = new View(document.getElementById("view"), page.look);
   const tools = document.getElementById("view-tools");
   const add = (words, title, action) => {
     const button = element("button", {type: "button", class: "choice", title}, words);

@@ -3,10 +3,6 @@
 "use strict";
 
 const LIGHT = [-0.41, 0.52, 0.75];  // in the frame of the eye: x right, y up, z towards it
-const STICK_RADIUS = 0.07;          // angstrom
-const STICK_COLOUR = [154, 163, 172];
-const POSITIVE = [43, 108, 184];
-const NEGATIVE = [242, 177, 60];
 const SURFACE_OPACITY = 0.8;
 
 // Little-endian numbers of one kind, as the page carries them.
@@ -32,7 +28,7 @@ function unpackedSurface(packed, colour) {
 }
 
 // A stick as a mesh, its ends inside the balls.
-function stickBetween(a, b) {
+function stickBetween(a, b, radius, colour) {
   const sectors = 12;
   const axis = [b[0] - a[0], b[1] - a[1], b[2] - a[2]];
   const length = Math.hypot(...axis);
@@ -45,14 +41,14 @@ function stickBetween(a, b) {
     const phi = 2 * Math.PI * j / sectors;
     const n = u.map((x, i) => Math.cos(phi) * x + Math.sin(phi) * v[i]);
     for (const end of [a, b]) {
-      vertices.push(...end.map((x, i) => x + STICK_RADIUS * n[i]));
+      vertices.push(...end.map((x, i) => x + radius * n[i]));
       normals.push(...n);
     }
     const p = 2 * j, q = 2 * ((j + 1) % sectors);
     triangles.push(p, q, p + 1, q, q + 1, p + 1);
   }
   return {vertices: new Float32Array(vertices), normals: new Float32Array(normals),
-          triangles: new Uint16Array(triangles), colour: STICK_COLOUR};
+          triangles: new Uint16Array(triangles), colour};
 }
 
 function cross(a, b) {
@@ -203,8 +199,10 @@ function laidOver(solid, surface) {
 
 // A view in a <canvas>. `show(molecule, orbital)` changes what is seen, not from where.
 class View {
-  constructor(canvas) {
+  // look: colours of the phases and sticks, and how thick those are, angstrom
+  constructor(canvas, look) {
     this.canvas = canvas;
+    this.look = look;
     this.molecule = null;
     this.surfaces = [];
     this.frame = frameFrom([0.45, -0.8, 0.4]);
@@ -219,16 +217,18 @@ class View {
     if (molecule !== this.molecule) {
       this.molecule = molecule;
       this.sticks = molecule.bonds.map(
-          ([a, b]) => stickBetween(molecule.atoms[a].place, molecule.atoms[b].place));
+          ([a, b]) => stickBetween(molecule.atoms[a].place, molecule.atoms[b].place,
+                                    this.look.stick_radius, this.look.stick));
       this.centre = [0, 1, 2].map(k => {
         const along = molecule.atoms.map(atom => atom.place[k]);
         return (Math.min(...along) + Math.max(...along)) / 2;
       });
-      this.reach = 1.2 + Math.max(0.6, ...molecule.atoms.map(
+      this.reach = 0.7 + Math.max(0.8, ...molecule.atoms.map(
           atom => Math.hypot(...atom.place.map((x, k) => x - this.centre[k]))));
     }
     this.surfaces = !orbital ? [] : [
-      unpackedSurface(orbital.positive, POSITIVE), unpackedSurface(orbital.negative, NEGATIVE),
+      unpackedSurface(orbital.positive, this.look.positive),
+      unpackedSurface(orbital.negative, this.look.negative),
     ].filter(surface => surface);
     this.draw();
   }
