@@ -29,6 +29,9 @@ struct OrbitalGrid {
   std::vector<double> integrals;            // per orbital, of the density over the grid
 };
 
+/// Every orbital at the points of one lattice, whatever part of the molecule it holds.
+[[nodiscard]] OrbitalGrid sample_on(const OrbitalField& field, const GridShape& shape);
+
 /// @param spacing_angstrom  as the user wants it; without it, 0.07 to 0.15 Å by the size of the
 ///                          molecule, finer where the integral of some density is otherwise
 ///                          further than 0.005 from 1
