@@ -6,11 +6,14 @@
 For each input: the level diagram and the contour drawing are well-formed SVG with title and
 description; the PNG decodes; of the HOMO, the density on the VTK grid integrates to 1 within 1 %,
 the isovalue encloses half of it, and the vertices of the glTF mesh lie on that value as interpolated
-from the grid. Two runs give the same bytes. Only Python's standard library is needed; where python3-vtk9 is installed, VTK itself
-reads the grid too.
+from the grid. The values themselves are those of the Slater functions, evaluated here from the
+coefficients and exponents that `levels` and `parameters` print. Of a job with variants, the diagram
+has the levels of every variant once. Two runs give the same bytes. Only Python's standard library is
+needed; where python3-vtk9 is installed, VTK itself reads the grid and the mesh too.
 """
 import base64
 import json
+import math
 import os
 import struct
 import subprocess
@@ -188,13 +191,123 @@ def check_mesh(meshes, extras, grid):
     expect("positive phase" in meshes, "glb: no surface")
 
 
-def check_with_vtk(path, grid):
+def printed(program, *arguments):
+    done = subprocess.run([program, *arguments, "--format", "json"], capture_output=True, text=True)
+    expect(done.returncode == 0, f"{arguments}: exit code {done.returncode}: {done.stderr}")
+    return json.loads(done.stdout)
+
+
+ANGULAR = {  # real spherical harmonics times sqrt(4 pi), of a unit vector
+    "s": lambda x, y, z: 1.0,
+    "px": lambda x, y, z: math.sqrt(3) * x,
+    "py": lambda x, y, z: math.sqrt(3) * y,
+    "pz": lambda x, y, z: math.sqrt(3) * z,
+    "dz2": lambda x, y, z: math.sqrt(5) / 2 * (3 * z * z - 1),
+    "dx2-y2": lambda x, y, z: math.sqrt(15) / 2 * (x * x - y * y),
+    "dxy": lambda x, y, z: math.sqrt(15) * x * y,
+    "dxz": lambda x, y, z: math.sqrt(15) * x * z,
+    "dyz": lambda x, y, z: math.sqrt(15) * y * z,
+}
+
+
+class Orbital:
+    """One molecular orbital, evaluated from what `levels` and `parameters` print."""
+
+    def __init__(self, program, job, name):
+        levels = printed(program, "levels", job, "--coefficients", "--all")
+        label, _, partner = name.partition(":")
+        level = next(level for level in levels["orbitals"] if level["label"] == label)
+        self.rotation = levels["symmetry"]["rotation"]
+        self.origin = levels["symmetry"]["origin"]
+        elements = sorted({atom["element"] for atom in levels["atoms"]})
+        shells = {}
+        for element in printed(program, "parameters", *elements)["elements"]:
+            for shell in element["shells"]:
+                shells[element["element"], shell["shell"]] = shell
+        self.terms = []  # place, angular part, n - 1, [(factor, exponent)]
+        coefficients = level["coefficients"][int(partner or 1) - 1]
+        for words, coefficient in zip(levels["matrices"]["orbitals"], coefficients):
+            atom_name, function = words.split()
+            atom = next(atom for atom in levels["atoms"]
+                        if f"{atom['element']}{atom['index']}" == atom_name)
+            shell = shells[atom["element"], function[:2]]
+            n = shell["n"]
+            radial = [(coefficient * term["coefficient"] / math.sqrt(4 * math.pi) *
+                       (2 * term["exponent"])**(n + 0.5) / math.sqrt(math.factorial(2 * n)),
+                       term["exponent"]) for term in shell["terms"]]
+            self.terms.append(((atom["x"], atom["y"], atom["z"]), ANGULAR[function[1:]], n - 1,
+                               radial))
+
+    def value(self, place):
+        """At a place in the standard frame, Å; coefficients and atoms are in that of the input."""
+        here = [sum(self.rotation[k][i] * place[k] for k in range(3)) + self.origin[i]
+                for i in range(3)]
+        total = 0.0
+        for atom, angular, power, radial in self.terms:
+            d = [(here[i] - atom[i]) / BOHR for i in range(3)]
+            r = math.hypot(*d)
+            if r < 1e-9:
+                continue  # none of the points tried lies on an atom
+            factor = sum(c * math.exp(-zeta * r) for c, zeta in radial) * r**power
+            total += factor * angular(d[0] / r, d[1] / r, d[2] / r)
+        return total
+
+
+def check_values(program, job, name, grid, isovalue, meshes):
+    orbital = Orbital(program, job, name)
+    largest = max(abs(value) for value in grid.values)
+    index = grid.names.index(name)
+    count = grid.size[0] * grid.size[1] * grid.size[2]
+    for point in range(count // 5, count, max(1, count // 211)):
+        i, j, k = (point % grid.size[0], point // grid.size[0] % grid.size[1],
+                   point // (grid.size[0] * grid.size[1]))
+        place = [grid.origin[a] + grid.spacing[a] * at for a, at in enumerate((i, j, k))]
+        error = abs(orbital.value(place) - grid.arrays[index][point])
+        # Single precision in the file; functions are cut off where they are below 1e-7.
+        expect(error < 1e-6 * largest + 1e-6, f"grid: {name} at {place} is off by {error:.2e}")
+    for mesh, sign in (("positive phase", 1.0), ("negative phase", -1.0)):
+        vertices = meshes[mesh][0] if mesh in meshes else []
+        for vertex in vertices[::max(1, len(vertices) // 100)]:
+            error = abs(orbital.value(vertex) / (sign * isovalue) - 1.0)
+            expect(error < 1e-4, f"glb: {mesh} of {name} at {vertex} is off by {error:.1e}")
+
+
+def check_variants(program, job, folder):
+    """The diagram of a job with variants has each level of the window once in its column."""
+    path = os.path.join(folder, "variants.svg")
+    data, _ = draw(program, [job, "--from", "-13", "--to", "-5"], path)
+    expect(draw(program, [job, "--from", "-13", "--to", "-5"], path)[0] == data,
+           "variants: two runs differ")
+    root = check_svg(data, "variants")
+    drawn = sorted((g.get("data-column"), g.get("data-name")) for g in root.iter(SVG + "g")
+                   if g.get("class") == "level")
+    compared = printed(program, "compare", job)
+    expect(sorted({column for column, _ in drawn}) ==
+           sorted(variant["name"] for variant in compared["variants"]), "variants: a column each")
+    expect(len(set(drawn)) == len(drawn), "variants: each level once")
+    for variant in compared["variants"]:
+        for level in variant["metal_levels"]:
+            if -13 < level["energy_ev"] < -5:
+                expect((variant["name"], level["label"]) in drawn,
+                       f"variants: {level['label']} of {variant['name']} is missing")
+    links = [g for g in root.iter(SVG + "g") if g.get("class") == "link"]
+    expect(len(links) > len(compared["variants"]), "variants: links")
+    for link in links:
+        for end in ("from", "to"):
+            expect((link.get(f"data-{end}-column"), link.get(f"data-{end}-level")) in drawn,
+                   "variants: a link to a level that is not drawn")
+    check_png(draw(program, [job], os.path.join(folder, "variants.png"))[0])
+    return f"{len(drawn)} levels in {len(compared['variants'])} columns, {len(links)} links"
+
+
+def check_with_vtk(grid_path, grid, mesh_path, meshes):
     try:
+        from vtkmodules.vtkIOGeometry import vtkGLTFReader
         from vtkmodules.vtkIOXML import vtkXMLImageDataReader
     except ImportError:
         return "VTK not installed"
     reader = vtkXMLImageDataReader()
-    reader.SetFileName(path)
+    reader.SetFileName(grid_path)
     reader.Update()
     image = reader.GetOutput()
     expect(list(image.GetDimensions()) == grid.size, "VTK: other dimensions")
@@ -203,10 +316,33 @@ def check_with_vtk(path, grid):
     step = max(1, array.GetNumberOfTuples() // 1000)
     expect(all(array.GetTuple1(i) == grid.values[i]
                for i in range(0, array.GetNumberOfTuples(), step)), "VTK: other values")
+    surface = vtkGLTFReader()
+    surface.SetFileName(mesh_path)
+    surface.ApplyDeformationsToGeometryOn()
+    surface.Update()
+    cells = points = 0
+    walk = surface.GetOutput().NewIterator()
+    while not walk.IsDoneWithTraversal():
+        part = walk.GetCurrentDataObject()
+        cells += part.GetNumberOfCells()
+        points += part.GetNumberOfPoints()
+        walk.GoToNextItem()
+    expect(points == sum(len(vertices) for vertices, _, _ in meshes.values()),
+           "VTK: other vertices in the mesh")
+    expect(3 * cells == sum(len(indices) for _, _, indices in meshes.values()),
+           "VTK: other triangles in the mesh")
     return "VTK agrees"
 
 
+def has_variants(job):
+    with open(job, encoding="utf-8") as file:
+        return any(line.startswith("variants:") for line in file)
+
+
 def check(program, job, folder):
+    if has_variants(job):
+        return check_variants(program, job, folder)
+
     def path(name):
         return os.path.join(folder, name)
 
@@ -236,7 +372,8 @@ def check(program, job, folder):
     extras, meshes = read_glb(mesh_data)
     expect(extras["orbital"] == orbital, "glb: another orbital")
     check_mesh(meshes, extras, grid)
-    return check_with_vtk(path("homo.vti"), grid)
+    check_values(program, job, orbital, grid, float(extras["isovalue_bohr"]), meshes)
+    return check_with_vtk(path("homo.vti"), grid, path("homo.glb"), meshes)
 
 
 def main():

@@ -1,8 +1,11 @@
 #include "figure/isosurface.hpp"
 
+#include <algorithm>
 #include <cmath>
+#include <numeric>
 #include <unordered_map>
 #include <utility>
+#include <vector>
 
 namespace irrepwise {
 namespace {
@@ -169,10 +172,142 @@ class Surface {
   std::unordered_map<std::uint64_t, std::uint32_t> known_;
 };
 
+// A part of a mesh that hangs together.
+struct Piece {
+  std::vector<std::uint32_t> vertices;  // indices, ascending
+  std::size_t triangles = 0;
+  Eigen::Vector3f low;
+  Eigen::Vector3f high;
+};
+
+std::vector<Piece> pieces_of(const Mesh& mesh, std::vector<std::size_t>& piece_of_vertex) {
+  std::vector<std::uint32_t> root(mesh.vertices.size());
+  std::iota(root.begin(), root.end(), 0u);
+  const auto find = [&](std::uint32_t v) {
+    while (root[v] != v) v = root[v] = root[root[v]];
+    return v;
+  };
+  for (const auto& t : mesh.triangles) {
+    for (const std::uint32_t v : {t[1], t[2]}) {
+      const std::uint32_t a = find(t[0]);
+      const std::uint32_t b = find(v);
+      root[std::max(a, b)] = std::min(a, b);
+    }
+  }
+  std::vector<Piece> pieces;
+  piece_of_vertex.assign(mesh.vertices.size(), 0);
+  for (std::uint32_t v = 0; v < root.size(); ++v) {
+    const std::uint32_t r = find(v);
+    if (r == v) {
+      piece_of_vertex[v] = pieces.size();
+      pieces.push_back({{}, 0, mesh.vertices[v], mesh.vertices[v]});
+    }
+    piece_of_vertex[v] = piece_of_vertex[r];
+    Piece& piece = pieces[piece_of_vertex[v]];
+    piece.vertices.push_back(v);
+    piece.low = piece.low.cwiseMin(mesh.vertices[v]);
+    piece.high = piece.high.cwiseMax(mesh.vertices[v]);
+  }
+  for (const auto& t : mesh.triangles) ++pieces[piece_of_vertex[t[0]]].triangles;
+  return pieces;
+}
+
+// Those pieces of a mesh that are wanted, the others left out.
+void append_pieces(Mesh& to, const Mesh& from, const std::vector<std::size_t>& piece_of_vertex,
+                   const std::vector<bool>& wanted) {
+  std::vector<std::uint32_t> moved(from.vertices.size());
+  for (std::size_t v = 0; v < from.vertices.size(); ++v) {
+    if (!wanted[piece_of_vertex[v]]) continue;
+    moved[v] = static_cast<std::uint32_t>(to.vertices.size());
+    to.vertices.push_back(from.vertices[v]);
+    to.normals.push_back(from.normals[v]);
+  }
+  for (const auto& t : from.triangles) {
+    if (wanted[piece_of_vertex[t[0]]])
+      to.triangles.push_back({moved[t[0]], moved[t[1]], moved[t[2]]});
+  }
+}
+
+std::size_t nearest_vertex(const Mesh& mesh, const Eigen::Vector3f& place) {
+  std::size_t nearest = 0;
+  for (std::size_t v = 1; v < mesh.vertices.size(); ++v) {
+    if ((mesh.vertices[v] - place).squaredNorm() < (mesh.vertices[nearest] - place).squaredNorm()) {
+      nearest = v;
+    }
+  }
+  return nearest;
+}
+
+// Lobes of the size of a few cells would look like splinters: they are made again on finer points.
+class FineLobes {
+ public:
+  FineLobes(const OrbitalField& field, int orbital, double isovalue, double spacing_angstrom)
+      : field_(field), orbital_(orbital), isovalue_(isovalue), spacing_(spacing_angstrom / finer) {}
+
+  Mesh applied(const Mesh& coarse) {
+    std::vector<std::size_t> piece_of_vertex;
+    const std::vector<Piece> pieces = pieces_of(coarse, piece_of_vertex);
+    std::vector<bool> kept(pieces.size(), true);
+    for (std::size_t i = 0; i < pieces.size(); ++i) {
+      if (pieces[i].triangles <= few_triangles) kept[i] = !replaced(coarse, pieces[i]);
+    }
+    Mesh out;
+    append_pieces(out, coarse, piece_of_vertex, kept);
+    append_pieces(out, fine_, std::vector<std::size_t>(fine_.vertices.size(), 0), {true});
+    return out;
+  }
+
+ private:
+  static constexpr int finer = 4;
+  static constexpr std::size_t few_triangles = 160;
+
+  bool replaced(const Mesh& coarse, const Piece& piece) {
+    const Eigen::Vector3f& place = coarse.vertices[piece.vertices.front()];
+    // On the finer points two pieces may have become one, which is there already.
+    if (!fine_.vertices.empty() &&
+        (fine_.vertices[nearest_vertex(fine_, place)] - place).norm() < spacing_) {
+      return true;
+    }
+    GridShape shape;
+    shape.spacing_angstrom = spacing_;
+    for (int axis = 0; axis < 3; ++axis) {
+      constexpr int around = finer + 2;
+      const int first = static_cast<int>(std::floor(piece.low(axis) / spacing_)) - around;
+      const int last = static_cast<int>(std::ceil(piece.high(axis) / spacing_)) + around;
+      shape.first[static_cast<std::size_t>(axis)] = first;
+      shape.size[static_cast<std::size_t>(axis)] = last - first + 1;
+    }
+    const OrbitalGrid grid = sample_on(field_, shape);
+    const Mesh mesh = Surface(field_, grid, orbital_, isovalue_).built();
+    std::vector<std::size_t> piece_of_vertex;
+    const std::vector<Piece> found = pieces_of(mesh, piece_of_vertex);
+    if (found.empty()) return false;
+    const std::size_t same = piece_of_vertex[nearest_vertex(mesh, place)];
+    const Eigen::Vector3f low = shape.point(0, 0, 0).cast<float>();
+    const Eigen::Vector3f high =
+        shape.point(shape.size[0] - 1, shape.size[1] - 1, shape.size[2] - 1).cast<float>();
+    const auto margin = static_cast<float>(0.5 * spacing_);
+    const bool whole = (found[same].low - low).minCoeff() > margin &&
+                       (high - found[same].high).minCoeff() > margin;
+    if (!whole) return false;  // it goes on beyond: a part of something larger
+    std::vector<bool> wanted(found.size(), false);
+    wanted[same] = true;
+    append_pieces(fine_, mesh, piece_of_vertex, wanted);
+    return true;
+  }
+
+  const OrbitalField& field_;
+  int orbital_;
+  double isovalue_;
+  double spacing_;
+  Mesh fine_;
+};
+
 }  // namespace
 
 Mesh isosurface(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue) {
-  return Surface(field, grid, orbital, isovalue).built();
+  const Mesh coarse = Surface(field, grid, orbital, isovalue).built();
+  return FineLobes(field, orbital, isovalue, grid.shape.spacing_angstrom).applied(coarse);
 }
 
 }  // namespace irrepwise

@@ -66,8 +66,8 @@ struct EnergyWindow {
   double to_ev = 0.0;
 };
 
-/// From 7 eV below the HOMO to 6 eV above the LUMO, wider where fewer than three occupied or two
-/// empty levels lie there, narrower where more than fourteen or ten do.
+/// From 7 eV below the HOMO to 6 eV above the LUMO, up to twice as wide where fewer than three
+/// occupied or two empty levels lie there, narrower where more than fourteen or ten do.
 [[nodiscard]] EnergyWindow frontier_window(const std::vector<DiagramColumn>& columns);
 
 /// Every level of a molecule.

@@ -40,7 +40,7 @@ EnergyWindow frontier_window(const std::vector<DiagramColumn>& columns) {
                           std::size_t most) {
       std::size_t n = 0;
       while (n < energies.size() && n < most &&
-             (n < least || std::abs(energies[n] - energies.front()) <= range)) {
+             std::abs(energies[n] - energies.front()) <= (n < least ? 2.0 * range : range)) {
         ++n;
       }
       return n == 0 ? std::nan("") : energies[n - 1];

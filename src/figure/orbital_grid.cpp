@@ -75,7 +75,15 @@ std::pair<int, int> indices_within(const GridShape& shape, std::size_t axis, dou
   return {std::max(0, first), std::min(shape.size[axis], last + 1)};
 }
 
-OrbitalGrid sampled(const OrbitalField& field, const GridShape& shape) {
+double worst_error(const OrbitalGrid& grid) {
+  double worst = 0.0;
+  for (const double integral : grid.integrals) worst = std::max(worst, std::abs(integral - 1.0));
+  return worst;
+}
+
+}  // namespace
+
+OrbitalGrid sample_on(const OrbitalField& field, const GridShape& shape) {
   const auto n = static_cast<std::size_t>(field.count());
   std::vector<double> all(shape.points() * n, 0.0);  // orbitals run fastest
   for (std::size_t c = 0; c < field.centres().size(); ++c) {
@@ -113,14 +121,6 @@ OrbitalGrid sampled(const OrbitalField& field, const GridShape& shape) {
   return grid;
 }
 
-double worst_error(const OrbitalGrid& grid) {
-  double worst = 0.0;
-  for (const double integral : grid.integrals) worst = std::max(worst, std::abs(integral - 1.0));
-  return worst;
-}
-
-}  // namespace
-
 std::size_t GridShape::points() const {
   return static_cast<std::size_t>(size[0]) * static_cast<std::size_t>(size[1]) *
          static_cast<std::size_t>(size[2]);
@@ -144,11 +144,11 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
         fmt::format("spacing of the grid: found {}, expected 0.02 to 1 Å", *spacing_angstrom));
   }
   double spacing = spacing_angstrom.value_or(usual_spacing(field, quality));
-  OrbitalGrid grid = sampled(field, shape_around(field, spacing));
+  OrbitalGrid grid = sample_on(field, shape_around(field, spacing));
   if (!spacing_angstrom) {
     for (int i = 0; i < finer_tries && worst_error(grid) > quality.wanted_error; ++i) {
       spacing *= finer;
-      grid = sampled(field, shape_around(field, spacing));
+      grid = sample_on(field, shape_around(field, spacing));
     }
   }
   if (worst_error(grid) > std::max(refused_error, quality.wanted_error)) {

@@ -29,6 +29,9 @@ struct OrbitalGrid {
   std::vector<double> integrals;            // per orbital, of the density over the grid
 };
 
+/// Every orbital at the points of one lattice, whatever part of the molecule it holds.
+[[nodiscard]] OrbitalGrid sample_on(const OrbitalField& field, const GridShape& shape);
+
 /// How fine a grid is without a wish of the user.
 struct GridQuality {
   double points = 300'000;          // about, for a molecule of any size …

@@ -9,7 +9,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int samples = 3;  // along each side of a pixel
-constexpr float touching_angstrom = 0.02f;
+constexpr float touching_angstrom = 0.05f;
 
 struct Layer {
   std::vector<float> depth;

@@ -1,9 +1,5 @@
 #include "page/page_orbitals.hpp"
 
-#include <algorithm>
-#include <cmath>
-#include <cstddef>
-
 #include "figure/isosurface.hpp"
 #include "figure/orbital_grid.hpp"
 #include "hueckel/levels.hpp"
@@ -13,9 +9,7 @@ namespace {
 
 constexpr double share = 0.5;
 constexpr std::size_t many_vertices = 700;  // of one phase; above it the next coarser grid is used
-constexpr std::ptrdiff_t few_points = 600;  // inside the surface; below it a finer grid is used
 constexpr double finest_spacing_angstrom = 0.08;
-constexpr double finer = 0.75;
 constexpr double coarsest_spacing_angstrom = 0.4;
 
 std::optional<PackedSurface> packed_phase(const OrbitalField& field, const OrbitalGrid& grid,
@@ -32,36 +26,16 @@ std::optional<PackedSurface> packed_phase(const OrbitalField& field, const Orbit
   return packed(mesh);
 }
 
-std::ptrdiff_t points_inside(const OrbitalGrid& grid, int orbital, double isovalue) {
-  const std::vector<double>& values = grid.values[static_cast<std::size_t>(orbital)];
-  return std::count_if(values.begin(), values.end(),
-                       [&](double value) { return std::abs(value) >= isovalue; });
-}
-
 }  // namespace
 
 std::vector<PageOrbital> page_orbitals(const LevelsResult& result, int level) {
   const OrbitalField field(result.symmetry.molecule, result.basis,
                            level_orbitals(result.symmetry, result.basis, result.levels, level));
-  OrbitalGrid grid = sample(field, {}, light_quality);
-  std::vector<double> isovalues;
-  for (int i = 0; i < field.count(); ++i) {
-    isovalues.push_back(enclosing_isovalue(field, grid, i, share, light_quality));
-  }
-  const auto is_angular = [&] {
-    for (int i = 0; i < field.count(); ++i) {
-      if (points_inside(grid, i, isovalues[static_cast<std::size_t>(i)]) < few_points) return true;
-    }
-    return false;
-  };
-  // Compact orbitals would look like crystals.
-  while (grid.shape.spacing_angstrom * finer > finest_spacing_angstrom && is_angular()) {
-    grid = sample(field, grid.shape.spacing_angstrom * finer, light_quality);
-  }
+  const OrbitalGrid grid = sample(field, {}, light_quality);
   std::vector<PageOrbital> orbitals;
   for (int i = 0; i < field.count(); ++i) {
     PageOrbital orbital;
-    orbital.isovalue = isovalues[static_cast<std::size_t>(i)];
+    orbital.isovalue = enclosing_isovalue(field, grid, i, share, light_quality);
     orbital.positive = packed_phase(field, grid, i, orbital.isovalue);
     orbital.negative = packed_phase(field, grid, i, -orbital.isovalue);
     orbitals.push_back(std::move(orbital));

@@ -75,6 +75,50 @@ TEST_CASE("the surface of a 1s orbital is a sphere, closed and wound outwards") 
   CHECK(volume(mesh) < exact);
 }
 
+TEST_CASE("a lobe smaller than a cell of the grid is as round as a large one") {
+  const double zeta = 1.3;
+  const OrbitalField field = single_orbital(1, 0, zeta, 0);
+  const OrbitalGrid grid = sample(field, 0.15);
+  const double radius = 0.12;  // Å; the grid has a point at its centre and none else inside
+  const double isovalue =
+      std::sqrt(std::pow(zeta, 3) / std::numbers::pi) * std::exp(-zeta * radius / bohr_in_angstrom);
+  const Mesh mesh = isosurface(field, grid, 0, isovalue);
+  CHECK(edges_of(mesh).closed);
+  const double exact = 4.0 / 3.0 * std::numbers::pi * std::pow(radius, 3);
+  CHECK(volume(mesh) > 0.9 * exact);  // 0.5 where the grid's own points make it
+  CHECK(volume(mesh) < exact);
+}
+
+TEST_CASE("two lobes near each other, one large and one small, are both there once") {
+  // p lobes of unequal size: 2s on the same centre adds to one and takes from the other.
+  const Molecule molecule({{1, {0, 0, 0}}}, 0);
+  Basis basis;
+  basis.shells.push_back({0, 0, -13.6, ContractedRadial({{SlaterRadial(2, 1.6), 1.0}}), 0});
+  basis.shells.push_back({0, 1, -13.6, ContractedRadial({{SlaterRadial(2, 1.6), 1.0}}), 1});
+  basis.first_shell = {0, 2};
+  basis.valence_electrons = {1};
+  basis.n_orbitals = 4;
+  Eigen::MatrixXd mixed = Eigen::MatrixXd::Zero(4, 1);
+  mixed(0, 0) = 0.6;
+  mixed(3, 0) = 0.8;
+  const OrbitalField field(molecule, basis, mixed);
+  const OrbitalGrid grid = sample(field, 0.15);
+  for (const double isovalue : {0.05, 0.1, 0.15, 0.2, 0.25, -0.02, -0.04, -0.06}) {
+    const Mesh mesh = isosurface(field, grid, 0, isovalue);
+    CAPTURE(isovalue);
+    CHECK(edges_of(mesh).closed);
+    if (mesh.triangles.empty()) continue;
+    // The volume is that of the points with a larger value, counted on a finer grid; a surface that
+    // is there twice would have twice as much.
+    const OrbitalGrid fine = sample(field, 0.04);
+    double counted = 0.0;
+    for (const double value : fine.values[0]) {
+      counted += value / isovalue >= 1.0 ? std::pow(0.04, 3) : 0.0;
+    }
+    CHECK(std::abs(volume(mesh) / counted - 1.0) < 0.1);
+  }
+}
+
 TEST_CASE("vertices of both phases lie on the isovalue of a molecular orbital") {
   const Run r = run(test_molecule("permanganate").molecule);
   const Eigen::MatrixXd c =
