@@ -18,5 +18,6 @@ struct Command {
 [[nodiscard]] Command add_levels(CLI::App& program);
 [[nodiscard]] Command add_parameters(CLI::App& program);
 [[nodiscard]] Command add_symmetry(CLI::App& program);
+[[nodiscard]] Command add_table(CLI::App& program);
 
 }  // namespace irrepwise::cli

@@ -215,8 +215,7 @@ Drawn draw_grid(const LevelsResult& result, const ChosenOrbitals& chosen,
 
 Drawn drawn(const LevelsResult& result, const DrawOptions& options, DrawKind kind) {
   if (kind == DrawKind::Levels) return draw_levels(result, options);
-  const ChosenOrbitals chosen = chosen_orbitals(
-      result, choose_orbitals(options.orbitals, result.symmetry.group, result.levels));
+  const ChosenOrbitals chosen = chosen_orbitals(result, choose_orbitals(options.orbitals, result));
   switch (kind) {
     case DrawKind::Levels:
       break;
@@ -255,9 +254,9 @@ Command add_draw(CLI::App& program) {
   const auto options = std::make_shared<DrawOptions>();
   app->set_help_flag("-h,--help", "Show this help");
   add_job_options(*app, options->job);
-  app->add_option("orbitals", options->orbitals,
-                  "Levels (2e1g), single partners (2e1g:2), homo, lumo, homo-1, ranges "
-                  "(homo-2..lumo+2) or frontier; without any a level diagram is drawn")
+  app->add_option(
+         "orbitals", options->orbitals,
+         std::string("Which: ") + orbital_words_help + ". Without any a level diagram is drawn")
       ->option_text("ORBITAL ...");
   app->add_option("-o,--output", options->output,
                   "File to write. Level diagrams: .svg, .png. Orbitals: .svg contour lines, .png "

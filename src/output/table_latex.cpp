@@ -59,6 +59,15 @@ constexpr std::array<Replacement, 16> letters = {{{"σ", "\\sigma"},
                                                   {"Λ", "\\Lambda"},
                                                   {"Η", "\\mathrm{H}"}}};
 
+constexpr std::size_t most_rows_on_a_page = 40;  // of a float, caption and notes beside them
+
+std::string latex_title(const Column& column) {
+  if (column.label.empty()) return latex_text(column_title(column));
+  Column without = column;
+  without.label.clear();
+  return latex_label(column.label) + latex_text(column_title(without));
+}
+
 std::string latex_cell(const Cell& cell, int digits_after) {
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return latex_label(label->ascii);
   if (!std::holds_alternative<Number>(cell)) return latex_text(cell_text(cell));
@@ -111,9 +120,11 @@ std::string latex_label(const std::string& ascii) {
 
 std::string table_latex(const Table& table) {
   std::vector<int> digits_after(table.columns.size(), 0);
+  std::size_t rows = 0;
   for (const auto& line : table.lines) {
     const Row* row = std::get_if<Row>(&line);
     if (row == nullptr) continue;
+    ++rows;
     for (std::size_t i = 0; i < row->cells.size(); ++i) {
       if (table.columns[i].align != Align::Decimal) continue;
       const auto after = static_cast<int>(decimal_parts(row->cells[i]).after.size());
@@ -124,32 +135,43 @@ std::string table_latex(const Table& table) {
   std::string kinds;
   std::string titles;
   for (const Column& column : table.columns) {
-    titles += (kinds.empty() ? "" : " & ") + latex_text(column_title(column));
+    titles += (kinds.empty() ? "" : " & ") + latex_title(column);
     kinds += column_kind(column);
   }
-  std::string out = "\\begin{table}\n\\centering\n";
-  if (!table.caption.empty()) out += "\\caption{" + latex_text(table.caption) + "}\n";
-  out += "\\begin{tabular}{" + kinds + "}\n\\toprule\n" + titles + " \\\\\n\\midrule\n";
+  std::string caption = latex_text(table.caption);
+  if (!table.legend.empty()) caption += ". " + latex_text(table.legend);
+
+  std::string body;
   for (const auto& line : table.lines) {
     if (const auto* separator = std::get_if<Separator>(&line)) {
-      out += "\\midrule\n";
+      if (!body.empty()) body += "\\midrule\n";
       if (!separator->words.empty()) {
-        out += "\\multicolumn{" + std::to_string(table.columns.size()) + "}{c}{\\textit{" +
-               latex_text(separator->words) + "}} \\\\\n\\midrule\n";
+        body += "\\multicolumn{" + std::to_string(table.columns.size()) + "}{c}{\\textit{" +
+                latex_text(separator->words) + "}} \\\\\n\\midrule\n";
       }
       continue;
     }
     const Row& row = std::get<Row>(line);
     for (std::size_t i = 0; i < row.cells.size(); ++i) {
-      out += (i > 0 ? " & " : "") + latex_cell(row.cells[i], digits_after[i]);
+      body += (i > 0 ? " & " : "") + latex_cell(row.cells[i], digits_after[i]);
     }
-    out += " \\\\\n";
+    body += " \\\\\n";
   }
-  out += "\\bottomrule\n\\end{tabular}\n";
+  std::string notes;
   for (const std::string& note : table.notes) {
-    out += "\\par\\smallskip\\footnotesize " + latex_text(note) + "\n";
+    notes += "\\par\\smallskip{\\footnotesize " + latex_text(note) + "\\par}\n";
   }
-  return out + "\\end{table}\n";
+
+  const std::string head = "\\toprule\n" + titles + " \\\\\n\\midrule\n";
+  if (rows > most_rows_on_a_page) {
+    return "\\begin{longtable}{" + kinds + "}\n" +
+           (caption.empty() ? "" : "\\caption{" + caption + "} \\\\\n") + head +
+           "\\endfirsthead\n" + head + "\\endhead\n\\bottomrule\n\\endlastfoot\n" + body +
+           "\\end{longtable}\n" + notes;
+  }
+  return "\\begin{table}\n\\centering\n" + (caption.empty() ? "" : "\\caption{" + caption + "}\n") +
+         "\\begin{tabular}{" + kinds + "}\n" + head + body + "\\bottomrule\n\\end{tabular}\n" +
+         notes + "\\end{table}\n";
 }
 
 }  // namespace irrepwise
