@@ -1,5 +1,8 @@
 #include "output/caption_words.hpp"
 
+#include <string>
+#include <vector>
+
 #include <fmt/format.h>
 
 namespace irrepwise {
@@ -33,9 +36,12 @@ std::string method_sentence(const LevelsResult& result) {
 }
 
 std::string axes_sentence(const LevelsResult& result) {
-  if (result.symmetry.axes.empty()) return "Axes: those of the input.";
+  const std::vector<std::string>& axes = result.symmetry.axes;
+  const bool as_given =
+      axes.empty() || (axes.size() == 1 && axes.front().find('=') == std::string::npos);
+  if (as_given) return "Axes as in the input.";
   std::string words;
-  for (const std::string& axis : result.symmetry.axes) words += (words.empty() ? "" : "; ") + axis;
+  for (const std::string& axis : axes) words += (words.empty() ? "" : "; ") + axis;
   return "Axes: " + words + ".";
 }
 

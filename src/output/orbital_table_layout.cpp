@@ -157,7 +157,9 @@ class Layout {
         continue;
       }
       const bool new_set = set != function.set;
-      if (new_set) table.lines.emplace_back(Separator{separator_words(function.set)});
+      if (new_set && (!set || has_several(*set) || has_several(function.set))) {
+        table.lines.emplace_back(Separator{separator_words(function.set)});
+      }
       std::string name;
       if (salcs_) {
         if (new_set) name = table_.sets[static_cast<std::size_t>(function.set)].name;
@@ -173,11 +175,14 @@ class Layout {
     table.notes = notes(columns, blank_share, left_out, rows.size());
   }
 
+  [[nodiscard]] bool has_several(int set) const {
+    return table_.sets[static_cast<std::size_t>(set)].atoms.size() > 1;
+  }
+
   // The atoms of a set, where the rows below do not say so by themselves.
   [[nodiscard]] std::string separator_words(int set) const {
-    const AtomSet& atoms = table_.sets[static_cast<std::size_t>(set)];
-    if (atoms.atoms.size() < 2) return {};
-    return atom_list(result_.symmetry.molecule, atoms.atoms);
+    if (!has_several(set)) return {};
+    return atom_list(result_.symmetry.molecule, table_.sets[static_cast<std::size_t>(set)].atoms);
   }
 
   [[nodiscard]] static std::string function_words(const TableFunction& function) {
@@ -201,8 +206,8 @@ class Layout {
     }
     constexpr double worth_a_word = 5e-4;
     if (!columns.empty() && std::abs(blank_share[most]) >= worth_a_word) {
-      words += fmt::format(" The blanks of an orbital add up to {:.1f}\u00A0% of it at most ({}).",
-                           100.0 * blank_share[most],
+      words += fmt::format(" The blanks of an orbital amount to {:.1f}\u00A0% of it at most ({}).",
+                           100.0 * std::abs(blank_share[most]),
                            readable_name(table_.orbitals[columns[most]].name));
     }
     if (left_out > 0) {
@@ -232,7 +237,7 @@ class Layout {
                         method_sentence(result_) + " " + axes_sentence(result_);
     if (salcs_) {
       words += fmt::format(
-          " SALCs: those of `irrepwise symmetry --{}`, the same coefficient for every partner.",
+          " SALCs as in irrepwise symmetry --{}, with the same coefficient for every partner.",
           table_.options.frame == TableFrame::Local ? "local" : "salcs");
       if (has_pair()) {
         words += " Of complex conjugate irreps both partners are listed.";

@@ -1,10 +1,11 @@
+#include "output/latex_text.hpp"
 #include "output/report.hpp"
 #include "output/table_latex.hpp"
 
 namespace irrepwise {
 
 std::string report_latex(const Report& report) {
-  std::string out = "% needs \\usepackage{booktabs,longtable}\n";
+  std::string out = "% needs \\usepackage{array,booktabs,longtable}\n";
   if (!report.title.empty()) out += "\\paragraph{" + latex_text(report.title) + "}\n";
   if (!report.facts.empty()) {
     out += "\\begin{description}\n";
