@@ -1,31 +1,13 @@
 #include "analysis/populations.hpp"
 
 #include <cmath>
-#include <variant>
 
+#include "analysis/level_coefficients.hpp"
 #include "core/constants.hpp"
 #include "overlap/two_centre.hpp"
-#include "salc/expansion.hpp"
 
 namespace irrepwise {
 namespace {
-
-// Orbitals of one level and S times them, `n_orbitals x degeneracy` each. S times an orbital has
-// the orbital's symmetry, so it expands in the same SALCs and needs no overlap matrix over atomic
-// orbitals.
-struct LevelColumns {
-  Eigen::MatrixXd orbitals;
-  Eigen::MatrixXd times_overlap;
-};
-
-LevelColumns level_columns(const MolecularSymmetry& symmetry, const Basis& basis,
-                           const Levels& levels, const Level& level) {
-  const LevelVectors& vectors = levels.vectors[level.irrep];
-  const auto expand = [&](const auto& matrix) {
-    return expanded(symmetry, basis, levels.salcs, level.irrep, matrix.col(level.column));
-  };
-  return {std::visit(expand, vectors.coefficients), std::visit(expand, vectors.times_overlap)};
-}
 
 // Occupied orbitals as columns, each times the root of its electrons, so that P = C C^T.
 Eigen::MatrixXd weighted_orbitals(const MolecularSymmetry& symmetry, const Basis& basis,
@@ -131,9 +113,9 @@ Populations mulliken_populations(const MolecularSymmetry& symmetry, const Basis&
   populations.gross_by_orbital = Eigen::VectorXd::Zero(basis.n_orbitals);
   for (Eigen::Index k = 0; k < n_levels; ++k) {
     const Level& level = levels.levels[static_cast<std::size_t>(k)];
-    const LevelColumns columns = level_columns(symmetry, basis, levels, level);
     populations.shares.col(k) =
-        columns.orbitals.cwiseProduct(columns.times_overlap).rowwise().sum() / level.degeneracy;
+        level_coefficients(symmetry, basis, levels, static_cast<int>(k)).shares().rowwise().sum() /
+        level.degeneracy;
     populations.gross_by_orbital += level.occupation * populations.shares.col(k);
   }
   const int n_atoms = symmetry.molecule.size();

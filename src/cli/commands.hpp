@@ -21,5 +21,6 @@ struct Command {
 /// @param command  the command line as the user wrote it, which the page repeats
 [[nodiscard]] Command add_report(CLI::App& program, const std::string& command);
 [[nodiscard]] Command add_symmetry(CLI::App& program);
+[[nodiscard]] Command add_table(CLI::App& program);
 
 }  // namespace irrepwise::cli

@@ -217,8 +217,7 @@ Drawn draw_grid(const LevelsResult& result, const ChosenOrbitals& chosen,
 
 Drawn drawn(const LevelsResult& result, const DrawOptions& options, DrawKind kind) {
   if (kind == DrawKind::Levels) return draw_levels(result, options);
-  const ChosenOrbitals chosen = chosen_orbitals(
-      result, choose_orbitals(options.orbitals, result.symmetry.group, result.levels));
+  const ChosenOrbitals chosen = chosen_orbitals(result, choose_orbitals(options.orbitals, result));
   switch (kind) {
     case DrawKind::Levels:
     case DrawKind::Variants:
@@ -276,9 +275,9 @@ Command add_draw(CLI::App& program) {
   app->set_help_flag("-h,--help", "Show this help");
   add_job_options(*app, options->job);
   app->add_option("orbitals", options->words,
-                  "Levels (2e1g), single partners (2e1g:2), homo, lumo, homo-1, ranges "
-                  "(homo-2..lumo+2) or frontier; without any a level diagram is drawn. Further "
-                  "files: their levels side by side, as those of a job with `variants:`")
+                  std::string("Which: ") + orbital_words_help +
+                      ". Without any a level diagram is drawn. Further files: their levels side by "
+                      "side, as those of a job with `variants:`")
       ->option_text("ORBITAL ... | FILE ...");
   app->add_option("-o,--output", options->output,
                   "File to write. Level diagrams: .svg, .png. Orbitals: .svg contour lines, .png "

@@ -113,14 +113,18 @@ int run(int argc, char** argv) {
       "  irrepwise symmetry complex.xyz --salcs --local\n"
       "  irrepwise build Pt SP-4 Cl Cl NH3 NH3 --oxidation 2 --output cis.xyz\n"
       "  irrepwise compare family.yaml --reference chloride\n"
+      "  irrepwise table complex.xyz frontier+5 --of shares\n"
       "  irrepwise report complex.xyz --output report.html\n"
       "  irrepwise parameters Pt Cl\n"
       "Each command has its own help: irrepwise levels --help");
-  const std::vector<cli::Command> commands = {
-      cli::add_levels(program),    cli::add_symmetry(program),
-      cli::add_compare(program),   cli::add_build(program),
-      cli::add_draw(program),      cli::add_report(program, repeated(argc, argv)),
-      cli::add_parameters(program)};
+  const std::vector<cli::Command> commands = {cli::add_levels(program),
+                                              cli::add_symmetry(program),
+                                              cli::add_compare(program),
+                                              cli::add_build(program),
+                                              cli::add_table(program),
+                                              cli::add_draw(program),
+                                              cli::add_report(program, repeated(argc, argv)),
+                                              cli::add_parameters(program)};
   try {
     program.parse(argc, argv);
     for (const cli::Command& command : commands) {

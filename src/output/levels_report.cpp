@@ -7,6 +7,7 @@
 #include <fmt/format.h>
 
 #include "core/error.hpp"
+#include "output/caption_words.hpp"
 #include "output/composition.hpp"
 #include "output/equivalence.hpp"
 #include "output/population_tables.hpp"
@@ -22,12 +23,6 @@ std::string method_words(const Levels& levels) {
   std::string words = rule_name(levels.rule);
   if (levels.k) words += fmt::format(", K = {}", *levels.k);
   return words;
-}
-
-// "Dinfh" -> "D∞h"
-std::string readable_group(std::string name) {
-  const std::size_t at = name.find("inf");
-  return at == std::string::npos ? name : name.replace(at, 3, "∞");
 }
 
 std::string group_words(const MolecularSymmetry& symmetry) {

@@ -31,13 +31,6 @@ OrbitalGrid sampled(const OrbitalField& field, const SurfaceChoice& choice,
 
 }  // namespace
 
-std::vector<OrbitalChoice> partners_of(const Levels& levels, int level) {
-  std::vector<OrbitalChoice> out;
-  const int degeneracy = levels.levels[static_cast<std::size_t>(level)].degeneracy;
-  for (int partner = 0; partner < degeneracy; ++partner) out.push_back({level, partner});
-  return out;
-}
-
 std::string method_words(const LevelsResult& result) {
   const Levels& levels = result.levels;
   return fmt::format("extended Hückel, {} rule{} · parameters: {}", rule_name(levels.rule),

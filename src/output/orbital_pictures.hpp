@@ -11,16 +11,9 @@
 #include "figure/orbital_scene.hpp"
 #include "figure/orbital_sheets.hpp"
 #include "output/levels_result.hpp"
+#include "output/orbital_choice.hpp"
 
 namespace irrepwise {
-
-struct OrbitalChoice {
-  int level = 0;    // index in the levels
-  int partner = 0;  // from 0
-};
-
-/// Every partner of one level.
-[[nodiscard]] std::vector<OrbitalChoice> partners_of(const Levels& levels, int level);
 
 struct ChosenOrbitals {
   std::vector<OrbitalChoice> choices;

@@ -26,7 +26,7 @@ struct Report {
 [[nodiscard]] std::string report_text(const Report& report, int width);
 [[nodiscard]] std::string report_markdown(const Report& report);
 
-/// To be included in a document that loads booktabs and longtable.
+/// To be included in a document that loads array, booktabs and longtable.
 [[nodiscard]] std::string report_latex(const Report& report);
 
 /// A whole page that needs nothing beside it: no script, style inside, for light, dark and print.

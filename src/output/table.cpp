@@ -31,7 +31,7 @@ std::string rounded(const Number& number) {
 std::string column_title(const Column& column) {
   std::string title = column.header;
   if (!column.label.empty()) {
-    title = readable_label(column.label) + (title.empty() ? "" : " " + title);
+    title.insert(0, readable_label(column.label));
   }
   return column.unit.empty() ? title : title + " / " + column.unit;
 }

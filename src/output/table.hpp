@@ -30,7 +30,7 @@ struct Column {
   Align align = Align::Left;
   int priority = 0;        // 0: always kept; a narrow terminal drops the highest first
   bool wraps = false;      // long text may run over several lines
-  std::string label = {};  // symmetry label in ASCII that stands before the header: "2e1g"
+  std::string label = {};  // symmetry label in ASCII that stands right before the header: "2e1g"
 };
 
 /// A line across the table, with a few words in it or none.
@@ -43,13 +43,14 @@ struct Row {
 };
 
 struct Table {
-  std::string caption;
+  std::string caption;  // a few words: what it is
   std::vector<Column> columns;
   std::vector<std::variant<Row, Separator>> lines;
   std::vector<std::string> notes;
+  std::string legend = {};  // sentences that let it stand alone: method, geometry, axes, units
 };
 
-/// @returns  "energy / eV", "2e1g 1"
+/// @returns  "energy / eV", "2e1g:1"
 [[nodiscard]] std::string column_title(const Column& column);
 
 /// For people: numbers with their digits (never "-0.00"), labels in readable form.

@@ -22,7 +22,7 @@ std::string class_of(const Column& column) {
 std::string head_cell(const Column& column) {
   std::string title = html_text(column.header);
   if (!column.label.empty()) {
-    title = html_label(column.label) + (title.empty() ? "" : " " + title);
+    title.insert(0, html_label(column.label));
   }
   if (!column.unit.empty())
     title += " <span class=\"unit\">/ " + html_text(column.unit) + "</span>";
@@ -69,7 +69,12 @@ std::string table_html(const Table& table) {
   std::string out = "<div class=\"table\">\n<div class=\"scroll\" role=\"region\" tabindex=\"0\"";
   out += " aria-label=\"" + (table.caption.empty() ? "table" : html_text(table.caption)) + "\">\n";
   out += "<table>\n";
-  if (!table.caption.empty()) out += "<caption>" + html_text(table.caption) + "</caption>\n";
+  if (!table.caption.empty()) {
+    out += "<caption>" + html_text(table.caption);
+    if (!table.legend.empty())
+      out += " <span class=\"legend\">" + html_text(table.legend) + "</span>";
+    out += "</caption>\n";
+  }
   out += "<thead>\n<tr>";
   for (const Column& column : table.columns) out += head_cell(column);
   out += "</tr>\n</thead>\n";
@@ -110,6 +115,9 @@ std::string_view table_style() {
 .scroll { overflow-x: auto; }
 .table table { border-collapse: collapse; line-height: 1.35; }
 .table caption { text-align: left; font-weight: 600; padding: 0 0 .5rem; color: var(--ink); }
+.table .legend { display: block; font-weight: 400; font-size: .86rem; color: var(--muted); min-width: 26rem;
+  max-width: 46rem; padding-top: .25rem; }
+@media (max-width: 34rem) { .table .legend { min-width: 0; } }
 .table th, .table td { padding: .16rem .7rem; text-align: left; vertical-align: baseline; }
 .table th:first-child, .table td:first-child { padding-left: .2rem; }
 .table thead th, .table thead td { border-top: 1.5px solid var(--ink); border-bottom: 1px solid var(--ink);

@@ -31,7 +31,7 @@ Json table_json_value(const Table& table) {
     }
     rows.push_back(std::move(entry));
   }
-  return {{"caption", table.caption},
+  return {{"caption", table.legend.empty() ? table.caption : table.caption + ". " + table.legend},
           {"columns", std::move(columns)},
           {"rows", std::move(rows)},
           {"notes", table.notes}};

@@ -1,63 +1,23 @@
 #include "output/table_latex.hpp"
 
 #include <algorithm>
-#include <array>
-#include <utility>
+#include <cstddef>
+#include <vector>
 
-#include "output/label_parts.hpp"
+#include "output/latex_columns.hpp"
+#include "output/latex_text.hpp"
 
 namespace irrepwise {
 namespace {
 
-using Replacement = std::pair<std::string_view, std::string_view>;
+constexpr std::ptrdiff_t most_rows_on_a_page = 40;  // of a float, caption and notes beside them
 
-constexpr std::array<Replacement, 27> replacements = {{
-    {"\\", "\\textbackslash{}"},
-    {"{", "\\{"},
-    {"}", "\\}"},
-    {"$", "\\$"},
-    {"&", "\\&"},
-    {"%", "\\%"},
-    {"#", "\\#"},
-    {"_", "\\_"},
-    {"^", "\\textasciicircum{}"},
-    {"~", "\\textasciitilde{}"},
-    {"\u00A0", "~"},
-    {"Å", "\\AA{}"},
-    {"×", "$\\times$"},
-    {"−", "$-$"},
-    {"–", "--"},
-    {"ζ", "$\\zeta$"},
-    {"χ", "$\\chi$"},
-    {"∞", "$\\infty$"},
-    {"′", "$'$"},
-    {"″", "$''$"},
-    {"σ", "$\\sigma$"},
-    {"π", "$\\pi$"},
-    {"δ", "$\\delta$"},
-    {"φ", "$\\phi$"},
-    {"Σ", "$\\Sigma$"},
-    {"<", "\\textless{}"},
-    {">", "\\textgreater{}"},
-}};
-
-// Greek letters of labels, in mathematics.
-constexpr std::array<Replacement, 16> letters = {{{"σ", "\\sigma"},
-                                                  {"π", "\\pi"},
-                                                  {"δ", "\\delta"},
-                                                  {"φ", "\\phi"},
-                                                  {"γ", "\\gamma"},
-                                                  {"η", "\\eta"},
-                                                  {"ι", "\\iota"},
-                                                  {"κ", "\\kappa"},
-                                                  {"λ", "\\lambda"},
-                                                  {"Σ", "\\Sigma"},
-                                                  {"Π", "\\Pi"},
-                                                  {"Δ", "\\Delta"},
-                                                  {"Φ", "\\Phi"},
-                                                  {"Γ", "\\Gamma"},
-                                                  {"Λ", "\\Lambda"},
-                                                  {"Η", "\\mathrm{H}"}}};
+std::string latex_title(const Column& column) {
+  if (column.label.empty()) return latex_text(column_title(column));
+  Column without = column;
+  without.label.clear();
+  return latex_label(column.label) + latex_text(column_title(without));
+}
 
 std::string latex_cell(const Cell& cell, int digits_after) {
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return latex_label(label->ascii);
@@ -73,83 +33,87 @@ std::string latex_cell(const Cell& cell, int digits_after) {
   return text;
 }
 
-std::string column_kind(const Column& column) {
-  if (column.wraps) return "p{0.45\\linewidth}";
-  return column.align == Align::Left ? "l" : "r";
-}
-
-}  // namespace
-
-std::string latex_text(std::string_view text) {
-  std::string out;
-  while (!text.empty()) {
-    const auto* found =
-        std::find_if(replacements.begin(), replacements.end(),
-                     [&](const Replacement& r) { return text.starts_with(r.first); });
-    if (found == replacements.end()) {
-      out += text.front();
-      text.remove_prefix(1);
-    } else {
-      out += found->second;
-      text.remove_prefix(found->first.size());
-    }
-  }
-  return out;
-}
-
-std::string latex_label(const std::string& ascii) {
-  const LabelParts parts = label_parts(ascii);
-  const auto* letter = std::find_if(
-      letters.begin(), letters.end(),
-      [&](const Replacement& replacement) { return replacement.first == parts.letter; });
-  std::string out = "$" + parts.number;
-  out += letter == letters.end() ? parts.letter : std::string(letter->second);
-  if (!parts.below.empty()) out += "_{" + parts.below + "}";
-  if (!parts.above.empty()) out += "^{" + parts.above + "}";
-  return out + std::string(static_cast<std::size_t>(parts.primes), '\'') + "$";
-}
-
-std::string table_latex(const Table& table) {
-  std::vector<int> digits_after(table.columns.size(), 0);
+std::vector<int> digits_after_point(const Table& table) {
+  std::vector<int> after(table.columns.size(), 0);
   for (const auto& line : table.lines) {
     const Row* row = std::get_if<Row>(&line);
     if (row == nullptr) continue;
     for (std::size_t i = 0; i < row->cells.size(); ++i) {
       if (table.columns[i].align != Align::Decimal) continue;
-      const auto after = static_cast<int>(decimal_parts(row->cells[i]).after.size());
-      digits_after[i] = std::max(digits_after[i], after);
+      after[i] = std::max(after[i], static_cast<int>(decimal_parts(row->cells[i]).after.size()));
     }
   }
+  return after;
+}
 
-  std::string kinds;
-  std::string titles;
-  for (const Column& column : table.columns) {
-    titles += (kinds.empty() ? "" : " & ") + latex_text(column_title(column));
-    kinds += column_kind(column);
-  }
-  std::string out = "\\begin{table}\n\\centering\n";
-  if (!table.caption.empty()) out += "\\caption{" + latex_text(table.caption) + "}\n";
-  out += "\\begin{tabular}{" + kinds + "}\n\\toprule\n" + titles + " \\\\\n\\midrule\n";
+std::string latex_body(const Table& table, const LatexPart& part) {
+  const std::vector<int> after = digits_after_point(table);
+  std::string body;
   for (const auto& line : table.lines) {
     if (const auto* separator = std::get_if<Separator>(&line)) {
-      out += "\\midrule\n";
+      if (!body.empty()) body += "\\midrule\n";
       if (!separator->words.empty()) {
-        out += "\\multicolumn{" + std::to_string(table.columns.size()) + "}{c}{\\textit{" +
-               latex_text(separator->words) + "}} \\\\\n\\midrule\n";
+        body += "\\multicolumn{" + std::to_string(part.columns.size()) + "}{c}{\\textit{" +
+                latex_text(separator->words) + "}} \\\\\n\\midrule\n";
       }
       continue;
     }
     const Row& row = std::get<Row>(line);
-    for (std::size_t i = 0; i < row.cells.size(); ++i) {
-      out += (i > 0 ? " & " : "") + latex_cell(row.cells[i], digits_after[i]);
+    std::string cells;
+    for (const LatexColumn& column : part.columns) {
+      if (&column != part.columns.data()) cells += " & ";
+      cells += latex_cell(row.cells[column.index], after[column.index]);
     }
-    out += " \\\\\n";
+    body += cells + " \\\\\n";
   }
-  out += "\\bottomrule\n\\end{tabular}\n";
+  return body;
+}
+
+// One part of the table with its caption, as a float or over as many pages as it needs.
+std::string latex_part(const Table& table, const LatexPart& part, const std::string& caption,
+                       const std::string& notes) {
+  std::string kinds;
+  std::string titles;
+  for (const LatexColumn& column : part.columns) {
+    titles += (kinds.empty() ? "" : " & ") + latex_title(table.columns[column.index]);
+    kinds += column.kind;
+  }
+  const std::string head = "\\toprule\n" + titles + " \\\\\n\\midrule\n";
+  const std::string body = latex_body(table, part);
+  const auto rows = std::count_if(table.lines.begin(), table.lines.end(), [](const auto& line) {
+    return std::holds_alternative<Row>(line);
+  });
+  const std::string size = part.size.empty() ? "" : part.size + "\n";
+  if (rows > most_rows_on_a_page) {
+    return "{" + (size.empty() ? "\n" : size) +
+           "\\setlength{\\LTcapwidth}{\\linewidth}\n\\begin{longtable}{" + kinds + "}\n" +
+           (caption.empty() ? "" : "\\caption{" + caption + "} \\\\\n") + head +
+           "\\endfirsthead\n" + head + "\\endhead\n\\bottomrule\n\\endlastfoot\n" + body +
+           "\\end{longtable}\n" + notes + "}\n";
+  }
+  return "\\begin{table}\n\\centering\n" + (caption.empty() ? "" : "\\caption{" + caption + "}\n") +
+         size + "\\begin{tabular}{" + kinds + "}\n" + head + body +
+         "\\bottomrule\n\\end{tabular}\n" + notes + "\\end{table}\n";
+}
+
+}  // namespace
+
+std::string table_latex(const Table& table) {
+  std::string notes;
   for (const std::string& note : table.notes) {
-    out += "\\par\\smallskip\\footnotesize " + latex_text(note) + "\n";
+    notes += "\\par\\smallskip{\\footnotesize " + latex_text(note) + "\\par}\n";
   }
-  return out + "\\end{table}\n";
+  const std::vector<LatexPart> parts = latex_parts(table);
+  std::string out;
+  for (const LatexPart& part : parts) {
+    const bool first = &part == &parts.front();
+    std::string caption = latex_text(table.caption);
+    if (!first) caption += " (continued)";
+    if (first && !table.legend.empty()) caption += ". " + latex_text(table.legend);
+    if (!first) out += '\n';
+    out += latex_part(table, part, caption, &part == &parts.back() ? notes : "");
+  }
+  return out;
 }
 
 }  // namespace irrepwise

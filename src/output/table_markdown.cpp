@@ -70,6 +70,7 @@ std::string table_markdown(const Table& table) {
 
   std::string out;
   if (!table.caption.empty()) out += "**" + markdown_text(table.caption) + "**\n\n";
+  if (!table.legend.empty()) out += markdown_text(table.legend) + "\n\n";
   add_row(out, titles, widths, table.columns);
   for (std::size_t i = 0; i < widths.size(); ++i) {
     const std::string dashes(static_cast<std::size_t>(widths[i] + 1), '-');

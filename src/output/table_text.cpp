@@ -130,6 +130,14 @@ std::string rule(int width, const std::string& words) {
 
 }  // namespace
 
+std::vector<int> text_widths(const Table& table) {
+  std::vector<int> widths;
+  for (std::size_t i = 0; i < table.columns.size(); ++i) {
+    widths.push_back(gap + print_column(table, i).width);
+  }
+  return widths;
+}
+
 std::string table_text(const Table& table, int width) {
   std::vector<Printed> all;
   for (std::size_t i = 0; i < table.columns.size(); ++i) all.push_back(print_column(table, i));
@@ -145,6 +153,10 @@ std::string table_text(const Table& table, int width) {
   std::string out;
   if (!table.caption.empty()) {
     for (const std::string& line : wrapped(table.caption, width)) add_line(out, line);
+  }
+  if (!table.legend.empty()) {
+    for (const std::string& line : wrapped(table.legend, width)) add_line(out, line);
+    add_line(out, "");
   }
   std::vector<std::string> titles;
   for (const Printed& column : columns) titles.push_back(column_title(*column.column));

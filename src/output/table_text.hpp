@@ -2,6 +2,7 @@
 #pragma once
 
 #include <string>
+#include <vector>
 
 #include "output/table.hpp"
 
@@ -14,5 +15,9 @@ namespace irrepwise {
 /// @param width  columns of the terminal
 /// @returns      lines without trailing spaces, each ended by a line feed
 [[nodiscard]] std::string table_text(const Table& table, int width);
+
+/// Columns of text that the table would fill if nothing were dropped or broken, one entry for each
+/// of its columns, the space between them included.
+[[nodiscard]] std::vector<int> text_widths(const Table& table);
 
 }  // namespace irrepwise

@@ -14,7 +14,7 @@ Table small_table() {
   table.caption = "Levels <of> \"a\" & b";
   table.columns = {{"label", "level", "", Align::Left, 0, false},
                    {"energy_ev", "energy", "eV", Align::Decimal, 0, false},
-                   {"2e1g", "2", "", Align::Right, 0, false, "2e1g"}};
+                   {"2e1g", ":2", "", Align::Right, 0, false, "2e1g"}};
   table.lines.emplace_back(Row{{SymmetryLabel{"1a1\""}, Number{-9.8765, 3}, std::string("x<y")}});
   table.lines.emplace_back(Separator{"gap & more"});
   table.lines.emplace_back(Row{{SymmetryLabel{"piu"}, Number{12, 0}, Cell{}}});
@@ -51,7 +51,7 @@ TEST_CASE("every cell carries its exact value, every head its key") {
   CHECK(holds(html,
               "<th scope=\"col\" class=\"number\" data-key=\"energy_ev\">energy <span "
               "class=\"unit\">/ eV</span></th>"));
-  CHECK(holds(html, "data-key=\"2e1g\">2<i>e</i><sub>1g</sub> 2</th>"));
+  CHECK(holds(html, "data-key=\"2e1g\">2<i>e</i><sub>1g</sub>:2</th>"));
   CHECK(holds(html, "<td data-value=\"1a1&quot;\">1<i>a</i><sub>1</sub>″</td>"));
   CHECK(holds(html, "data-value=\"-9.8765\""));
   CHECK(holds(html, "data-value=\"x&lt;y\">x&lt;y</td>"));

@@ -15,7 +15,7 @@ TEST_CASE("a table reads back from JSON with every digit, by key") {
   table.caption = "A \"caption\"";
   table.columns = {{"label", "level", "", Align::Left, 0, false},
                    {"energy_ev", "energy", "eV", Align::Decimal, 0, false},
-                   {"2e1g:1", "1", "", Align::Decimal, 0, false, "2e1g"}};
+                   {"2e1g:1", ":1", "", Align::Decimal, 0, false, "2e1g"}};
   table.lines.emplace_back(Row{{SymmetryLabel{"1sigmag+"}, Number{third, 3}, Cell{}}});
   table.lines.emplace_back(Separator{"gap"});
   table.lines.emplace_back(Row{{std::string("words"), Number{-0.0, 3}, Number{1e-7, 3}}});
@@ -26,7 +26,7 @@ TEST_CASE("a table reads back from JSON with every digit, by key") {
   CHECK(document["columns"][1]["header"] == "energy");
   CHECK(document["columns"][1]["unit"] == "eV");
   CHECK(document["columns"][2]["key"] == "2e1g:1");
-  CHECK(document["columns"][2]["header"] == "2e1g 1");
+  CHECK(document["columns"][2]["header"] == "2e1g:1");
   REQUIRE(document["rows"].size() == 2);  // separators are no rows
   CHECK(document["rows"][0]["label"] == "1sigmag+");
   CHECK(document["rows"][0]["energy_ev"].get<double>() == third);
