@@ -12,6 +12,8 @@
 
 namespace irrepwise {
 
+struct Job;
+
 struct LevelsResult {
   std::string title;
   std::string parameter_set;
@@ -22,6 +24,10 @@ struct LevelsResult {
   Populations populations;
   std::vector<std::string> warnings;
 };
+
+/// From a job to its levels and populations.
+/// @throws Error  as `make_basis`, `find_symmetry` and `solve_levels`
+[[nodiscard]] LevelsResult levels_result(const Job& job);
 
 /// @returns  the symmetrised molecule, turned and shifted back to where the input had it
 [[nodiscard]] Molecule computed_molecule(const LevelsResult& result);

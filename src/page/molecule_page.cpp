@@ -9,6 +9,7 @@
 #include "output/html_parts.hpp"
 #include "output/levels_report.hpp"
 #include "output/orbital_pictures.hpp"
+#include "output/orbital_table_layout.hpp"
 #include "output/symmetry_report.hpp"
 #include "page/page_parts.hpp"
 #include "page/page_surfaces.hpp"
@@ -17,6 +18,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
+constexpr int screen_columns = 130;
 constexpr int every_level = 1'000'000;
 
 LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) {
@@ -29,6 +31,20 @@ LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) 
   diagram.title = words.title;
   diagram.method = words.method;
   return diagram;
+}
+
+// Of the levels that the diagram shows.
+std::vector<Table> coefficient_tables(const LevelsResult& result, const PageMolecule& shown,
+                                      const Provenance& provenance) {
+  std::vector<OrbitalChoice> choices;
+  for (const PageLevel& level : shown.levels) {
+    const std::vector<OrbitalChoice> partners = partners_of(result.levels, level.level);
+    choices.insert(choices.end(), partners.begin(), partners.end());
+  }
+  OrbitalTableLayout layout;
+  layout.width = screen_columns;
+  if (!provenance.files.empty()) layout.source = provenance.files.front().name;
+  return orbital_tables(result, orbital_table(result, choices, {}), layout);
 }
 
 // The pictures of HOMO and LUMO stand in the page also where no script runs, and on paper.

@@ -11,7 +11,6 @@
 #include <doctest/doctest.h>
 
 #include "figure/collisions.hpp"
-#include "basis/atom_kinds.hpp"
 #include "core/error.hpp"
 #include "figure/svg.hpp"
 #include "job/variants.hpp"
@@ -22,21 +21,7 @@ using namespace irrepwise;
 namespace {
 
 VariantResult computed_variant(const VariantJob& variant) {
-  const Job job = variant.read();
-  Basis basis = make_basis(job.molecule, job.parameters, job.overrides);
-  SymmetryOptions options = job.symmetry;
-  options.kinds = atom_kinds(basis);
-  MolecularSymmetry symmetry = find_symmetry(job.molecule, options);
-  Levels levels = solve_levels(symmetry, basis, job.hueckel);
-  Populations populations = mulliken_populations(symmetry, basis, levels);
-  return analysed(variant.name, {job.title,
-                                 job.parameters.name(),
-                                 job.molecule,
-                                 std::move(symmetry),
-                                 std::move(basis),
-                                 std::move(levels),
-                                 std::move(populations),
-                                 {}});
+  return analysed(variant.name, levels_result(variant.read()));
 }
 
 Matching matching(const VariantResult& reference, const VariantResult& variant) {
