@@ -3,7 +3,6 @@
 #include <algorithm>
 #include <cmath>
 #include <cstddef>
-#include <map>
 #include <utility>
 
 #include <Eigen/Geometry>
@@ -152,79 +151,106 @@ std::vector<DContent> d_contents(const MolecularSymmetry& symmetry, const Basis&
   return contents;
 }
 
-// Levels of one irrep of the parent, those to take first in front.
-std::vector<int> candidates(const std::vector<DContent>& contents, std::size_t irrep, bool sigma) {
-  constexpr double of_the_largest = 0.5;
-  constexpr double tie = 1e-9;  // shares apart by rounding only keep the order of energy
-  const auto part = [&](int k) {
-    const DContent& content = contents[static_cast<std::size_t>(k)];
-    return content.share * content.weights[irrep];
-  };
-  std::vector<int> order;
-  double largest = 0.0;
-  for (int k = static_cast<int>(contents.size()) - 1; k >= 0; --k) {
-    order.push_back(k);
-    largest = std::max(largest, part(k));
+double part_of(const DContent& content, std::size_t irrep) {
+  return content.share * content.weights[irrep];
+}
+
+bool mostly(const DContent& content, std::size_t irrep) {
+  return std::max_element(content.weights.begin(), content.weights.end()) -
+             content.weights.begin() ==
+         static_cast<std::ptrdiff_t>(irrep);
+}
+
+// Where σ donors span the irrep too, its d orbitals are shared between bonding levels, below their
+// own energy, and antibonding ones above it. The d block is the upper part, unless there is hardly
+// anything of them there, as where the donors lie higher than the metal.
+bool lies_above(const Levels& levels, const std::vector<DContent>& contents, std::size_t irrep,
+                double d_energy_ev) {
+  constexpr double least_above = 0.25;  // of what is below
+  double above = 0.0, below = 0.0;
+  for (std::size_t k = 0; k < contents.size(); ++k) {
+    if (!mostly(contents[k], irrep)) continue;
+    const Level& level = levels.levels[k];
+    (level.energy_ev > d_energy_ev ? above : below) +=
+        part_of(contents[k], irrep) * level.degeneracy;
   }
-  const auto key = [&](int k) { return std::llround(part(k) / tie); };
-  std::stable_sort(order.begin(), order.end(), [&](int a, int b) {
-    if (sigma) {
-      const bool much_a = part(a) >= of_the_largest * largest;
-      const bool much_b = part(b) >= of_the_largest * largest;
-      if (much_a || much_b) return much_a && (!much_b || a > b);
-    }
-    return key(a) > key(b);
-  });
+  return above >= least_above * below;
+}
+
+// Levels of one irrep of the parent, those to take first in front.
+std::vector<int> candidates(const Levels& levels, const std::vector<DContent>& contents,
+                            std::size_t irrep, bool above, double d_energy_ev) {
+  constexpr double tie = 1e-9;  // shares apart by rounding only keep the order of energy
+  std::vector<int> order;
+  for (int k = static_cast<int>(contents.size()) - 1; k >= 0; --k) order.push_back(k);
+  const auto key = [&](int k) {
+    const auto at = static_cast<std::size_t>(k);
+    const bool wanted = !above || levels.levels[at].energy_ev > d_energy_ev;
+    return std::pair(wanted, std::llround(part_of(contents[at], irrep) / tie));
+  };
+  std::stable_sort(order.begin(), order.end(), [&](int a, int b) { return key(a) > key(b); });
   return order;
 }
 
-std::vector<DLevel> d_levels(const MolecularSymmetry& symmetry, const Basis& basis,
-                             const Levels& levels, int metal, const std::vector<DIrrep>& irreps,
-                             const std::vector<DContent>& contents) {
-  const EquivalentAtoms& set = set_of(levels, metal);
+// Over the levels chosen, and where they are antibonding also over what else above the d orbitals
+// has much of them, since ligand levels near in energy take their share.
+std::optional<double> mean_energy(const Levels& levels, const std::vector<DContent>& contents,
+                                  std::size_t irrep, const std::vector<int>& chosen, bool above,
+                                  double d_energy_ev) {
+  constexpr double much = 0.25;  // of the largest part among the chosen
+  double largest = 0.0;
+  for (const int k : chosen) {
+    largest = std::max(largest, part_of(contents[static_cast<std::size_t>(k)], irrep));
+  }
+  double weights = 0.0, sum = 0.0;
+  for (std::size_t k = 0; k < contents.size(); ++k) {
+    const Level& level = levels.levels[k];
+    const double part = part_of(contents[k], irrep);
+    const bool is_chosen =
+        std::find(chosen.begin(), chosen.end(), static_cast<int>(k)) != chosen.end();
+    const bool joins = above && level.energy_ev > d_energy_ev && mostly(contents[k], irrep) &&
+                       part >= much * largest;
+    if (!is_chosen && !joins) continue;
+    weights += part * level.degeneracy;
+    sum += part * level.degeneracy * level.energy_ev;
+  }
+  if (!(weights > 0.0)) return {};  // Mulliken's shares may be negative
+  return sum / weights;
+}
+
+void add_levels(const MolecularSymmetry& symmetry, const Basis& basis, const Levels& levels,
+                const std::vector<DIrrep>& irreps, const std::vector<DContent>& contents,
+                DBlock& block) {
+  const EquivalentAtoms& set = set_of(levels, block.metal);
+  const double d_energy_ev = d_shell(basis, block.metal)->h_ii_ev;
   std::vector<int> left;  // by irrep of the molecule: combinations not yet given to a level
   for (int irrep = 0; irrep < static_cast<int>(symmetry.group.irreps().size()); ++irrep) {
     left.push_back(d_combinations(basis, levels, set, irrep));
   }
-  std::vector<bool> taken(contents.size(), false);
-  std::vector<DLevel> chosen;
   for (std::size_t i = 0; i < irreps.size(); ++i) {
+    const bool above = irreps[i].sigma && lies_above(levels, contents, i, d_energy_ev);
+    std::vector<int> chosen;
     int wanted = irreps[i].n_orbitals * set.size();
-    for (const int k : candidates(contents, i, irreps[i].sigma)) {
+    for (const int k : candidates(levels, contents, i, above, d_energy_ev)) {
       const auto at = static_cast<std::size_t>(k);
       const Level& level = levels.levels[at];
       int& of_irrep = left[static_cast<std::size_t>(level.irrep)];
       if (wanted <= 0) break;
-      const std::vector<double>& weights = contents[at].weights;
-      const bool of_this = std::max_element(weights.begin(), weights.end()) - weights.begin() ==
-                           static_cast<std::ptrdiff_t>(i);
-      if (taken[at] || of_irrep == 0 || !of_this) continue;
-      taken[at] = true;
+      if (of_irrep == 0 || !mostly(contents[at], i)) continue;
       --of_irrep;
       wanted -= level.degeneracy;
-      chosen.push_back({k, contents[at].share, irreps[i].label, weights[i]});
+      chosen.push_back(k);
+      block.levels.push_back({k, contents[at].share, irreps[i].label, contents[at].weights[i]});
     }
+    if (irreps[i].label.empty()) continue;
+    const std::optional<double> mean = mean_energy(levels, contents, i, chosen, above, d_energy_ev);
+    if (mean) block.means.push_back({irreps[i].label, *mean});
   }
-  std::sort(chosen.begin(), chosen.end(),
+  std::sort(block.levels.begin(), block.levels.end(),
             [](const DLevel& a, const DLevel& b) { return a.level < b.level; });
-  return chosen;
-}
-
-std::vector<ParentMean> parent_means(const Levels& levels, const std::vector<DLevel>& d_levels) {
-  std::map<std::string, std::pair<double, double>> sums;  // weight, weight times energy
-  for (const DLevel& entry : d_levels) {
-    const Level& level = levels.levels[static_cast<std::size_t>(entry.level)];
-    const double weight = entry.d_share * level.degeneracy;
-    if (entry.parent_label.empty() || !(weight > 0.0)) continue;
-    sums[entry.parent_label].first += weight;
-    sums[entry.parent_label].second += weight * level.energy_ev;
-  }
-  std::vector<ParentMean> means;
-  for (const auto& [label, sum] : sums) means.push_back({label, sum.second / sum.first});
-  std::stable_sort(means.begin(), means.end(), [](const ParentMean& a, const ParentMean& b) {
-    return a.energy_ev < b.energy_ev;
-  });
-  return means;
+  std::stable_sort(
+      block.means.begin(), block.means.end(),
+      [](const ParentMean& a, const ParentMean& b) { return a.energy_ev < b.energy_ev; });
 }
 
 }  // namespace
@@ -250,8 +276,7 @@ DBlock find_d_block(const MolecularSymmetry& symmetry, const Basis& basis, const
   }
   const std::vector<DContent> contents =
       d_contents(symmetry, basis, levels, populations, metal, irreps, turn);
-  block.levels = d_levels(symmetry, basis, levels, metal, irreps, contents);
-  block.means = parent_means(levels, block.levels);
+  add_levels(symmetry, basis, levels, irreps, contents, block);
   return block;
 }
 

@@ -20,7 +20,9 @@ struct DLevel {
   double parent_weight = 0.0;  // the part of the metal d part that belongs to it, 0 to 1
 };
 
-/// Mean energy of all levels of one parent label, weighted by d share and degeneracy.
+/// Mean energy of the levels of one parent label, weighted by the d share that belongs to it and by
+/// degeneracy. Where σ donors span it and ligand levels near in energy take part of the d orbitals,
+/// every level above the d energy counts that has a quarter of the largest share or more.
 struct ParentMean {
   std::string label;
   double energy_ev = 0.0;
@@ -36,10 +38,10 @@ struct DBlock {
 
 /// For each irrep of the parent that d functions span, as many levels as it has orbitals, each with
 /// the largest weight in that irrep: those with the largest d share. Where σ donors span the irrep
-/// as well (eg in an octahedron) there are a bonding and an antibonding level, between which the d
-/// orbital is shared: the d block is the antibonding one, so there the highest level counts that
-/// has at least half of the largest share. No irrep of the molecule gives more levels than d
-/// combinations.
+/// as well (eg in an octahedron) the d orbital is shared between bonding and antibonding levels:
+/// the d block is the antibonding part, so there levels above H_ii of the d shell come first,
+/// unless the part above is less than a quarter of that below. No irrep of the molecule gives more
+/// levels than d combinations.
 ///
 /// The parent is the group of the polyhedron that the donor sites are nearest to, laid over them as
 /// well as it goes; a single donor makes it C∞v. The metal d part of a level, turned to the

@@ -26,7 +26,9 @@ Eigen::MatrixXd all_orbitals(const MolecularSymmetry& symmetry, const Basis& bas
 }
 
 // The rows of shared shells, turned into the reference's frame and put in its order; what the
-// variant has beside them is left out. Shells meet by l: a metal of another row keeps its d shell.
+// variant has beside them is left out. Shells meet by l: a metal of another row keeps its d shell,
+// and a donor that replaces another its s and p, which tell bonding from antibonding, of p only the
+// part along the bond where the ligands are not both single atoms.
 Eigen::MatrixXd in_reference(const MatchReference& reference, const SharedAtoms& shared,
                              const Basis& basis, const Eigen::MatrixXd& orbitals) {
   std::array<Eigen::MatrixXd, max_l + 1> turns;
@@ -34,19 +36,24 @@ Eigen::MatrixXd in_reference(const MatchReference& reference, const SharedAtoms&
     turns[static_cast<std::size_t>(l)] = harmonic_rotation(l, shared.turn);
   }
   Eigen::MatrixXd rows = Eigen::MatrixXd::Zero(reference.basis.n_orbitals, orbitals.cols());
-  for (const auto& [ours, theirs] : shared.atoms) {
+  const auto put = [&](int ours, int theirs, const ReplacedDonor* replaced) {
     const auto a = static_cast<std::size_t>(ours), b = static_cast<std::size_t>(theirs);
     for (int i = reference.basis.first_shell[a]; i < reference.basis.first_shell[a + 1]; ++i) {
       const Shell& to = reference.basis.shells[static_cast<std::size_t>(i)];
       for (int j = basis.first_shell[b]; j < basis.first_shell[b + 1]; ++j) {
         const Shell& from = basis.shells[static_cast<std::size_t>(j)];
-        if (from.l != to.l) continue;
-        rows.middleRows(to.first_orbital, to.size()) =
-            turns[static_cast<std::size_t>(to.l)] *
-            orbitals.middleRows(from.first_orbital, from.size());
+        if (from.l != to.l || (replaced && to.l > 1)) continue;
+        Eigen::MatrixXd turned = turns[static_cast<std::size_t>(to.l)] *
+                                 orbitals.middleRows(from.first_orbital, from.size());
+        if (replaced && replaced->sigma_only && to.l == 1) {
+          turned = (replaced->direction * replaced->direction.transpose() * turned).eval();
+        }
+        rows.middleRows(to.first_orbital, to.size()) = turned;
       }
     }
-  }
+  };
+  for (const auto& [ours, theirs] : shared.atoms) put(ours, theirs, nullptr);
+  for (const ReplacedDonor& pair : shared.replaced_donors) put(pair.first, pair.second, &pair);
   return rows;
 }
 
@@ -112,6 +119,7 @@ Matching match_levels(const MatchReference& reference, const MolecularSymmetry& 
   Matching matching;
   matching.common_group = common.group.symbol().name();
   matching.shared_atoms = static_cast<int>(shared.atoms.size());
+  matching.replaced_donors = static_cast<int>(shared.replaced_donors.size());
   for (LevelMatch& match : found) {
     int& ours = free_reference[static_cast<std::size_t>(match.reference)];
     int& theirs = free_variant[static_cast<std::size_t>(match.variant)];

@@ -32,6 +32,7 @@ struct LevelMatch {
 struct Matching {
   std::string common_group;
   int shared_atoms = 0;
+  int replaced_donors = 0;          // of other elements in the same places
   std::vector<LevelMatch> matches;  // by the reference's level, then the variant's
 };
 
@@ -40,8 +41,8 @@ inline constexpr double least_match = 0.1;
 
 /// Pairs levels, those that overlap most first; a degenerate level may meet several, as many
 /// orbitals as it has. Only levels that share an irrep of the common subgroup are paired. The
-/// overlap is that of the orbitals on the shared atoms, taken with the reference's overlap
-/// integrals.
+/// overlap is that of the orbitals on the shared atoms and on donors that replace each other, taken
+/// with the reference's overlap integrals.
 [[nodiscard]] Matching match_levels(const MatchReference& reference,
                                     const MolecularSymmetry& symmetry, const Basis& basis,
                                     const Levels& levels);

@@ -15,6 +15,7 @@ namespace {
 
 // What turns are found from: donor sites about a metal, or atoms about the centroid.
 struct Landmark {
+  int atom = 0;  // the first, if there are several
   int element = 0;
   int n_atoms = 1;
   Eigen::Vector3d position;  // from the anchor, Å
@@ -42,14 +43,16 @@ Laid laid_out(const Molecule& molecule, const Basis& basis) {
         centroid += molecule.atoms()[static_cast<std::size_t>(atom)].position - laid.anchor;
       }
       const Atom& donor = molecule.atoms()[static_cast<std::size_t>(site.atoms.front())];
-      laid.landmarks.push_back({donor.atomic_number, static_cast<int>(site.atoms.size()),
+      laid.landmarks.push_back({site.atoms.front(), donor.atomic_number,
+                                static_cast<int>(site.atoms.size()),
                                 centroid / static_cast<double>(site.atoms.size())});
     }
     return laid;
   }
   laid.anchor = molecule.positions().rowwise().mean();
-  for (const Atom& atom : molecule.atoms()) {
-    laid.landmarks.push_back({atom.atomic_number, 1, atom.position - laid.anchor});
+  for (int i = 0; i < molecule.size(); ++i) {
+    const Atom& atom = molecule.atoms()[static_cast<std::size_t>(i)];
+    laid.landmarks.push_back({i, atom.atomic_number, 1, atom.position - laid.anchor});
   }
   std::stable_sort(laid.landmarks.begin(), laid.landmarks.end(),
                    [](const Landmark& a, const Landmark& b) { return a.element > b.element; });
@@ -127,13 +130,19 @@ std::optional<Eigen::Matrix3d> turn_between(const Eigen::Vector3d& a1, const Eig
   return frame(a1, a2) * frame(b1, b2).transpose();
 }
 
+double cosine_between(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
+  const double lengths = a.norm() * b.norm();
+  return lengths > 0.0 ? a.dot(b) / lengths : 0.0;
+}
+
+constexpr double one_direction = 0.94;  // cosine of 20 degrees
+
 // How many landmarks point where one of the other molecule does, of whatever element.
 int directions_met(const Laid& first, const Laid& second, const Eigen::Matrix3d& turn) {
-  constexpr double nearness = 0.94;  // cosine of 20 degrees
   int count = 0;
   for (const Landmark& a : first.landmarks) {
     count += std::any_of(second.landmarks.begin(), second.landmarks.end(), [&](const Landmark& b) {
-      return a.position.dot(turn * b.position) >= nearness * a.position.norm() * b.position.norm();
+      return cosine_between(a.position, turn * b.position) >= one_direction;
     });
   }
   return count;
@@ -145,6 +154,45 @@ struct Best {
   int directions = -1;
   std::vector<std::pair<int, int>> atoms;
 };
+
+bool is_terminal(const Laid& laid, int atom) {
+  for (int other = 0; other < laid.molecule->size(); ++other) {
+    if (other != atom && other != *laid.metal && are_bonded(*laid.molecule, atom, other)) {
+      return false;
+    }
+  }
+  return true;
+}
+
+std::vector<ReplacedDonor> donors_replaced(const Laid& first, const Laid& second,
+                                           const Best& best) {
+  std::vector<ReplacedDonor> pairs;
+  if (!first.metal || !second.metal) return pairs;
+  std::vector<bool> ours(first.molecule->atoms().size(), false);
+  std::vector<bool> theirs(second.molecule->atoms().size(), false);
+  for (const auto& [a, b] : best.atoms) {
+    ours[static_cast<std::size_t>(a)] = true;
+    theirs[static_cast<std::size_t>(b)] = true;
+  }
+  for (const Landmark& a : first.landmarks) {
+    if (a.n_atoms != 1 || ours[static_cast<std::size_t>(a.atom)]) continue;
+    const Landmark* nearest = nullptr;
+    double cosine = one_direction;
+    for (const Landmark& b : second.landmarks) {
+      if (b.n_atoms != 1 || theirs[static_cast<std::size_t>(b.atom)]) continue;
+      const double own = cosine_between(a.position, best.turn * b.position);
+      if (own >= cosine) {
+        cosine = own;
+        nearest = &b;
+      }
+    }
+    if (!nearest) continue;
+    theirs[static_cast<std::size_t>(nearest->atom)] = true;
+    pairs.push_back({a.atom, nearest->atom, a.position.normalized(),
+                     !is_terminal(first, a.atom) || !is_terminal(second, nearest->atom)});
+  }
+  return pairs;
+}
 
 void consider(const Laid& first, const Laid& second, const Eigen::Matrix3d& turn, Best& best) {
   const int landmarks = landmarks_met(first, second, turn);
@@ -211,7 +259,8 @@ SharedAtoms find_shared_atoms(const MolecularSymmetry& first, const Basis& first
     }
   }
   const Eigen::Matrix3d turn = refined(a, b, best);
-  return {std::move(best.atoms), turn};
+  std::vector<ReplacedDonor> replaced = donors_replaced(a, b, best);
+  return {std::move(best.atoms), std::move(replaced), turn};
 }
 
 }  // namespace irrepwise

@@ -49,7 +49,7 @@ int vertex_number(std::string_view text, const std::string& word) {
   return *number;
 }
 
-// "NH3", "Cl@1,3" (one on each vertex), "Cp@1+2+3" (one over all of them).
+// "NH3", "Cl@1,3" (one on each vertex), "Cp@1+2+3", "OAc@1+2" (one over all of them).
 LigandRequest parse_ligand(const std::string& word) {
   LigandRequest request;
   request.place = word;
@@ -74,6 +74,21 @@ LigandLibrary library(const BuildOptions& options) {
   return built_in_ligands().extended_by(read_ligands(options.ligands));
 }
 
+// One ligand on several vertices is a chelate where it has as many teeth.
+void settle_teeth(LigandRequest& request, const LigandLibrary& library) {
+  if (!request.covers) return;
+  try {
+    for (const Binding& binding : library.find(request.ligand).bindings) {
+      const int n_vertices = static_cast<int>(request.vertices.size());
+      if (binding.denticity() < 2 || binding.denticity() != n_vertices) continue;
+      request.covers = false;
+      request.denticity = n_vertices;
+    }
+  } catch (const Error& error) {
+    throw error_at(request.place, error);
+  }
+}
+
 ComplexSpec spec_of_words(const BuildOptions& options) {
   const std::vector<std::string>& words = options.words;
   CentreSpec centre;
@@ -86,9 +101,12 @@ ComplexSpec spec_of_words(const BuildOptions& options) {
   centre.polyhedron = Polyhedron(words[1], options.angle);
   centre.oxidation = options.oxidation;
   centre.oxidation_place = "--oxidation";
-  for (std::size_t i = 2; i < words.size(); ++i) centre.ligands.push_back(parse_ligand(words[i]));
   ComplexSpec complex;
   complex.library = library(options);
+  for (std::size_t i = 2; i < words.size(); ++i) {
+    centre.ligands.push_back(parse_ligand(words[i]));
+    settle_teeth(centre.ligands.back(), complex.library);
+  }
   complex.charge = options.charge;
   complex.charge_place = "--charge";
   complex.centres.push_back(std::move(centre));
@@ -179,7 +197,7 @@ Command add_build(CLI::App& program) {
   app->add_option("complex", options->words,
                   "A job file with a section build, or: metal, polyhedral symbol, ligands in the "
                   "order of the vertices. NAME@1,3 puts a ligand on each of these vertices, "
-                  "NAME@1+2+3 one over all of them")
+                  "NAME@1+2+3 one over all of them: a π ligand, or a chelate with as many teeth")
       ->option_text("JOB | METAL POLYHEDRON LIGAND ...");
   app->add_option("--oxidation", options->oxidation, "Oxidation state of the metal")
       ->option_text("N")
@@ -206,6 +224,7 @@ Command add_build(CLI::App& program) {
       "  irrepwise build Pt SP-4 Cl Cl NH3 NH3 --oxidation 2\n"
       "  irrepwise build Co OC-6 en en en --oxidation 3 --output tris.xyz\n"
       "  irrepwise build Mn OC-6 Cp@1+2+3 CO CO CO --charge 0\n"
+      "  irrepwise build Pd SP-4 OAc@1+2 PMe3 PMe3 --oxidation 2\n"
       "  irrepwise build --list ligands");
   return {app, [options] { run(*options); }};
 }

@@ -146,11 +146,23 @@ Conformation widest(const Assembly& assembly, const std::vector<int>& metals,
   return best;
 }
 
-Error clash_error(const Contact& contact) {
+// A ring on one vertex of a polyhedron made for small ligands takes the room of several.
+std::string covering_words(const Assembly& assembly, const Contact& contact) {
+  for (const Site& site : assembly.sites) {
+    if (site.words != contact.first && site.words != contact.second) continue;
+    if (site.seated.binding->hapticity() < 3 || site.seated.request.vertices.size() > 1) continue;
+    const std::string& name = site.seated.ligand->name;
+    return fmt::format(", or let {} cover several vertices", name);
+  }
+  return {};
+}
+
+Error clash_error(const Assembly& assembly, const Contact& contact) {
   return Error(fmt::format(
       "{} and {} clash: atoms come as near as {:.2f} Å, expected {:.2f} Å or more, in every "
-      "conformation tried; give longer distances, a twist, other vertices or smaller ligands",
-      contact.first, contact.second, contact.distance_angstrom, contact.limit_angstrom));
+      "conformation tried; give longer distances, a twist, other vertices or smaller ligands{}",
+      contact.first, contact.second, contact.distance_angstrom, contact.limit_angstrom,
+      covering_words(assembly, contact)));
 }
 
 }  // namespace
@@ -164,7 +176,7 @@ std::vector<Pose> most_symmetric_poses(const Assembly& assembly, const std::vect
   }
   Conformation best{fixed, nearest_contact(assembly, metals, fixed)};
   if (!is_free) {
-    if (best.contact.relative < 1.0) throw clash_error(best.contact);
+    if (best.contact.relative < 1.0) throw clash_error(assembly, best.contact);
     return fixed;
   }
   const SkeletonGroup group = skeleton_group(assembly, metals);
@@ -182,7 +194,7 @@ std::vector<Pose> most_symmetric_poses(const Assembly& assembly, const std::vect
       best = std::move(found);
     }
   }
-  if (best.contact.relative < 1.0) throw clash_error(best.contact);
+  if (best.contact.relative < 1.0) throw clash_error(assembly, best.contact);
   return best.poses;
 }
 

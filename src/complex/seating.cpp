@@ -124,6 +124,22 @@ std::vector<std::vector<int>> split(const LigandRequest& request, const Ligand& 
   return groups;
 }
 
+// What could fill more vertices: a ligand that binds by fewer teeth than it can.
+std::string more_teeth_words(const std::vector<std::vector<SeatedLigand>>& seated) {
+  for (const std::vector<SeatedLigand>& group : seated) {
+    for (const SeatedLigand& one : group) {
+      for (const Binding& binding : one.ligand->bindings) {
+        if (binding.denticity() <= one.binding->denticity()) continue;
+        return fmt::format(
+            "; {0} has one tooth here and can have two: {{ligand: {0}, denticity: 2}}, or {0}@1+2 "
+            "on the command line",
+            one.ligand->name);
+      }
+    }
+  }
+  return {};
+}
+
 }  // namespace
 
 std::vector<SeatedLigand> seat_ligands(const CentreSpec& centre, const std::vector<int>& taken,
@@ -156,10 +172,11 @@ std::vector<SeatedLigand> seat_ligands(const CentreSpec& centre, const std::vect
     std::vector<std::string> names;
     for (const int vertex : left) names.push_back(std::to_string(vertex));
     at_place(centre.place, [&] {
-      throw Error(fmt::format(
-          "nothing is on {} {} of {}; give it a ligand, or choose a smaller "
-          "polyhedron",
-          left.size() == 1 ? "vertex" : "vertices", joined(names), polyhedron.kind().symbol));
+      throw Error(
+          fmt::format("nothing is on {} {} of {}; give it a ligand, or choose a smaller "
+                      "polyhedron{}",
+                      left.size() == 1 ? "vertex" : "vertices", joined(names),
+                      polyhedron.kind().symbol, more_teeth_words(seated)));
     });
   }
   std::vector<SeatedLigand> all;

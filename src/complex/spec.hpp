@@ -61,19 +61,19 @@ struct ComplexSpec {
 struct Substitution {
   std::optional<int> metal;  // atomic number
   std::optional<int> oxidation;
-  std::optional<std::string> polyhedron;
+  std::optional<Polyhedron> polyhedron;
   std::vector<LigandRequest> ligands;  // each with the vertices that it takes over
   std::vector<std::pair<int, double>> distances_angstrom;  // vertex, metal-donor distance
+  int centre = 0;                                          // which one, from 0
+  std::string place;                                       // for messages
 };
 
-/// @param centre  which one, from 0
 /// @returns  the complex with the ligands on the vertices named replaced; a ligand that loses one
 /// of
 ///           its teeth leaves, and must be replaced on all its vertices. A new metal keeps the
 ///           oxidation state; a charge that was given for the whole follows where it can.
 /// @throws Error  as `seat_ligands`; a vertex that nothing is on; no such centre
-[[nodiscard]] ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change,
-                                      int centre = 0);
+[[nodiscard]] ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change);
 
 /// One ligand with everything settled but its pose.
 struct SeatedLigand {

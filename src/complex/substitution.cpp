@@ -17,7 +17,8 @@ bool meets(const std::vector<int>& a, const std::vector<int>& b) {
 
 }  // namespace
 
-ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change, int centre) {
+ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change) {
+  const int centre = change.centre;
   if (centre < 0 || centre >= static_cast<int>(complex.centres.size())) {
     throw Error(
         fmt::format("there is no centre {}, expected 1 to {}", centre + 1, complex.centres.size()));
@@ -32,7 +33,7 @@ ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change, 
   }
   const std::vector<SeatedLigand> seated = seat_ligands(spec, taken, complex.library);
   if (change.metal) spec.atomic_number = *change.metal;
-  if (change.polyhedron) spec.polyhedron = Polyhedron(*change.polyhedron);
+  if (change.polyhedron) spec.polyhedron = *change.polyhedron;
   if (variant.charge && complex.centres.size() == 1 && !change.oxidation) {
     int ligands = 0;
     for (const SeatedLigand& one : seated) ligands += one.ligand->charge;

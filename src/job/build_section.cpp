@@ -182,13 +182,56 @@ ComplexSpec read_build(const YamlNode& node, const std::string& beside, FileChai
   return complex;
 }
 
+std::vector<EachChange> read_each(const YamlNode& node) {
+  node.expect_keys("`each`", {"ligands", "vertices", "metals", "centre"});
+  const YamlNode* const ligands = node.find("ligands");
+  const YamlNode* const metals = node.find("metals");
+  const YamlNode* const vertices = node.find("vertices");
+  if (!ligands && !metals) node.fail("give a list of `ligands`, of `metals`, or both");
+  if (vertices && !ligands) vertices->fail("`vertices` goes with `ligands`");
+  Substitution start;
+  start.place = node.place();
+  if (const YamlNode* const centre = node.find("centre")) {
+    start.centre = centre->whole_number("1 or 2, the number of a centre") - 1;
+  }
+  std::vector<EachChange> changes = {{"", "", start}};
+  if (metals) {
+    changes.clear();
+    for (const YamlNode& item : metals->list("a list of metals")) {
+      EachChange change{item.word(), "", start};
+      change.change.metal = read_metal(item);
+      changes.push_back(std::move(change));
+    }
+  }
+  if (!ligands) return changes;
+  const std::vector<int> taken = read_vertices(node.at("vertices"));
+  std::vector<EachChange> all;
+  for (const EachChange& first : changes) {
+    for (const YamlNode& item : ligands->list("a list of ligands")) {
+      EachChange both = first;
+      LigandRequest request = read_ligand_request(item);
+      if (!request.vertices.empty()) item.fail("the vertices stand beside the list of ligands");
+      request.vertices = taken;
+      both.ligand = request.ligand;
+      both.change.ligands.push_back(std::move(request));
+      all.push_back(std::move(both));
+    }
+  }
+  return all;
+}
+
 Substitution read_substitution(const YamlNode& node) {
-  node.expect_keys("a substitution", {"metal", "oxidation", "polyhedron", "ligands", "distances"});
+  node.expect_keys("a substitution",
+                   {"metal", "oxidation", "polyhedron", "ligands", "distances", "centre"});
   Substitution change;
+  change.place = node.place();
+  if (const YamlNode* const centre = node.find("centre")) {
+    change.centre = centre->whole_number("1 or 2, the number of a centre") - 1;
+  }
   if (const YamlNode* const metal = node.find("metal")) change.metal = read_metal(*metal);
   change.oxidation = read_optional_whole(node, "oxidation", "a whole number, the oxidation state");
   if (const YamlNode* const polyhedron = node.find("polyhedron")) {
-    change.polyhedron = read_polyhedron(*polyhedron).kind().symbol;
+    change.polyhedron = read_polyhedron(*polyhedron);
   }
   if (const YamlNode* const ligands = node.find("ligands")) {
     for (const YamlNode& item : ligands->list("a list of ligands with their vertices")) {

@@ -54,7 +54,7 @@ void read_charge(const YamlNode& node, ComplexSpec& complex) {
   complex.charge_place = node.place();
 }
 
-BuiltComplex built_at(const ComplexSpec& complex, const YamlNode& section,
+BuiltComplex built_at(const ComplexSpec& complex, const std::string& section,
                       const std::string& path) {
   try {
     return build_complex(complex);
@@ -62,29 +62,32 @@ BuiltComplex built_at(const ComplexSpec& complex, const YamlNode& section,
     // Where no value of the section is to blame, the section is.
     const bool has_place = std::string_view(error.what()).starts_with(path);
     if (has_place) throw;
-    throw error_at(section.place(), error);
+    throw error_at(section, error);
   }
 }
 
-ComplexSpec replaced(const ComplexSpec& complex, const YamlNode& replace, const std::string& path) {
-  const Substitution change = read_substitution(replace);
+ComplexSpec replaced(const ComplexSpec& complex, const Substitution& change,
+                     const std::string& path) {
   try {
     return substituted(complex, change);
   } catch (const Error& error) {
     const bool has_place = std::string_view(error.what()).starts_with(path);
     if (has_place) throw;
-    throw error_at(replace.place(), error);
+    throw error_at(change.place, error);
   }
 }
 
 // The molecule from `geometry` or `build`, the latter with what the variant replaces.
-Job read_structure(const YamlNode& node, const YamlNode* variant, const std::string& path,
-                   FileChain& files) {
+Job read_structure(const YamlNode& node, const YamlNode* variant, const Substitution* each,
+                   const std::string& path, FileChain& files) {
   const YamlNode* const build = node.find("build");
   const YamlNode* const replace = find_in(variant, "replace");
   const YamlNode* const other = find_in(variant, "geometry");
-  if (replace && (!build || other)) {
-    replace->fail("`replace` changes what `build` makes; use `geometry` for a structure in a file");
+  for (const char* const key : {"replace", "each"}) {
+    const YamlNode* const change = find_in(variant, key);
+    if (!change || (build && !other)) continue;
+    change->fail(fmt::format(
+        "`{}` changes what `build` makes; use `geometry` for a structure in a file", key));
   }
   if (other) return job_of(read_geometry(*other, path, files));
   if (!build) return job_of(read_geometry(node.at("geometry"), path, files));
@@ -93,9 +96,17 @@ Job read_structure(const YamlNode& node, const YamlNode* variant, const std::str
   }
   ComplexSpec complex = read_build(*build, path, files);
   if (const YamlNode* const charge = node.find("charge")) read_charge(*charge, complex);
-  if (replace) complex = replaced(complex, *replace, path);
+  std::string section = build->place();
+  if (replace) {
+    complex = replaced(complex, read_substitution(*replace), path);
+    section = replace->place();
+  }
+  if (each) {
+    complex = replaced(complex, *each, path);
+    section = each->place;
+  }
   if (const YamlNode* const charge = find_in(variant, "charge")) read_charge(*charge, complex);
-  BuiltComplex built = built_at(complex, replace ? *replace : *build, path);
+  BuiltComplex built = built_at(complex, section, path);
   Job job = job_of(built.molecule);
   job.complex = std::move(complex);
   job.built = std::move(built);
@@ -103,18 +114,18 @@ Job read_structure(const YamlNode& node, const YamlNode* variant, const std::str
 }
 
 Job parse_job(const std::string& text, const std::string& path, FileChain& files) {
-  return read_job_node(YamlNode::parse(text, path), nullptr, path, files);
+  return read_job_node(YamlNode::parse(text, path), nullptr, nullptr, path, files);
 }
 
 }  // namespace
 
-Job read_job_node(const YamlNode& node, const YamlNode* variant, const std::string& path,
-                  FileChain& files) {
+Job read_job_node(const YamlNode& node, const YamlNode* variant, const Substitution* each,
+                  const std::string& path, FileChain& files) {
   files.open.push_back(path);
   files.read.push_back(path);
   node.expect_keys("a job", {"title", "geometry", "build", "charge", "multiplicity", "occupations",
                              "parameters", "overrides", "rule", "k", "symmetry", "variants"});
-  Job job = read_structure(node, variant, path, files);
+  Job job = read_structure(node, variant, each, path, files);
   if (const YamlNode* const title = find_in(node, variant, "title")) {
     job.title = title->word("a title");
   }

@@ -41,8 +41,18 @@ struct FileChain {
 [[nodiscard]] LigandRequest read_ligand_request(const YamlNode& node);
 
 /// A change of a complex: `metal`, `oxidation`, `polyhedron`, `ligands` with the vertices that they
-/// take over, `distances` by vertex.
+/// take over, `distances` by vertex, `centre` of two.
 [[nodiscard]] Substitution read_substitution(const YamlNode& node);
+
+/// One of the changes that `each` of a variant stands for.
+struct EachChange {
+  std::string metal;  // as the file has them; empty where there is none
+  std::string ligand;
+  Substitution change;
+};
+
+/// `each`: lists of `metals` and of `ligands` for the same `vertices`, in all combinations.
+[[nodiscard]] std::vector<EachChange> read_each(const YamlNode& node);
 
 /// `parameters`: `published`, the name of a file, or a parameter set in place.
 [[nodiscard]] ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
@@ -64,8 +74,10 @@ enum class AbsentElement { Refused, Skipped };
 
 /// A whole job, with the keys of one of its `variants` in place of its own.
 /// @param variant  null for the job as it is
+/// @param each     a change of what `build` makes, after the variant's own; null for none
 [[nodiscard]] Job read_job_node(const YamlNode& node, const YamlNode* variant,
-                                const std::string& path, FileChain& files);
+                                const Substitution* each, const std::string& path,
+                                FileChain& files);
 
 /// The atoms of a job or an XYZ file, through a chain of files.
 /// @param from  the value that names the file; its place is blamed where the file cannot be read

@@ -3,10 +3,15 @@
 #include <cstddef>
 #include <filesystem>
 #include <memory>
+#include <optional>
 #include <span>
+#include <string>
+#include <string_view>
+#include <utility>
 
 #include <fmt/format.h>
 
+#include "core/error.hpp"
 #include "core/file.hpp"
 #include "core/yaml.hpp"
 #include "job/job_file.hpp"
@@ -15,9 +20,51 @@ namespace irrepwise {
 namespace {
 
 void check_keys(const YamlNode& variant) {
-  variant.expect_keys(
-      "a variant", {"name", "title", "geometry", "replace", "charge", "multiplicity", "occupations",
-                    "parameters", "overrides", "rule", "k", "symmetry"});
+  variant.expect_keys("a variant",
+                      {"name", "title", "geometry", "replace", "each", "charge", "multiplicity",
+                       "occupations", "parameters", "overrides", "rule", "k", "symmetry"});
+}
+
+std::string replaced_in(std::string text, std::string_view what, const std::string& by) {
+  for (std::size_t at = 0; (at = text.find(what, at)) != std::string::npos; at += by.size()) {
+    text.replace(at, what.size(), by);
+  }
+  return text;
+}
+
+// "Pd, CO"; or what the user calls it, with {metal} and {ligand} filled in.
+std::string name_of(const YamlNode& variant, const EachChange& change) {
+  const YamlNode* const name = variant.find("name");
+  if (!name) {
+    const bool both = !change.metal.empty() && !change.ligand.empty();
+    return change.metal + (both ? ", " : "") + change.ligand;
+  }
+  return replaced_in(replaced_in(name->word("a name"), "{metal}", change.metal), "{ligand}",
+                     change.ligand);
+}
+
+struct NamedChange {
+  std::string name;
+  std::string place;
+  std::optional<Substitution> change;  // one of `each`
+};
+
+// What one item of the list stands for: itself, or one for each of its changes.
+std::vector<NamedChange> named_changes(const YamlNode& item) {
+  const YamlNode* const each = item.find("each");
+  if (!each) return {{item.at("name").word("a name"), item.at("name").place(), {}}};
+  std::vector<NamedChange> named;
+  for (EachChange& change : read_each(*each)) {
+    std::string place = each->place();
+    if (const auto& ligands = change.change.ligands; !ligands.empty()) {
+      place = ligands.front().place;
+    }
+    std::string name = name_of(item, change);
+    change.change.place = place;
+    named.push_back({std::move(name), std::move(place), std::move(change.change)});
+  }
+  if (named.empty()) each->fail("found nothing to put in, expected at least one");
+  return named;
 }
 
 const YamlNode* find_list(const YamlNode& job) {
@@ -44,18 +91,19 @@ std::vector<VariantJob> variant_jobs(const std::string& path) {
   std::vector<VariantJob> jobs;
   for (const YamlNode& item : items) {
     check_keys(item);
-    const std::string& name = item.at("name").word("a name");
-    for (const VariantJob& other : jobs) {
-      if (other.name == name) {
-        item.at("name").fail(fmt::format("the name '{}' is used already at {}; names must differ",
-                                         name, other.place));
+    for (NamedChange& named : named_changes(item)) {
+      for (const VariantJob& other : jobs) {
+        if (other.name != named.name) continue;
+        throw Error(fmt::format("{}: the name '{}' is used already at {}; names must differ",
+                                named.place, named.name, other.place));
       }
+      // The tree is kept alive by `node`, of which the item is a part.
+      jobs.push_back({named.name, item.place(), [node, &item, path, change = named.change] {
+                        FileChain files;
+                        return read_job_node(*node, &item, change ? &*change : nullptr, path,
+                                             files);
+                      }});
     }
-    // The tree is kept alive by `node`, of which the item is a part.
-    jobs.push_back({name, item.place(), [node, &item, path] {
-                      FileChain files;
-                      return read_job_node(*node, &item, path, files);
-                    }});
   }
   return jobs;
 }

@@ -38,7 +38,7 @@ const std::vector<PolyhedronKind>& kinds() {
        tetrahedral_angle},
       {"TS-3", "T-shape", "1 up, 2 on y and 3 opposite to 2", "C2v", "", 0.0},
       {"T-4", "tetrahedron", "1 at (1,1,1), 2 at (-1,-1,1), 3 at (-1,1,-1), 4 at (1,-1,-1)", "Td",
-       "", 0.0},
+       "angle 1-M-2", tetrahedral_angle},
       {"SP-4", "square plane", "1 on x, on anticlockwise; 3 opposite to 1", "D4h", "", 0.0},
       {"SPY-4", "square pyramid, metal on top", "1 to 4 below, 3 across from 1", "C4v",
        "angle between z and M-1", pyramid_angle},
@@ -115,9 +115,19 @@ Vertices octahedron_face_capped() {
   return vertices;
 }
 
-Vertices tetrahedron() {
-  const double c = 1.0 / std::sqrt(3.0);
-  return {{c, c, c}, {-c, -c, c}, {-c, c, -c}, {c, -c, -c}};
+// As vertices 1 and 2 open, 3 and 4 close in the way of hybrids: cos = -s / (1 - s) for two of
+// equal s character, which add up to 1 (Coulson, Valence, 1952; from memory). Bent metallocenes
+// follow this: 131° between the rings of a titanocene dichloride go with 97° between the chlorides.
+Vertices tetrahedron(double angle) {
+  if (angle == tetrahedral_angle) {
+    const double c = 1.0 / std::sqrt(3.0);
+    return {{c, c, c}, {-c, -c, c}, {-c, c, -c}, {c, -c, -c}};
+  }
+  const double upper_s = cosine(angle) / (cosine(angle) - 1.0);
+  const double lower_s = 0.5 - upper_s;
+  const double lower = std::acos(-lower_s / (1.0 - lower_s)) * 180.0 / std::numbers::pi;
+  return {at(angle / 2, 45), at(angle / 2, 225), at(180.0 - lower / 2, 135),
+          at(180.0 - lower / 2, 315)};
 }
 
 Vertices bipyramid(int n) {
@@ -146,7 +156,7 @@ Vertices make_vertices(std::string_view symbol, double angle) {
     add_ring(v, 3, 180.0 - std::asin(std::min(sine, 1.0)) * 180.0 / std::numbers::pi);
   }
   if (symbol == "TS-3") return {at(0, 0), at(90, 90), at(90, 270)};
-  if (symbol == "T-4") return tetrahedron();
+  if (symbol == "T-4") return tetrahedron(angle);
   if (symbol == "SP-4") add_ring(v, 4, 90);
   if (symbol == "SPY-4") add_ring(v, 4, angle);
   if (symbol == "SS-4") return {at(0, 0), at(90, -angle / 2), at(90, angle / 2), at(180, 0)};
@@ -201,6 +211,7 @@ struct Range {
 Range angle_range(std::string_view symbol) {
   if (symbol == "TPY-3") return {40.0, 119.9};
   if (symbol == "SPY-4" || symbol == "SPY-5") return {60.0, 140.0};
+  if (symbol == "T-4") return {90.0, 180.0};
   if (symbol == "TPR-6") return {30.0, 70.0};
   if (symbol == "SAPR-8") return {35.0, 75.0};
   if (symbol == "TPRS-9") return {30.0, 60.0};

@@ -247,7 +247,7 @@ Report polyhedra_report() {
                    {"name", "shape", "", Align::Left, 1, false},
                    {"group", "group", "", Align::Left, 0, false},
                    {"vertices", "vertices", "", Align::Left, 0, true},
-                   {"angle", "angle, default", "", Align::Left, 2, true}};
+                   {"angle", "angle to set, default", "", Align::Left, 0, true}};
   for (const PolyhedronKind& kind : polyhedron_kinds()) {
     const std::string angle = kind.free_angle.empty()
                                   ? std::string()

@@ -13,6 +13,7 @@
 #include "core/error.hpp"
 #include "core/parse.hpp"
 #include "core/text.hpp"
+#include "molecule/molecule.hpp"
 
 namespace irrepwise {
 namespace {
@@ -24,6 +25,7 @@ using Reader = std::function<Cell(const VariantResult&)>;
 struct SummaryColumn {
   Column column;
   Reader read;
+  SummaryPart part = SummaryPart::Frontier;
 };
 
 Cell level_cell(const VariantResult& variant, const std::optional<int>& level) {
@@ -45,8 +47,8 @@ Cell gap_cell(const VariantResult& variant) {
 }
 
 Cell bond_cell(const VariantResult& variant, const std::string& element) {
-  if (!variant.metal) return {};
-  for (const MetalBonds& bonds : variant.metal->bonds) {
+  if (!variant.metal()) return {};
+  for (const MetalBonds& bonds : variant.metal()->bonds) {
     if (bonds.element == element) return Number{bonds.overlap_population, 3};
   }
   return {};
@@ -55,8 +57,8 @@ Cell bond_cell(const VariantResult& variant, const std::string& element) {
 std::vector<std::string> donor_elements(const Comparison& comparison) {
   std::vector<std::string> elements;
   for (const VariantResult& variant : comparison.variants) {
-    if (!variant.metal) continue;
-    for (const MetalBonds& bonds : variant.metal->bonds) {
+    if (!variant.metal()) continue;
+    for (const MetalBonds& bonds : variant.metal()->bonds) {
       if (std::find(elements.begin(), elements.end(), bonds.element) == elements.end()) {
         elements.push_back(bonds.element);
       }
@@ -80,23 +82,33 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
       {{"lumo_ev", "LUMO", "eV", Align::Decimal, 0, false},
        [](const V& v) { return energy_cell(v, v.levels.levels.frontier.lumo); }},
       {{"gap_ev", "gap", "eV", Align::Decimal, 0, false}, gap_cell},
-      {{"metal_charge", "metal charge", "e", Align::Decimal, 2, false},
+      {{"fragile", "frontier", "", Align::Left, 0, false},
+       [](const V& v) { return Cell(v.robustness.fragile() ? "fragile" : ""); }},
+      {{"metal", "metal", "", Align::Left, 5, false},
        [](const V& v) {
-         return v.metal ? Cell(Number{v.metal->charge, 3, true}) : Cell();
-       }},
-      {{"d_population", "d electrons", "", Align::Decimal, 2, false}, [](const V& v) {
-         return v.metal ? Cell(Number{v.metal->d_population, 3}) : Cell();
-       }}};
+         return v.metal() ? Cell(atom_name(v.levels.molecule, v.metal()->atom)) : Cell();
+       },
+       SummaryPart::Metal},
+      {{"metal_charge", "metal charge", "e", Align::Decimal, 0, false},
+       [](const V& v) {
+         return v.metal() ? Cell(Number{v.metal()->charge, 3, true}) : Cell();
+       },
+       SummaryPart::Metal},
+      {{"d_population", "d electrons", "", Align::Decimal, 1, false},
+       [](const V& v) {
+         return v.metal() ? Cell(Number{v.metal()->d_population, 3}) : Cell();
+       },
+       SummaryPart::Metal}};
   for (const std::string& element : donor_elements(comparison)) {
-    columns.push_back({{"bond_" + element, "M–" + element, "", Align::Decimal, 3, false},
-                       [element](const V& v) { return bond_cell(v, element); }});
+    columns.push_back({{"bond_" + element, "M–" + element, "", Align::Decimal, 2, false},
+                       [element](const V& v) { return bond_cell(v, element); },
+                       SummaryPart::Metal});
   }
-  columns.push_back(
-      {{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 4, false}, [](const V& v) {
-         return Cell(Number{v.levels.levels.sum_of_occupied_ev, 2});
-       }});
-  columns.push_back({{"fragile", "frontier", "", Align::Left, 1, false},
-                     [](const V& v) { return Cell(v.robustness.fragile() ? "fragile" : ""); }});
+  columns.push_back({{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 3, false},
+                     [](const V& v) {
+                       return Cell(Number{v.levels.levels.sum_of_occupied_ev, 2});
+                     },
+                     SummaryPart::Metal});
   return columns;
 }
 
@@ -113,12 +125,26 @@ const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns,
                           joined(known)));
 }
 
-std::vector<SummaryColumn> chosen_columns(const Comparison& comparison,
-                                          const SummaryChoice& choice) {
+bool has_metal(const Comparison& comparison) {
+  return std::any_of(comparison.variants.begin(), comparison.variants.end(),
+                     [](const VariantResult& v) { return v.metal() != nullptr; });
+}
+
+// The name goes with every part. Without metals there is one part, and in it no column of theirs.
+std::vector<SummaryColumn> chosen_columns(const Comparison& comparison, const SummaryChoice& choice,
+                                          SummaryPart part) {
   std::vector<SummaryColumn> all = all_columns(comparison);
-  if (choice.columns.empty()) return all;
   std::vector<SummaryColumn> chosen;
   for (const std::string& key : choice.columns) chosen.push_back(find_column(all, key));
+  if (!chosen.empty() || part == SummaryPart::Whole) return chosen.empty() ? all : chosen;
+  const bool split = has_metal(comparison);
+  for (SummaryColumn& column : all) {
+    const bool of_metal = column.part == SummaryPart::Metal;
+    const bool sum = column.column.key == "sum_of_occupied_ev";
+    const bool wanted =
+        column.column.key == "name" || (split ? column.part == part : !of_metal || sum);
+    if (wanted) chosen.push_back(std::move(column));
+  }
   return chosen;
 }
 
@@ -164,15 +190,57 @@ bool holds_numbers(const SummaryColumn& column, const Comparison& comparison) {
                      [&](const VariantResult& v) { return number_in(column.read(v)).has_value(); });
 }
 
+bool has_several_metals(const VariantResult& variant) {
+  return variant.metals.size() > 1 || (variant.metal() && variant.metal()->n_equivalent > 1);
+}
+
+// What the columns present mean, as far as their titles do not say it.
+std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
+                                  const Comparison& comparison) {
+  bool fragile = false, metal = false, bonds = false, sum = false;
+  for (const SummaryColumn& column : columns) {
+    const std::string& key = column.column.key;
+    fragile = fragile || key == "fragile";
+    metal = metal || key == "metal_charge" || key == "d_population";
+    bonds = bonds || key.starts_with("bond_");
+    sum = sum || key == "sum_of_occupied_ev";
+  }
+  std::string text;
+  const auto say = [&](const char* words) {
+    text += (text.empty() ? "" : " ") + std::string(words);
+  };
+  const auto& variants = comparison.variants;
+  if (fragile && std::any_of(variants.begin(), variants.end(),
+                             [](const VariantResult& v) { return v.robustness.fragile(); })) {
+    say("fragile: a small change of one parameter turns the order of two frontier levels, see "
+        "below.");
+  }
+  if (metal) say("metal charge, d electrons: by Mulliken's populations.");
+  if (bonds) say("M–X: mean overlap population of the bonds from the metal to donor atoms X.");
+  if ((metal || bonds) && std::any_of(variants.begin(), variants.end(), has_several_metals)) {
+    say("Of several metals the first is shown here; the d block has each.");
+  }
+  if (sum) {
+    say("occupied: sum of the energies of all electrons, which is not a total energy: no reaction "
+        "energy follows from differences of it.");
+  }
+  return text.empty() ? std::vector<std::string>{} : std::vector<std::string>{text};
+}
+
 }  // namespace
 
-Table summary_table(const Comparison& comparison, const SummaryChoice& choice) {
-  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice);
+std::vector<SummaryPart> summary_parts(const Comparison& comparison, const SummaryChoice& choice) {
+  if (!choice.columns.empty() || !has_metal(comparison)) return {SummaryPart::Frontier};
+  return {SummaryPart::Frontier, SummaryPart::Metal};
+}
+
+Table summary_table(const Comparison& comparison, const SummaryChoice& choice, SummaryPart part) {
+  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice, part);
   const VariantResult& reference =
       comparison.variants[static_cast<std::size_t>(comparison.reference)];
   std::vector<const SummaryColumn*> differing;
   Table table;
-  table.caption = "Summary";
+  table.caption = part == SummaryPart::Metal ? "The metal and its bonds" : "Summary";
   for (const SummaryColumn& column : columns) {
     table.columns.push_back(column.column);
     if (choice.differences && holds_numbers(column, comparison)) differing.push_back(&column);
@@ -192,19 +260,18 @@ Table summary_table(const Comparison& comparison, const SummaryChoice& choice) {
     }
     table.lines.emplace_back(std::move(row));
   }
-  table.notes = {
-      "M–X: mean overlap population of the bonds from the metal to donor atoms X. occupied: sum of "
-      "the energies of all electrons, which is not a total energy: no reaction energy follows from "
-      "differences of it."};
+  table.notes = notes_on(columns, comparison);
   return table;
 }
 
-Table difference_table(const Comparison& comparison, const SummaryChoice& choice) {
-  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice);
+Table difference_table(const Comparison& comparison, const SummaryChoice& choice,
+                       SummaryPart part) {
+  const std::vector<SummaryColumn> columns = chosen_columns(comparison, choice, part);
   const auto at = static_cast<std::size_t>(comparison.reference);
   const VariantResult& reference = comparison.variants[at];
   Table table;
-  table.caption = "Differences from " + reference.name;
+  table.caption = "Differences from " + reference.name +
+                  (part == SummaryPart::Metal ? ": the metal and its bonds" : "");
   table.columns.push_back({"name", "variant", "", Align::Left, 0, true});
   std::vector<const SummaryColumn*> numbers;
   for (const SummaryColumn& column : columns) {

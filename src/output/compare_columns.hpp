@@ -17,13 +17,22 @@ struct SummaryChoice {
                              // number, its key with `delta_` before it
 };
 
+/// The summary is written whole for programs, and in two parts for people where there is a metal,
+/// so that each fits the page. Columns that were picked stay together.
+enum class SummaryPart { Whole, Frontier, Metal };
+
+[[nodiscard]] std::vector<SummaryPart> summary_parts(const Comparison& comparison,
+                                                     const SummaryChoice& choice);
+
 /// Energies in eV. Bonds are those from the metal, by the element of the donor: mean overlap
 /// population. Rows without a value for the column sorted by come last.
 ///
 /// @throws Error  for a key that is no column, with the nearest and the list of all
-[[nodiscard]] Table summary_table(const Comparison& comparison, const SummaryChoice& choice);
+[[nodiscard]] Table summary_table(const Comparison& comparison, const SummaryChoice& choice,
+                                  SummaryPart part);
 
 /// Numbers only, each minus the reference's; the reference itself is left out.
-[[nodiscard]] Table difference_table(const Comparison& comparison, const SummaryChoice& choice);
+[[nodiscard]] Table difference_table(const Comparison& comparison, const SummaryChoice& choice,
+                                     SummaryPart part);
 
 }  // namespace irrepwise

@@ -35,10 +35,10 @@ Json frontier_json(const VariantResult& variant) {
           {"open_shell", frontier.open_shell}};
 }
 
-Json metal_levels_json(const VariantResult& variant) {
+Json metal_levels_json(const VariantResult& variant, const MetalFacts* metal) {
   Json list = Json::array();
-  if (!variant.d_block) return list;
-  for (const DLevel& entry : variant.d_block->levels) {
+  if (!metal) return list;
+  for (const DLevel& entry : metal->d_block.levels) {
     list.push_back(
         {{"label", name_of_level(variant, entry.level)},
          {"parent_label", entry.parent_label.empty() ? Json(nullptr) : Json(entry.parent_label)},
@@ -52,11 +52,11 @@ Json metal_levels_json(const VariantResult& variant) {
   return list;
 }
 
-Json parent_json(const VariantResult& variant) {
-  if (!variant.d_block || variant.d_block->parent_group.empty()) return nullptr;
-  Json parent = {{"point_group", variant.d_block->parent_group}};
-  if (variant.d_block->shape) {
-    const PolyhedronFit& shape = *variant.d_block->shape;
+Json parent_json(const MetalFacts* metal) {
+  if (!metal || metal->d_block.parent_group.empty()) return nullptr;
+  Json parent = {{"point_group", metal->d_block.parent_group}};
+  if (metal->d_block.shape) {
+    const PolyhedronFit& shape = *metal->d_block.shape;
     parent["polyhedron"] = shape.symbol;
     parent["name"] = shape.name;
     parent["deviation_degrees"] = finite_number(shape.deviation_degrees);
@@ -64,10 +64,10 @@ Json parent_json(const VariantResult& variant) {
   return parent;
 }
 
-Json bonds_json(const VariantResult& variant) {
+Json bonds_json(const MetalFacts* metal) {
   Json list = Json::array();
-  if (!variant.metal) return list;
-  for (const MetalBonds& bonds : variant.metal->bonds) {
+  if (!metal) return list;
+  for (const MetalBonds& bonds : metal->bonds) {
     list.push_back({{"element", bonds.element},
                     {"count", bonds.count},
                     {"overlap_population", finite_number(bonds.overlap_population)},
@@ -109,29 +109,37 @@ Json sensitivities_json(const Robustness& robustness) {
   return list;
 }
 
+Json metal_json(const VariantResult& variant, const MetalFacts* metal) {
+  return {{"metal", metal ? Json(atom_name(variant.levels.molecule, metal->atom)) : Json(nullptr)},
+          {"equivalent_metals", metal ? Json(metal->n_equivalent) : Json(0)},
+          {"metal_charge", metal ? Json(finite_number(metal->charge)) : Json(nullptr)},
+          {"d_population", metal ? Json(finite_number(metal->d_population)) : Json(nullptr)},
+          {"bonds", bonds_json(metal)},
+          {"parent", parent_json(metal)},
+          {"metal_levels", metal_levels_json(variant, metal)}};
+}
+
 Json variant_json(const VariantResult& variant) {
   const LevelsResult& result = variant.levels;
-  return {
-      {"name", variant.name},
-      {"formula", hill_formula(result.molecule)},
-      {"charge", result.molecule.charge()},
-      {"point_group", result.symmetry.group.symbol().name()},
-      {"frontier", frontier_json(variant)},
-      {"metal",
-       variant.metal ? Json(atom_name(result.molecule, variant.metal->atom)) : Json(nullptr)},
-      {"metal_charge", variant.metal ? Json(finite_number(variant.metal->charge)) : Json(nullptr)},
-      {"d_population",
-       variant.metal ? Json(finite_number(variant.metal->d_population)) : Json(nullptr)},
-      {"bonds", bonds_json(variant)},
-      {"parent", parent_json(variant)},
-      {"metal_levels", metal_levels_json(variant)},
-      {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
-      {"fragile", variant.robustness.fragile()},
-      {"robustness",
-       {{"occupied", flip_json(variant, variant.robustness.occupied)},
-        {"empty", flip_json(variant, variant.robustness.empty)}}},
-      {"sensitivities", sensitivities_json(variant.robustness)},
-      {"warnings", result.warnings}};
+  Json others = Json::array();
+  for (std::size_t i = 1; i < variant.metals.size(); ++i) {
+    others.push_back(metal_json(variant, &variant.metals[i]));
+  }
+  Json json = {{"name", variant.name},
+               {"formula", hill_formula(result.molecule)},
+               {"charge", result.molecule.charge()},
+               {"point_group", result.symmetry.group.symbol().name()},
+               {"frontier", frontier_json(variant)}};
+  json.update(metal_json(variant, variant.metal()));
+  json.update({{"other_metals", std::move(others)},
+               {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
+               {"fragile", variant.robustness.fragile()},
+               {"robustness",
+                {{"occupied", flip_json(variant, variant.robustness.occupied)},
+                 {"empty", flip_json(variant, variant.robustness.empty)}}},
+               {"sensitivities", sensitivities_json(variant.robustness)},
+               {"warnings", result.warnings}});
+  return json;
 }
 
 Json matches_json(const Comparison& comparison) {
@@ -160,6 +168,7 @@ Json matches_json(const Comparison& comparison) {
                     {"variant", variant.name},
                     {"common_group", matching.common_group},
                     {"shared_atoms", matching.shared_atoms},
+                    {"replaced_donors", matching.replaced_donors},
                     {"levels", std::move(pairs)},
                     {"crossings", std::move(crossings)}});
   }
@@ -169,13 +178,15 @@ Json matches_json(const Comparison& comparison) {
 Json splittings_json(const Comparison& comparison) {
   Json list = Json::array();
   for (const VariantResult& variant : comparison.variants) {
-    if (!variant.d_block) continue;
-    const std::vector<ParentMean>& means = variant.d_block->means;
-    for (std::size_t i = 0; i + 1 < means.size(); ++i) {
-      list.push_back({{"variant", variant.name},
-                      {"from", means[i].label},
-                      {"to", means[i + 1].label},
-                      {"value_ev", finite_number(means[i + 1].energy_ev - means[i].energy_ev)}});
+    for (const MetalFacts& metal : variant.metals) {
+      const std::vector<ParentMean>& means = metal.d_block.means;
+      for (std::size_t i = 0; i + 1 < means.size(); ++i) {
+        list.push_back({{"variant", variant.name},
+                        {"from", means[i].label},
+                        {"to", means[i + 1].label},
+                        {"value_ev", finite_number(means[i + 1].energy_ev - means[i].energy_ev)},
+                        {"metal", atom_name(variant.levels.molecule, metal.atom)}});
+      }
     }
   }
   return list;
@@ -196,7 +207,7 @@ std::string compare_json(const Comparison& comparison) {
 }
 
 std::string compare_csv(const Comparison& comparison, const SummaryChoice& choice) {
-  return table_csv(summary_table(comparison, choice));
+  return table_csv(summary_table(comparison, choice, SummaryPart::Whole));
 }
 
 }  // namespace irrepwise

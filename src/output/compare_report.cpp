@@ -41,10 +41,13 @@ Report compare_report(const Comparison& comparison, const CompareParts& parts) {
   report.title = n == 1 ? reference : fmt::format("{} variants compared", n);
   report.facts.push_back({"reference", {reference}});
   report.facts.push_back({"method", methods(comparison)});
-  report.tables.push_back(summary_table(comparison, parts.summary));
-  if (parts.differences) report.tables.push_back(difference_table(comparison, parts.summary));
-  for (Table table : {d_block_table(comparison), frontier_match_table(comparison),
-                      robustness_table(comparison)}) {
+  for (const SummaryPart part : summary_parts(comparison, parts.summary)) {
+    report.tables.push_back(summary_table(comparison, parts.summary, part));
+    if (!parts.differences) continue;
+    report.tables.push_back(difference_table(comparison, parts.summary, part));
+  }
+  for (Table table : {d_block_table(comparison), splittings_table(comparison),
+                      frontier_match_table(comparison), robustness_table(comparison)}) {
     if (!table.lines.empty()) report.tables.push_back(std::move(table));
   }
   if (parts.slopes) {

@@ -45,7 +45,22 @@ MetalFacts metal_facts(const LevelsResult& result, int metal) {
     bonds.overlap_population /= bonds.count;
     bonds.distance_angstrom /= bonds.count;
   }
+  facts.d_block =
+      find_d_block(result.symmetry, result.basis, result.levels, result.populations, metal);
   return facts;
+}
+
+std::vector<MetalFacts> all_metals(const LevelsResult& result) {
+  std::vector<MetalFacts> metals;
+  const std::vector<int> atoms = metal_atoms(result.symmetry.molecule, result.basis);
+  for (const EquivalentAtoms& set : result.levels.salcs.sets) {
+    if (std::find(atoms.begin(), atoms.end(), set.representative()) == atoms.end()) continue;
+    metals.push_back(metal_facts(result, set.representative()));
+    metals.back().n_equivalent = set.size();
+  }
+  std::sort(metals.begin(), metals.end(),
+            [](const MetalFacts& a, const MetalFacts& b) { return a.atom < b.atom; });
+  return metals;
 }
 
 std::optional<int> frontier_level(const VariantResult& variant, FrontierSide side) {
@@ -66,13 +81,8 @@ std::string name_of_level(const VariantResult& variant, int level) {
 
 VariantResult analysed(std::string name, LevelsResult levels) {
   Robustness robustness = find_robustness(levels.symmetry, levels.basis, levels.levels);
-  VariantResult result{std::move(name), std::move(levels), std::move(robustness), {}, {}};
-  const LevelsResult& of = result.levels;
-  const std::vector<int> metals = metal_atoms(of.symmetry.molecule, of.basis);
-  if (!metals.empty()) {
-    result.metal = metal_facts(of, metals.front());
-    result.d_block = find_d_block(of.symmetry, of.basis, of.levels, of.populations, metals.front());
-  }
+  VariantResult result{std::move(name), std::move(levels), std::move(robustness), {}};
+  result.metals = all_metals(result.levels);
   return result;
 }
 

@@ -20,19 +20,26 @@ struct MetalBonds {
   double distance_angstrom = 0.0;   // mean
 };
 
+/// A metal with a d shell; of several equivalent ones the first stands for all.
 struct MetalFacts {
-  int atom = 0;  // the first metal of the molecule
+  int atom = 0;
+  int n_equivalent = 1;
   double charge = 0.0;
   double d_population = 0.0;
   std::vector<MetalBonds> bonds;  // in the order of the first donor of each element
+  DBlock d_block;                 // of all equivalent ones
 };
 
 struct VariantResult {
   std::string name;
   LevelsResult levels;
   Robustness robustness;
-  std::optional<MetalFacts> metal;  // absent where there is no metal with a d shell
-  std::optional<DBlock> d_block;
+  std::vector<MetalFacts> metals;  // in the order of the atoms; none where no metal has a d shell
+
+  /// The one that stands in the summary; null where there is none.
+  [[nodiscard]] const MetalFacts* metal() const {
+    return metals.empty() ? nullptr : &metals.front();
+  }
 };
 
 struct Comparison {

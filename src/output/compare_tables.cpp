@@ -52,18 +52,16 @@ void add_fate(const Comparison& comparison, int index, FrontierSide side, Row& r
                                     level_of(reference, fate->reference_level).energy_ev,
                                 3, true});
   row.cells.emplace_back(percent(fate->match->overlap));
-  row.cells.emplace_back(fate->stays ? "" : "no longer");
+  row.cells.emplace_back(fate->stays ? "yes" : "no");
 }
 
-}  // namespace
-
+// Neighbours in energy: "a1g–eg 0.015, eg–b2g 0.216".
 std::string splitting_words(const DBlock& block) {
   std::string words;
   for (std::size_t i = 0; i + 1 < block.means.size(); ++i) {
-    words +=
-        fmt::format("{}{}–{} {:.3f} eV", i == 0 ? "" : ", ", readable_label(block.means[i].label),
-                    readable_label(block.means[i + 1].label),
-                    block.means[i + 1].energy_ev - block.means[i].energy_ev);
+    words += fmt::format("{}{}–{} {:.3f}", i == 0 ? "" : ", ", readable_label(block.means[i].label),
+                         readable_label(block.means[i + 1].label),
+                         block.means[i + 1].energy_ev - block.means[i].energy_ev);
   }
   return words;
 }
@@ -73,9 +71,19 @@ std::string parent_words(const DBlock& block) {
   std::string group = block.parent_group;
   if (const std::size_t at = group.find("inf"); at != std::string::npos) group.replace(at, 3, "∞");
   if (!block.shape) return "one donor (" + group + ")";
-  return fmt::format("{} {} ({}), {:.1f}° off", block.shape->symbol, block.shape->name, group,
-                     block.shape->deviation_degrees);
+  return fmt::format("{} {} ({})", block.shape->symbol, block.shape->name, group);
 }
+
+// Names the metal where there are others.
+std::string metal_words(const VariantResult& variant, const MetalFacts& metal) {
+  const std::string name = atom_name(variant.levels.molecule, metal.atom);
+  if (metal.n_equivalent > 1) {
+    return fmt::format("{} and {} equivalent: ", name, metal.n_equivalent - 1);
+  }
+  return variant.metals.size() > 1 ? name + ": " : "";
+}
+
+}  // namespace
 
 Table d_block_table(const Comparison& comparison) {
   Table table;
@@ -88,26 +96,51 @@ Table d_block_table(const Comparison& comparison) {
                    {"parent_weight", "of it in parent", "%", Align::Decimal, 2, false},
                    {"occupation", "electrons", "", Align::Decimal, 1, false}};
   for (const VariantResult& variant : comparison.variants) {
-    if (!variant.d_block) continue;
-    const DBlock& block = *variant.d_block;
-    const std::string splittings = splitting_words(block);
-    table.lines.emplace_back(
-        Separator{parent_words(block) + (splittings.empty() ? "" : "; " + splittings)});
-    for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
-      const Level& level = level_of(variant, entry->level);
-      const bool whole = level.occupation == std::round(level.occupation);
-      const bool labelled = !entry->parent_label.empty();
-      table.lines.emplace_back(Row{
-          {variant.name, SymmetryLabel{name_of_level(variant, entry->level)},
-           labelled ? Cell(SymmetryLabel{entry->parent_label}) : Cell(), Number{level.energy_ev, 3},
-           percent(entry->d_share), labelled ? percent(entry->parent_weight) : Cell(),
-           Number{level.occupation, whole ? 0 : 2}}});
+    for (const MetalFacts& metal : variant.metals) {
+      const DBlock& block = metal.d_block;
+      table.lines.emplace_back(Separator{metal_words(variant, metal) + parent_words(block)});
+      for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
+        const Level& level = level_of(variant, entry->level);
+        const bool whole = level.occupation == std::round(level.occupation);
+        const bool labelled = !entry->parent_label.empty();
+        table.lines.emplace_back(
+            Row{{variant.name, SymmetryLabel{name_of_level(variant, entry->level)},
+                 labelled ? Cell(SymmetryLabel{entry->parent_label}) : Cell(),
+                 Number{level.energy_ev, 3}, percent(entry->d_share),
+                 labelled ? percent(entry->parent_weight) : Cell(),
+                 Number{level.occupation, whole ? 0 : 2}}});
+      }
     }
   }
   table.notes = {
       "parent: the irrep that the metal d part has most of in the ideal polyhedron of the donor "
-      "atoms. Splittings: differences of means over the levels of each parent label, weighted by d "
-      "share and degeneracy."};
+      "atoms; d share: of the whole level, Mulliken's."};
+  return table;
+}
+
+Table splittings_table(const Comparison& comparison) {
+  Table table;
+  table.caption = "Splittings of the d block";
+  table.columns = {{"name", "variant", "", Align::Left, 0, true},
+                   {"metal", "metal", "", Align::Left, 4, false},
+                   {"polyhedron", "ideal", "", Align::Left, 1, false},
+                   {"deviation_degrees", "off", "°", Align::Decimal, 2, false},
+                   {"splittings", "means of parents, apart", "eV", Align::Left, 0, true}};
+  for (const VariantResult& variant : comparison.variants) {
+    for (const MetalFacts& metal : variant.metals) {
+      const DBlock& block = metal.d_block;
+      if (block.means.size() < 2) continue;
+      table.lines.emplace_back(
+          Row{{variant.name, atom_name(variant.levels.molecule, metal.atom),
+               block.shape ? Cell(std::string(block.shape->symbol)) : Cell(),
+               block.shape ? Cell(Number{block.shape->deviation_degrees, 1}) : Cell(),
+               splitting_words(block)}});
+    }
+  }
+  table.notes = {
+      "Differences of the mean energies of neighbouring parents, means weighted by d share and "
+      "degeneracy; of parents that σ donors span, all antibonding levels with much d. off: root "
+      "mean square of the angles between donors and the ideal vertices."};
   return table;
 }
 
@@ -124,19 +157,21 @@ Table frontier_match_table(const Comparison& comparison) {
   table.columns = {{"name", "variant", "", Align::Left, 0, true},
                    {"common_group", "common group", "", Align::Left, 1, false},
                    {"shared_atoms", "atoms shared", "", Align::Right, 4, false},
+                   {"replaced_donors", "donors replaced", "", Align::Right, 5, false},
                    {"homo", title("HOMO", frontier.homo), "", Align::Right, 0, false},
                    {"homo_shift_ev", "shift", "eV", Align::Decimal, 0, false},
                    {"homo_overlap", "HOMO overlap", "%", Align::Decimal, 3, false},
-                   {"homo_change", "HOMO?", "", Align::Left, 2, false},
+                   {"homo_change", "still HOMO", "", Align::Left, 2, false},
                    {"lumo", title("LUMO", frontier.lumo), "", Align::Right, 0, false},
                    {"lumo_shift_ev", "shift", "eV", Align::Decimal, 0, false},
                    {"lumo_overlap", "LUMO overlap", "%", Align::Decimal, 3, false},
-                   {"lumo_change", "LUMO?", "", Align::Left, 2, false}};
+                   {"lumo_change", "still LUMO", "", Align::Left, 2, false}};
   for (int i = 0; i < static_cast<int>(comparison.variants.size()); ++i) {
     if (i == comparison.reference) continue;
     const Matching& matching = comparison.matchings[static_cast<std::size_t>(i)];
     Row row{{comparison.variants[static_cast<std::size_t>(i)].name, matching.common_group,
-             Number{static_cast<double>(matching.shared_atoms), 0}}};
+             Number{static_cast<double>(matching.shared_atoms), 0},
+             Number{static_cast<double>(matching.replaced_donors), 0}}};
     add_fate(comparison, i, FrontierSide::Homo, row);
     add_fate(comparison, i, FrontierSide::Lumo, row);
     table.lines.emplace_back(std::move(row));
@@ -145,6 +180,10 @@ Table frontier_match_table(const Comparison& comparison) {
       if (!words.empty()) table.notes.push_back(std::move(words));
     }
   }
+  table.notes.push_back(
+      "The level of each variant that resembles the reference's HOMO or LUMO most: by the overlap "
+      "of the two on the atoms that both molecules have and on donors in the same places, among "
+      "levels that share an irrep of the common group. shift: its energy less the reference's.");
   return table;
 }
 
@@ -173,7 +212,9 @@ Table robustness_table(const Comparison& comparison) {
   table.notes = {fmt::format(
       "The two highest occupied and the two lowest empty levels of different symmetry. by slope: "
       "first order in the parameter; solved: computed again until the levels meet, where less than "
-      "1 eV is expected. fragile: turns for less than {} eV in one H_ii.",
+      "1 eV is expected; or, by: the exponent or K that does it soonest, first order. fragile: "
+      "turns "
+      "for less than {} eV in one H_ii.",
       fragile_below_ev)};
   return table;
 }

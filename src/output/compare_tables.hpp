@@ -6,9 +6,12 @@
 
 namespace irrepwise {
 
-/// A row for each level with most metal d character, the variants below each other; above each the
-/// polyhedron, below it the splittings.
+/// A row for each level with most metal d character, variants and metals below each other, above
+/// each the polyhedron.
 [[nodiscard]] Table d_block_table(const Comparison& comparison);
+
+/// How far the means of the parent labels lie apart.
+[[nodiscard]] Table splittings_table(const Comparison& comparison);
 
 /// What became of the reference's HOMO and LUMO; changes of identity as notes, in words.
 [[nodiscard]] Table frontier_match_table(const Comparison& comparison);
@@ -18,11 +21,5 @@ namespace irrepwise {
 
 /// Derivatives of HOMO, LUMO and gap.
 [[nodiscard]] Table slopes_table(const VariantResult& variant);
-
-/// "t2g–eg 3.214 eV": from the lowest mean to the highest, each to the next.
-[[nodiscard]] std::string splitting_words(const DBlock& block);
-
-/// "OC-6 octahedron (Oh), 2.1° off".
-[[nodiscard]] std::string parent_words(const DBlock& block);
 
 }  // namespace irrepwise

@@ -65,6 +65,60 @@ TEST_CASE("replacing one of six ligands splits t2g into b2 and e, and both are f
   CHECK(found == std::vector<std::string>{"b2", "e"});
 }
 
+namespace {
+
+Molecule octahedron(int metal, int ligand, double distance_angstrom, int charge) {
+  std::vector<Atom> atoms = {{metal, Eigen::Vector3d::Zero()}};
+  for (int axis = 0; axis < 3; ++axis) {
+    for (const double sign : {1.0, -1.0}) {
+      atoms.push_back({ligand, sign * distance_angstrom * Eigen::Vector3d::Unit(axis)});
+    }
+  }
+  return Molecule(std::move(atoms), charge);
+}
+
+}  // namespace
+
+TEST_CASE(
+    "with all six halides replaced each level is found as the level of its place in its irrep") {
+  // Between two octahedra of halides the levels of an irrep keep their order (no reason to cross:
+  // common practice), so bonding eg is bonding eg and antibonding eg* antibonding. The metal alone
+  // does not tell them apart, the phase of the donors does.
+  const Run bromide = run(octahedron(27, 35, 2.46, -3));
+  const Run chloride = run(octahedron(27, 17, 2.28, -3));
+  const MatchReference reference =
+      make_match_reference(bromide.symmetry, bromide.basis, bromide.levels);
+  const Matching matching =
+      match_levels(reference, chloride.symmetry, chloride.basis, chloride.levels);
+  CHECK(matching.common_group == "Oh");
+  CHECK(matching.replaced_donors + matching.shared_atoms == 7);
+  REQUIRE(matching.matches.size() == bromide.levels.levels.size());
+  for (const LevelMatch& match : matching.matches) {
+    const Level& a = bromide.levels.levels[static_cast<std::size_t>(match.reference)];
+    const Level& b = chloride.levels.levels[static_cast<std::size_t>(match.variant)];
+    CAPTURE(a.irrep);
+    CAPTURE(a.number);
+    CHECK(a.irrep == b.irrep);
+    CHECK(a.number == b.number);
+  }
+}
+
+TEST_CASE("the lone pairs of a halide are not looked for in ligands of several atoms") {
+  // 1t1g holds nothing but halide lone pairs across the bonds: no metal orbital is t1g in Oh
+  // (character table). Carbonyls have t1g too, of their own.
+  const Run halide = run(octahedron(27, 35, 2.46, -3));
+  const Run carbonyl = run(test_molecule("hexacarbonylchromium").molecule);
+  const MatchReference reference =
+      make_match_reference(halide.symmetry, halide.basis, halide.levels);
+  const Matching matching =
+      match_levels(reference, carbonyl.symmetry, carbonyl.basis, carbonyl.levels);
+  CHECK(matching.replaced_donors == 6);
+  for (const LevelMatch& match : matching.matches) {
+    const std::string label = label_of(halide, match.reference);
+    CHECK_FALSE(label.ends_with("t1g"));
+  }
+}
+
 TEST_CASE("no orbital is matched twice") {
   const Run a = run(test_molecule("trans-tetracarbonyldichloromolybdate(0)").molecule);
   const Run b = run(test_molecule("cis-tetracarbonyldichloromolybdate(0)").molecule);

@@ -109,6 +109,22 @@ TEST_CASE("a complex of equal ligands has the group of the handbooks") {
   }
 }
 
+TEST_CASE(
+    "an opened tetrahedron closes on the other side, from the square plane's to the see-saw's") {
+  // Coulson's rule for hybrids: s = cos / (cos - 1) each, and all four make one s. At 90° there is
+  // none left for 1 and 2, and 3 and 4 are sp; at 180° it is the other way round.
+  CHECK(std::abs(angle(Polyhedron("T-4", 180.0), 1, 2) - 180.0) < 1e-6);
+  CHECK(std::abs(angle(Polyhedron("T-4", 180.0), 3, 4) - 90.0) < 1e-6);
+  CHECK(std::abs(angle(Polyhedron("T-4", 90.0), 3, 4) - 180.0) < 1e-6);
+  const Polyhedron ideal("T-4"), same("T-4", ideal.angle_degrees() + 1e-9);
+  for (int v = 1; v <= 4; ++v) CHECK((ideal.vertex(v) - same.vertex(v)).norm() < 1e-9);
+  // Titanocene dichloride: rings 131° apart, chlorides 94.5° (Clearfield et al., Can. J. Chem. 53,
+  // 1622 (1975), from memory).
+  const Polyhedron bent("T-4", 131.0);
+  CHECK(std::abs(angle(bent, 1, 2) - 131.0) < 1e-9);
+  CHECK(std::abs(angle(bent, 3, 4) - 94.5) < 3.0);
+}
+
 TEST_CASE("vertex angles are those of the ideal shapes") {
   // Geometry: cos = -1/3 in the tetrahedron, 1/3 between neighbours in the cube, and so on.
   CHECK(angles("L-2") == std::map<double, int>{{180.0, 1}});
