@@ -10,9 +10,9 @@
 
 #include <doctest/doctest.h>
 
-#include "figure/collisions.hpp"
 #include "basis/atom_kinds.hpp"
 #include "core/error.hpp"
+#include "figure/collisions.hpp"
 #include "figure/svg.hpp"
 #include "job/variants.hpp"
 #include "support/paths.hpp"
