@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <limits>
+#include <map>
 #include <set>
 #include <string>
 #include <utility>
@@ -102,8 +103,9 @@ std::set<int> fate(const Shown& shown, std::size_t column, std::optional<int> le
 
 std::set<int> d_levels(const VariantResult& variant) {
   std::set<int> levels;
-  if (!variant.d_block) return levels;
-  for (const DLevel& level : variant.d_block->levels) levels.insert(level.level);
+  for (const MetalFacts& metal : variant.metals) {
+    for (const DLevel& level : metal.d_block.levels) levels.insert(level.level);
+  }
   return levels;
 }
 
@@ -164,11 +166,15 @@ DiagramColumn variant_column(const Shown& shown, const Trails& trails, std::size
   DiagramColumn column = diagram_column(variant.levels.symmetry.group, variant.levels.levels);
   column.title = variant.name;
   column.notes = column_notes(shown, i);
-  if (variant.d_block) {
-    for (const DLevel& level : variant.d_block->levels) {
+  std::map<int, double> d_share;  // of levels in the d block of several metals the largest counts
+  for (const MetalFacts& metal : variant.metals) {
+    for (const DLevel& level : metal.d_block.levels) {
+      double& known = d_share[level.level];
+      if (level.d_share <= known) continue;
+      known = level.d_share;
       DiagramLevel& drawn = column.levels[static_cast<std::size_t>(level.level)];
       // Where the molecule has the symmetry of its parent, "2t2g (t2g)" would say nothing more.
-      if (!same_irrep(drawn.label, level.parent_label)) drawn.parent = level.parent_label;
+      drawn.parent = same_irrep(drawn.label, level.parent_label) ? "" : level.parent_label;
     }
   }
   for (std::size_t k = 0; k < column.levels.size(); ++k) {
@@ -207,11 +213,11 @@ RichText parent_groups(const Shown& shown) {
   std::set<std::string> known;
   RichText words;
   for (std::size_t i = 0; i < shown.at.size(); ++i) {
-    const VariantResult& variant = shown.variant(i);
-    if (!variant.d_block || variant.d_block->parent_group.empty()) continue;
-    const std::string& parent = variant.d_block->parent_group;
-    if (!known.insert(parent).second) continue;
-    words = words + plain_text(words.empty() ? "" : ", ") + group_text(parent);
+    for (const MetalFacts& metal : shown.variant(i).metals) {
+      const std::string& parent = metal.d_block.parent_group;
+      if (parent.empty() || !known.insert(parent).second) continue;
+      words = words + plain_text(words.empty() ? "" : ", ") + group_text(parent);
+    }
   }
   return words;
 }
@@ -239,7 +245,8 @@ std::vector<RichText> diagram_notes(const Shown& shown, const LevelDiagram& diag
   if (shown.at.size() > 1) {
     notes.push_back(plain_text(fmt::format(
         "Lines join levels of neighbours that share a symmetry and at least {:.0f}\u00A0% of their "
-        "orbitals on the atoms both have; dashed below {:.0f}\u00A0%. Blue and orange lines: what "
+        "orbitals on atoms in the same places; dashed below {:.0f}\u00A0%. Blue and orange lines: "
+        "what "
         "became of HOMO and LUMO of {}.",
         100.0 * least_drawn_overlap, 100.0 * dashed_below, shown.reference().name)));
   }

@@ -10,8 +10,8 @@
 
 #include <doctest/doctest.h>
 
-#include "figure/collisions.hpp"
 #include "core/error.hpp"
+#include "figure/collisions.hpp"
 #include "figure/svg.hpp"
 #include "job/variants.hpp"
 #include "support/paths.hpp"
