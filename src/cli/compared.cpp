@@ -43,18 +43,33 @@ int find_reference(const std::vector<VariantJob>& variants, const std::string& n
   const std::string nearest = nearest_word(name, names);
   throw Error(fmt::format(
       "--reference: there is no variant {}{}; the first is '{}'", irrepwise::quoted(name),
-      nearest.empty() ? "" : ", did you mean '" + nearest + "'?", names.front()));
+      nearest.empty() ? "" : " (did you mean '" + nearest + "'?)", names.front()));
 }
 
-// On a terminal only: a pipe or a log gets nothing.
-std::function<void(int)> progress(std::size_t count) {
-  if (::isatty(STDERR_FILENO) != 1) return {};
-  return [count](int done) {
-    const bool last = done == static_cast<int>(count);
-    std::fprintf(stderr, last ? "\r\x1b[K" : "\r%d of %zu variants", done, count);
-    std::fflush(stderr);
-  };
-}
+// A line that counts, on a terminal only: a pipe or a log gets nothing. It is gone at the end, also
+// where that is an error.
+class Progress {
+ public:
+  explicit Progress(std::size_t count)
+      : count_(count), is_shown_(::isatty(STDERR_FILENO) == 1 && count > 1) {}
+  Progress(const Progress&) = delete;
+  Progress& operator=(const Progress&) = delete;
+  ~Progress() {
+    if (is_shown_) std::fputs("\r\x1b[K", stderr);
+  }
+
+  [[nodiscard]] std::function<void(int)> callback() const {
+    if (!is_shown_) return {};
+    return [count = count_](int done) {
+      std::fprintf(stderr, "\r%d of %zu variants", done, count);
+      std::fflush(stderr);
+    };
+  }
+
+ private:
+  std::size_t count_;
+  bool is_shown_;
+};
 
 }  // namespace
 
@@ -68,15 +83,18 @@ Compared compared(const std::vector<std::string>& files, const std::string& refe
 
   std::vector<std::optional<VariantResult>> found(jobs.size());
   std::vector<std::vector<std::string>> files_read(jobs.size());
-  run_parallel(
-      count, threads,
-      [&](int i) {
-        const VariantJob& variant = jobs[static_cast<std::size_t>(i)];
-        const Job job = variant.read();
-        files_read[static_cast<std::size_t>(i)] = job.source_files;
-        found[static_cast<std::size_t>(i)] = analysed(variant.name, computed(job, variant.place));
-      },
-      progress(jobs.size()));
+  {
+    const Progress progress(jobs.size());
+    run_parallel(
+        count, threads,
+        [&](int i) {
+          const VariantJob& variant = jobs[static_cast<std::size_t>(i)];
+          const Job job = variant.read();
+          files_read[static_cast<std::size_t>(i)] = job.source_files;
+          found[static_cast<std::size_t>(i)] = analysed(variant.name, computed(job, variant.place));
+        },
+        progress.callback());
+  }
   for (std::optional<VariantResult>& variant : found) {
     result.comparison.variants.push_back(std::move(*variant));
   }

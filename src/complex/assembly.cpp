@@ -30,9 +30,9 @@ std::string vertex_words(const std::vector<int>& vertices) {
 double bridge_distance(const BridgeRequest& request, const Ligand& ligand, std::size_t centre,
                        int metal) {
   if (request.distances_angstrom[centre]) return *request.distances_angstrom[centre];
-  // Between two metals bonds are single: what shortens a terminal one does not hold.
+  // What shortens a terminal bond does not hold between two metals.
   return usual_distance_angstrom(ligand, ligand.bindings.front().teeth[0][0], metal) +
-         ligand.shortening_angstrom;
+         ligand.shortening_angstrom - ligand.bridging_shortening_angstrom;
 }
 
 void check_bridges(const ComplexSpec& complex) {

@@ -10,6 +10,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int hydrogen = 1;
+constexpr double roomy = 1.3;
 constexpr double radius_without_source_angstrom = 1.7;  // elements beyond curium
 
 double radius(int element) {
@@ -32,8 +33,10 @@ double limit_between(int a, int b) {
 
 void keep_nearer(Contact& nearest, double distance, double limit, const std::string& first,
                  const std::string& second) {
+  const double lack = roomy - distance / limit;
+  if (lack > 0.0) nearest.crowding += lack * lack;
   if (distance / limit >= nearest.relative) return;
-  nearest = {distance / limit, distance, limit, first, second};
+  nearest = {distance / limit, distance, limit, nearest.crowding, first, second};
 }
 
 void compare_groups(const Group& a, const Group& b, Contact& nearest) {

@@ -22,7 +22,8 @@ struct Contact {
   double relative = 0.0;  // distance over limit; below 1 is a clash
   double distance_angstrom = 0.0;
   double limit_angstrom = 0.0;
-  std::string first;  // "NH3 on vertex 2"
+  double crowding = 0.0;  // how much all pairs lack of 1.3 times their limits: the sum of squares
+  std::string first;      // "NH3 on vertex 2"
   std::string second;
 };
 

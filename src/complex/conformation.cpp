@@ -146,6 +146,32 @@ Conformation widest(const Assembly& assembly, const std::vector<int>& metals,
   return best;
 }
 
+// Turns two ligands at once, each two of them, as gears that cannot pass one by one. Symmetry is
+// lost on the way, so this is for complexes that would not fit otherwise.
+void turn_in_pairs(const Assembly& assembly, const std::vector<int>& metals, Conformation& best) {
+  constexpr int most_rounds = 4;
+  const std::size_t n = assembly.sites.size();
+  std::vector<std::vector<Pose>> own;
+  for (const Site& site : assembly.sites) own.push_back(own_poses(site));
+  for (int round = 0; round < most_rounds && best.contact.relative < 1.0; ++round) {
+    const double before = best.contact.crowding;
+    for (std::size_t i = 0; i < n * n && best.contact.relative < 1.0; ++i) {
+      const std::size_t a = i / n, b = i % n;
+      if (a >= b) continue;
+      std::vector<Pose> poses = best.poses;
+      for (const Pose& one : own[a]) {
+        for (const Pose& other : own[b]) {
+          poses[a] = one;
+          poses[b] = other;
+          const Contact contact = nearest_contact(assembly, metals, poses);
+          if (contact.crowding < best.contact.crowding - 1e-6) best = {poses, contact};
+        }
+      }
+    }
+    if (best.contact.crowding > before - 1e-6) return;
+  }
+}
+
 // A ring on one vertex of a polyhedron made for small ligands takes the room of several.
 std::string covering_words(const Assembly& assembly, const Contact& contact) {
   for (const Site& site : assembly.sites) {
@@ -194,6 +220,7 @@ std::vector<Pose> most_symmetric_poses(const Assembly& assembly, const std::vect
       best = std::move(found);
     }
   }
+  if (best.contact.relative < 1.0) turn_in_pairs(assembly, metals, best);
   if (best.contact.relative < 1.0) throw clash_error(assembly, best.contact);
   return best.poses;
 }

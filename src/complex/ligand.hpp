@@ -29,9 +29,10 @@ struct Ligand {
   std::vector<std::string> names;  // other names: "ammine"
   int charge = 0;                  // of the free ligand with closed shells
   std::vector<Atom> atoms;
-  std::vector<Binding> bindings;          // the usual one first; at least one
-  std::optional<int> bridging_electrons;  // for each of two metals that it bridges
-  double shortening_angstrom = 0.0;       // of the bond to the metal, below the sum of radii
+  std::vector<Binding> bindings;              // the usual one first; at least one
+  std::optional<int> bridging_electrons;      // for each of two metals that it bridges
+  double bridging_shortening_angstrom = 0.0;  // of each bond of a bridge, below the sum of radii
+  double shortening_angstrom = 0.0;           // of the bond to the metal, below the sum of radii
   std::string shortening_source;
   std::string geometry;  // lengths and angles in words
   std::string source;

@@ -98,9 +98,18 @@ std::vector<Atom> read_atoms(const YamlNode& node) {
   }
 }
 
+double read_shortening(const YamlNode& ligand, const char* key) {
+  const YamlNode* const node = ligand.find(key);
+  if (!node) return 0.0;
+  const double angstrom = node->number("a length in Å");
+  if (std::abs(angstrom) > 1.0) node->fail("found a shortening of more than 1 Å");
+  return angstrom;
+}
+
 Ligand read_ligand(const std::string& name, const YamlNode& node, const Sources& sources) {
-  node.expect_keys("a ligand", {"names", "charge", "binding", "bridging", "shortening",
-                                "shortening_source", "geometry", "source", "lengths", "atoms"});
+  node.expect_keys("a ligand", {"names", "charge", "binding", "bridging", "bridging_shortening",
+                                "bridging_shortening_source", "shortening", "shortening_source",
+                                "geometry", "source", "lengths", "atoms"});
   Ligand ligand;
   ligand.name = name;
   if (const YamlNode* const names = node.find("names")) {
@@ -121,12 +130,8 @@ Ligand read_ligand(const std::string& name, const YamlNode& node, const Sources&
     ligand.bridging_electrons = bridging->whole_number("a whole number of electrons");
     if (*ligand.bridging_electrons < 0) bridging->fail("expected 0 or more electrons");
   }
-  if (const YamlNode* const shortening = node.find("shortening")) {
-    ligand.shortening_angstrom = shortening->number("a length in Å");
-    if (std::abs(ligand.shortening_angstrom) > 1.0) {
-      shortening->fail("found a shortening of more than 1 Å");
-    }
-  }
+  ligand.shortening_angstrom = read_shortening(node, "shortening");
+  ligand.bridging_shortening_angstrom = read_shortening(node, "bridging_shortening");
   if (const YamlNode* const source = node.find("shortening_source")) {
     ligand.shortening_source = source->word("words");
   }

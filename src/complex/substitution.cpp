@@ -32,6 +32,7 @@ ComplexSpec substituted(const ComplexSpec& complex, const Substitution& change) 
     taken.push_back(bridge.vertices[static_cast<std::size_t>(centre)]);
   }
   const std::vector<SeatedLigand> seated = seat_ligands(spec, taken, complex.library);
+  if (!change.place.empty()) spec.place = change.place;
   if (change.metal) spec.atomic_number = *change.metal;
   if (change.polyhedron) spec.polyhedron = *change.polyhedron;
   if (variant.charge && complex.centres.size() == 1 && !change.oxidation) {

@@ -43,6 +43,19 @@ std::string name_of(const YamlNode& variant, const EachChange& change) {
                      change.ligand);
 }
 
+// "family.yaml:9:5: variant 'water': what is wrong". The place may be that of the job itself, which
+// does not say which variant it is.
+Error with_variant(const Error& error, const std::string& name, const std::string& path,
+                   const std::string& place) {
+  const std::string text = error.what();
+  const std::size_t end =
+      text.starts_with(path + ":") ? text.find(": ", path.size()) : std::string::npos;
+  if (end == std::string::npos) {
+    return Error(fmt::format("{}: variant '{}': {}", place, name, text));
+  }
+  return Error(fmt::format("{}: variant '{}'{}", text.substr(0, end), name, text.substr(end)));
+}
+
 struct NamedChange {
   std::string name;
   std::string place;
@@ -52,7 +65,7 @@ struct NamedChange {
 // What one item of the list stands for: itself, or one for each of its changes.
 std::vector<NamedChange> named_changes(const YamlNode& item) {
   const YamlNode* const each = item.find("each");
-  if (!each) return {{item.at("name").word("a name"), item.at("name").place(), {}}};
+  if (!each) return {{item.at("name").word("a name"), item.place(), {}}};
   std::vector<NamedChange> named;
   for (EachChange& change : read_each(*each)) {
     std::string place = each->place();
@@ -94,15 +107,20 @@ std::vector<VariantJob> variant_jobs(const std::string& path) {
     for (NamedChange& named : named_changes(item)) {
       for (const VariantJob& other : jobs) {
         if (other.name != named.name) continue;
+        const YamlNode* const name = item.find("name");
         throw Error(fmt::format("{}: the name '{}' is used already at {}; names must differ",
-                                named.place, named.name, other.place));
+                                name ? name->place() : named.place, named.name, other.place));
       }
       // The tree is kept alive by `node`, of which the item is a part.
-      jobs.push_back({named.name, item.place(), [node, &item, path, change = named.change] {
-                        FileChain files;
-                        return read_job_node(*node, &item, change ? &*change : nullptr, path,
-                                             files);
-                      }});
+      jobs.push_back(
+          {named.name, named.place, [node, &item, path, name = named.name, change = named.change] {
+             try {
+               FileChain files;
+               return read_job_node(*node, &item, change ? &*change : nullptr, path, files);
+             } catch (const Error& error) {
+               throw with_variant(error, name, path, item.place());
+             }
+           }});
     }
   }
   return jobs;

@@ -246,15 +246,16 @@ Report polyhedra_report() {
   table.columns = {{"symbol", "symbol", "", Align::Left, 0, false},
                    {"name", "shape", "", Align::Left, 1, false},
                    {"group", "group", "", Align::Left, 0, false},
-                   {"vertices", "vertices", "", Align::Left, 0, true},
-                   {"angle", "angle to set, default", "", Align::Left, 0, true}};
+                   {"vertices", "vertices", "", Align::Left, 0, true}};
+  std::string angles;
   for (const PolyhedronKind& kind : polyhedron_kinds()) {
-    const std::string angle = kind.free_angle.empty()
-                                  ? std::string()
-                                  : fmt::format("{}, {:.1f}°", kind.free_angle, kind.angle_degrees);
     table.lines.emplace_back(Row{{std::string(kind.symbol), std::string(kind.name),
-                                  std::string(kind.group), std::string(kind.vertices), angle}});
+                                  std::string(kind.group), std::string(kind.vertices)}});
+    if (kind.free_angle.empty()) continue;
+    angles += fmt::format("{}{} ({}, {:.1f}°)", angles.empty() ? "" : ", ", kind.symbol,
+                          kind.free_angle, kind.angle_degrees);
   }
+  table.notes.push_back("Angles that can be set, with their defaults: " + angles + ".");
   report.tables.push_back(std::move(table));
   report.remarks.push_back(
       "Symbols of IUPAC's Red Book (2005), IR-9.3. The group is that of equal ligands of one atom. "

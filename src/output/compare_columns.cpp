@@ -67,6 +67,13 @@ std::vector<std::string> donor_elements(const Comparison& comparison) {
   return elements;
 }
 
+std::string frontier_words(const VariantResult& variant) {
+  const bool open = variant.levels.levels.frontier.open_shell;
+  const bool fragile = variant.robustness.fragile();
+  return std::string(open ? "open shell" : "") + (open && fragile ? ", " : "") +
+         (fragile ? "fragile" : "");
+}
+
 std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
   using V = VariantResult;
   std::vector<SummaryColumn> columns = {
@@ -83,7 +90,7 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
        [](const V& v) { return energy_cell(v, v.levels.levels.frontier.lumo); }},
       {{"gap_ev", "gap", "eV", Align::Decimal, 0, false}, gap_cell},
       {{"fragile", "frontier", "", Align::Left, 0, false},
-       [](const V& v) { return Cell(v.robustness.fragile() ? "fragile" : ""); }},
+       [](const V& v) { return Cell(frontier_words(v)); }},
       {{"metal", "metal", "", Align::Left, 5, false},
        [](const V& v) {
          return v.metal() ? Cell(atom_name(v.levels.molecule, v.metal()->atom)) : Cell();
@@ -121,7 +128,7 @@ const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns,
   }
   const std::string nearest = nearest_word(key, known);
   throw Error(fmt::format("there is no column {}{}; columns are {}", irrepwise::quoted(key),
-                          nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
+                          nearest.empty() ? "" : " (did you mean '" + nearest + "'?)",
                           joined(known)));
 }
 
@@ -214,6 +221,11 @@ std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
                              [](const VariantResult& v) { return v.robustness.fragile(); })) {
     say("fragile: a small change of one parameter turns the order of two frontier levels, see "
         "below.");
+  }
+  if (fragile && std::any_of(variants.begin(), variants.end(), [](const VariantResult& v) {
+        return v.levels.levels.frontier.open_shell;
+      })) {
+    say("open shell: the HOMO is not full; the gap is that to the lowest empty level.");
   }
   if (metal) say("metal charge, d electrons: by Mulliken's populations.");
   if (bonds) say("M–X: mean overlap population of the bonds from the metal to donor atoms X.");

@@ -19,6 +19,15 @@ std::string group_of(const ComplexSpec& spec) { return build_complex(spec).point
 
 }  // namespace
 
+TEST_CASE("two trimethylphosphanes side by side are turned together where one alone cannot pass") {
+  // cis-Bis(trimethylphosphane) complexes with a small chelate are common (common practice).
+  ComplexSpec spec = spec_of("Pd", "SP-4", 2, {});
+  spec.centres[0].ligands = {on("OAc", {1, 2}), on("PMe3", {3, 4})};
+  spec.centres[0].ligands[0].denticity = 2;
+  const BuiltComplex built = build_complex(spec);
+  CHECK(built.centres[0].electrons.total == 16);
+}
+
 TEST_CASE("complexes come out in their textbook groups") {
   // Common practice; the conformation is the most symmetric one that the ligands allow.
   struct Row {

@@ -39,6 +39,16 @@ double metal_distance(const BuiltComplex& built) {
 
 }  // namespace
 
+TEST_CASE("sulfide between two metals is nearer than a single bond, as in clusters") {
+  // Fe-S 2.20 in Fe2S2 clusters and Mo-S 2.33 in [Mo2O2S2]2+ units, from memory.
+  const auto bridge = [](const char* metal, int oxidation) {
+    ComplexSpec spec = pair_of(metal, "T-4", oxidation, {"Cl", "Cl"}, "S", {1, 2});
+    return build_complex(spec).ligands.back().distances_angstrom.front();
+  };
+  CHECK(std::abs(bridge("Fe", 3) - 2.20) < 0.1);
+  CHECK(std::abs(bridge("Mo", 5) - 2.33) < 0.1);
+}
+
 TEST_CASE("squares that share an edge lie in one plane") {
   const BuiltComplex built = build_complex(pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 2}));
   CHECK(built.point_group == "D2h");  // as [Pd2Cl6]2- in crystals: common practice

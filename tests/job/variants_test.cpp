@@ -148,9 +148,9 @@ TEST_CASE("what cannot be a variant is refused with its place") {
   CHECK(message("  - {name: a, replace: {ligands: [{ligand: NH4, vertices: 1}]}}\n")
             .starts_with("test.yaml:9:"));
   CHECK(message("  - {name: a, replace: {metal: Pd, centre: 2}}\n")
-            .starts_with("test.yaml:9:24: there is no centre 2, expected 1 to 1"));
+            .starts_with("test.yaml:9:24: variant 'a': there is no centre 2, expected 1 to 1"));
   CHECK(message("  - each: {ligands: [Br, NH4], vertices: 1}\n")
-            .starts_with("test.yaml:9:26: no ligand is called 'NH4'"));
+            .starts_with("test.yaml:9:26: variant 'NH4': no ligand is called 'NH4'"));
   CHECK(message("  - each: {ligands: [Br, Br], vertices: 1}\n")
             .starts_with("test.yaml:9:26: the name 'Br' is used already"));
   CHECK(message("  - each: {ligands: [Br]}\n").find("vertices") != std::string::npos);
@@ -163,5 +163,8 @@ TEST_CASE("what cannot be a variant is refused with its place") {
   CHECK(message("  - each: {metals: []}\n").find("found nothing") != std::string::npos);
   CHECK(message("  - {geometry: {atoms: [[H, 0, 0, 0]]}, each: {metals: [Pd]}}\n")
             .find("`each` changes what `build` makes") != std::string::npos);
+  // Phosphanes so near do not fit, and the place is that of the ligand, not of the section `build`.
+  CHECK(message("  - each: {ligands: [{ligand: PMe3, distance: 1}], vertices: [1, 2]}\n")
+            .starts_with("test.yaml:9:22: variant 'PMe3': PMe3 on vertex"));
   CHECK(message("  []\n").find("found no variant") != std::string::npos);
 }
