@@ -3,11 +3,11 @@
 
     check-tables.py PROGRAM INPUT...
 
-For each input: the numbers of the CSV of `irrepwise table` are those of its JSON to the last bit,
-and those of the cells of its HTML; coefficients times S give 1, shares add up to 100 %. In the Markdown of
-every command each table renders as one, and no row loses a cell (python3-markdown-it). The LaTeX of
-every command goes through pdflatex without an error and without a line that runs far into the margin. A
-check whose program is not installed is skipped with a word.
+For each input: the numbers in the CSV of `irrepwise table` are those of its JSON to the last bit, and
+those of the cells of its HTML; shares add up to 100 %. In the Markdown of every command each table
+renders as one, and no row loses a cell (python3-markdown-it). The LaTeX of every command goes through
+pdflatex without an error, and no line runs far into the margin. What is not installed is skipped with a
+word.
 """
 import csv
 import html.parser

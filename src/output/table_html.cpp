@@ -36,14 +36,18 @@ std::string body_cell(const Column& column, const Cell& cell, int digits_after) 
   std::string shown;
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) {
     shown = html_label(label->ascii);
+  } else if (const auto* words = std::get_if<Words>(&cell)) {
+    for (const WordsPart& part : parts_of(*words)) {
+      shown += part.is_label ? html_label(part.text) : html_text(part.text);
+    }
   } else if (std::holds_alternative<Number>(cell)) {
     const DecimalParts parts = decimal_parts(cell);
     shown = with_true_minus(parts.before);
     shown += column.align == Align::Decimal ? filled_with_figure_spaces(parts.after, digits_after)
                                             : parts.after;
   } else {
-    const std::string words = cell_text(cell);  // "-1/2" stands in a right column as a text
-    shown = html_text(column.align == Align::Left ? words : with_true_minus(words));
+    const std::string text = cell_text(cell);  // "-1/2" stands in a right column as a text
+    shown = html_text(column.align == Align::Left ? text : with_true_minus(text));
   }
   return "<td" + class_of(column) + " data-value=\"" + html_text(cell_exact(cell)) + "\">" + shown +
          "</td>";
