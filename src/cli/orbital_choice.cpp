@@ -106,11 +106,13 @@ class Chooser {
     constexpr double unlimited = std::numeric_limits<double>::infinity();
     const std::optional<double> from_ev = first.empty() ? -unlimited : parse_number(first);
     const std::optional<double> to_ev = last.empty() ? unlimited : parse_number(last);
-    if (from_ev && to_ev && !(first.empty() && last.empty())) {
-      return add_energies(*from_ev, *to_ev, given);
+    if (first.empty() && last.empty()) {
+      throw Error(fmt::format("{} has neither end; write a range such as homo-2..lumo+2 or -14..-8",
+                              quoted(given)));
     }
-    const int from = level_of(first, given);
-    const int to = level_of(last, given);
+    if (from_ev && to_ev) return add_energies(*from_ev, *to_ev, given);
+    const int from = first.empty() ? 0 : level_of(first, given);
+    const int to = last.empty() ? n_ - 1 : level_of(last, given);
     if (from > to) {
       throw Error(
           fmt::format("{} runs downwards in energy; write the lower level first", quoted(given)));

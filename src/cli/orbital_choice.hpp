@@ -16,17 +16,16 @@ inline constexpr const char* orbital_words_help =
     "2e1g, one partner of it 2e1g:1, homo, lumo+2, a range homo-2..lumo+2, frontier, frontier+5 "
     "(five more on either side), an irrep eg, energies in eV -14..-8, the d block d, all";
 
-/// @param words  each one of:
-///               a level (then every partner is meant) or a partner of it, "2e1g:2"; homo and lumo
-///               count levels, not orbitals;
-///               a range of levels, "2e1g..lumo";
-///               a range of energies in eV, either end of which may be left out, "-14..-8",
-///               "-10.."; "frontier" for HOMO and LUMO, "frontier+5" (or "frontier+-5") for so many
-///               more on either side, fewer where the levels end; an irrep, "eg", for all its
-///               levels, or one partner of each, "eg:1"; "d" for the d block of every metal; "all"
+/// A word is a level, which means every partner, or a partner of it, "2e1g:2"; homo and lumo count
+/// levels, not orbitals. A range of levels is "2e1g..lumo", of energies in eV "-14..-8"; either end
+/// may be left out. "frontier" is HOMO and LUMO, "frontier+5" (or "frontier+-5") so many more on
+/// either side, fewer where the levels end. An irrep, "eg", means all its levels, "eg:1" one
+/// partner of each; "d" the d block of every metal; "all" is all.
+///
 /// @returns      in the order of the words, each orbital once
-/// @throws Error for a label that no level has (with the nearest), a partner or frontier level that
-///               is not there, a range that runs backwards or holds nothing, "d" without a metal
+/// @throws Error  for a label that no level has (with the nearest), a partner or frontier level
+/// that
+///                is not there, a range that runs backwards or holds nothing, "d" without a metal
 [[nodiscard]] std::vector<OrbitalChoice> choose_orbitals(std::span<const std::string> words,
                                                          const LevelsResult& result);
 

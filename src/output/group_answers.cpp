@@ -7,13 +7,13 @@
 namespace irrepwise {
 namespace {
 
-std::string factors_words(const std::vector<Factor>& factors) {
+Words factors_words(const std::vector<Factor>& factors) {
   std::string words;
   for (const Factor& factor : factors) {
-    words += (words.empty() ? "" : " × ") + readable_label(factor.label) +
+    words += (words.empty() ? "{" : " × {") + factor.label + "}" +
              (factor.exponent > 1 ? superscript(factor.exponent) : "");
   }
-  return words;
+  return {words};
 }
 
 Table product_table(const std::vector<ProductAnswer>& products) {
@@ -24,27 +24,21 @@ Table product_table(const std::vector<ProductAnswer>& products) {
                    {"irreps", "irreps", "", Align::Left, 0, true}};
   for (const ProductAnswer& answer : products) {
     table.lines.emplace_back(
-        Row{{factors_words(answer.factors), "whole", readable_states(answer.product)}});
+        Row{{factors_words(answer.factors), "whole", state_words(answer.product)}});
     if (!answer.has_parts) continue;
-    table.lines.emplace_back(Row{{"", "symmetric", readable_states(answer.symmetric)}});
-    table.lines.emplace_back(Row{{"", "antisymmetric", readable_states(answer.antisymmetric)}});
+    table.lines.emplace_back(Row{{"", "symmetric", state_words(answer.symmetric)}});
+    table.lines.emplace_back(Row{{"", "antisymmetric", state_words(answer.antisymmetric)}});
   }
   return table;
 }
 
-std::string configuration_words(const std::vector<OpenLevel>& levels) {
+Words configuration_words(const std::vector<OpenLevel>& levels) {
   std::string words;
   for (const OpenLevel& level : levels) {
-    words += (words.empty() ? "" : " ") + readable_label(level_label(level.label)) +
+    words += (words.empty() ? "{" : " {") + level_label(level.label) + "}" +
              (level.electrons > 1 ? superscript(level.electrons) : "");
   }
-  return words;
-}
-
-std::string term_list(const std::vector<Term>& terms) {
-  std::string words;
-  for (const Term& term : terms) words += (words.empty() ? "" : ", ") + readable_term(term);
-  return words;
+  return {words};
 }
 
 Table term_table(const PointGroup& group, const std::vector<TermsAnswer>& answers) {
@@ -55,7 +49,7 @@ Table term_table(const PointGroup& group, const std::vector<TermsAnswer>& answer
   for (const TermsAnswer& answer : answers) {
     table.lines.emplace_back(
         Row{{configuration_words(parse_configuration(group, answer.configuration)),
-             term_list(answer.terms)}});
+             term_words(answer.terms)}});
   }
   return table;
 }
@@ -78,7 +72,7 @@ std::vector<Table> descent_tables(const PointGroup& group,
       Row row{{SymmetryLabel{group.irreps()[i].label}}};
       for (std::size_t d = first; d < next; ++d) {
         row.cells.emplace_back(
-            readable_states(reduction_of(descents[d].embedding.subgroup, descents[d].times[i])));
+            state_words(reduction_of(descents[d].embedding.subgroup, descents[d].times[i])));
       }
       table.lines.emplace_back(std::move(row));
     }
@@ -113,31 +107,30 @@ Table transition_table(const PointGroup& group, const FrontierSymmetry& frontier
   return table;
 }
 
-std::string distortion_words(const TermDistortion& distortion) {
+Words distortion_words(const TermDistortion& distortion) {
+  const std::string along = " along " + reduction_words(distortion.modes).marked;
   switch (distortion.kind) {
     case DistortionKind::None:
-      return "none: not degenerate";
+      return {"none: not degenerate"};
     case DistortionKind::JahnTeller:
-      return distortion.modes.empty() ? "Jahn–Teller, but this molecule has no such mode"
-                                      : "Jahn–Teller along " + readable_reduction(distortion.modes);
+      return {"Jahn–Teller" +
+              (distortion.modes.empty() ? ", but this molecule has no such mode" : along)};
     case DistortionKind::RennerTeller:
-      return distortion.modes.empty()
-                 ? "Renner–Teller, but this molecule cannot bend"
-                 : "Renner–Teller along " + readable_reduction(distortion.modes);
+      return {"Renner–Teller" +
+              (distortion.modes.empty() ? ", but this molecule cannot bend" : along)};
   }
   return {};
 }
 
 Table ground_table(const FrontierSymmetry& frontier) {
   Table table;
-  table.caption = "Terms of " + configuration_words(frontier.open);
+  table.caption = "Terms of " + cell_text(configuration_words(frontier.open));
   table.columns = {{"term", "lowest by Hund's rules", "", Align::Left, 0, false},
                    {"distortion", "distortion", "", Align::Left, 0, true}};
   for (const GroundTerm& ground : frontier.ground) {
-    table.lines.emplace_back(
-        Row{{readable_term(ground.term), distortion_words(ground.distortion)}});
+    table.lines.emplace_back(Row{{term_words({ground.term}), distortion_words(ground.distortion)}});
   }
-  table.notes.push_back("All terms: " + term_list(frontier.terms) + ".");
+  table.notes.push_back("All terms: " + cell_text(term_words(frontier.terms)) + ".");
   return table;
 }
 

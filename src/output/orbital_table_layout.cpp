@@ -185,10 +185,13 @@ class Layout {
     return atom_list(result_.symmetry.molecule, table_.sets[static_cast<std::size_t>(set)].atoms);
   }
 
-  [[nodiscard]] static std::string function_words(const TableFunction& function) {
+  [[nodiscard]] std::string function_words(const TableFunction& function) const {
     std::string words = function.name;
     if (function.of_number > 1) words += fmt::format(" ({})", function.number);
-    if (function.partner > 0) words += fmt::format(":{}", function.partner);
+    // On a single atom the orbital's name says which partner it is.
+    if (function.partner > 0 && has_several(function.set)) {
+      words += fmt::format(":{}", function.partner);
+    }
     return words;
   }
 
@@ -236,12 +239,10 @@ class Layout {
     std::string words = geometry_sentence(result_, layout_.source) + " " +
                         method_sentence(result_) + " " + axes_sentence(result_);
     if (salcs_) {
-      words += fmt::format(
-          " SALCs as in irrepwise symmetry --{}, with the same coefficient for every partner.",
-          table_.options.frame == TableFrame::Local ? "local" : "salcs");
-      if (has_pair()) {
-        words += " Of complex conjugate irreps both partners are listed.";
-      }
+      words += fmt::format(" SALCs as in irrepwise symmetry --{}, {}.",
+                           table_.options.frame == TableFrame::Local ? "local" : "salcs",
+                           has_pair() ? "of complex conjugate irreps both partners"
+                                      : "with the same coefficient for every partner");
     } else if (table_.options.frame == TableFrame::Standard) {
       words += " Orbitals in this frame.";
     }

@@ -184,7 +184,7 @@ Table reduction_table(const SymmetryResult& result) {
     table.lines.emplace_back(
         Row{{first ? names[reduction.set].name : "", part_words(result, reduction), shells,
              Number{double(reduction.orbitals), 0},
-             readable_reduction(reduction_of(result.symmetry.group, reduction.times))}});
+             reduction_words(reduction_of(result.symmetry.group, reduction.times))}});
   }
   table.notes.push_back(
       fmt::format("The shells add up to {} orbitals, as many as the valence orbitals.", total));

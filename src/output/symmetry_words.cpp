@@ -14,14 +14,14 @@ namespace {
 constexpr std::array<std::string_view, 10> superscripts = {"⁰", "¹", "²", "³", "⁴",
                                                            "⁵", "⁶", "⁷", "⁸", "⁹"};
 
-std::string sum_words(const Reduction& reduction, bool of_levels) {
+Words sum_words(const Reduction& reduction, bool of_levels) {
   std::string words;
   for (const IrrepCount& part : reduction) {
     if (!words.empty()) words += " + ";
     if (part.count > 1) words += std::to_string(part.count);
-    words += readable_label(of_levels ? level_label(part.label) : part.label);
+    words += "{" + (of_levels ? level_label(part.label) : part.label) + "}";
   }
-  return words.empty() ? "nothing" : words;
+  return {words.empty() ? "nothing" : words};
 }
 
 }  // namespace
@@ -73,13 +73,18 @@ std::string readable_functions(const FunctionSet& set) {
   return text;
 }
 
-std::string readable_reduction(const Reduction& reduction) { return sum_words(reduction, true); }
+Words reduction_words(const Reduction& reduction) { return sum_words(reduction, true); }
 
-std::string readable_states(const Reduction& reduction) { return sum_words(reduction, false); }
+Words state_words(const Reduction& reduction) { return sum_words(reduction, false); }
 
-std::string readable_term(const Term& term) {
-  return fmt::format("{}{}{}", term.count > 1 ? fmt::format("{} ", term.count) : "",
-                     superscript(term.multiplicity), readable_label(term.irrep));
+Words term_words(const std::vector<Term>& terms) {
+  std::string words;
+  for (const Term& term : terms) {
+    if (!words.empty()) words += ", ";
+    if (term.count > 1) words += std::to_string(term.count) + " ";
+    words += superscript(term.multiplicity) + "{" + term.irrep + "}";
+  }
+  return {words};
 }
 
 }  // namespace irrepwise

@@ -5,6 +5,7 @@
 #include <string_view>
 #include <vector>
 
+#include "output/table.hpp"
 #include "symmetry/functions.hpp"
 #include "symmetry/reduction.hpp"
 #include "symmetry/terms.hpp"
@@ -18,13 +19,13 @@ namespace irrepwise {
 [[nodiscard]] std::string readable_functions(const FunctionSet& set);
 
 /// Labels of levels: "a1g + 2eg"; "nothing" where there is none.
-[[nodiscard]] std::string readable_reduction(const Reduction& reduction);
+[[nodiscard]] Words reduction_words(const Reduction& reduction);
 
 /// The same with capital labels, as of states and of products: "A1g + 2Eg".
-[[nodiscard]] std::string readable_states(const Reduction& reduction);
+[[nodiscard]] Words state_words(const Reduction& reduction);
 
-/// "³T1g", "2 ¹Eg" where it occurs twice
-[[nodiscard]] std::string readable_term(const Term& term);
+/// "³T1g", "2 ¹Eg" where it occurs twice; several with commas between them
+[[nodiscard]] Words term_words(const std::vector<Term>& terms);
 
 /// Digits as superscripts: "12" -> "¹²".
 [[nodiscard]] std::string superscript(int number);

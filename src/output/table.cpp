@@ -26,6 +26,15 @@ std::string rounded(const Number& number) {
   return text;
 }
 
+template <typename WriteLabel>
+std::string joined_parts(const Words& words, WriteLabel write_label) {
+  std::string text;
+  for (const WordsPart& part : parts_of(words)) {
+    text += part.is_label ? write_label(part.text) : part.text;
+  }
+  return text;
+}
+
 }  // namespace
 
 std::string column_title(const Column& column) {
@@ -40,17 +49,35 @@ std::string cell_text(const Cell& cell) {
   if (const auto* text = std::get_if<std::string>(&cell)) return *text;
   if (const auto* number = std::get_if<Number>(&cell)) return rounded(*number);
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return readable_label(label->ascii);
+  if (const auto* words = std::get_if<Words>(&cell)) return joined_parts(*words, readable_label);
   return {};
 }
 
 std::string cell_exact(const Cell& cell) {
   if (const auto* text = std::get_if<std::string>(&cell)) return *text;
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return label->ascii;
+  if (const auto* words = std::get_if<Words>(&cell)) {
+    return joined_parts(*words, [](const std::string& ascii) { return ascii; });
+  }
   if (const auto* number = std::get_if<Number>(&cell)) {
     refuse_non_finite(number->value);
     return fmt::format("{}", number->value + 0.0);  // + 0.0 turns -0 into 0
   }
   return {};
+}
+
+std::vector<WordsPart> parts_of(const Words& words) {
+  std::vector<WordsPart> parts;
+  bool inside = false;
+  std::size_t start = 0;
+  const std::string& text = words.marked;
+  while (start < text.size()) {
+    const std::size_t end = std::min(text.find(inside ? '}' : '{', start), text.size());
+    if (end > start) parts.push_back({text.substr(start, end - start), inside});
+    inside = !inside;
+    start = end + 1;
+  }
+  return parts;
 }
 
 DecimalParts decimal_parts(const Cell& cell) {

@@ -19,7 +19,12 @@ struct SymmetryLabel {
   std::string ascii;
 };
 
-using Cell = std::variant<std::monostate, std::string, Number, SymmetryLabel>;
+/// Words with labels of symmetry among them, these in braces: "{a1g} + 2{eg}".
+struct Words {
+  std::string marked;
+};
+
+using Cell = std::variant<std::monostate, std::string, Number, SymmetryLabel, Words>;
 
 enum class Align { Left, Right, Decimal };
 
@@ -58,6 +63,13 @@ struct Table {
 
 /// For programs: the shortest digits that read back as the same double, labels in ASCII.
 [[nodiscard]] std::string cell_exact(const Cell& cell);
+
+/// Words taken apart, in order.
+struct WordsPart {
+  std::string text;
+  bool is_label = false;  // then in ASCII
+};
+[[nodiscard]] std::vector<WordsPart> parts_of(const Words& words);
 
 /// A number's text in two parts, "-12" and ".345"; any other cell is all in the first.
 struct DecimalParts {

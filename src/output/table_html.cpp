@@ -16,7 +16,8 @@ std::string with_true_minus(std::string text) {
 }
 
 std::string class_of(const Column& column) {
-  return column.align == Align::Left ? "" : " class=\"number\"";
+  if (column.align != Align::Left) return " class=\"number\"";
+  return column.wraps ? "" : " class=\"word\"";
 }
 
 std::string head_cell(const Column& column) {
@@ -36,14 +37,18 @@ std::string body_cell(const Column& column, const Cell& cell, int digits_after) 
   std::string shown;
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) {
     shown = html_label(label->ascii);
+  } else if (const auto* words = std::get_if<Words>(&cell)) {
+    for (const WordsPart& part : parts_of(*words)) {
+      shown += part.is_label ? html_label(part.text) : html_text(part.text);
+    }
   } else if (std::holds_alternative<Number>(cell)) {
     const DecimalParts parts = decimal_parts(cell);
     shown = with_true_minus(parts.before);
     shown += column.align == Align::Decimal ? filled_with_figure_spaces(parts.after, digits_after)
                                             : parts.after;
   } else {
-    const std::string words = cell_text(cell);  // "-1/2" stands in a right column as a text
-    shown = html_text(column.align == Align::Left ? words : with_true_minus(words));
+    const std::string text = cell_text(cell);  // "-1/2" stands in a right column as a text
+    shown = html_text(column.align == Align::Left ? text : with_true_minus(text));
   }
   return "<td" + class_of(column) + " data-value=\"" + html_text(cell_exact(cell)) + "\">" + shown +
          "</td>";
@@ -70,9 +75,12 @@ std::string table_html(const Table& table) {
   out += " aria-label=\"" + (table.caption.empty() ? "table" : html_text(table.caption)) + "\">\n";
   out += "<table>\n";
   if (!table.caption.empty()) {
-    out += "<caption>" + html_text(table.caption);
-    if (!table.legend.empty())
+    // The inner block keeps its place while a wide table scrolls beneath it.
+    out += "<caption><div class=\"caption\">" + html_text(table.caption);
+    if (!table.legend.empty()) {
       out += " <span class=\"legend\">" + html_text(table.legend) + "</span>";
+    }
+    out += "</div>";
     out += "</caption>\n";
   }
   out += "<thead>\n<tr>";
@@ -115,15 +123,15 @@ std::string_view table_style() {
 .scroll { overflow-x: auto; }
 .table table { border-collapse: collapse; line-height: 1.35; }
 .table caption { text-align: left; font-weight: 600; padding: 0 0 .5rem; color: var(--ink); }
-.table .legend { display: block; font-weight: 400; font-size: .86rem; color: var(--muted); min-width: 26rem;
-  max-width: 46rem; padding-top: .25rem; }
-@media (max-width: 34rem) { .table .legend { min-width: 0; } }
+.table .caption { position: sticky; left: 0; max-width: min(46rem, calc(100vw - 2.5rem)); }
+.table .legend { display: block; font-weight: 400; font-size: .86rem; color: var(--muted); padding-top: .25rem; }
 .table th, .table td { padding: .16rem .7rem; text-align: left; vertical-align: baseline; }
 .table th:first-child, .table td:first-child { padding-left: .2rem; }
 .table thead th, .table thead td { border-top: 1.5px solid var(--ink); border-bottom: 1px solid var(--ink);
   font-weight: 500; color: var(--muted); vertical-align: bottom; }
 .table tbody + tbody { border-top: 1px solid var(--faint); }
 .table tbody:last-child { border-bottom: 1.5px solid var(--ink); }
+.table .word { white-space: nowrap; }
 .table .number { text-align: right; white-space: nowrap; font-variant-numeric: tabular-nums lining-nums; }
 .table .separator th { font-weight: 400; font-style: italic; color: var(--muted); padding-top: .4rem; }
 .table .unit { white-space: nowrap; }

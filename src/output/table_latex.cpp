@@ -21,6 +21,13 @@ std::string latex_title(const Column& column) {
 
 std::string latex_cell(const Cell& cell, int digits_after) {
   if (const auto* label = std::get_if<SymmetryLabel>(&cell)) return latex_label(label->ascii);
+  if (const auto* words = std::get_if<Words>(&cell)) {
+    std::string text;
+    for (const WordsPart& part : parts_of(*words)) {
+      text += part.is_label ? latex_label(part.text) : latex_text(part.text);
+    }
+    return text;
+  }
   if (!std::holds_alternative<Number>(cell)) return latex_text(cell_text(cell));
   const DecimalParts parts = decimal_parts(cell);
   std::string text = "$" + parts.before + parts.after + "$";

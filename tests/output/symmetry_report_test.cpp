@@ -104,8 +104,8 @@ TEST_CASE("words of symmetry are those of the trade") {
   CHECK(readable_class("2C5^2") == "2C5²");
   CHECK(readable_class("3sigmad") == "3σd");
   CHECK(readable_class("2Cphi") == "2C(φ)");
-  CHECK(readable_term({3, "T1g", 3, 1}) == "³T1g");
-  CHECK(readable_term({1, "Eg", 2, 2}) == "2 ¹Eg");
+  CHECK(cell_text(term_words({{3, "T1g", 3, 1}})) == "³T1g");
+  CHECK(cell_text(term_words({{1, "Eg", 2, 2}})) == "2 ¹Eg");
   CHECK(readable_functions({FunctionKind::Quadratic, {"x2-y2"}}) == "x²−y²");
   CHECK(coefficient_text(0.0) == "·");
   CHECK(coefficient_text(-0.37174) == "-0.3717");

@@ -46,13 +46,15 @@ TEST_CASE("labels are typeset with what stands below and above the line") {
 
 TEST_CASE("every cell carries its exact value, every head its key") {
   const std::string html = table_html(small_table());
-  CHECK(holds(html, "<caption>Levels &lt;of&gt; &quot;a&quot; &amp; b</caption>"));
-  CHECK(holds(html, "<th scope=\"col\" data-key=\"label\">level</th>"));
+  CHECK(holds(
+      html,
+      "<caption><div class=\"caption\">Levels &lt;of&gt; &quot;a&quot; &amp; b</div></caption>"));
+  CHECK(holds(html, "<th scope=\"col\" class=\"word\" data-key=\"label\">level</th>"));
   CHECK(holds(html,
               "<th scope=\"col\" class=\"number\" data-key=\"energy_ev\">energy <span "
               "class=\"unit\">/ eV</span></th>"));
   CHECK(holds(html, "data-key=\"2e1g\">2<i>e</i><sub>1g</sub>:2</th>"));
-  CHECK(holds(html, "<td data-value=\"1a1&quot;\">1<i>a</i><sub>1</sub>″</td>"));
+  CHECK(holds(html, "<td class=\"word\" data-value=\"1a1&quot;\">1<i>a</i><sub>1</sub>″</td>"));
   CHECK(holds(html, "data-value=\"-9.8765\""));
   CHECK(holds(html, "data-value=\"x&lt;y\">x&lt;y</td>"));
   CHECK(holds(html, "data-value=\"\"></td>"));

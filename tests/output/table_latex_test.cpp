@@ -4,6 +4,15 @@
 
 using namespace irrepwise;
 
+TEST_CASE("labels among words are typeset") {
+  Table table;
+  table.columns = {{"irreps", "irreps", "", Align::Left, 0, false}};
+  table.lines.emplace_back(Row{{Words{"{a1g} + 2{eg} & more"}}});
+  CHECK(table_latex(table).find("$a_{1g}$ + 2$e_{g}$ \\& more") != std::string::npos);
+  CHECK(cell_text(Words{"{piu}, ³{T1g}"}) == "πu, ³T1g");
+  CHECK(cell_exact(Words{"{piu}, ³{T1g}"}) == "piu, ³T1g");
+}
+
 TEST_CASE("numbers align at the point by invisible digits") {
   Table table;
   table.columns = {{"label", "level", "", Align::Right, 0, false},
