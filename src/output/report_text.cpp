@@ -24,8 +24,7 @@ void add_paragraph(std::string& out, const std::string& first, const std::string
 std::string report_text(const Report& report, int width) {
   std::string out;
   if (!report.title.empty()) add_paragraph(out, "", report.title, width);
-  if (!out.empty() && !report.facts.empty()) out += '
-';
+  if (!out.empty() && !report.facts.empty()) out += '\n';
   int name_width = 0;
   for (const Fact& fact : report.facts) name_width = std::max(name_width, display_width(fact.name));
   for (const Fact& fact : report.facts) {

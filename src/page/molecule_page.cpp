@@ -1,5 +1,6 @@
 #include "page/molecule_page.hpp"
 
+#include <algorithm>
 #include <utility>
 
 #include <fmt/format.h>
@@ -33,12 +34,25 @@ LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) 
   return diagram;
 }
 
-// Of the levels that the diagram shows.
+// Of the levels that the diagram shows; of a large molecule, of those nearest to the frontier.
 std::vector<Table> coefficient_tables(const LevelsResult& result, const PageMolecule& shown,
                                       const Provenance& provenance) {
+  constexpr int most_entries = 8'000;  // of which a reader can still make something
+  std::vector<int> levels;
+  for (const PageLevel& level : shown.levels) levels.push_back(level.level);
+  std::stable_sort(levels.begin(), levels.end(), [&](int a, int b) {
+    return levels_from_frontier(result.levels, a) < levels_from_frontier(result.levels, b);
+  });
+  std::size_t kept = 0;
+  for (int columns = 0; kept < levels.size(); ++kept) {
+    columns += result.levels.levels[static_cast<std::size_t>(levels[kept])].degeneracy;
+    if (kept > 1 && columns * result.basis.n_orbitals > most_entries) break;
+  }
+  levels.resize(kept);
+  std::sort(levels.begin(), levels.end());
   std::vector<OrbitalChoice> choices;
-  for (const PageLevel& level : shown.levels) {
-    const std::vector<OrbitalChoice> partners = partners_of(result.levels, level.level);
+  for (const int level : levels) {
+    const std::vector<OrbitalChoice> partners = partners_of(result.levels, level);
     choices.insert(choices.end(), partners.begin(), partners.end());
   }
   OrbitalTableLayout layout;
@@ -94,6 +108,8 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
   page.sections.push_back({"frontier", "Frontier orbitals", frontier.html});
   page.sections.push_back(
       {"energies", "Energies and compositions", tables_html({levels.tables.front()})});
+  page.sections.push_back({"coefficients", "Coefficients",
+                           tables_html(coefficient_tables(result, molecules.front(), provenance))});
   page.sections.push_back({"populations", "Charges and bonds",
                            tables_html({summary.tables.begin() + 1, summary.tables.end()})});
   page.sections.push_back({"symmetry", "Symmetry",

@@ -17,17 +17,12 @@ struct Task {
   std::size_t level = 0;
 };
 
-int rank_of(const Levels& levels, int level) {
-  const int homo = levels.frontier.homo.value_or(-1);
-  const int lumo = levels.frontier.lumo.value_or(static_cast<int>(levels.levels.size()));
-  return std::min(std::abs(level - homo), std::abs(level - lumo));
-}
-
 std::vector<Task> tasks_for(const std::vector<PageMolecule>& molecules, int levels_around) {
   std::vector<Task> tasks;
   for (std::size_t m = 0; m < molecules.size(); ++m) {
     for (std::size_t i = 0; i < molecules[m].levels.size(); ++i) {
-      const int rank = rank_of(molecules[m].result->levels, molecules[m].levels[i].level);
+      const int rank =
+          levels_from_frontier(molecules[m].result->levels, molecules[m].levels[i].level);
       if (rank <= levels_around) tasks.push_back({rank, m, i});
     }
   }
@@ -37,6 +32,12 @@ std::vector<Task> tasks_for(const std::vector<PageMolecule>& molecules, int leve
 }
 
 }  // namespace
+
+int levels_from_frontier(const Levels& levels, int level) {
+  const int homo = levels.frontier.homo.value_or(-1);
+  const int lumo = levels.frontier.lumo.value_or(static_cast<int>(levels.levels.size()));
+  return std::min(std::abs(level - homo), std::abs(level - lumo));
+}
 
 void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads) {
   const std::vector<Task> tasks = tasks_for(molecules, levels_around);

@@ -7,6 +7,9 @@
 
 namespace irrepwise {
 
+/// @returns  0 for HOMO and LUMO, 1 for the levels next to them …
+[[nodiscard]] int levels_from_frontier(const Levels& levels, int level);
+
 /// @param molecules      whose levels have no surfaces yet
 /// @param levels_around  how many levels below the HOMO and above the LUMO are of interest
 /// @param threads        changes no result
