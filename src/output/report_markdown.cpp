@@ -4,7 +4,8 @@
 namespace irrepwise {
 
 std::string report_markdown(const Report& report) {
-  std::string out = "# " + markdown_text(report.title) + "\n\n";
+  std::string out;
+  if (!report.title.empty()) out = "# " + markdown_text(report.title) + "\n\n";
   for (const Fact& fact : report.facts) {
     out += "- " + markdown_text(fact.name) + ": ";
     for (std::size_t i = 0; i < fact.lines.size(); ++i) {
@@ -12,7 +13,10 @@ std::string report_markdown(const Report& report) {
     }
     out += '\n';
   }
-  for (const Table& table : report.tables) out += '\n' + table_markdown(table);
+  for (const Table& table : report.tables) {
+    if (!out.empty()) out += '\n';
+    out += table_markdown(table);
+  }
   if (!report.warnings.empty()) {
     out += "\n**Warnings**\n\n";
     for (const std::string& warning : report.warnings) out += "- " + markdown_text(warning) + '\n';

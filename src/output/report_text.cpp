@@ -23,8 +23,10 @@ void add_paragraph(std::string& out, const std::string& first, const std::string
 
 std::string report_text(const Report& report, int width) {
   std::string out;
-  add_paragraph(out, "", report.title, width);
-  if (!report.facts.empty()) out += '\n';
+  if (!report.title.empty()) {
+    add_paragraph(out, "", report.title, width);
+    out += '\n';
+  }
   int name_width = 0;
   for (const Fact& fact : report.facts) name_width = std::max(name_width, display_width(fact.name));
   for (const Fact& fact : report.facts) {
@@ -34,7 +36,10 @@ std::string report_text(const Report& report, int width) {
       name.clear();
     }
   }
-  for (const Table& table : report.tables) out += '\n' + table_text(table, width);
+  for (const Table& table : report.tables) {
+    if (!out.empty()) out += '\n';
+    out += table_text(table, width);
+  }
   if (!report.warnings.empty()) {
     out += "\nWarnings\n";
     for (const std::string& warning : report.warnings) add_paragraph(out, "  ! ", warning, width);
