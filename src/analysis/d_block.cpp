@@ -223,8 +223,10 @@ void add_levels(const MolecularSymmetry& symmetry, const Basis& basis, const Lev
                 DBlock& block) {
   const EquivalentAtoms& set = set_of(levels, block.metal);
   const double d_energy_ev = d_shell(basis, block.metal)->h_ii_ev;
+  const int n_irreps = static_cast<int>(symmetry.group.irreps().size());
   std::vector<int> left;  // by irrep of the molecule: combinations not yet given to a level
-  for (int irrep = 0; irrep < static_cast<int>(symmetry.group.irreps().size()); ++irrep) {
+  left.reserve(static_cast<std::size_t>(n_irreps));
+  for (int irrep = 0; irrep < n_irreps; ++irrep) {
     left.push_back(d_combinations(basis, levels, set, irrep));
   }
   for (std::size_t i = 0; i < irreps.size(); ++i) {

@@ -163,8 +163,9 @@ std::vector<Parameter> parameters_in_use(const Molecule& molecule, const Basis& 
       const auto terms = shell.radial.terms();
       for (std::size_t term = 0; term < terms.size(); ++term) {
         const std::string number = terms.size() > 1 ? fmt::format(" {}", term + 1) : "";
-        parameters.push_back({ParameterKind::Exponent, name + " exponent" + number, "1/bohr",
-                              terms[term].function.zeta(), shells, static_cast<int>(term)});
+        parameters.push_back({ParameterKind::Exponent, fmt::format("{} exponent{}", name, number),
+                              "1/bohr", terms[term].function.zeta(), shells,
+                              static_cast<int>(term)});
       }
     }
   }

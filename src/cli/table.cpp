@@ -76,12 +76,6 @@ void check_usage(const TableOptions& options) {
   }
 }
 
-// The geometry as a report shall call it: the file without its folders.
-std::string source_name(const std::string& file) {
-  const std::size_t slash = file.rfind('/');
-  return slash == std::string::npos ? file : file.substr(slash + 1);
-}
-
 // A report of tables alone: their legends say what other reports say on top.
 Report report_of(const LevelsResult& result, std::vector<Table> tables, Format format) {
   Report report;
@@ -115,7 +109,7 @@ int width_of_tables(const OutputOptions& output) {
 }
 
 std::string written_populations(const LevelsResult& result, const TableOptions& options) {
-  const std::string source = source_name(options.job.file);
+  const std::string source = file_name(options.job.file);
   const Format format = chosen_format(options.output);
   if (format == Format::Json) return populations_json(result, source);
   if (format == Format::Csv) return populations_csv(result);
@@ -141,7 +135,7 @@ OrbitalTable table_asked_for(const LevelsResult& result, const TableOptions& opt
 std::string written(const LevelsResult& result, const TableOptions& options) {
   if (options.of_populations()) return written_populations(result, options);
   const OrbitalTable table = table_asked_for(result, options);
-  const std::string source = source_name(options.job.file);
+  const std::string source = file_name(options.job.file);
   const Format format = chosen_format(options.output);
   if (for_programs(options)) {
     const OrbitalTableData data{options.threshold.value_or(0.0), source};

@@ -173,7 +173,8 @@ std::vector<Atom> with_angle(const SeatedLigand& seated, double angle_degrees) {
 
 std::vector<Eigen::Vector3d> positions(const std::vector<Atom>& atoms, const Eigen::Matrix3d& map) {
   std::vector<Eigen::Vector3d> points;
-  for (const Atom& atom : atoms) points.push_back(map * atom.position);
+  points.reserve(atoms.size());
+  for (const Atom& atom : atoms) points.emplace_back(map * atom.position);
   return points;
 }
 

@@ -72,4 +72,9 @@ std::vector<std::string_view> split_words(std::string_view text) {
   return words;
 }
 
+std::string file_name(const std::string& path) {
+  const std::size_t slash = path.rfind('/');
+  return slash == std::string::npos ? path : path.substr(slash + 1);
+}
+
 }  // namespace irrepwise

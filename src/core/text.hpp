@@ -21,4 +21,7 @@ namespace irrepwise {
 /// @returns  the words between runs of white space
 [[nodiscard]] std::vector<std::string_view> split_words(std::string_view text);
 
+/// @returns  "square.xyz" of "inputs/square.xyz": the name without its folders
+[[nodiscard]] std::string file_name(const std::string& path);
+
 }  // namespace irrepwise

@@ -207,8 +207,8 @@ std::string build_xyz(const BuiltComplex& complex, const std::string& title) {
 
 Report ligands_report(const LigandLibrary& library) {
   Report report;
-  report.title = fmt::format("{} ligands", library.ligands().size());
   Table table;
+  table.caption = fmt::format("{} ligands", library.ligands().size());
   table.columns = {{"ligand", "ligand", "", Align::Left, 0, false},
                    {"names", "also called", "", Align::Left, 2, true},
                    {"charge", "charge", "", Align::Right, 0, false},
@@ -241,8 +241,8 @@ Report ligands_report(const LigandLibrary& library) {
 
 Report polyhedra_report() {
   Report report;
-  report.title = "Coordination polyhedra";
   Table table;
+  table.caption = "Coordination polyhedra";
   table.columns = {{"symbol", "symbol", "", Align::Left, 0, false},
                    {"name", "shape", "", Align::Left, 1, false},
                    {"group", "group", "", Align::Left, 0, false},

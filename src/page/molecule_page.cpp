@@ -5,6 +5,7 @@
 
 #include <fmt/format.h>
 
+#include "core/text.hpp"
 #include "figure/level_diagram.hpp"
 #include "figure/svg.hpp"
 #include "output/html_parts.hpp"
@@ -19,7 +20,7 @@ namespace irrepwise {
 namespace {
 
 constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
-constexpr int screen_columns = 130;
+constexpr int screen_columns = 115;
 constexpr int every_level = 1'000'000;
 
 LevelDiagram diagram_of(const LevelsResult& result, const PageOptions& options) {
@@ -57,7 +58,7 @@ std::vector<Table> coefficient_tables(const LevelsResult& result, const PageMole
   }
   OrbitalTableLayout layout;
   layout.width = screen_columns;
-  if (!provenance.files.empty()) layout.source = provenance.files.front().name;
+  if (!provenance.files.empty()) layout.source = file_name(provenance.files.front().name);
   return orbital_tables(result, orbital_table(result, choices, {}), layout);
 }
 
