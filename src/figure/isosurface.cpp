@@ -241,15 +241,20 @@ std::size_t nearest_vertex(const Mesh& mesh, const Eigen::Vector3f& place) {
 // Lobes of the size of a few cells would look like splinters: they are made again on finer points.
 class FineLobes {
  public:
-  FineLobes(const OrbitalField& field, int orbital, double isovalue, double spacing_angstrom)
-      : field_(field), orbital_(orbital), isovalue_(isovalue), spacing_(spacing_angstrom / finer) {}
+  FineLobes(const OrbitalField& field, int orbital, double isovalue, double spacing_angstrom,
+            const SmallLobes& lobes)
+      : field_(field),
+        orbital_(orbital),
+        isovalue_(isovalue),
+        spacing_(spacing_angstrom / lobes.finer),
+        lobes_(lobes) {}
 
   Mesh applied(const Mesh& coarse) {
     std::vector<std::size_t> piece_of_vertex;
     const std::vector<Piece> pieces = pieces_of(coarse, piece_of_vertex);
     std::vector<bool> kept(pieces.size(), true);
     for (std::size_t i = 0; i < pieces.size(); ++i) {
-      if (pieces[i].triangles <= few_triangles) kept[i] = !replaced(coarse, pieces[i]);
+      if (pieces[i].triangles <= lobes_.few_triangles) kept[i] = !replaced(coarse, pieces[i]);
     }
     Mesh out;
     append_pieces(out, coarse, piece_of_vertex, kept);
@@ -258,9 +263,6 @@ class FineLobes {
   }
 
  private:
-  static constexpr int finer = 4;
-  static constexpr std::size_t few_triangles = 160;
-
   bool replaced(const Mesh& coarse, const Piece& piece) {
     const Eigen::Vector3f& place = coarse.vertices[piece.vertices.front()];
     // On the finer points two pieces may have become one, which is there already.
@@ -271,7 +273,7 @@ class FineLobes {
     GridShape shape;
     shape.spacing_angstrom = spacing_;
     for (int axis = 0; axis < 3; ++axis) {
-      constexpr int around = finer + 2;
+      const int around = lobes_.finer + 2;
       const int first = static_cast<int>(std::floor(piece.low(axis) / spacing_)) - around;
       const int last = static_cast<int>(std::ceil(piece.high(axis) / spacing_)) + around;
       shape.first[static_cast<std::size_t>(axis)] = first;
@@ -300,14 +302,16 @@ class FineLobes {
   int orbital_;
   double isovalue_;
   double spacing_;
+  SmallLobes lobes_;
   Mesh fine_;
 };
 
 }  // namespace
 
-Mesh isosurface(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue) {
+Mesh isosurface(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue,
+                const SmallLobes& lobes) {
   const Mesh coarse = Surface(field, grid, orbital, isovalue).built();
-  return FineLobes(field, orbital, isovalue, grid.shape.spacing_angstrom).applied(coarse);
+  return FineLobes(field, orbital, isovalue, grid.shape.spacing_angstrom, lobes).applied(coarse);
 }
 
 }  // namespace irrepwise

@@ -1,7 +1,6 @@
 #include "figure/orbital_grid.hpp"
 
 #include <algorithm>
-#include <cassert>
 #include <cmath>
 #include <functional>
 #include <utility>
@@ -159,30 +158,14 @@ OrbitalGrid sample(const OrbitalField& field, std::optional<double> spacing_angs
   return grid;
 }
 
-OrbitalGrid thinned(const OrbitalGrid& grid, int step) {
-  assert(step >= 1);
-  OrbitalGrid out;
-  out.integrals = grid.integrals;
-  out.shape.spacing_angstrom = step * grid.shape.spacing_angstrom;
-  std::array<int, 3> skipped{};  // points before the first that is left
+GridShape with_spacing(const GridShape& shape, double spacing_angstrom) {
+  GridShape out;
+  out.spacing_angstrom = spacing_angstrom;
+  const double ratio = shape.spacing_angstrom / spacing_angstrom;
   for (std::size_t axis = 0; axis < 3; ++axis) {
-    const int first = grid.shape.first[axis];
-    const int from_origin = first % step;  // of the sign of `first`
-    skipped[axis] = (from_origin <= 0 ? -from_origin : step - from_origin);
-    out.shape.first[axis] = (first + skipped[axis]) / step;
-    out.shape.size[axis] = (grid.shape.size[axis] - skipped[axis] + step - 1) / step;
-  }
-  for (const std::vector<double>& values : grid.values) {
-    std::vector<double>& left = out.values.emplace_back();
-    left.reserve(out.shape.points());
-    for (int k = 0; k < out.shape.size[2]; ++k) {
-      for (int j = 0; j < out.shape.size[1]; ++j) {
-        for (int i = 0; i < out.shape.size[0]; ++i) {
-          left.push_back(values[grid.shape.index(skipped[0] + step * i, skipped[1] + step * j,
-                                                 skipped[2] + step * k)]);
-        }
-      }
-    }
+    const int last = shape.first[axis] + shape.size[axis] - 1;
+    out.first[axis] = static_cast<int>(std::floor(shape.first[axis] * ratio));
+    out.size[axis] = static_cast<int>(std::ceil(last * ratio)) - out.first[axis] + 1;
   }
   return out;
 }

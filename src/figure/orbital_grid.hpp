@@ -23,6 +23,9 @@ struct GridShape {
   [[nodiscard]] std::size_t index(int i, int j, int k) const;      // x runs fastest
 };
 
+/// @returns  over at least the same part of space, as every shape with a point at the origin
+[[nodiscard]] GridShape with_spacing(const GridShape& shape, double spacing_angstrom);
+
 struct OrbitalGrid {
   GridShape shape;
   std::vector<std::vector<double>> values;  // per orbital, bohr^(-3/2)
@@ -50,10 +53,6 @@ inline constexpr GridQuality light_quality{50'000, 0.25, 0.03, 15'000};
 [[nodiscard]] OrbitalGrid sample(const OrbitalField& field,
                                  std::optional<double> spacing_angstrom = {},
                                  const GridQuality& quality = {});
-
-/// @param step  1 or more
-/// @returns      every so many points of the same lattice; those that are left keep their values
-[[nodiscard]] OrbitalGrid thinned(const OrbitalGrid& grid, int step);
 
 /// @throws Error  for a share of the density that is not between 0 and 1
 void check_share(double share);

@@ -14,8 +14,6 @@
 namespace irrepwise {
 namespace {
 
-constexpr double raster_scale = 2.0;  // pixels of a surface for one of the figure
-
 std::string cell_name(const OrbitalCaption& caption) {
   return caption.degeneracy == 1 ? caption.label
                                  : fmt::format("{}:{}", caption.label, caption.partner);
@@ -124,7 +122,7 @@ Raster surface_picture(const OrbitalScene& scene, const Camera& camera, int size
 
 Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
                      std::span<const OrbitalCaption> captions, std::span<const OrbitalScene> scenes,
-                     const Camera& camera) {
+                     const Camera& camera, double raster_scale) {
   assert(captions.size() == scenes.size() && !scenes.empty());
   Sheet sheet;
   sheet.title = words.title;

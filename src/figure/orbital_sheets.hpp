@@ -27,10 +27,12 @@ struct SheetWords {
   RichText method;
 };
 
-/// @param scenes  one per caption; all are drawn to one scale, from one side
+/// @param scenes        one per caption; all are drawn to one scale, from one side
+/// @param raster_scale  pixels of a surface for one of the figure
 [[nodiscard]] Figure surface_sheet(const SheetWords& words, const Molecule& molecule,
                                    std::span<const OrbitalCaption> captions,
-                                   std::span<const OrbitalScene> scenes, const Camera& camera);
+                                   std::span<const OrbitalScene> scenes, const Camera& camera,
+                                   double raster_scale = 2.0);
 
 /// @param maps, planes  one per caption
 [[nodiscard]] Figure contour_sheet(const SheetWords& words, const Molecule& molecule,

@@ -19,7 +19,7 @@
 namespace irrepwise {
 namespace {
 
-constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
+constexpr int all_columns = 10'000;   // a page scrolls where a terminal breaks
 constexpr int screen_columns = 115;
 constexpr int every_level = 1'000'000;
 
@@ -81,8 +81,9 @@ FrontierFigure frontier_figure(const LevelsResult& result) {
   std::vector<Scene> scenes;
   for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
   const Camera camera = best_camera(scenes);
+  const double raster_scale = scenes.size() > 6 ? 1.0 : 1.5;  // many pictures make a heavy page
   const Figure figure = surface_sheet(sheet_heading(result), result.symmetry.molecule,
-                                      chosen.captions, surfaces.scenes, camera);
+                                      chosen.captions, surfaces.scenes, camera, raster_scale);
   return {"<figure class=\"scroll\">\n" + svg_element(figure, "frontier") + "</figure>\n",
           camera.towards};
 }

@@ -1,5 +1,8 @@
 #include "page/page_orbitals.hpp"
 
+#include <algorithm>
+#include <cmath>
+
 #include "figure/isosurface.hpp"
 #include "figure/orbital_grid.hpp"
 #include "hueckel/levels.hpp"
@@ -8,20 +11,41 @@ namespace irrepwise {
 namespace {
 
 constexpr double share = 0.5;
-constexpr std::size_t many_vertices = 700;  // of one phase; above it the next coarser grid is used
-constexpr double finest_spacing_angstrom = 0.08;
-constexpr double coarsest_spacing_angstrom = 0.4;
+constexpr double many_vertices = 1'100;  // of both phases; with more, a coarser grid is used
+constexpr double coarsest_spacing_angstrom = 0.45;
+constexpr double few_vertices = 300;  // with fewer, lobes get finer points
+constexpr SmallLobes as_they_are{0, 1};
+constexpr SmallLobes finer{1'000, 2};
 
-std::optional<PackedSurface> packed_phase(const OrbitalField& field, const OrbitalGrid& grid,
-                                          int orbital, double isovalue) {
-  const double spacing = grid.shape.spacing_angstrom;
-  int step = 1;
-  while (step * spacing < finest_spacing_angstrom) ++step;
-  Mesh mesh = isosurface(field, thinned(grid, step), orbital, isovalue);
-  while (mesh.vertices.size() > many_vertices && (step + 1) * spacing < coarsest_spacing_angstrom) {
-    ++step;
-    mesh = isosurface(field, thinned(grid, step), orbital, isovalue);
+struct Phases {
+  Mesh positive;
+  Mesh negative;
+
+  [[nodiscard]] double vertices() const {
+    return static_cast<double>(positive.vertices.size() + negative.vertices.size());
   }
+};
+
+Phases phases_on(const OrbitalField& field, const OrbitalGrid& grid, int orbital, double isovalue,
+                 const SmallLobes& lobes) {
+  return {isosurface(field, grid, orbital, isovalue, lobes),
+          isosurface(field, grid, orbital, -isovalue, lobes)};
+}
+
+// As the number of vertices goes with the square of the spacing, one more try is enough.
+Phases light_phases(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
+                    double isovalue) {
+  Phases phases = phases_on(field, grid, orbital, isovalue, as_they_are);
+  if (phases.vertices() < few_vertices) return phases_on(field, grid, orbital, isovalue, finer);
+  const double spacing = grid.shape.spacing_angstrom;
+  const double wanted =
+      std::min(coarsest_spacing_angstrom, spacing * std::sqrt(phases.vertices() / many_vertices));
+  if (wanted <= spacing) return phases;
+  return phases_on(field, sample_on(field, with_spacing(grid.shape, wanted)), orbital, isovalue,
+                   as_they_are);
+}
+
+std::optional<PackedSurface> packed_phase(const Mesh& mesh) {
   if (mesh.vertices.empty()) return {};
   return packed(mesh);
 }
@@ -36,8 +60,9 @@ std::vector<PageOrbital> page_orbitals(const LevelsResult& result, int level) {
   for (int i = 0; i < field.count(); ++i) {
     PageOrbital orbital;
     orbital.isovalue = enclosing_isovalue(field, grid, i, share, light_quality);
-    orbital.positive = packed_phase(field, grid, i, orbital.isovalue);
-    orbital.negative = packed_phase(field, grid, i, -orbital.isovalue);
+    const Phases phases = light_phases(field, grid, i, orbital.isovalue);
+    orbital.positive = packed_phase(phases.positive);
+    orbital.negative = packed_phase(phases.negative);
     orbitals.push_back(std::move(orbital));
   }
   return orbitals;
