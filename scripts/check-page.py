@@ -28,7 +28,7 @@ except ImportError:
 
 SKIPPED = 77
 LARGEST_PAGE = 3_000_000  # bytes
-PHONE, DESK = (390, 844), (1280, 900)  # CSS pixels
+PHONE, DESK, PAPER = (390, 844), (1280, 900), (680, 1000)  # CSS pixels
 
 
 class Failed(Exception):
@@ -200,7 +200,16 @@ def check_print(driver, folder):
     hidden = driver.execute_script("""
         return [...document.querySelectorAll('table, figure svg')]
           .filter(e => e.getBoundingClientRect().height < 1).length;""")
+    set_size(driver, PAPER)
+    driver.execute_script("dispatchEvent(new Event('beforeprint'))")
+    wide = driver.execute_script("""
+        return [...document.querySelectorAll('table, figure svg, pre')]
+          .filter(e => e.getBoundingClientRect().right > innerWidth + 1)
+          .map(e => e.tagName + ' ' + (e.caption?.textContent ?? ''));""")
+    driver.execute_script("dispatchEvent(new Event('afterprint'))")
+    set_size(driver, DESK)
     driver.execute_cdp_cmd("Emulation.setEmulatedMedia", {"media": ""})
+    expect(not wide, f"wider than paper: {wide}")
     expect(hidden == 0, f"{hidden} tables or figures are missing in print")
     if shutil.which("pdftotext") is None:
         return

@@ -232,7 +232,7 @@ std::vector<RichText> diagram_notes(const Shown& shown, const LevelDiagram& diag
       has_arrows = has_arrows || is_partly_filled(level);
     }
   }
-  RichText levels = plain_text("Dark levels are occupied, grey ones empty");
+  RichText levels = plain_text("Strongly drawn levels are occupied, pale ones empty");
   if (has_arrows) levels = levels + plain_text("; arrows stand where a level is partly filled");
   if (has_parents) {
     levels = levels +

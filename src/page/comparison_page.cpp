@@ -66,7 +66,7 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
   add_surfaces(molecules, levels_around_frontier, options.threads);
 
   HtmlPage page;
-  page.title = report.title;
+  page.title = diagram.title.empty() ? report.title : diagram.title;
   page.generator = generator_words(provenance);
   page.head_html = facts_html(report.facts) + warnings_html(report.warnings);
   page.sections.push_back(

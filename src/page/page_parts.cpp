@@ -129,8 +129,9 @@ PageSection levels_section(const Figure& diagram, DiagramRoom room) {
       "to see its "
       "composition, coefficients and orbital.</p>\n<noscript><p>The picture of single levels "
       "needs JavaScript; every table is here without it.</p></noscript>\n"
-      "<div class=\"levels{}\">\n<div class=\"scroll\"><figure class=\"diagram{}\">\n",
-      wide ? " wide" : "", wide ? " roomy" : "");
+      "<div class=\"levels{}\">\n<div class=\"scroll\"><figure class=\"diagram{}\" "
+      "style=\"--natural: {:.0f}px\">\n",
+      wide ? " wide" : "", wide ? " roomy" : "", diagram.width);
   html += svg_element(diagram, "diagram");
   html +=
       "</figure></div>\n<aside class=\"panel\" aria-live=\"polite\" "

@@ -229,6 +229,21 @@ const first = levelElements().find(g =>
 if (first) choose(first);
 else fillPanel();
 prepareTheme();
-// Printed on white whatever the screen shows.
-addEventListener("beforeprint", () => view.paint(2));
+// Paper does not scroll: letters of wide tables get smaller until the table fits.
+const PAPER_WIDTH = 660;  // CSS pixels between the margins of the narrower of A4 and Letter
+function fitTables() {
+  for (const table of document.querySelectorAll("table")) {
+    table.style.fontSize = "9pt";
+    const width = table.scrollWidth;
+    if (width > PAPER_WIDTH) table.style.fontSize = `${9 * PAPER_WIDTH / width}pt`;
+  }
+}
+function unfitTables() {
+  for (const table of document.querySelectorAll("table")) table.style.fontSize = "";
+}
+addEventListener("beforeprint", () => {
+  view.paint(2);
+  fitTables();
+});
+addEventListener("afterprint", unfitTables);
 document.documentElement.dataset.ready = "true";

@@ -223,7 +223,7 @@ class View {
         const along = molecule.atoms.map(atom => atom.place[k]);
         return (Math.min(...along) + Math.max(...along)) / 2;
       });
-      this.reach = 0.7 + Math.max(0.8, ...molecule.atoms.map(
+      this.reach = 1.0 + Math.max(0.6, ...molecule.atoms.map(
           atom => Math.hypot(...atom.place.map((x, k) => x - this.centre[k]))));
     }
     this.surfaces = !orbital ? [] : [
