@@ -1,9 +1,11 @@
 #include "page/comparison_page.hpp"
 
 #include <algorithm>
+#include <numeric>
 #include <utility>
 
 #include <fmt/format.h>
+#include <Eigen/Core>
 
 #include "output/character_tables.hpp"
 #include "output/compare_report.hpp"
@@ -20,6 +22,16 @@ namespace {
 constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
 constexpr int levels_around_frontier = 2;
 const Eigen::Vector3d usual_eye(0.45, -0.8, 0.4);  // no axis hides behind another
+
+// The first ones, as many as a diagram holds, the reference among them.
+std::vector<int> shown_variants(const Comparison& comparison) {
+  std::vector<int> shown(comparison.variants.size());
+  std::iota(shown.begin(), shown.end(), 0);
+  if (shown.size() <= most_columns) return shown;
+  shown.resize(most_columns);
+  if (comparison.reference >= most_columns) shown.back() = comparison.reference;
+  return shown;
+}
 
 std::string character_tables_html(const Comparison& comparison) {
   std::string html;
@@ -55,11 +67,13 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
   CompareParts parts;
   parts.differences = comparison.variants.size() > 1;
   const Report report = compare_report(comparison, parts);
+  const std::vector<int> shown = shown_variants(comparison);
   const LevelDiagram diagram = variant_diagram(
-      comparison, {.variants = {}, .from_ev = options.from_ev, .to_ev = options.to_ev});
+      comparison, {.variants = shown, .from_ev = options.from_ev, .to_ev = options.to_ev});
 
   std::vector<PageMolecule> molecules;
-  for (const VariantResult& variant : comparison.variants) {
+  for (const int index : shown) {
+    const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
     molecules.push_back(
         page_molecule(variant.name, variant.levels, {diagram.from_ev, diagram.to_ev}));
   }
@@ -71,7 +85,13 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
   page.head_html = facts_html(report.facts) + warnings_html(report.warnings);
   page.sections.push_back(
       {"summary", "Summary", tables_html({report.tables.begin(), report.tables.begin() + 1})});
-  page.sections.push_back(levels_section(level_diagram_figure(diagram), DiagramRoom::Above));
+  PageSection levels = levels_section(level_diagram_figure(diagram), DiagramRoom::Above);
+  if (shown.size() < comparison.variants.size()) {
+    levels.html = fmt::format("<p>The diagram holds {} of the {} variants.</p>\n", shown.size(),
+                              comparison.variants.size()) +
+                  levels.html;
+  }
+  page.sections.push_back(std::move(levels));
   page.sections.push_back({"comparison", "d block, frontier, robustness",
                            tables_html({report.tables.begin() + 1, report.tables.end()})});
   page.sections.push_back({"symmetry", "Symmetry", character_tables_html(comparison)});

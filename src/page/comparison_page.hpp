@@ -8,7 +8,8 @@
 
 namespace irrepwise {
 
-/// @throws Error  as `level_diagram_figure`, and for more variants than fit side by side
+/// Of more variants than a diagram holds, it shows the first; the tables have all.
+/// @throws Error  as `level_diagram_figure`
 [[nodiscard]] std::string comparison_page(const Comparison& comparison,
                                           const Provenance& provenance, const PageOptions& options);
 

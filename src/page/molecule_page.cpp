@@ -19,7 +19,7 @@
 namespace irrepwise {
 namespace {
 
-constexpr int all_columns = 10'000;   // a page scrolls where a terminal breaks
+constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
 constexpr int screen_columns = 115;
 constexpr int every_level = 1'000'000;
 

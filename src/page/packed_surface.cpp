@@ -1,6 +1,7 @@
 #include "page/packed_surface.hpp"
 
 #include <algorithm>
+#include <cassert>
 #include <cmath>
 #include <cstdint>
 #include <limits>
@@ -22,6 +23,7 @@ void append(std::string& bytes, Integer value) {
 }  // namespace
 
 PackedSurface packed(const Mesh& mesh) {
+  assert(!mesh.vertices.empty());
   Eigen::Vector3f low = mesh.vertices.front();
   Eigen::Vector3f high = low;
   for (const Eigen::Vector3f& vertex : mesh.vertices) {

@@ -2,6 +2,7 @@
 #pragma once
 
 #include <array>
+#include <cstddef>
 #include <string>
 
 #include "figure/mesh.hpp"
@@ -23,7 +24,7 @@ struct PackedSurface {
 };
 
 /// @param mesh    with at least one vertex
-/// @accuracy      positions within 1/65534 of the longest side of the box around the mesh
+/// @accuracy      positions within 1/131068 of the longest side of the box around the mesh
 [[nodiscard]] PackedSurface packed(const Mesh& mesh);
 
 }  // namespace irrepwise

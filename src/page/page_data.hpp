@@ -4,6 +4,8 @@
 #include <string>
 #include <vector>
 
+#include <Eigen/Core>
+
 #include "output/levels_result.hpp"
 #include "page/page_orbitals.hpp"
 

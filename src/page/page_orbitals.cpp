@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <cmath>
+#include <utility>
 
 #include "figure/isosurface.hpp"
 #include "figure/orbital_grid.hpp"
@@ -14,8 +15,8 @@ constexpr double share = 0.5;
 constexpr double many_vertices = 1'100;  // of both phases; with more, a coarser grid is used
 constexpr double coarsest_spacing_angstrom = 0.45;
 constexpr double few_vertices = 300;  // with fewer, lobes get finer points
-constexpr SmallLobes as_they_are{0, 1};
-constexpr SmallLobes finer{1'000, 2};
+constexpr SmallLobes usual_lobes{40, 2};
+constexpr SmallLobes finer_lobes{1'000, 2};
 
 struct Phases {
   Mesh positive;
@@ -35,14 +36,15 @@ Phases phases_on(const OrbitalField& field, const OrbitalGrid& grid, int orbital
 // As the number of vertices goes with the square of the spacing, one more try is enough.
 Phases light_phases(const OrbitalField& field, const OrbitalGrid& grid, int orbital,
                     double isovalue) {
-  Phases phases = phases_on(field, grid, orbital, isovalue, as_they_are);
-  if (phases.vertices() < few_vertices) return phases_on(field, grid, orbital, isovalue, finer);
+  Phases phases = phases_on(field, grid, orbital, isovalue, usual_lobes);
+  if (phases.vertices() < few_vertices)
+    return phases_on(field, grid, orbital, isovalue, finer_lobes);
   const double spacing = grid.shape.spacing_angstrom;
   const double wanted =
       std::min(coarsest_spacing_angstrom, spacing * std::sqrt(phases.vertices() / many_vertices));
   if (wanted <= spacing) return phases;
   return phases_on(field, sample_on(field, with_spacing(grid.shape, wanted)), orbital, isovalue,
-                   as_they_are);
+                   usual_lobes);
 }
 
 std::optional<PackedSurface> packed_phase(const Mesh& mesh) {

@@ -2,13 +2,13 @@
 
 #include <algorithm>
 #include <cstdlib>
+#include <utility>
 
 #include "core/parallel.hpp"
 
 namespace irrepwise {
 namespace {
 
-constexpr std::size_t most_characters = 1'400'000;
 constexpr int batch = 4;  // levels computed before the size is looked at again
 
 struct Task {
@@ -39,11 +39,11 @@ int levels_from_frontier(const Levels& levels, int level) {
   return std::min(std::abs(level - homo), std::abs(level - lumo));
 }
 
-void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads) {
+void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads,
+                  std::size_t most) {
   const std::vector<Task> tasks = tasks_for(molecules, levels_around);
   std::size_t characters = 0;
-  for (std::size_t first = 0; first < tasks.size() && characters < most_characters;
-       first += batch) {
+  for (std::size_t first = 0; first < tasks.size() && characters < most; first += batch) {
     const std::size_t end = std::min(tasks.size(), first + batch);
     std::vector<std::vector<PageOrbital>> found(end - first);
     run_parallel(static_cast<int>(end - first), threads, [&](int i) {
@@ -55,7 +55,7 @@ void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int t
     for (std::size_t i = first; i < end; ++i) {
       std::size_t more = 0;
       for (const PageOrbital& orbital : found[i - first]) more += orbital.bytes();
-      if (characters + more > most_characters) return;
+      if (characters + more > most) return;
       characters += more;
       molecules[tasks[i].molecule].levels[tasks[i].level].orbitals = std::move(found[i - first]);
     }

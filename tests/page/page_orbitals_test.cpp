@@ -1,6 +1,8 @@
 #include "page/page_orbitals.hpp"
 
+#include <algorithm>
 #include <cmath>
+#include <cstdlib>
 
 #include <doctest/doctest.h>
 
@@ -52,7 +54,27 @@ TEST_CASE("a page carries the frontier first, and no more surfaces than it may")
     CHECK(one[0].levels[i].orbitals.empty() != near);
     REQUIRE(one[0].levels[i].orbitals.size() == two[0].levels[i].orbitals.size());
     for (std::size_t k = 0; k < one[0].levels[i].orbitals.size(); ++k) {
-      CHECK(one[0].levels[i].orbitals[k].bytes() == two[0].levels[i].orbitals[k].bytes());
+      const PageOrbital& a = one[0].levels[i].orbitals[k];
+      const PageOrbital& b = two[0].levels[i].orbitals[k];
+      CHECK(a.positive->places == b.positive->places);
+      CHECK(a.positive->triangles == b.positive->triangles);
     }
   }
+
+  // Room for the frontier and little more: the farthest levels are the ones to go.
+  std::size_t frontier = 0;
+  for (const int level : {homo, lumo}) {
+    for (const PageOrbital& orbital : one[0].levels[static_cast<std::size_t>(level)].orbitals) {
+      frontier += orbital.bytes();
+    }
+  }
+  std::vector<PageMolecule> few = {molecule};
+  add_surfaces(few, 3, 2, frontier + 10);
+  std::size_t carried = 0;
+  for (const PageLevel& level : few[0].levels) {
+    const bool is_frontier = level.level == homo || level.level == lumo;
+    CHECK(level.orbitals.empty() != is_frontier);
+    for (const PageOrbital& orbital : level.orbitals) carried += orbital.bytes();
+  }
+  CHECK(carried == frontier);
 }

@@ -1,5 +1,6 @@
 #include "page/molecule_page.hpp"
 
+#include <cmath>
 #include <set>
 #include <string>
 

@@ -147,6 +147,8 @@ function energyOf(g) {
 }
 
 function prepareLevels() {
+  // What stands inside an image is hidden from readers of screens; here it can be chosen.
+  document.querySelector(".diagram svg").setAttribute("role", "group");
   for (const g of levelElements()) {
     // Around each bar and word, not around all of them: a label may stand far from its level.
     for (const part of [...g.children].reverse()) {
@@ -226,20 +228,22 @@ prepareView();
 prepareLevels();
 const first = levelElements().find(g =>
   moleculeOf(g) === page.first.molecule && g.dataset.name === page.first.level);
-if (first) choose(first);
-else fillPanel();
+if (first) {
+  choose(first);
+} else {
+  levelElements()[0]?.setAttribute("tabindex", 0);
+  fillPanel();
+}
 prepareTheme();
-// Paper does not scroll: letters of wide tables get smaller until the table fits.
+// Paper does not scroll: a table that is too wide gets smaller as a whole.
 const PAPER_WIDTH = 660;  // CSS pixels between the margins of the narrower of A4 and Letter
 function fitTables() {
   for (const table of document.querySelectorAll("table")) {
-    table.style.fontSize = "9pt";
-    const width = table.scrollWidth;
-    if (width > PAPER_WIDTH) table.style.fontSize = `${9 * PAPER_WIDTH / width}pt`;
+    table.style.zoom = Math.min(0.85, PAPER_WIDTH / table.scrollWidth);
   }
 }
 function unfitTables() {
-  for (const table of document.querySelectorAll("table")) table.style.fontSize = "";
+  for (const table of document.querySelectorAll("table")) table.style.zoom = "";
 }
 addEventListener("beforeprint", () => {
   view.paint(2);

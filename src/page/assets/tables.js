@@ -12,6 +12,21 @@ function compareValues(a, b) {
   return Number.isFinite(x) && Number.isFinite(y) ? x - y : a.localeCompare(b, "en", {numeric: true});
 }
 
+// A first column that names things only where they begin: every row is told its own, for sorting and
+// copying.
+function fillDown(table) {
+  if (exactValue(table.tHead?.rows[0]?.cells[0]) === "") return;
+  for (const body of table.tBodies) {
+    let last = "";
+    for (const row of body.rows) {
+      const cell = row.cells[0];
+      if (row.classList.contains("separator")) continue;
+      if (exactValue(cell) === "") cell.dataset.value = last;
+      else last = exactValue(cell);
+    }
+  }
+}
+
 // Rows between two headings of a table are sorted among themselves.
 function sortTable(table, column, descending) {
   for (const body of table.tBodies) {
@@ -22,7 +37,10 @@ function sortTable(table, column, descending) {
         const order = compareValues(x, y);
         return descending && x !== "" && y !== "" ? -order : order;
       });
-      for (const row of block) body.insertBefore(row, before);
+      for (const row of block) {
+        if (row.cells[0].textContent === "") row.cells[0].textContent = exactValue(row.cells[0]);
+        body.insertBefore(row, before);
+      }
       block = [];
     };
     for (const row of [...body.rows]) {
@@ -93,6 +111,7 @@ function makeSortable(table) {
 
 function prepareTables() {
   for (const table of document.querySelectorAll(".table table")) {
+    fillDown(table);
     makeSortable(table);
     table.closest(".table").prepend(copyButton(() => tableText(table)));
   }

@@ -33,8 +33,8 @@ function stickBetween(a, b, radius, colour) {
   const axis = [b[0] - a[0], b[1] - a[1], b[2] - a[2]];
   const length = Math.hypot(...axis);
   const w = axis.map(x => x / length);
-  const helper = Math.abs(w[0]) < 0.7 ? [1, 0, 0] : [0, 1, 0];
-  const u = normalised(cross(w, helper));
+  const aside = Math.abs(w[0]) < 0.7 ? [1, 0, 0] : [0, 1, 0];
+  const u = normalised(cross(w, aside));
   const v = cross(w, u);
   const vertices = [], normals = [], triangles = [];
   for (let j = 0; j < sectors; ++j) {
