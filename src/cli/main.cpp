@@ -57,6 +57,15 @@ std::string usage_message(const CLI::App& program, const CLI::ParseError& error,
       }
     }
   }
+  if (dynamic_cast<const CLI::ConversionError*>(&error) != nullptr) {
+    const std::string message = error.what();  // "Could not convert: --charge = one"
+    const std::size_t option = message.find("--");
+    const std::size_t equals = message.find(" = ", option);
+    if (option != std::string::npos && equals != std::string::npos) {
+      return message.substr(option, equals - option) + ": found '" + message.substr(equals + 3) +
+             "', expected a number (a whole one where the help says N)";
+    }
+  }
   return error.what();
 }
 

@@ -52,7 +52,7 @@ Charges settle_charges(const ComplexSpec& complex, const Assembly& assembly) {
   if (n_open > 0 && !complex.charge) {
     fail_at(complex.centres.front().place,
             "neither the oxidation state of the metal nor the charge is known; give `oxidation` or "
-            "`charge`");
+            "`charge` (--oxidation or --charge on the command line)");
   }
   if (n_open == 0) {
     const int total = known + ligands;

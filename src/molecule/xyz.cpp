@@ -215,14 +215,25 @@ XyzFile parse_xyz(std::string_view text, const std::string& name) {
   return Reader(text, name).read();
 }
 
-std::string xyz_text(const Molecule& molecule, const std::string& comment) {
-  std::string title;
-  for (const char c : comment) {
-    if (c == '"' || c == '\\') title += '\\';
-    title += c == '\n' || c == '\r' ? ' ' : c;
+namespace {
+
+// `key="words"` as a further part of a comment; nothing for no words.
+std::string comment_part(const char* key, const std::string& words) {
+  if (words.empty()) return {};
+  std::string text = fmt::format(" {}=\"", key);
+  for (const char c : words) {
+    if (c == '"' || c == '\\') text += '\\';
+    text += c == '\n' || c == '\r' ? ' ' : c;
   }
-  std::string text = fmt::format("{}\nProperties=species:S:1:pos:R:3 charge={} title=\"{}\"\n",
-                                 molecule.size(), molecule.charge(), title);
+  return text + '"';
+}
+
+}  // namespace
+
+std::string xyz_text(const Molecule& molecule, const std::string& title, const std::string& made) {
+  std::string text =
+      fmt::format("{}\nProperties=species:S:1:pos:R:3 charge={}{}{}\n", molecule.size(),
+                  molecule.charge(), comment_part("title", title), comment_part("made", made));
   for (const Atom& atom : molecule.atoms()) {
     // Adding zero turns -0 into 0, so that mirror images print the same.
     text += fmt::format("{:<2} {:15.10f} {:15.10f} {:15.10f}\n", element_symbol(atom.atomic_number),

@@ -25,7 +25,10 @@ struct XyzFile {
 /// @param name  how messages call the text
 [[nodiscard]] XyzFile parse_xyz(std::string_view text, const std::string& name);
 
-/// @returns  the text of an extended XYZ file, positions to 10 decimals
-[[nodiscard]] std::string xyz_text(const Molecule& molecule, const std::string& comment);
+/// @param title  what the molecule is called; may be empty
+/// @param made   how it was made, which no reader takes for its title; may be empty
+/// @returns      the text of an extended XYZ file, positions to 10 decimals
+[[nodiscard]] std::string xyz_text(const Molecule& molecule, const std::string& title,
+                                   const std::string& made = {});
 
 }  // namespace irrepwise

@@ -198,11 +198,11 @@ std::string build_json(const BuiltComplex& complex, const std::string& title) {
 }
 
 std::string build_xyz(const BuiltComplex& complex, const std::string& title) {
-  std::string words = title.empty() ? complex.how : title + "; " + complex.how;
-  words += "; group " + complex.point_group;
+  std::string made = complex.how;
+  made += "; group " + complex.point_group;
   for (const BuiltCentre& centre : complex.centres)
-    words += "; " + electron_words(centre.electrons);
-  return xyz_text(complex.molecule, words);
+    made += "; " + electron_words(centre.electrons);
+  return xyz_text(complex.molecule, title, made);
 }
 
 Report ligands_report(const LigandLibrary& library) {

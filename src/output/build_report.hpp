@@ -13,7 +13,7 @@ namespace irrepwise {
 [[nodiscard]] Report build_report(const BuiltComplex& complex, const std::string& title);
 [[nodiscard]] std::string build_json(const BuiltComplex& complex, const std::string& title);
 
-/// Extended XYZ; its title says how the complex was made, its group and its electrons.
+/// Extended XYZ; its comment says how the complex was made, its group and its electrons.
 [[nodiscard]] std::string build_xyz(const BuiltComplex& complex, const std::string& title);
 
 [[nodiscard]] Report ligands_report(const LigandLibrary& library);
