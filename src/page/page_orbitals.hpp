@@ -21,8 +21,10 @@ struct PageOrbital {
 
 /// The isovalue is that of `enclosing_isovalue`; the surface has fewer vertices than that of a
 /// drawing, each of them on the isovalue.
+/// @param vertices  about how many an orbital may have, both phases together
 /// @returns        one per partner
 /// @throws Error   as `sample`
-[[nodiscard]] std::vector<PageOrbital> page_orbitals(const LevelsResult& result, int level);
+[[nodiscard]] std::vector<PageOrbital> page_orbitals(const LevelsResult& result, int level,
+                                                     double vertices);
 
 }  // namespace irrepwise

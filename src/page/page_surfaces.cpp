@@ -31,6 +31,21 @@ std::vector<Task> tasks_for(const std::vector<PageMolecule>& molecules, int leve
   return tasks;
 }
 
+// So many that all orbitals find room, where that still gives a picture.
+double vertices_for(const std::vector<PageMolecule>& molecules, const std::vector<Task>& tasks,
+                    std::size_t most) {
+  constexpr double characters_per_vertex = 29.0;  // two triangles to a vertex, in base64
+  constexpr double fewest = 1'000.0;
+  constexpr double enough = 3'000.0;
+  double orbitals = 1.0;
+  for (const Task& task : tasks) {
+    const PageMolecule& molecule = molecules[task.molecule];
+    const auto level = static_cast<std::size_t>(molecule.levels[task.level].level);
+    orbitals += molecule.result->levels.levels[level].degeneracy;
+  }
+  return std::clamp(static_cast<double>(most) / orbitals / characters_per_vertex, fewest, enough);
+}
+
 }  // namespace
 
 int levels_from_frontier(const Levels& levels, int level) {
@@ -42,6 +57,7 @@ int levels_from_frontier(const Levels& levels, int level) {
 void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int threads,
                   std::size_t most) {
   const std::vector<Task> tasks = tasks_for(molecules, levels_around);
+  const double vertices = vertices_for(molecules, tasks, most);
   std::size_t characters = 0;
   for (std::size_t first = 0; first < tasks.size() && characters < most; first += batch) {
     const std::size_t end = std::min(tasks.size(), first + batch);
@@ -50,7 +66,7 @@ void add_surfaces(std::vector<PageMolecule>& molecules, int levels_around, int t
       const Task& task = tasks[first + static_cast<std::size_t>(i)];
       const PageMolecule& molecule = molecules[task.molecule];
       found[static_cast<std::size_t>(i)] =
-          page_orbitals(*molecule.result, molecule.levels[task.level].level);
+          page_orbitals(*molecule.result, molecule.levels[task.level].level, vertices);
     });
     for (std::size_t i = first; i < end; ++i) {
       std::size_t more = 0;

@@ -19,7 +19,7 @@ TEST_CASE("isovalues of the page are those of drawings within 2 %") {
       const OrbitalField field(result.symmetry.molecule, result.basis,
                                level_orbitals(result.symmetry, result.basis, result.levels, level));
       const OrbitalGrid grid = sample(field);
-      const std::vector<PageOrbital> orbitals = page_orbitals(result, level);
+      const std::vector<PageOrbital> orbitals = page_orbitals(result, level, 1'000.0);
       REQUIRE(orbitals.size() == std::size_t(field.count()));
       for (int i = 0; i < field.count(); ++i) {
         CAPTURE(name);
