@@ -104,8 +104,12 @@ class Chooser {
 
   void add_between(const std::string& first, const std::string& last, const std::string& given) {
     constexpr double unlimited = std::numeric_limits<double>::infinity();
-    const std::optional<double> from_ev = first.empty() ? -unlimited : parse_number(first);
-    const std::optional<double> to_ev = last.empty() ? unlimited : parse_number(last);
+    // "1e1" is a level of C5v, not ten: energies are written without exponents.
+    const auto energy_ev = [](const std::string& word) {
+      return word.find_first_of("eEdD") == std::string::npos ? parse_number(word) : std::nullopt;
+    };
+    const std::optional<double> from_ev = first.empty() ? -unlimited : energy_ev(first);
+    const std::optional<double> to_ev = last.empty() ? unlimited : energy_ev(last);
     if (first.empty() && last.empty()) {
       throw Error(fmt::format("{} has neither end; write a range such as homo-2..lumo+2 or -14..-8",
                               quoted(given)));

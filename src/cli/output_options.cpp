@@ -32,8 +32,9 @@ const std::map<std::string, std::string> names_by_ending = {
     {".html", "html"}, {".htm", "html"}, {".yaml", "yaml"},   {".yml", "yaml"}};
 
 std::string ending(const std::string& path) {
-  const std::size_t point = path.rfind('.');
-  return point == std::string::npos ? std::string() : path.substr(point);
+  const std::string name = file_name(path);
+  const std::size_t point = name.rfind('.');
+  return point == std::string::npos ? std::string() : name.substr(point);
 }
 
 int terminal_width() {
@@ -83,8 +84,15 @@ void add_output_options(CLI::App& command, OutputOptions& options,
 Format chosen_format(const OutputOptions& options) {
   if (!options.format.empty()) return formats_by_name.at(options.format);
   const auto by_ending = names_by_ending.find(ending(options.output));
-  if (by_ending == names_by_ending.end()) return Format::Text;
   const std::vector<std::string>& known = options.formats;
+  if (by_ending == names_by_ending.end()) {
+    const std::string unknown = ending(options.output);
+    if (unknown.empty() || unknown == ".txt" || known.empty()) return Format::Text;
+    throw CLI::ValidationError(fmt::format(
+        "{}: no format ends in {}; let the file end in .txt or that of a format, or give --format "
+        "{}",
+        options.output, unknown, joined(known, "or")));
+  }
   if (std::find(known.begin(), known.end(), by_ending->second) == known.end()) {
     throw CLI::ValidationError(
         fmt::format("{}: this command does not write {}; it writes {}, by --format or the ending",

@@ -113,4 +113,14 @@ std::string why_not_a_number(std::string_view word) {
   return fmt::format("found {}, expected a number", quoted(word));
 }
 
+std::string valid_utf8(std::string_view text) {
+  std::string out;
+  for (std::size_t at = 0; at < text.size();) {
+    const std::size_t length = utf8_length(text, at);
+    out += length == 0 ? "\uFFFD" : std::string(text.substr(at, length));
+    at += std::max<std::size_t>(1, length);
+  }
+  return out;
+}
+
 }  // namespace irrepwise

@@ -22,4 +22,7 @@ namespace irrepwise {
 /// infinity, a decimal comma, out of range.
 [[nodiscard]] std::string why_not_a_number(std::string_view word);
 
+/// @returns  the text, each byte that is not part of UTF-8 replaced by U+FFFD
+[[nodiscard]] std::string valid_utf8(std::string_view text);
+
 }  // namespace irrepwise

@@ -78,14 +78,16 @@ Path link_path(const DiagramLink& link, const LevelColumn& left, const ColumnLev
                const LevelColumn& right, const ColumnLevel& to) {
   Path path;
   path.stroke = link_stroke(link);
+  // From height to height of the levels, so that it rises where the energy does; labels, which may
+  // stand away from their levels, interrupt it.
   std::vector<Point2> points;
-  if (from.label_width > 0.0) {  // the label is a part of the way
-    points.push_back({left.labels_left + from.label_width + 4.0, from.label_y});
-    points.push_back({left.right, from.label_y});
-  } else {
-    if (is_free(left, from.y)) points.push_back({left.bars_right + 3.0, from.y});
-    points.push_back({left.right, from.y});
+  if (is_free(left, from.y)) {
+    points.push_back({left.bars_right + 3.0, from.y});
+  } else if (from.label_width > 0.0 && std::abs(from.label_y - from.y) < 0.5) {
+    points.push_back(
+        {left.labels_left + from.label_width + 4.0, from.y});  // its own label, in line
   }
+  points.push_back({left.right, from.y});
   points.push_back({right.left - 3.0, to.y});
   path.lines = {std::move(points)};
   return path;

@@ -85,6 +85,13 @@ void check_diagram(const LevelDiagram& diagram) {
         fmt::format("{} columns of levels are too many for one diagram; choose up to {} of them",
                     diagram.columns.size(), most_columns));
   }
+  constexpr double farthest_ev = 1e4;  // beyond it a decimal point has slipped
+  if (!(std::abs(diagram.from_ev) <= farthest_ev && std::abs(diagram.to_ev) <= farthest_ev)) {
+    throw Error(
+        fmt::format("the range of energies runs from {} to {} eV; expected energies between -{} "
+                    "and {} eV",
+                    diagram.from_ev, diagram.to_ev, farthest_ev, farthest_ev));
+  }
   if (!(diagram.to_ev > diagram.from_ev)) {
     throw Error(
         fmt::format("the range of energies runs from {} to {} eV; its end must lie above "

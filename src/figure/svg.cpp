@@ -6,6 +6,7 @@
 
 #include <fmt/format.h>
 
+#include "core/parse.hpp"
 #include "figure/font.hpp"
 
 namespace irrepwise {
@@ -21,7 +22,7 @@ std::string px(double value) {
 
 std::string escaped(std::string_view text) {
   std::string out;
-  for (const char c : text) {
+  for (const char c : valid_utf8(text)) {
     switch (c) {
       case '&':
         out += "&amp;";

@@ -32,12 +32,12 @@ std::string replaced_in(std::string text, std::string_view what, const std::stri
   return text;
 }
 
-// "Pd, CO"; or what the user calls it, with {metal} and {ligand} filled in.
+// "Pd CO"; or what the user calls it, with {metal} and {ligand} filled in.
 std::string name_of(const YamlNode& variant, const EachChange& change) {
   const YamlNode* const name = variant.find("name");
   if (!name) {
     const bool both = !change.metal.empty() && !change.ligand.empty();
-    return change.metal + (both ? ", " : "") + change.ligand;
+    return change.metal + (both ? " " : "") + change.ligand;
   }
   return replaced_in(replaced_in(name->word("a name"), "{metal}", change.metal), "{ligand}",
                      change.ligand);

@@ -200,8 +200,7 @@ std::string build_json(const BuiltComplex& complex, const std::string& title) {
 std::string build_xyz(const BuiltComplex& complex, const std::string& title) {
   std::string made = complex.how;
   made += "; group " + complex.point_group;
-  for (const BuiltCentre& centre : complex.centres)
-    made += "; " + electron_words(centre.electrons);
+  for (const BuiltCentre& centre : complex.centres) made += "; " + electron_words(centre.electrons);
   return xyz_text(complex.molecule, title, made);
 }
 

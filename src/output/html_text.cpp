@@ -1,12 +1,16 @@
 #include "output/html_text.hpp"
 
+#include "core/parse.hpp"
 #include "output/label_parts.hpp"
 
 namespace irrepwise {
 
 std::string html_text(std::string_view text) {
   std::string out;
-  for (const char c : text) {
+  const std::string valid = valid_utf8(text);
+  for (std::size_t i = 0; i < valid.size(); ++i) {
+    const char c = valid[i];
+    if (c == '\r' && i + 1 < valid.size() && valid[i + 1] == '\n') continue;  // of a DOS file
     switch (c) {
       case '&':
         out += "&amp;";

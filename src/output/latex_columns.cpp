@@ -109,6 +109,7 @@ std::vector<LatexPart> latex_parts(const Table& table) {
   for (const Size& size : sizes) {
     if (const auto part = sheet.fitted(all, size)) return {*part};
   }
+  if (all.size() == 1) return {{sizes.back().command, {{0, "l"}}}};  // runs over, but is there
   std::vector<LatexPart> parts;
   const Size& smallest = sizes.back();
   for (std::size_t next = 1; next < all.size();) {

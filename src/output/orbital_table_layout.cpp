@@ -266,8 +266,9 @@ class Layout {
 
   [[nodiscard]] std::string frame_words() const {
     std::string words = fmt::format(
-        "Local frames: z of an atom points to {}, σ along it, π across; πy is the one that points "
-        "along +z of the molecule where it can.",
+        "Local frames: z of an atom points to {}, σ along it, π across; πy stands across "
+        "the mirror plane that holds the line, and symmetry carries it from atom to atom, sign "
+        "included.",
         table_.centre_words);
     std::vector<bool> standard(table_.sets.size(), true);
     for (const TableFunction& function : table_.functions) {

@@ -192,8 +192,9 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
           "alone.");
     }
     tables.back().notes.push_back(local ? "Orbitals of each atom's own frame: z towards the "
-                                          "centre, x and y across it; y points "
-                                          "along +z of the molecule where it can."
+                                          "centre, x and y across it; y stands "
+                                          "across the mirror plane that holds the line, and "
+                                          "symmetry carries it from atom to atom."
                                         : "Orbitals of the standard frame.");
   }
   return tables;

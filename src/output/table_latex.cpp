@@ -53,6 +53,11 @@ std::vector<int> digits_after_point(const Table& table) {
   return after;
 }
 
+// A bracket or a star at the start of a row would belong to the command before it.
+std::string guarded(const std::string& cells) {
+  return cells.starts_with('[') || cells.starts_with('*') ? "{}" + cells : cells;
+}
+
 std::string latex_body(const Table& table, const LatexPart& part) {
   const std::vector<int> after = digits_after_point(table);
   std::string body;
@@ -71,7 +76,7 @@ std::string latex_body(const Table& table, const LatexPart& part) {
       if (&column != part.columns.data()) cells += " & ";
       cells += latex_cell(row.cells[column.index], after[column.index]);
     }
-    body += cells + " \\\\\n";
+    body += guarded(cells) + " \\\\\n";
   }
   return body;
 }
@@ -85,7 +90,7 @@ std::string latex_part(const Table& table, const LatexPart& part, const std::str
     titles += (kinds.empty() ? "" : " & ") + latex_title(table.columns[column.index]);
     kinds += column.kind;
   }
-  const std::string head = "\\toprule\n" + titles + " \\\\\n\\midrule\n";
+  const std::string head = "\\toprule\n" + guarded(titles) + " \\\\\n\\midrule\n";
   const std::string body = latex_body(table, part);
   const auto rows = std::count_if(table.lines.begin(), table.lines.end(), [](const auto& line) {
     return std::holds_alternative<Row>(line);

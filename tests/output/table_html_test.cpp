@@ -98,3 +98,12 @@ TEST_CASE("a page stands alone: style inside, nothing to fetch, everything escap
   CHECK(holds(page, "prefers-color-scheme: dark"));
   CHECK(holds(page, "@media print"));
 }
+
+TEST_CASE("lines of a DOS file lose their carriage returns, bytes outside UTF-8 become marks") {
+  CHECK(html_text("3\r\nwater\r\n") == "3\nwater\n");
+  CHECK(html_text("a\rb") ==
+        "a\uFFFD"
+        "b");
+  CHECK(html_text("caf\xe9") == "caf\uFFFD");
+  CHECK(html_text("caf\u00e9") == "caf\u00e9");
+}

@@ -1,5 +1,7 @@
 #include "output/table_latex.hpp"
 
+#include <string>
+
 #include <doctest/doctest.h>
 
 using namespace irrepwise;
@@ -27,4 +29,22 @@ TEST_CASE("numbers align at the point by invisible digits") {
         "\\midrule\n\\multicolumn{2}{c}{\\textit{gap}} \\\\\n\\midrule\n"
         "$2e_{u}$ & $-12$\\phantom{$.000$} \\\\\n"
         "\\bottomrule\n\\end{tabular}\n\\end{table}\n");
+}
+
+TEST_CASE("a row that begins with a bracket or a star is no argument of the command before it") {
+  // LaTeX looks for [length] and * after \\ and after the rules of booktabs, over spaces and lines.
+  Table table;
+  table.columns = {{"name", "[name]", "", Align::Left, 0, false}};
+  table.lines = {Row{{std::string("[PtCl4]2-")}}, Row{{std::string("*")}}};
+  const std::string text = table_latex(table);
+  CHECK(text.find("\n[") == std::string::npos);
+  CHECK(text.find("\n*") == std::string::npos);
+  CHECK(text.find("{}[PtCl4]2-") != std::string::npos);
+}
+
+TEST_CASE("a table of one column too wide for the page is still there") {
+  Table table;
+  table.columns = {{"words", "words", "", Align::Left, 0, false}};
+  table.lines = {Row{{std::string(400, 'm')}}};
+  CHECK(table_latex(table).find(std::string(400, 'm')) != std::string::npos);
 }

@@ -64,7 +64,7 @@ TEST_CASE("a page carries the frontier first, and no more surfaces than it may")
   // Room for the frontier and little more: the farthest levels are the ones to go.
   std::size_t frontier = 0;
   for (const int level : {homo, lumo}) {
-    for (const PageOrbital& orbital : one[0].levels[static_cast<std::size_t>(level)].orbitals) {
+    for (const PageOrbital& orbital : page_orbitals(result, level, 1'000.0)) {
       frontier += orbital.bytes();
     }
   }
