@@ -1,5 +1,6 @@
 #include "figure/level_frame.hpp"
 
+#include <algorithm>
 #include <cmath>
 #include <utility>
 

@@ -161,7 +161,7 @@ TEST_CASE("the charge follows from the oxidation state, or the other way round")
   spec.charge.reset();
   CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(spec)),
                        "neither the oxidation state of the metal nor the charge is known; give "
-                       "`oxidation` or `charge`",
+                       "`oxidation` or `charge` (--oxidation or --charge on the command line)",
                        Error);
 }
 

@@ -1,9 +1,13 @@
 #include "figure/level_diagram.hpp"
 
+#include <algorithm>
 #include <cmath>
+#include <limits>
 #include <map>
 #include <optional>
 #include <set>
+#include <string>
+#include <utility>
 
 #include <doctest/doctest.h>
 
@@ -193,6 +197,48 @@ TEST_CASE("columns with links stand side by side, and links of equal levels run 
   CHECK(links == shown);
 }
 
+TEST_CASE("a link runs between the heights of its two levels, however far labels are moved") {
+  // Six levels within 0.05 eV: labels need 14 px each, the bars stand less than 1 px apart.
+  LevelDiagram diagram;
+  for (int c = 0; c < 2; ++c) {
+    DiagramColumn column;
+    column.title = c == 0 ? "first" : "second";
+    for (int i = 0; i < 6; ++i) {
+      column.levels.push_back({std::to_string(i + 1) + "a",
+                               -12.0 + 0.01 * i + 0.02 * c,
+                               1,
+                               2.0,
+                               i == 5 ? FrontierMark::Homo : FrontierMark::None,
+                               {}});
+    }
+    column.levels.push_back({"7a", -6.0, 1, 0.0, FrontierMark::Lumo, {}});
+    diagram.columns.push_back(column);
+  }
+  diagram.columns[1].levels.insert(diagram.columns[1].levels.begin(),
+                                   {"0a", -12.3, 1, 2.0, FrontierMark::None, {}});
+  for (int i = 0; i < 7; ++i) diagram.links.push_back({0, i, i + 1, 1.0, LinkWeight::Plain});
+  diagram.from_ev = -13.0;
+  diagram.to_ev = -5.0;
+  const Figure figure = level_diagram_figure(diagram);
+  CHECK(first_text_collision(figure) == "");
+  std::map<std::string, double> bar;  // by column and level
+  for (const Group& group : figure.groups) {
+    if (group.kind != "level") continue;
+    bar[group.facts[0].second + group.name] = std::get<Path>(group.elements.front()).lines[0][0].y;
+  }
+  int links = 0;
+  for (const Group& group : figure.groups) {
+    if (group.kind != "link") continue;
+    ++links;
+    const auto& way = std::get<Path>(group.elements.front()).lines[0];
+    CAPTURE(group.title);
+    CHECK(std::abs(way.front().y - bar.at(group.facts[0].second + group.facts[1].second)) < 0.5);
+    CHECK(std::abs(way.back().y - bar.at(group.facts[2].second + group.facts[3].second)) < 0.5);
+    if (group.facts[1].second != "7a") CHECK(way.back().y < way.front().y);  // all rise by 0.02 eV
+  }
+  CHECK(links == 7);
+}
+
 TEST_CASE("a window without levels, or upside down, is refused") {
   LevelDiagram diagram;
   diagram.columns = {{"", {{"1a", -12.0, 1, 2.0, FrontierMark::Homo, {}}}}};
@@ -205,4 +251,12 @@ TEST_CASE("a window without levels, or upside down, is refused") {
   CHECK_THROWS_WITH_AS(
       static_cast<void>(level_diagram_figure(diagram)),
       "the range of energies runs from -5 to -6 eV; its end must lie above its start", Error);
+  const double huge = std::numeric_limits<double>::infinity();
+  for (const auto& [from, to] :
+       {std::pair{-1e7, 0.0}, {-huge, 0.0}, {-20.0, huge}, {-20.0, std::nan("")}}) {
+    diagram.from_ev = from;
+    diagram.to_ev = to;
+    CHECK_THROWS_WITH_AS(static_cast<void>(level_diagram_figure(diagram)),
+                         doctest::Contains("expected energies between -10000 and 10000 eV"), Error);
+  }
 }
