@@ -80,7 +80,7 @@ TEST_CASE("coefficients are normalised with S, and shares add up to one") {
       const Eigen::MatrixXd norms = c.coefficients.transpose() * s * c.coefficients;
       worst =
           std::max(worst, largest(norms - Eigen::MatrixXd::Identity(norms.rows(), norms.cols())));
-      worst = std::max(worst, std::abs(c.shares().colwise().sum().maxCoeff() - 1.0));
+      worst = std::max(worst, (c.shares().colwise().sum().array() - 1.0).abs().maxCoeff());
     }
     CHECK(worst < 1e-9);
   }
