@@ -16,12 +16,6 @@ void refuse(bool given, const char* option, const char* meant_for) {
   if (given) throw CLI::ValidationError(fmt::format("{} is for {} only", option, meant_for));
 }
 
-bool changes_job(const JobOptions& job) {
-  return job.charge || job.multiplicity || !job.parameters.empty() || !job.rule.empty() || job.k ||
-         job.tolerance || !job.z.empty() || !job.x.empty() || !job.subgroup.empty() ||
-         !job.group.empty() || job.limit;
-}
-
 // "../a.xyz" and "a.xyz", but not "homo-1..lumo".
 bool is_file_name(const std::string& word) {
   return word.find('/') != std::string::npos ||
@@ -36,7 +30,7 @@ void check_options(const DrawOptions& options, DrawKind kind) {
   const bool grid = surface || kind == DrawKind::Grid || (levels && options.pictures);
   refuse(!variants && !options.reference.empty(), "--reference", "variants side by side");
   refuse(!variants && !options.variants.empty(), "--variants", "variants side by side");
-  if (variants && changes_job(options.job)) {
+  if (variants && options.job.is_used()) {
     throw CLI::ValidationError(
         "options that change charge, method or symmetry are for one molecule; for variants, write "
         "it in their job files");
