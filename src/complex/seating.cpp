@@ -124,6 +124,19 @@ std::vector<std::vector<int>> split(const LigandRequest& request, const Ligand& 
   return groups;
 }
 
+std::string teeth_words(int teeth) {
+  return fmt::format("{} {}", teeth, teeth == 1 ? "tooth" : "teeth");
+}
+
+// "1+2+3": an example of so many vertices, as the command line takes them.
+std::string first_vertices(int count) {
+  std::string words;
+  for (int vertex = 1; vertex <= count; ++vertex) {
+    words += fmt::format("{}{}", vertex == 1 ? "" : "+", vertex);
+  }
+  return words;
+}
+
 // What could fill more vertices: a ligand that binds by fewer teeth than it can.
 std::string more_teeth_words(const std::vector<std::vector<SeatedLigand>>& seated) {
   for (const std::vector<SeatedLigand>& group : seated) {
@@ -131,9 +144,12 @@ std::string more_teeth_words(const std::vector<std::vector<SeatedLigand>>& seate
       for (const Binding& binding : one.ligand->bindings) {
         if (binding.denticity() <= one.binding->denticity()) continue;
         return fmt::format(
-            "; {0} has one tooth here and can have two: {{ligand: {0}, denticity: 2}}, or {0}@1+2 "
+            "; {0} binds by {1} here and can bind by {2}: {{ligand: {0}, denticity: {3}}}, or "
+            "{0}@{4} "
             "on the command line",
-            one.ligand->name);
+            one.ligand->name, teeth_words(one.binding->denticity()),
+            teeth_words(binding.denticity()), binding.denticity(),
+            first_vertices(binding.denticity()));
       }
     }
   }
