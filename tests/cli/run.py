@@ -1,15 +1,15 @@
 #!/usr/bin/python3
-"""Runs the commands of transcripts and compares what they print.
+"""Repeats recorded runs of the program and compares what it prints.
 
     run.py --program DIR --inputs DIR [--rewrite] TRANSCRIPT...
 
-A transcript is text. A line that starts with "$ " is a bash command, lines right after it that
+A recording is text. A line that starts with "$ " is a bash command, lines right after it that
 start with "> " go on with it, lines that start with "%%" are comment, and every other line up to
 the next command or comment is what the command prints, standard error included. A last line
-"[exit 1]" states an exit code other than 0. Each transcript runs in an empty folder of its own that
+"[exit 1]" states an exit code other than 0. Each recording runs in an empty folder of its own that
 holds a link `inputs` to the shipped inputs; the folder of the program stands first in PATH.
 
-Of a Markdown file, the blocks that start with "```console" are the transcript, one after another.
+Of a Markdown file, the blocks that start with "```console" are the recording, one after another.
 
 --rewrite puts what was printed in place of what was expected. Review the difference before you
 commit it: it is the specification.
@@ -71,8 +71,8 @@ def render(steps):
     return "\n".join(lines) + "\n"
 
 
-def transcripts_in(path):
-    """Splits a file into text to keep and transcripts, in turn, starting with text."""
+def recordings_in(path):
+    """Splits a file into text to keep and recordings, in turn, starting with text."""
     text = path.read_text(encoding="utf-8")
     if path.suffix != ".md":
         return ["", text]
@@ -86,7 +86,7 @@ def replay(path, options):
     for name in ("ASAN_OPTIONS", "UBSAN_OPTIONS"):
         if name in os.environ:
             environment[name] = os.environ[name]
-    parts = transcripts_in(path)
+    parts = recordings_in(path)
     expected = "".join(parts)
     with tempfile.TemporaryDirectory() as folder:
         os.symlink(options.inputs.resolve(), os.path.join(folder, "inputs"))
@@ -113,12 +113,12 @@ def main():
     parser.add_argument("--program", type=pathlib.Path, required=True)
     parser.add_argument("--inputs", type=pathlib.Path, required=True)
     parser.add_argument("--rewrite", action="store_true")
-    parser.add_argument("transcripts", type=pathlib.Path, nargs="+")
+    parser.add_argument("recordings", type=pathlib.Path, nargs="+")
     options = parser.parse_args()
     if not (options.program / "irrepwise").is_file():
         parser.error(f"no program in {options.program}")
-    failed = [path.name for path in options.transcripts if not replay(path, options)]
-    print(f"{len(options.transcripts) - len(failed)} passed, {len(failed)} failed")
+    failed = [path.name for path in options.recordings if not replay(path, options)]
+    print(f"{len(options.recordings) - len(failed)} passed, {len(failed)} failed")
     return 1 if failed else 0
 
 

@@ -13,7 +13,7 @@
 
 using namespace irrepwise;
 
-TEST_CASE("covalent radii agree with another transcription of the published table") {
+TEST_CASE("covalent radii agree with another copy of the published table") {
   std::ifstream file(reference_path("covalent_radii.csv"));
   REQUIRE(file);
   std::string line;
