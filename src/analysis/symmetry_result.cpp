@@ -9,26 +9,6 @@
 namespace irrepwise {
 namespace {
 
-const char* part_letter(Part part) {
-  switch (part) {
-    case Part::Shell:
-      return "";
-    case Part::Sigma:
-      return "σ";
-    case Part::Pi:
-      return "π";
-    case Part::PiInPlane:
-      return "π in plane";
-    case Part::PiOutOfPlane:
-      return "π out of plane";
-    case Part::Delta:
-      return "δ";
-    case Part::Phi:
-      return "φ";
-  }
-  return "";
-}
-
 // The orbitals of a single atom's shell that take part in an irrep; those of its representative.
 std::vector<std::string> orbitals_in_irrep(const SymmetryResult& result, const Basis& basis,
                                            const OrbitalReduction& reduction, int irrep) {
@@ -76,7 +56,7 @@ std::vector<BondingIrrep> bonding_by_irrep(const SymmetryResult& result) {
       if (reduction.times[irrep] == 0 || has_parts == (reduction.part == Part::Shell)) continue;
       const Shell& shell = basis.shells[reduction.shells.front()];
       if (reduction.part != Part::Shell) {
-        row.parts[set].push_back(part_letter(reduction.part));
+        row.parts[set].push_back(part_name(reduction.part));
       } else if (result.sets[set].size() == 1) {
         for (std::string& name : orbitals_in_irrep(result, basis, reduction, irrep)) {
           row.parts[set].push_back(std::move(name));

@@ -67,26 +67,6 @@ std::vector<TableFunction> atomic_functions(const LevelsResult& result, const Fr
   return functions;
 }
 
-const char* part_words(Part part) {
-  switch (part) {
-    case Part::Shell:
-      return "";
-    case Part::Sigma:
-      return "σ";
-    case Part::Pi:
-      return "π";
-    case Part::PiInPlane:
-      return "π in plane";
-    case Part::PiOutOfPlane:
-      return "π out of plane";
-    case Part::Delta:
-      return "δ";
-    case Part::Phi:
-      return "φ";
-  }
-  return "";
-}
-
 // On a single atom every partner is an orbital, or nearly; "5dxz, 5dyz" says more than "5d".
 std::string single_atom_name(const std::vector<const SalcFunction*>& partners, const Shell& shell) {
   constexpr double nothing = 1e-9;
@@ -113,7 +93,7 @@ std::string salc_name(const std::vector<const SalcFunction*>& partners, const Sh
   const SalcFunction& salc = *partners.front();
   const bool named_part = salc.local && shell.l > 0;
   return fmt::format("{}{}{}", shell.n(), shell_letter(shell.l),
-                     named_part ? part_words(salc.part) : "");
+                     named_part ? part_name(salc.part) : "");
 }
 
 bool same_family(const SalcFunction& a, const SalcFunction& b) {

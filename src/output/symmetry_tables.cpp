@@ -137,22 +137,7 @@ Table equivalent_atoms_table(const SymmetryResult& result) {
 }
 
 std::string part_words(const SymmetryResult& result, const OrbitalReduction& reduction) {
-  switch (reduction.part) {
-    case Part::Shell:
-      break;
-    case Part::Sigma:
-      return "σ";
-    case Part::Pi:
-      return "π";
-    case Part::PiInPlane:
-      return "π in plane";
-    case Part::PiOutOfPlane:
-      return "π out of plane";
-    case Part::Delta:
-      return "δ";
-    case Part::Phi:
-      return "φ";
-  }
+  if (reduction.part != Part::Shell) return part_name(reduction.part);
   const Shell& shell = result.orbitals->basis.shells[reduction.shells.front()];
   return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
 }

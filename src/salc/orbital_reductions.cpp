@@ -64,6 +64,26 @@ std::vector<int> part_components(Part part, int l) {
   return all;
 }
 
+const char* part_name(Part part) {
+  switch (part) {
+    case Part::Shell:
+      return "";
+    case Part::Sigma:
+      return "σ";
+    case Part::Pi:
+      return "π";
+    case Part::PiInPlane:
+      return "π in plane";
+    case Part::PiOutOfPlane:
+      return "π out of plane";
+    case Part::Delta:
+      return "δ";
+    case Part::Phi:
+      return "φ";
+  }
+  return "";
+}
+
 std::string part_key(Part part, int l) {
   switch (part) {
     case Part::Shell:

@@ -47,6 +47,9 @@ struct OrbitalReduction {
 /// @returns  for programs: "s" … "f" for a shell, "sigma", "pi", "pi_in_plane" …
 [[nodiscard]] std::string part_key(Part part, int l);
 
+/// @returns  for people: "σ", "π in plane" …; empty for a shell
+[[nodiscard]] const char* part_name(Part part);
+
 /// The parts of a shell, whole π where the frames do not split it.
 [[nodiscard]] std::vector<Part> parts_of_shell(const LocalFrames& frames, int l);
 
