@@ -11,7 +11,7 @@ std::string_view page_style() {
   :root { --ink: #000; --muted: #444; --faint: #bbb; --paper: #fff; --accent: #083f80; }
 }
 * { box-sizing: border-box; }
-body { margin: 0; background: var(--paper); color: var(--ink);
+body { margin: 0; overflow-wrap: break-word; background: var(--paper); color: var(--ink);
   font: 1rem/1.5 system-ui, "Liberation Sans", "Helvetica Neue", Arial, sans-serif; }
 main { max-width: 68rem; margin: 0 auto; padding: 2.5rem 1.25rem 4rem; }
 h1 { font-size: 1.6rem; line-height: 1.25; font-weight: 600; margin: 0 0 1.25rem; text-wrap: balance; }

@@ -239,7 +239,14 @@ prepareTheme();
 const PAPER_WIDTH = 660;  // CSS pixels between the margins of the narrower of A4 and Letter
 function fitTables() {
   for (const table of document.querySelectorAll("table")) {
-    table.style.zoom = Math.min(0.85, PAPER_WIDTH / table.scrollWidth);
+    // Letters do not shrink quite as their size does, so one step may leave a table too wide.
+    let zoom = 0.85;
+    for (let step = 0; step < 4; ++step) {
+      table.style.zoom = zoom;
+      const width = table.getBoundingClientRect().width;
+      if (width <= PAPER_WIDTH) break;
+      zoom *= PAPER_WIDTH / width;
+    }
   }
 }
 function unfitTables() {
