@@ -313,7 +313,7 @@ Command add_draw(CLI::App& program) {
       "the lobes show best",
       "Surfaces and grids");
   add("--spacing", options->spacing_angstrom, "Å",
-      "Between points of the grid; by default 0.07 to 0.15 by the size of the molecule",
+      "Between points of the grid; by default 0.15 or finer, by the size of the molecule",
       "Surfaces and grids");
   app->footer(
       "Axes and partners are those of the standard frame, as `irrepwise levels` states them.\n"

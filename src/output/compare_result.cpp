@@ -72,6 +72,18 @@ double energy_of(const VariantResult& variant, int level) {
   return variant.levels.levels.levels[static_cast<std::size_t>(level)].energy_ev;
 }
 
+// Whether it is the HOMO (LUMO), or filled (empty) as that is and so near that the method cannot
+// tell the two apart.
+bool is_at_frontier(const VariantResult& variant, int level, FrontierSide side) {
+  const std::optional<int> frontier = frontier_level(variant, side);
+  if (!frontier) return false;
+  if (level == *frontier) return true;
+  const bool occupied =
+      variant.levels.levels.levels[static_cast<std::size_t>(level)].occupation > 0.0;
+  return occupied == (side == FrontierSide::Homo) &&
+         std::abs(energy_of(variant, level) - energy_of(variant, *frontier)) < tied_below_ev;
+}
+
 }  // namespace
 
 std::string name_of_level(const VariantResult& variant, int level) {
@@ -99,7 +111,11 @@ std::optional<FrontierFate> frontier_fate(const Comparison& comparison, int vari
   for (const LevelMatch& match : comparison.matchings[static_cast<std::size_t>(variant)].matches) {
     if (match.reference == *level) {
       if (!fate.match || match.overlap > fate.match->overlap) fate.match = match;
-      if (match.variant == fate.now) fate.stays = true;
+    }
+    if (is_at_frontier(reference, match.reference, side) &&
+        is_at_frontier(comparison.variants[static_cast<std::size_t>(variant)], match.variant,
+                       side)) {
+      fate.stays = true;
     }
     if (match.variant == fate.now && match.overlap > best_now) {
       best_now = match.overlap;

@@ -50,11 +50,16 @@ struct Comparison {
 
 [[nodiscard]] VariantResult analysed(std::string name, LevelsResult levels);
 
+/// Levels closer than this share a place: errors of published H_ii are far larger, so that the
+/// method tells no order of theirs. A choice of ours.
+inline constexpr double tied_below_ev = 0.02;
+
 /// What became of the reference's HOMO or LUMO in a variant.
 struct FrontierFate {
   int reference_level = 0;
   std::optional<LevelMatch> match;  // its best, absent where nothing in the variant resembles it
-  bool stays = false;               // one of its matches is the variant's HOMO (LUMO)
+  bool stays = false;               // one of its matches is the variant's HOMO (LUMO); levels tied
+                                    // with either count as it
   std::optional<int> now;           // the variant's HOMO (LUMO)
   std::optional<int> now_was;       // the reference's level that this one was
 };

@@ -180,10 +180,12 @@ Table frontier_match_table(const Comparison& comparison) {
       if (!words.empty()) table.notes.push_back(std::move(words));
     }
   }
-  table.notes.push_back(
+  table.notes.push_back(fmt::format(
       "The level of each variant that resembles the reference's HOMO or LUMO most: by the overlap "
       "of the two on the atoms that both molecules have and on donors in the same places, among "
-      "levels that share an irrep of the common group. shift: its energy less the reference's.");
+      "levels that share an irrep of the common group. shift: its energy less the reference's. "
+      "Levels within {} eV of the HOMO or LUMO count as it.",
+      tied_below_ev));
   return table;
 }
 
@@ -213,8 +215,7 @@ Table robustness_table(const Comparison& comparison) {
       "The two highest occupied and the two lowest empty levels of different symmetry. by slope: "
       "first order in the parameter; solved: computed again until the levels meet, where less than "
       "1 eV is expected; or, by: the exponent or K that does it soonest, first order. fragile: "
-      "turns "
-      "for less than {} eV in one H_ii.",
+      "turns for less than {} eV in one H_ii.",
       fragile_below_ev)};
   return table;
 }

@@ -7,6 +7,7 @@
 #include <fmt/format.h>
 
 #include "core/error.hpp"
+#include "core/text.hpp"
 #include "output/caption_words.hpp"
 #include "output/composition.hpp"
 #include "output/equivalence.hpp"
@@ -138,15 +139,29 @@ Table level_table(const LevelsResult& result, const std::vector<AtomSet>& sets,
   return table;
 }
 
+// The HOMO, and what a multiplicity or the user's own occupation leaves open besides it.
+std::string words_on_partly_filled(const LevelsResult& result) {
+  const std::optional<int> homo = result.levels.frontier.homo;
+  std::vector<std::string> holds;
+  for (std::size_t i = result.levels.levels.size(); i-- > 0;) {
+    const Level& level = result.levels.levels[i];
+    const int room = 2 * level.degeneracy;
+    if (level.occupation < 1e-9 || level.occupation > room - 1e-9) continue;
+    const bool is_homo = homo == static_cast<int>(i);
+    holds.push_back(
+        fmt::format("{} holds {:g} of {} electrons",
+                    is_homo ? "the HOMO" : readable_label(level_name(result.symmetry.group, level)),
+                    level.occupation, room));
+  }
+  return joined(holds);
+}
+
 std::vector<std::string> remarks(const LevelsResult& result) {
   std::vector<std::string> words;
   if (result.levels.frontier.open_shell) {
-    const Level& homo =
-        result.levels.levels[static_cast<std::size_t>(result.levels.frontier.homo.value_or(0))];
-    words.push_back(fmt::format(
-        "Open shell: the HOMO holds {:g} of {} electrons. The method has no electron repulsion "
-        "and cannot tell which spin state lies lowest.",
-        homo.occupation, 2 * homo.degeneracy));
+    words.push_back("Open shell: " + words_on_partly_filled(result) +
+                    ". The method has no electron repulsion and cannot tell which spin state lies "
+                    "lowest.");
   }
   words.push_back(
       "Extended Hückel ranks levels by symmetry, overlap and electronegativity. Do not read bond "

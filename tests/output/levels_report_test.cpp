@@ -1,5 +1,6 @@
 #include "output/levels_report.hpp"
 
+#include <algorithm>
 #include <sstream>
 
 #include <doctest/doctest.h>
@@ -119,4 +120,36 @@ TEST_CASE("an open shell is said so") {
   const std::string text = report_text(levels_report(result_of(oxygen)), 100);
   CHECK(text.find("Open shell: the HOMO holds 2 of 4 electrons") != std::string::npos);
   CHECK(text.substr(0, 2) == "O2");  // no title: the formula stands for it
+}
+
+TEST_CASE("every level that a multiplicity leaves partly filled is named") {
+  HueckelOptions options;
+  options.multiplicity = 5;
+  const LevelsResult result = result_of(skew_square(), options);
+  const std::string text = report_text(levels_report(result), 2000);
+  const std::size_t at = text.find("Open shell: ");
+  REQUIRE(at != std::string::npos);
+  const std::string note = text.substr(at, text.find(". The method", at) - at);
+  double unpaired = 0.0;
+  int open_levels = 0;
+  for (std::size_t i = 0; i < result.levels.levels.size(); ++i) {
+    const Level& level = result.levels.levels[i];
+    const int room = 2 * level.degeneracy;
+    if (level.occupation == 0.0 || level.occupation == room) continue;
+    ++open_levels;
+    unpaired += std::min(level.occupation, room - level.occupation);
+    const bool is_homo = result.levels.frontier.homo == static_cast<int>(i);
+    const std::string name =
+        is_homo ? "the HOMO" : readable_label(level_name(result.symmetry.group, level));
+    CAPTURE(name);
+    CHECK(note.find(name + " holds ") != std::string::npos);
+  }
+  CHECK(open_levels > 1);
+  CHECK(unpaired == 4.0);  // a quintet: 2 S, the multiplicity less one
+  int named = 0;
+  for (std::size_t i = note.find(" holds "); i != std::string::npos;
+       i = note.find(" holds ", i + 1)) {
+    ++named;
+  }
+  CHECK(named == open_levels);
 }
