@@ -6,9 +6,8 @@
 
 #include <fmt/format.h>
 
+#include "cli/variant_option.hpp"
 #include "core/error.hpp"
-#include "core/parse.hpp"
-#include "core/text.hpp"
 #include "output/variant_diagram.hpp"
 
 namespace irrepwise::cli {
@@ -20,14 +19,7 @@ std::vector<int> chosen_variants(const Comparison& comparison,
   for (const VariantResult& variant : comparison.variants) names.push_back(variant.name);
   std::vector<int> out;
   for (const std::string& name : chosen) {
-    const auto found = std::find(names.begin(), names.end(), name);
-    if (found == names.end()) {
-      const std::string nearest = nearest_word(name, names);
-      throw Error(fmt::format(
-          "--variants: there is no variant {}{}; the first is '{}'", irrepwise::quoted(name),
-          nearest.empty() ? "" : ", did you mean '" + nearest + "'?", names.front()));
-    }
-    const int index = static_cast<int>(found - names.begin());
+    const int index = find_variant("--variants", names, name);
     if (std::find(out.begin(), out.end(), index) != out.end()) {
       throw Error(fmt::format("--variants: '{}' is named twice; name each once", name));
     }

@@ -69,7 +69,7 @@ Written molecule(const ReportOptions& options, const std::string& command) {
   job_options.file = options.files.front();
   const Job job = read_job_with(job_options);
   refuse_to_overwrite(options.output, job.source_files);
-  const LevelsResult result = computed(job, job_options.file);
+  const LevelsResult result = computed(job, job_place(job_options));
   const SymmetryResult symmetry = symmetry_answer(job, result.basis);
   return {molecule_page(result, symmetry, provenance(command, job.source_files), options.page),
           result.warnings};
@@ -88,7 +88,12 @@ void run(ReportOptions options, const std::string& command) {
                             options.output.output));
   }
   options.page.threads = options.threads.value_or(hardware_threads());
-  const bool several = options.files.size() > 1 || has_variants(options.files.front());
+  if (options.files.size() > 1 && !options.job.variant.empty()) {
+    throw CLI::ValidationError(
+        "--variant takes one molecule of one job; leave the other files out");
+  }
+  const bool several = options.files.size() > 1 ||
+                       (options.job.variant.empty() && has_variants(options.files.front()));
   if (several && options.job.is_used()) {
     throw CLI::ValidationError(
         "options of a single job (charge, method, symmetry) cannot hold for a comparison; write "
@@ -139,7 +144,8 @@ Command add_report(CLI::App& program, const std::string& command) {
       "copy.\n\n"
       "Examples:\n"
       "  irrepwise report complex.xyz --charge -2 --output report.html\n"
-      "  irrepwise report family.yaml --reference chloride --output family.html");
+      "  irrepwise report family.yaml --reference chloride --output family.html\n"
+      "  irrepwise report family.yaml --variant carbonyl --output carbonyl.html");
   return {app, [options, command] { run(*options, command); }};
 }
 
