@@ -14,6 +14,7 @@
 #include "cli/commands.hpp"
 #include "cli/compared.hpp"
 #include "cli/computed.hpp"
+#include "cli/draw_variants.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
@@ -30,6 +31,7 @@ struct ReportOptions {
   std::vector<std::string> files;
   JobOptions job;
   std::string reference;
+  std::vector<std::string> variants;
   PageOptions page;
   std::optional<int> threads;
   OutputOptions output;
@@ -78,7 +80,9 @@ Written molecule(const ReportOptions& options, const std::string& command) {
 Written comparison(const ReportOptions& options, const std::string& command) {
   const Compared result = compared(options.files, options.reference, options.threads);
   refuse_to_overwrite(options.output, result.files_read);
-  return {comparison_page(result.comparison, provenance(command, result.files_read), options.page),
+  PageOptions page = options.page;
+  page.variants = chosen_variants(result.comparison, options.variants);
+  return {comparison_page(result.comparison, provenance(command, result.files_read), page),
           warnings_of(result.comparison)};
 }
 
@@ -101,6 +105,9 @@ void run(ReportOptions options, const std::string& command) {
   }
   if (!several && !options.reference.empty()) {
     throw CLI::ValidationError("--reference needs variants; there is one molecule");
+  }
+  if (!several && !options.variants.empty()) {
+    throw CLI::ValidationError("--variants needs variants; there is one molecule");
   }
   const Written page = several ? comparison(options, command) : molecule(options, command);
   print_warnings({"text", options.output.output, {}}, page.warnings);
@@ -127,6 +134,12 @@ Command add_report(CLI::App& program, const std::string& command) {
   app->add_option("-r,--reference", options->reference,
                   "Variant that the others are matched with (the first by default)")
       ->option_text("NAME")
+      ->group("Comparison");
+  app->add_option("--variants", options->variants,
+                  "Those in the diagram, in this order, with commas; by default the first 12. The "
+                  "tables have all")
+      ->delimiter(',')
+      ->option_text("NAMES")
       ->group("Comparison");
   app->add_option("--from", options->page.from_ev, "Lowest energy of the level diagram")
       ->option_text("eV")
