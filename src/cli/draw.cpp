@@ -97,14 +97,7 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
   diagram.to_ev = options.to_ev.value_or(window.to_ev);
   Drawn out;
   if (options.pictures) {
-    std::vector<OrbitalChoice> choices;
-    for (const std::optional<int>& level :
-         {result.levels.frontier.homo, result.levels.frontier.lumo}) {
-      if (!level) continue;
-      const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
-      choices.insert(choices.end(), partners.begin(), partners.end());
-    }
-    const ChosenOrbitals chosen = chosen_orbitals(result, choices);
+    const ChosenOrbitals chosen = chosen_orbitals(result, frontier_orbitals(result.levels));
     const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
     const Camera camera =
         at_place("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
