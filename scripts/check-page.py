@@ -15,7 +15,8 @@ import re
 import shutil
 import subprocess
 import sys
-import tempfile
+
+from checking import check_each, expect
 
 try:
     from selenium import webdriver
@@ -30,15 +31,6 @@ SKIPPED = 77
 LARGEST_PAGE = 3_000_000  # bytes
 # CSS pixels; 320 is the width without scrolling sideways of WCAG 2.1, 1.4.10.
 PHONE, DESK, PAPER = (320, 844), (1280, 900), (680, 1000)
-
-
-class Failed(Exception):
-    pass
-
-
-def expect(condition, words):
-    if not condition:
-        raise Failed(words)
 
 
 def report(program, job, output, *options):
@@ -299,15 +291,7 @@ def main():
     if shutil.which("chromium") is None or shutil.which("chromedriver") is None:
         print("skipped: chromium and chromium-driver are not installed")
         return SKIPPED
-    failures = 0
-    for job in jobs:
-        with tempfile.TemporaryDirectory() as folder:
-            try:
-                print(f"{os.path.basename(job)}: as it should be ({check(program, job, folder)})")
-            except Failed as failure:
-                failures += 1
-                print(f"{os.path.basename(job)}: {failure}")
-    return 1 if failures or not jobs else 0
+    return check_each(check, program, jobs)
 
 
 if __name__ == "__main__":
