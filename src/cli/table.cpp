@@ -13,6 +13,7 @@
 #include "core/error.hpp"
 #include "core/parse.hpp"
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/orbital_table_data.hpp"
 #include "output/orbital_table_layout.hpp"
 #include "output/population_document.hpp"
@@ -80,7 +81,7 @@ void check_usage(const TableOptions& options) {
 Report report_of(const LevelsResult& result, std::vector<Table> tables, Format format) {
   Report report;
   if (format == Format::Html) {  // a page has a title
-    report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+    report.title = result.title.empty() ? readable_formula(result.molecule) : result.title;
   }
   report.tables = std::move(tables);
   report.warnings = result.warnings;
@@ -186,7 +187,7 @@ Command add_table(CLI::App& program) {
       "orbitals (default), or salcs: those of `irrepwise symmetry --salcs`")
       ->check(one_of({"orbitals", "salcs"}));
   add("--frame", options->frame, "FRAME",
-      "standard (default), or local: σ and π of each atom about the centre")
+      "standard (default), or local: σ and π of each atom, z along its bond towards the centre")
       ->check(one_of({"standard", "local"}));
   add("--threshold", options->threshold, "X",
       "Leave smaller entries blank: 0.05 by default, 1 % for shares, 0 in json and csv");

@@ -1,5 +1,8 @@
 #include "output/caption_words.hpp"
 
+#include <array>
+#include <cstddef>
+#include <cstdlib>
 #include <string>
 #include <vector>
 
@@ -12,6 +15,23 @@ std::string readable_group(std::string name) {
   return at == std::string::npos ? name : name.replace(at, 3, "∞");
 }
 
+std::string readable_formula(const Molecule& molecule) {
+  constexpr std::array<const char*, 10> below = {"₀", "₁", "₂", "₃", "₄", "₅", "₆", "₇", "₈", "₉"};
+  constexpr std::array<const char*, 10> above = {"⁰", "¹", "²", "³", "⁴", "⁵", "⁶", "⁷", "⁸", "⁹"};
+  const auto is_digit = [](char c) { return c >= '0' && c <= '9'; };
+  const auto figure = [](char c) { return static_cast<std::size_t>(c - '0'); };
+  std::string words;
+  for (const char c : hill_formula(molecule)) {
+    words += is_digit(c) ? below[figure(c)] : std::string(1, c);
+  }
+  const int charge = molecule.charge();
+  if (charge == 0) return words;
+  if (std::abs(charge) > 1) {
+    for (const char c : std::to_string(std::abs(charge))) words += above[figure(c)];
+  }
+  return words + (charge > 0 ? "⁺" : "⁻");
+}
+
 std::string geometry_sentence(const LevelsResult& result, const std::string& source) {
   const MolecularSymmetry& symmetry = result.symmetry;
   std::string group = readable_group(symmetry.group.symbol().name());
@@ -19,7 +39,7 @@ std::string geometry_sentence(const LevelsResult& result, const std::string& sou
     group += ", a subgroup of " + readable_group(symmetry.full_group);
   }
   std::string words =
-      fmt::format("Geometry: {}, {}, {}", source, charged_formula(result.molecule), group);
+      fmt::format("Geometry: {}, {}, {}", source, readable_formula(result.molecule), group);
   constexpr double worth_a_word_angstrom = 5e-5;
   if (symmetry.largest_shift_angstrom >= worth_a_word_angstrom) {
     words += fmt::format(" (atoms shifted by up to {:.4f} Å to be exact)",
@@ -43,6 +63,11 @@ std::string axes_sentence(const LevelsResult& result) {
   std::string words;
   for (const std::string& axis : axes) words += (words.empty() ? "" : "; ") + axis;
   return "Axes: " + words + ".";
+}
+
+std::string outer_frame_sentence() {
+  return "Beyond the donors z points along the bond towards it; x and y are those of the atom "
+         "before where the ligand is straight, otherwise y stands across the plane of the bonds.";
 }
 
 }  // namespace irrepwise

@@ -8,7 +8,8 @@
 
 namespace irrepwise {
 
-/// Which levels to show. By default those around the frontier.
+/// Which levels to show. By default those around the frontier, with the whole d block
+/// of every metal.
 struct LevelWindow {
   bool all = false;
   std::optional<double> from_ev = {};  // either turns the default window off

@@ -212,6 +212,9 @@ OrbitalTable orbital_table(const LevelsResult& result, const std::vector<Orbital
     const std::optional<Centre> centre = find_centre(result.symmetry);
     table.centre_words =
         centre && centre->atom ? atom_name(result.symmetry.molecule, *centre->atom) : "the centre";
+    table.beyond_donors =
+        std::any_of(frames.by_set.begin(), frames.by_set.end(),
+                    [](const auto& local) { return local && local->beyond_donors; });
   }
   return options.functions == TableFunctions::Orbitals
              ? over_orbitals(result, frames, choices, std::move(table))

@@ -230,7 +230,7 @@ class Layout {
           result_.symmetry.group.irreps()[static_cast<std::size_t>(level(columns.front()).irrep)];
       words += ", " + readable_label(level_label(irrep.label));
     }
-    words += ": " + (result_.title.empty() ? charged_formula(result_.molecule) : result_.title);
+    words += ": " + (result_.title.empty() ? readable_formula(result_.molecule) : result_.title);
     if (part > 0) words += fmt::format(" (part {} of {})", part, parts);
     return words;
   }
@@ -270,6 +270,7 @@ class Layout {
         "the mirror plane that holds the line, and symmetry carries it from atom to atom, sign "
         "included.",
         table_.centre_words);
+    if (table_.beyond_donors) words += " " + outer_frame_sentence();
     std::vector<bool> standard(table_.sets.size(), true);
     for (const TableFunction& function : table_.functions) {
       if (function.local) standard[static_cast<std::size_t>(function.set)] = false;

@@ -7,6 +7,7 @@
 
 #include "core/exact_number.hpp"
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/display_width.hpp"
 #include "output/equivalence.hpp"
 
@@ -196,6 +197,10 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
                                           "across the mirror plane that holds the line, and "
                                           "symmetry carries it from atom to atom."
                                         : "Orbitals of the standard frame.");
+    const bool beyond_donors =
+        local && std::any_of(result.frames.begin(), result.frames.end(),
+                             [](const auto& frames) { return frames && frames->beyond_donors; });
+    if (beyond_donors) tables.back().notes.back() += " " + outer_frame_sentence();
   }
   return tables;
 }

@@ -1,5 +1,6 @@
 #include "output/symmetry_tables.hpp"
 
+#include <algorithm>
 #include <cmath>
 
 #include <fmt/format.h>
@@ -173,13 +174,18 @@ Table reduction_table(const SymmetryResult& result) {
   }
   table.notes.push_back(
       fmt::format("The shells add up to {} orbitals, as many as the valence orbitals.", total));
-  bool has_parts = false;
-  for (const auto& frames : result.frames) has_parts = has_parts || frames;
-  if (has_parts) {
+  const auto any = [&](auto&& holds) {
+    return std::any_of(result.frames.begin(), result.frames.end(),
+                       [&](const auto& frames) { return frames && holds(*frames); });
+  };
+  if (any([](const LocalFrames&) { return true; })) {
+    const std::string centre = result.central_atom
+                                   ? atom_name(result.symmetry.molecule, *result.central_atom)
+                                   : std::string("the centre");
+    const bool beyond_donors = any([](const LocalFrames& local) { return local.beyond_donors; });
     table.notes.push_back(
-        fmt::format("σ: along the line to {}; π: across it.",
-                    result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
-                                        : std::string("the centre")));
+        fmt::format("σ: along the line to {}{}; π: across it.", centre,
+                    beyond_donors ? ", beyond the donors along the bond towards it" : ""));
   }
   return table;
 }

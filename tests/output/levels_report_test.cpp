@@ -5,11 +5,14 @@
 
 #include <doctest/doctest.h>
 
+#include "analysis/d_block.hpp"
+#include "analysis/donors.hpp"
 #include "core/error.hpp"
 #include "output/composition.hpp"
 #include "output/display_width.hpp"
 #include "output/example.hpp"
 #include "output/levels_json.hpp"
+#include "support/molecules.hpp"
 
 using namespace irrepwise;
 
@@ -84,6 +87,39 @@ TEST_CASE("a range of energies shows just its levels, and an empty one is refuse
   const Report report = levels_report(result, {.from_ev = homo - 1e-6, .to_ev = homo + 1e-6});
   CHECK(rows_of(report.tables[0]) == 1);
   CHECK_THROWS_AS(static_cast<void>(levels_report(result, {.from_ev = 1e4})), Error);
+}
+
+TEST_CASE("the default window holds the frontier and the whole d block of every metal") {
+  int widened = 0;
+  for (const TestMolecule& test : test_molecules()) {
+    const std::string name = test.name;
+    CAPTURE(name);
+    const std::vector<int> metals =
+        metal_atoms(test.molecule, make_basis(test.molecule, published_parameters()));
+    if (metals.empty()) continue;
+    const LevelsResult result = result_of(test.molecule);
+    const Table table = levels_report(result).tables.front();
+    std::vector<std::string> shown;
+    for (const auto& line : table.lines) {
+      if (const Row* row = std::get_if<Row>(&line)) shown.push_back(cell_exact(row->cells[1]));
+    }
+    const auto is_shown = [&](int level) {
+      const Level& wanted = result.levels.levels[static_cast<std::size_t>(level)];
+      return std::count(shown.begin(), shown.end(), level_name(result.symmetry.group, wanted)) == 1;
+    };
+    if (result.levels.frontier.homo) CHECK(is_shown(*result.levels.frontier.homo));
+    if (result.levels.frontier.lumo) CHECK(is_shown(*result.levels.frontier.lumo));
+    for (const int metal : metals) {
+      const DBlock block =
+          find_d_block(result.symmetry, result.basis, result.levels, result.populations, metal);
+      for (const DLevel& level : block.levels) {
+        CHECK(is_shown(level.level));
+        const int above = level.level - result.levels.frontier.homo.value_or(0);
+        widened += above > 6 || above < -9 ? 1 : 0;
+      }
+    }
+  }
+  CHECK(widened > 5);  // in some the d block reaches beyond ten levels down and six up
 }
 
 TEST_CASE("the whole report keeps to 40 columns and more, but for the narrow tables themselves") {
