@@ -141,7 +141,8 @@ std::string latex_words(std::string_view words) {
       out += latex_text(run.text);
       continue;
     }
-    out += "$" + run.text + "_{";
+    // The letter of the shell stands upright, as where nothing is below: "2s".
+    out += "$" + run.text.substr(0, 1) + "\\mathrm{" + run.text.substr(1) + "}_{";
     for (std::size_t i = 0; i < run.below.size();) {
       const std::string_view rest = std::string_view(run.below).substr(i);
       const Replacement* letter = start_of(rest, in_mathematics);

@@ -28,11 +28,11 @@ TEST_CASE("orbitals are typeset as the trade writes them") {
   CHECK(html_words("5d(xz,yz)") == "5d<sub>(xz,yz)</sub>");
   CHECK(html_words("3pπx") == "3p<sub>πx</sub>");
   CHECK(html_words("5fz3") == "5f<sub>z³</sub>");
-  CHECK(latex_words("5dx2-y2") == "$5d_{x^2-y^2}$");
-  CHECK(latex_words("3pz") == "$3p_{z}$");
-  CHECK(latex_words("3pσ, 3pπx") == "$3p_{\\sigma}$, $3p_{\\pi x}$");
-  CHECK(latex_words("5dδx2-y2") == "$5d_{\\delta x^2-y^2}$");
-  CHECK(latex_words("4fx(x2-3y2)") == "$4f_{x(x^2-3y^2)}$");
+  CHECK(latex_words("5dx2-y2") == "$5\\mathrm{d}_{x^2-y^2}$");
+  CHECK(latex_words("3pz") == "$3\\mathrm{p}_{z}$");
+  CHECK(latex_words("3pσ, 3pπx") == "$3\\mathrm{p}_{\\sigma}$, $3\\mathrm{p}_{\\pi x}$");
+  CHECK(latex_words("5dδx2-y2") == "$5\\mathrm{d}_{\\delta x^2-y^2}$");
+  CHECK(latex_words("4fx(x2-3y2)") == "$4\\mathrm{f}_{x(x^2-3y^2)}$");
 }
 
 TEST_CASE("every orbital that tables name is found, and nothing is lost on the way") {
