@@ -53,7 +53,9 @@ std::string written(const LevelsResult& result, const LevelsOptions& options) {
     case Format::Yaml:
       break;
   }
-  return written_report(levels_report(result, options.window), options.output);
+  LevelWindow window = options.window;
+  if (chosen_format(options.output) == Format::Text) window.hint = LevelsHint::NameAllOption;
+  return written_report(levels_report(result, window), options.output);
 }
 
 void run(const LevelsOptions& options) {

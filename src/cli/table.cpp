@@ -123,7 +123,7 @@ OrbitalTable table_asked_for(const LevelsResult& result, const TableOptions& opt
   OrbitalTableOptions table;
   if (options.of == "shares") table.entries = TableEntries::Shares;
   if (options.over == "salcs") table.functions = TableFunctions::Salcs;
-  if (options.frame == "local") table.frame = TableFrame::Local;
+  if (options.frame == "local") table.frame = OrbitalFrame::Local;
   const std::vector<OrbitalChoice> choices =
       choose_orbitals(options.orbitals.empty() ? default_orbitals : options.orbitals, result);
   try {

@@ -8,6 +8,8 @@
 
 #include <fmt/format.h>
 
+#include "output/symmetry_words.hpp"
+
 namespace irrepwise {
 
 std::string readable_group(std::string name) {
@@ -17,7 +19,6 @@ std::string readable_group(std::string name) {
 
 std::string readable_formula(const Molecule& molecule) {
   constexpr std::array<const char*, 10> below = {"₀", "₁", "₂", "₃", "₄", "₅", "₆", "₇", "₈", "₉"};
-  constexpr std::array<const char*, 10> above = {"⁰", "¹", "²", "³", "⁴", "⁵", "⁶", "⁷", "⁸", "⁹"};
   const auto is_digit = [](char c) { return c >= '0' && c <= '9'; };
   const auto figure = [](char c) { return static_cast<std::size_t>(c - '0'); };
   std::string words;
@@ -26,9 +27,7 @@ std::string readable_formula(const Molecule& molecule) {
   }
   const int charge = molecule.charge();
   if (charge == 0) return words;
-  if (std::abs(charge) > 1) {
-    for (const char c : std::to_string(std::abs(charge))) words += above[figure(c)];
-  }
+  if (std::abs(charge) > 1) words += superscript(std::abs(charge));
   return words + (charge > 0 ? "⁺" : "⁻");
 }
 

@@ -136,8 +136,11 @@ Table level_table(const LevelsResult& result, const std::vector<AtomSet>& sets,
   Table table;
   table.caption = range.end - range.first == n
                       ? "Levels"
-                      : fmt::format("Levels {} to {} of {} (--all shows every one)",
-                                    range.first + 1, range.end, n);
+                      : fmt::format("Levels {} to {} of {}", range.first + 1, range.end, n);
+  const bool left_out = range.end - range.first < n;
+  if (left_out && window.hint == LevelsHint::NameAllOption) {
+    table.caption += " (--all shows every one)";
+  }
   table.columns = {{"frontier", "", "", Align::Left, 0, false},
                    {"label", "level", "", Align::Right, 0, false},
                    {"energy_ev", "energy", "eV", Align::Decimal, 0, false},
@@ -165,7 +168,8 @@ std::string words_on_partly_filled(const LevelsResult& result) {
   for (std::size_t i = result.levels.levels.size(); i-- > 0;) {
     const Level& level = result.levels.levels[i];
     const int room = 2 * level.degeneracy;
-    if (level.occupation < 1e-9 || level.occupation > room - 1e-9) continue;
+    constexpr double rounding = 1e-9;  // electrons
+    if (level.occupation < rounding || level.occupation > room - rounding) continue;
     const bool is_homo = homo == static_cast<int>(i);
     holds.push_back(
         fmt::format("{} holds {:g} of {} electrons",

@@ -14,14 +14,16 @@ namespace irrepwise {
 namespace {
 
 std::string direction_words(const Eigen::Vector3d& axis) {
+  constexpr double along = 1e-9;  // of a unit vector: axes of the standard frame are exact
+  constexpr double shown = 5e-4;  // smaller parts are 0.000 to three decimals
   static constexpr const char* names[] = {"x", "y", "z"};
   for (int i = 0; i < 3; ++i) {
-    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9)
+    if (std::abs(std::abs(axis[i]) - 1.0) < along)
       return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
   }
   std::string words;
   for (int i = 0; i < 3; ++i) {
-    const double value = std::abs(axis[i]) < 5e-4 ? 0.0 : axis[i];
+    const double value = std::abs(axis[i]) < shown ? 0.0 : axis[i];
     words += fmt::format("{}{:.3f}", i == 0 ? "(" : ", ", value);
   }
   return words + ")";

@@ -12,8 +12,9 @@
 namespace irrepwise {
 namespace {
 
-constexpr int least_neighbours = 2;    // fewer make no centre
-constexpr double same = 1e-6;          // of unit vectors; coordinates are exact here
+constexpr int least_neighbours = 2;  // fewer make no centre
+constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
+constexpr double in_plane_angstrom = 1e-4;
 constexpr double least_across = 1e-3;  // a shorter direction would be along z
 
 bool fixes_one_point(Family family) {
@@ -51,9 +52,10 @@ bool is_kept(const MolecularSymmetry& symmetry, int atom) {
 
 int atoms_in_plane(const Molecule& molecule, const Eigen::Vector3d& point,
                    const Eigen::Vector3d& normal) {
-  return static_cast<int>(std::count_if(
-      molecule.atoms().begin(), molecule.atoms().end(),
-      [&](const Atom& atom) { return std::abs(normal.dot(atom.position - point)) < 1e-4; }));
+  return static_cast<int>(
+      std::count_if(molecule.atoms().begin(), molecule.atoms().end(), [&](const Atom& atom) {
+        return std::abs(normal.dot(atom.position - point)) < in_plane_angstrom;
+      }));
 }
 
 // The sign for which the first component from z over y to x that is not zero is positive.

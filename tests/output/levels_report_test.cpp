@@ -122,6 +122,17 @@ TEST_CASE("the default window holds the frontier and the whole d block of every 
   CHECK(widened > 5);  // in some the d block reaches beyond ten levels down and six up
 }
 
+TEST_CASE("a terminal alone is told which option shows the levels left out") {
+  const LevelsResult result = result_of(benzene());
+  LevelWindow window{.from_ev = -20.0, .to_ev = 0.0};
+  CHECK(levels_report(result, window).tables.front().caption.find("--all") == std::string::npos);
+  window.hint = LevelsHint::NameAllOption;
+  CHECK(levels_report(result, window).tables.front().caption.ends_with("(--all shows every one)"));
+  CHECK(levels_report(result, {.all = true, .hint = LevelsHint::NameAllOption})
+            .tables.front()
+            .caption == "Levels");
+}
+
 TEST_CASE("the whole report keeps to 40 columns and more, but for the narrow tables themselves") {
   const Report report = levels_report(result_of(benzene()));
   for (const int width : {60, 80, 100, 200}) {

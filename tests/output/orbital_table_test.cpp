@@ -156,7 +156,7 @@ TEST_CASE("in local frames a molecule without a centre is refused") {
   const LevelsResult result =
       result_of(Molecule({{1, {0, 0, 0}}, {17, {0, 0, 1.27}}}, 0, "hydrogen chloride"));
   OrbitalTableOptions options;
-  options.frame = TableFrame::Local;
+  options.frame = OrbitalFrame::Local;
   CHECK_THROWS_WITH_AS(
       static_cast<void>(orbital_table(result, {{0, 0}}, options)),
       "no atom has a local frame: the molecule has no central atom with neighbours around it; use "
