@@ -54,7 +54,9 @@ std::string written(const LevelsResult& result, const LevelsOptions& options) {
     case Format::Yaml:
       break;
   }
-  Report report = levels_report(result, options.window);
+  LevelWindow window = options.window;
+  if (chosen_format(options.output) == Format::Text) window.hint = LevelsHint::NameAllOption;
+  Report report = levels_report(result, window);
   add_variants_fact(report, options.job.file, options.job.variant);
   return written_report(report, options.output);
 }

@@ -15,6 +15,7 @@
 #include "core/error.hpp"
 #include "core/parse.hpp"
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/orbital_table_data.hpp"
 #include "output/orbital_table_layout.hpp"
 #include "output/population_document.hpp"
@@ -83,7 +84,7 @@ Report report_of(const LevelsResult& result, std::vector<Table> tables,
                  const TableOptions& options) {
   Report report;
   if (chosen_format(options.output) == Format::Html) {  // a page has a title
-    report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+    report.title = result.title.empty() ? readable_formula(result.molecule) : result.title;
   }
   report.tables = std::move(tables);
   report.warnings = result.warnings;
@@ -127,7 +128,7 @@ OrbitalTable table_asked_for(const LevelsResult& result, const TableOptions& opt
   OrbitalTableOptions table;
   if (options.of == "shares") table.entries = TableEntries::Shares;
   if (options.over == "salcs") table.functions = TableFunctions::Salcs;
-  if (options.frame == "local") table.frame = TableFrame::Local;
+  if (options.frame == "local") table.frame = OrbitalFrame::Local;
   const std::vector<OrbitalChoice> choices =
       choose_orbitals(options.orbitals.empty() ? default_orbitals : options.orbitals, result);
   return at_place(job_place(options.job), [&] { return orbital_table(result, choices, table); });
@@ -187,7 +188,7 @@ Command add_table(CLI::App& program) {
       "orbitals (default), or salcs: those of `irrepwise symmetry --salcs`")
       ->check(one_of({"orbitals", "salcs"}));
   add("--frame", options->frame, "FRAME",
-      "standard (default), or local: σ and π of each atom about the centre")
+      "standard (default), or local: σ and π of each atom, z along its bond towards the centre")
       ->check(one_of({"standard", "local"}));
   add("--threshold", options->threshold, "X",
       "Leave smaller entries blank: 0.05 by default, 1 % for shares, 0 in json and csv");

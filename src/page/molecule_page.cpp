@@ -8,6 +8,7 @@
 #include "core/text.hpp"
 #include "figure/level_diagram.hpp"
 #include "figure/svg.hpp"
+#include "output/caption_words.hpp"
 #include "output/html_parts.hpp"
 #include "output/levels_report.hpp"
 #include "output/orbital_pictures.hpp"
@@ -91,7 +92,7 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
   const LevelDiagram diagram = diagram_of(result, options);
 
   std::vector<PageMolecule> molecules = {
-      page_molecule(charged_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
+      page_molecule(readable_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
   add_surfaces(molecules, every_level, options.threads);
 
   const FrontierFigure frontier = frontier_figure(result);
