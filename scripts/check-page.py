@@ -223,6 +223,17 @@ def check_sorting(driver):
     expect(sum(len(values) for values in parts) > 1, "nothing to sort")
 
 
+def check_captions(driver):
+    """A short caption stays in one line, however narrow its table, and the table stays narrow."""
+    broken = driver.execute_script("""
+        return [...document.querySelectorAll('.table caption .caption')].filter(words => {
+          const style = getComputedStyle(words);
+          const short = words.childElementCount === 0 && words.textContent.length < 40;
+          return short && words.getBoundingClientRect().height > 2 * parseFloat(style.fontSize);
+        }).map(words => words.textContent);""")
+    expect(not broken, f"captions break: {broken}")
+
+
 def check_print(driver, folder):
     driver.execute_cdp_cmd("Emulation.setEmulatedMedia", {"media": "print"})
     hidden = driver.execute_script("""
@@ -312,6 +323,7 @@ def check(program, job, folder):
         check_rounding(driver)
         check_keyboard(driver)
         check_sorting(driver)
+        check_captions(driver)
         check_print(driver, folder)
         check_phone(driver)
         check_dark(driver)

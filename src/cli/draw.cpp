@@ -108,6 +108,10 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
           std::make_shared<const Raster>(surface_picture(surfaces.scenes[i], camera, picture_px)));
     }
     out.remarks = surfaces.remarks;
+    diagram.notes.push_back(plain_text(fmt::format(
+        "Pictures: surfaces that enclose {:g}\u00A0% of the density, blue where the orbital is "
+        "positive, amber where it is negative; degenerate partners side by side.",
+        100.0 * surfaces.scenes.front().share)));
   }
   out.bytes = picture_bytes(level_diagram_figure(diagram), draw_format(options.output));
   return out;

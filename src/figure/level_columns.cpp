@@ -17,8 +17,9 @@ constexpr double least_bar = 7.0;
 constexpr double lane_gap = 8.0;   // between levels that share the width
 constexpr double clearance = 2.6;  // px of white between bars one above the other
 constexpr double leader = 14.0;    // room between bars and labels
-constexpr double crowd = 11.0;     // px: closer than this, two lines cannot be told apart
-constexpr int most_stairs = 6;     // bars that rise side by side
+constexpr double tag_leader = 10.0;
+constexpr double crowd = 11.0;  // px: closer than this, two lines cannot be told apart
+constexpr int most_stairs = 6;  // bars that rise side by side
 
 // What a level needs above and below its line.
 double half_extent(const DiagramLevel& level) {
@@ -193,7 +194,7 @@ LevelColumn place_level_column(const LevelDiagram& diagram, std::size_t column, 
   }
   const double tags = place_tags(out.levels, linked, font);
   out.tags_right = left + tags;
-  if (tags > 0.0) left += tags + leader;
+  if (tags > 0.0) left += tags + tag_leader;
   out.left = left;
   const std::vector<Cluster> clusters = clusters_of(out.levels);
   double width = least_bars_width;

@@ -43,7 +43,7 @@ inline constexpr double column_label_size = 11.0;
 inline constexpr double column_label_height = 14.2;
 inline constexpr double column_tag_size = 10.0;
 inline constexpr double column_tag_height = 13.4;
-inline constexpr double column_link_room = 46.0;  // between one column and the next
+inline constexpr double column_link_room = 38.0;  // between one column and the next
 
 /// The label, its parent in parentheses and the word HOMO or LUMO.
 [[nodiscard]] RichText column_label(const DiagramLevel& level);
