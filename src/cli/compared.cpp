@@ -14,6 +14,7 @@
 #include "core/parse.hpp"
 #include "core/text.hpp"
 #include "job/variants.hpp"
+#include "output/varied_bonds.hpp"
 
 namespace irrepwise::cli {
 namespace {
@@ -113,6 +114,7 @@ Compared compared(const std::vector<std::string>& files, const std::string& refe
     result.comparison.matchings[at] =
         match_levels(match, levels.symmetry, levels.basis, levels.levels);
   });
+  find_varied_bonds(result.comparison);
   return result;
 }
 
