@@ -92,7 +92,12 @@ Compared compared(const std::vector<std::string>& files, const std::string& refe
           const VariantJob& variant = jobs[static_cast<std::size_t>(i)];
           const Job job = variant.read();
           files_read[static_cast<std::size_t>(i)] = job.source_files;
-          found[static_cast<std::size_t>(i)] = analysed(variant.name, computed(job, variant.place));
+          try {
+            found[static_cast<std::size_t>(i)] =
+                analysed(variant.name, computed(job, variant.place));
+          } catch (const Error& error) {
+            throw variant.named(error);
+          }
         },
         progress.callback());
   }

@@ -8,7 +8,7 @@ LevelsResult computed(const Job& job, const std::string& file) {
   try {
     return levels_result(job);
   } catch (const Error& error) {
-    throw error_at(file, error);
+    throw error_in(job, file, error);
   }
 }
 

@@ -77,13 +77,23 @@ Computed compute(const Job& job, const SymmetryCommandOptions& options) {
   return {std::move(result), std::move(warnings)};
 }
 
-// Adds the file or the option as the place of any error.
+// Adds the option as the place of any error.
 template <typename Action>
 auto for_place(const std::string& place, Action action) {
   try {
     return action();
   } catch (const Error& error) {
     throw error_at(place, error);
+  }
+}
+
+// Adds the place of what is wrong in the job.
+template <typename Action>
+auto for_job(const Job& job, const SymmetryCommandOptions& options, Action action) {
+  try {
+    return action();
+  } catch (const Error& error) {
+    throw error_in(job, options.job.file, error);
   }
 }
 
@@ -191,13 +201,14 @@ void run(SymmetryCommandOptions options) {
     options.symmetrise =
         for_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
   }
-  const Job job = read_job_with(options.job);
+  Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
   if (!options.symmetrise.empty()) {
+    job.places["group"] = "--symmetrise";
     return emit(options.output,
-                for_place(options.job.file, [&] { return symmetrised_xyz(job, options); }));
+                for_job(job, options, [&] { return symmetrised_xyz(job, options); }));
   }
-  Computed computed = for_place(options.job.file, [&] { return compute(job, options); });
+  Computed computed = for_job(job, options, [&] { return compute(job, options); });
   computed.result.answers = answers(computed.result.symmetry.group, options);
   const std::string text = written(computed.result, {job.title, computed.warnings}, options);
   print_warnings(options.output, computed.warnings);

@@ -226,6 +226,11 @@ std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
 
 }  // namespace
 
+void check_columns(const Comparison& comparison, const std::vector<std::string>& keys) {
+  const std::vector<SummaryColumn> all = all_columns(comparison);
+  for (const std::string& key : keys) static_cast<void>(find_column(all, key));
+}
+
 std::vector<SummaryPart> summary_parts(const Comparison& comparison, const SummaryChoice& choice) {
   if (!choice.columns.empty() || !has_metal(comparison)) return {SummaryPart::Frontier};
   return {SummaryPart::Frontier, SummaryPart::Metal};
