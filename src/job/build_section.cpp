@@ -95,7 +95,7 @@ double read_distance_angstrom(const YamlNode& node) {
 }
 
 BridgeRequest read_bridge(const YamlNode& node) {
-  node.expect_keys("a bridge", {"ligand", "vertices", "distance", "distances"});
+  node.expect_keys("a bridge", {"ligand", "vertices", "distance", "distances", "mirrored"});
   BridgeRequest bridge;
   bridge.place = node.place();
   bridge.ligand = node.at("ligand").word("the name of a ligand");
@@ -113,6 +113,9 @@ BridgeRequest read_bridge(const YamlNode& node) {
     for (std::size_t i = 0; i < 2; ++i) {
       bridge.distances_angstrom[i] = read_distance_angstrom(both[i]);
     }
+  }
+  if (const YamlNode* const mirrored = node.find("mirrored")) {
+    bridge.mirrored = read_truth(*mirrored);
   }
   return bridge;
 }
