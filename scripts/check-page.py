@@ -148,6 +148,41 @@ def check_levels(driver):
     expect(picture(driver) != seen, "a click on a level does not change the picture")
 
 
+def check_rounding(driver):
+    """Surfaces are carried with few triangles and rounded by the page: an icosahedron comes near the
+    sphere of its corners, and stays closed."""
+    phi = (1 + 5 ** 0.5) / 2
+    corners = [turn for a in (1, -1) for b in (phi, -phi)
+               for turn in ((0, a, b), (a, b, 0), (b, 0, a))]
+    corners = [[x / (1 + phi * phi) ** 0.5 for x in corner] for corner in corners]
+    near = [[j for j in range(12) if 0.4 < sum(map(float.__mul__, corners[i], corners[j])) < 0.5]
+            for i in range(12)]
+    faces = [(i, j, k) for i in range(12) for j in near[i] for k in near[i]
+             if i < j < k and k in near[j]]
+    flat = [x for corner in corners for x in corner]
+    rounded = driver.execute_script("""
+        const {vertices, normals, triangles} = parted({
+          vertices: Float32Array.from(arguments[0]), normals: Float32Array.from(arguments[0]),
+          triangles: Uint32Array.from(arguments[1])});
+        return [vertices, normals, triangles].map(numbers => [...numbers]);""",
+                                    flat, [corner for face in faces for corner in face])
+    vertices, normals = ([values[i:i + 3] for i in range(0, len(values), 3)]
+                         for values in rounded[:2])
+    expect(len(vertices) == 12 + 30 and len(rounded[2]) == 3 * 80, "a triangle is not parted in four")
+    edges = {}
+    for i in range(0, len(rounded[2]), 3):
+        for j in range(3):
+            edge = frozenset((rounded[2][i + j], rounded[2][i + (j + 1) % 3]))
+            edges[edge] = edges.get(edge, 0) + 1
+    expect(len(edges) == 120 and set(edges.values()) == {2}, "the rounded surface is not closed")
+    for vertex, normal in zip(vertices[12:], normals[12:]):
+        radius = sum(x * x for x in vertex) ** 0.5
+        # cos(t) (1 + sin(t)^2 / 2), t half the angle of an edge (cos 2t = 1/sqrt 5), by the cubic's
+        # formula; flat it would be cos(t) = 0.851.
+        expect(abs(radius - 0.9682) < 1e-3, f"the middle of an edge lies at {radius:.4f} of the radius")
+        expect(abs(sum(x * y for x, y in zip(vertex, normal)) / radius - 1) < 1e-5, "a normal leans")
+
+
 def check_keyboard(driver):
     before = energy_words(driver)
     driver.switch_to.active_element.send_keys(Keys.ARROW_UP)
@@ -290,6 +325,7 @@ def check(program, job, folder):
         check_loading(driver, page)
         check_structure(driver)
         check_levels(driver)
+        check_rounding(driver)
         check_keyboard(driver)
         check_sorting(driver)
         check_captions(driver)

@@ -66,7 +66,8 @@ std::string axes_sentence(const LevelsResult& result) {
 
 std::string outer_frame_sentence() {
   return "Beyond the donors z points along the bond towards it; x and y are those of the atom "
-         "before where the ligand is straight, otherwise y stands across the plane of the bonds.";
+         "before where the ligand is straight, otherwise x or y, whichever was nearer to it there, "
+         "stands across the plane of the bonds.";
 }
 
 }  // namespace irrepwise

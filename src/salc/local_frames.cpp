@@ -81,6 +81,11 @@ Eigen::Matrix3d frame_of(const Eigen::Vector3d& y, const Eigen::Vector3d& z) {
   return frame;
 }
 
+// 2 where x and y are those wished for, -2 where both are opposite, 0 for no wish.
+double nearness_to(const Eigen::Matrix3d& wish, const Eigen::Matrix3d& frame) {
+  return wish.col(0).dot(frame.col(0)) + wish.col(1).dot(frame.col(1));
+}
+
 // The mirror plane that makes "in plane" mean something: σh, or the plane of a planar molecule.
 std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry) {
   const Family family = symmetry.group.symbol().family;
@@ -161,16 +166,16 @@ std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
   constexpr double at_centre_angstrom = 1e-4;  // an atom there has no line to the centre
   if ((centre.position - at).norm() < at_centre_angstrom) return std::nullopt;
   const Eigen::Vector3d z = (centre.position - at).normalized();
-  const std::vector<Eigen::Vector3d> no_wishes(set.atoms.size(), Eigen::Vector3d::Zero());
+  const std::vector<Eigen::Matrix3d> no_wishes(set.atoms.size(), Eigen::Matrix3d::Zero());
   return carried_frames(symmetry, set, first_y(symmetry, set, z), z, no_wishes);
 }
 
 LocalFrames carried_frames(const MolecularSymmetry& symmetry, const EquivalentAtoms& set,
                            const Eigen::Vector3d& y, const Eigen::Vector3d& z,
-                           const std::vector<Eigen::Vector3d>& wishes) {
-  const double towards_wish = y.dot(wishes.front());
-  const Eigen::Vector3d first =
-      std::abs(towards_wish) > same ? (towards_wish < 0.0 ? Eigen::Vector3d(-y) : y) : upwards(y);
+                           const std::vector<Eigen::Matrix3d>& wishes) {
+  const double nearness = nearness_to(wishes.front(), frame_of(y, z));
+  const bool decides = std::abs(nearness) > same;
+  const Eigen::Vector3d first = !decides ? upwards(y) : nearness < 0.0 ? Eigen::Vector3d(-y) : y;
   const Eigen::Vector3d x = frame_of(first, z).col(0);
 
   LocalFrames local;
@@ -182,9 +187,10 @@ LocalFrames carried_frames(const MolecularSymmetry& symmetry, const EquivalentAt
       const Eigen::Matrix3d& operation = symmetry.group.operations()[g];
       const Eigen::Vector3d atom_z = operation * z;
       const Eigen::Vector3d atom_y = atom_z.cross(operation * x);
-      const Merit merit = {atom_y.dot(wishes[i]), atom_y[2], atom_y[1], atom_y[0]};
+      const Eigen::Matrix3d frame = frame_of(atom_y, atom_z);
+      const Merit merit = {nearness_to(wishes[i], frame), atom_y[2], atom_y[1], atom_y[0]};
       if (!best || better(merit, best_merit)) {
-        best = frame_of(atom_y, atom_z);
+        best = frame;
         best_merit = merit;
       }
     }

@@ -38,15 +38,16 @@ struct LocalFrames {
                                       const Eigen::Vector3d& z);
 
 /// The group carries the frame of the representative to the other atoms; of the ways in which it
-/// does, the one whose y comes nearest to the atom's wish is taken, then the one whose y points
-/// most upwards along z (then y, x). The sign of the representative's y is chosen likewise.
+/// does, the one whose x and y come nearest to those of the frame that the atom wishes for is
+/// taken, then the one whose y points most upwards along z (then y, x). The sign of the
+/// representative's x and y is chosen likewise.
 ///
 /// @param y, z    of the representative: unit vectors across each other, z kept by the site group
-/// @param wishes  by atom of the set; zero where there is none
+/// @param wishes  frames by atom of the set; zero where there is none
 [[nodiscard]] LocalFrames carried_frames(const MolecularSymmetry& symmetry,
                                          const EquivalentAtoms& set, const Eigen::Vector3d& y,
                                          const Eigen::Vector3d& z,
-                                         const std::vector<Eigen::Vector3d>& wishes);
+                                         const std::vector<Eigen::Matrix3d>& wishes);
 
 /// z points to the centre, y is `first_y`, and the group carries the frame.
 ///

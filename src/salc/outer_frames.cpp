@@ -84,27 +84,47 @@ class Outward {
     return (goal - position(atom)).normalized();
   }
 
+  // The normal of the plane that the ligand makes at the atom, if it makes one.
+  [[nodiscard]] std::optional<Eigen::Vector3d> normal_at(int atom, const Eigen::Vector3d& z) const {
+    const std::optional<int> previous = before(atom);
+    Eigen::Vector3d normal = Eigen::Vector3d::Zero();
+    if (const auto flat = bond_plane_normal(symmetry_.molecule, atom)) {
+      normal = *flat;
+    } else if (previous && !is_straight(z, by_atom_[*previous].col(2))) {
+      normal = z.cross(by_atom_[*previous].col(2));
+    }
+    normal -= normal.dot(z) * z;
+    if (normal.norm() < least_across) return std::nullopt;
+    return normal.normalized();
+  }
+
+  // Whether x is nearer to the direction than y is, in the frames of the atoms before.
+  [[nodiscard]] bool is_x_before(int atom, const Eigen::Vector3d& direction) const {
+    constexpr double tie = 1e-6;
+    double x_less_y = 0.0;
+    for (const int other : nearer_atoms(atom)) {
+      const Eigen::Vector3d parts = by_atom_[other].transpose() * direction;
+      x_less_y += parts.x() * parts.x() - parts.y() * parts.y();
+    }
+    return x_less_y > tie;
+  }
+
   [[nodiscard]] Eigen::Vector3d y_of(const EquivalentAtoms& set, const Eigen::Vector3d& z) const {
     const int atom = set.representative();
-    const std::optional<int> previous = before(atom);
-    const auto flat = bond_plane_normal(symmetry_.molecule, atom);
-    Eigen::Vector3d y = Eigen::Vector3d::Zero();
-    if (flat) {
-      y = *flat;
-    } else if (previous) {
-      const Eigen::Matrix3d& frame = by_atom_[*previous];
-      y = is_straight(z, frame.col(2)) ? Eigen::Vector3d(frame.col(1)) : z.cross(frame.col(2));
+    if (const auto normal = normal_at(atom, z)) {
+      return is_x_before(atom, *normal) ? Eigen::Vector3d(z.cross(*normal)) : *normal;
     }
-    y -= y.dot(z) * z;
-    return y.norm() < least_across ? first_y(symmetry_, set, z) : y.normalized();
+    const std::optional<int> previous = before(atom);
+    if (!previous) return first_y(symmetry_, set, z);
+    const Eigen::Vector3d y = by_atom_[*previous].col(1);
+    return (y - y.dot(z) * z).normalized();
   }
 
   [[nodiscard]] LocalFrames of_set(const EquivalentAtoms& set) const {
-    std::vector<Eigen::Vector3d> wishes;
+    std::vector<Eigen::Matrix3d> wishes;
     for (const int atom : set.atoms) {
       const std::optional<int> previous = before(atom);
-      wishes.push_back(previous ? Eigen::Vector3d(by_atom_[*previous].col(1))
-                                : Eigen::Vector3d::Zero());
+      wishes.push_back(previous ? by_atom_[*previous] : Eigen::Matrix3d::Zero());
     }
     const Eigen::Vector3d z = z_of(set.representative());
     LocalFrames local = carried_frames(symmetry_, set, y_of(set, z), z, wishes);
@@ -112,7 +132,7 @@ class Outward {
     return local;
   }
 
-  static constexpr double least_across = 0.1;  // a shorter y would be along z
+  static constexpr double least_across = 0.1;  // a shorter normal would be along z
 
   const MolecularSymmetry& symmetry_;
   const std::vector<EquivalentAtoms>& sets_;

@@ -11,11 +11,12 @@
 namespace irrepwise {
 
 /// Adds frames to sets that are not bonded to the central atom but reach it over bonds. z points to
-/// the atom one bond nearer to it, or between several. y stands across the plane of the atom's own
-/// bonds; where they lie in none, and z goes straight on from that atom's, x and y are those of
-/// that atom; otherwise y stands across the plane of the two z. Where a ligand has none of these (a
-/// CH2 between two arms) the rule of `local_frames` does. Of the two signs of y the one nearer to
-/// that atom's y is taken, so that π of a straight ligand follows one pair of axes from end to end.
+/// the atom one bond nearer to it, or between several. Where z goes straight on from that atom's,
+/// and the atom's own bonds lie in no plane, x and y are those of that atom. Otherwise x or y,
+/// whichever is nearer to it in that atom's frame, stands across the plane of the bonds or, where
+/// they lie in none, of the two z: so π across a flat ligand is one of πx and πy from end to end,
+/// and of a straight one both are. Where a ligand has none of these (a CH2 between two arms) the
+/// rule of `local_frames` does. Signs are those nearer to that atom's x and y.
 ///
 /// @param frames  by set: of the sets bonded to the centre
 /// @returns       by set; nothing for the centre, and for atoms with no path of bonds to it
