@@ -215,7 +215,8 @@ Command add_symmetry(CLI::App& program) {
   flag("--operations", options->sections.operations,
        "Each operation and what it does to the atoms");
   flag("--salcs", options->sections.salcs, "SALCs of each set, shell and irrep");
-  flag("--local", options->local, "SALCs in each atom's own frame: σ and π along its bond towards the centre");
+  flag("--local", options->local,
+       "SALCs in each atom's own frame: σ and π along its bond towards the centre");
   flag("--transitions", options->transitions,
        "Selection rules between frontier levels, terms of an open shell, vibrations");
   flag("-a,--all", options->all, "All of these");
