@@ -1,15 +1,11 @@
 #include "cli/computed.hpp"
 
-#include "core/error.hpp"
+#include "core/at_place.hpp"
 
 namespace irrepwise::cli {
 
 LevelsResult computed(const Job& job, const std::string& file) {
-  try {
-    return levels_result(job);
-  } catch (const Error& error) {
-    throw error_at(file, error);
-  }
+  return at_place(file, [&] { return levels_result(job); });
 }
 
 }  // namespace irrepwise::cli

@@ -9,6 +9,8 @@
 #include "cli/commands.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "molecule/xyz.hpp"
 #include "output/symmetry_json.hpp"
@@ -77,21 +79,11 @@ Computed compute(const Job& job, const SymmetryCommandOptions& options) {
   return {std::move(result), std::move(warnings)};
 }
 
-// Adds the file or the option as the place of any error.
-template <typename Action>
-auto for_place(const std::string& place, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    throw error_at(place, error);
-  }
-}
-
 // The questions of the command line, each with its option as the place of any error.
 GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
-  return {for_place("--product", [&] { return answer_products(group, options.products); }),
-          for_place("--terms", [&] { return answer_terms(group, options.terms); }),
-          for_place("--descent", [&] { return answer_descents(group, options.descents); })};
+  return {at_place("--product", [&] { return answer_products(group, options.products); }),
+          at_place("--terms", [&] { return answer_terms(group, options.terms); }),
+          at_place("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -137,9 +129,10 @@ std::string written(const SymmetryResult& result, const SymmetryHeadings& headin
     case Format::Yaml:
       break;
   }
-  return written_report(
-      symmetry_report(result, headings, options.sections, width_of_tables(options.output)),
-      options.output);
+  Report report =
+      symmetry_report(result, headings, options.sections, width_of_tables(options.output));
+  add_variants_fact(report, options.job.file, options.job.variant);
+  return written_report(report, options.output);
 }
 
 std::string written(const PointGroup& group, const GroupAnswers& asked,
@@ -169,6 +162,9 @@ void check_usage(const SymmetryCommandOptions& options) {
         "--group is for a group without a molecule; leave it or the FILE out (--symmetry makes the "
         "structure exact in a group)");
   }
+  if (!options.group.empty() && !options.job.variant.empty()) {
+    throw CLI::ValidationError("--variant is one of a job FILE; --group has none");
+  }
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
     throw CLI::ValidationError("--group has no molecule; the option needs a FILE");
@@ -184,20 +180,20 @@ void run(SymmetryCommandOptions options) {
   if (options.transitions) options.sections.vibrations = true;
   check_usage(options);
   if (!options.group.empty()) {
-    const PointGroup group(for_place("--group", [&] { return parse_schoenflies(options.group); }));
+    const PointGroup group(at_place("--group", [&] { return parse_schoenflies(options.group); }));
     return emit(options.output, written(group, answers(group, options), options));
   }
   if (!options.symmetrise.empty()) {
     options.symmetrise =
-        for_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
+        at_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
   }
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
   if (!options.symmetrise.empty()) {
     return emit(options.output,
-                for_place(options.job.file, [&] { return symmetrised_xyz(job, options); }));
+                at_place(job_place(options.job), [&] { return symmetrised_xyz(job, options); }));
   }
-  Computed computed = for_place(options.job.file, [&] { return compute(job, options); });
+  Computed computed = at_place(job_place(options.job), [&] { return compute(job, options); });
   computed.result.answers = answers(computed.result.symmetry.group, options);
   const std::string text = written(computed.result, {job.title, computed.warnings}, options);
   print_warnings(options.output, computed.warnings);

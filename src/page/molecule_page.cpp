@@ -70,14 +70,7 @@ struct FrontierFigure {
 };
 
 FrontierFigure frontier_figure(const LevelsResult& result) {
-  std::vector<OrbitalChoice> choices;
-  for (const std::optional<int>& level :
-       {result.levels.frontier.homo, result.levels.frontier.lumo}) {
-    if (!level) continue;
-    const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
-    choices.insert(choices.end(), partners.begin(), partners.end());
-  }
-  const ChosenOrbitals chosen = chosen_orbitals(result, std::move(choices));
+  const ChosenOrbitals chosen = chosen_orbitals(result, frontier_orbitals(result.levels));
   const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, {});
   std::vector<Scene> scenes;
   for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
