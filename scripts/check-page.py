@@ -262,6 +262,11 @@ def check_print(driver, folder):
         "return [...document.querySelectorAll('caption')].map(e => e.textContent)")
     for caption in captions:
         expect(re.sub(r"\s+", "", caption) in plain, f"not in the printed version: {caption}")
+    with open(pdf, "rb") as file:
+        sheets = re.findall(rb"/MediaBox *\[0 0 ([0-9.]+) ([0-9.]+)\]", file.read())
+    sideways = sum(float(width) > float(height) for width, height in sheets)
+    wide = len(driver.find_elements(By.CSS_SELECTOR, ".diagram.roomy"))
+    expect(sideways == wide, f"{sideways} sheets lie sideways, for {wide} diagrams of many columns")
 
 
 def check_phone(driver):

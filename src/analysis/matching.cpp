@@ -119,6 +119,7 @@ Matching match_levels(const MatchReference& reference, const MolecularSymmetry& 
   Matching matching;
   matching.common_group = common.group.symbol().name();
   matching.shared_atoms = static_cast<int>(shared.atoms.size());
+  matching.atoms = shared.atoms;
   matching.replaced_donors = static_cast<int>(shared.replaced_donors.size());
   for (LevelMatch& match : found) {
     int& ours = free_reference[static_cast<std::size_t>(match.reference)];

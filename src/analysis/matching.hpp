@@ -2,6 +2,7 @@
 #pragma once
 
 #include <string>
+#include <utility>
 #include <vector>
 
 #include <Eigen/Core>
@@ -32,8 +33,9 @@ struct LevelMatch {
 struct Matching {
   std::string common_group;
   int shared_atoms = 0;
-  int replaced_donors = 0;          // of other elements in the same places
-  std::vector<LevelMatch> matches;  // by the reference's level, then the variant's
+  std::vector<std::pair<int, int>> atoms;  // those shared: the reference's, then the variant's
+  int replaced_donors = 0;                 // of other elements in the same places
+  std::vector<LevelMatch> matches;         // by the reference's level, then the variant's
 };
 
 /// Below this two levels have too little in common to be called the same.

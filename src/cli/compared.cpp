@@ -13,6 +13,7 @@
 #include "core/error.hpp"
 #include "core/parallel.hpp"
 #include "job/variants.hpp"
+#include "output/varied_bonds.hpp"
 
 namespace irrepwise::cli {
 namespace {
@@ -84,7 +85,12 @@ Compared compared(const std::vector<std::string>& files, const std::string& refe
           const VariantJob& variant = jobs[static_cast<std::size_t>(i)];
           const Job job = variant.read();
           files_read[static_cast<std::size_t>(i)] = job.source_files;
-          found[static_cast<std::size_t>(i)] = analysed(variant.name, computed(job, variant.place));
+          try {
+            found[static_cast<std::size_t>(i)] =
+                analysed(variant.name, computed(job, variant.place));
+          } catch (const Error& error) {
+            throw variant.named(error);
+          }
         },
         progress.callback());
   }
@@ -106,6 +112,7 @@ Compared compared(const std::vector<std::string>& files, const std::string& refe
     result.comparison.matchings[at] =
         match_levels(match, levels.symmetry, levels.basis, levels.levels);
   });
+  find_varied_bonds(result.comparison);
   return result;
 }
 

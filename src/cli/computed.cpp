@@ -1,11 +1,11 @@
 #include "cli/computed.hpp"
 
-#include "core/at_place.hpp"
+#include "cli/in_job.hpp"
 
 namespace irrepwise::cli {
 
 LevelsResult computed(const Job& job, const std::string& file) {
-  return at_place(file, [&] { return levels_result(job); });
+  return in_job(job, file, [&] { return levels_result(job); });
 }
 
 }  // namespace irrepwise::cli

@@ -73,7 +73,10 @@ std::string job_place(const JobOptions& options) {
 
 Job read_job_with(const JobOptions& options) {
   Job job = read_job_or_variant(options.file, options.variant);
-  if (options.charge) job.molecule = job.molecule.with_charge(*options.charge);
+  if (options.charge) {
+    job.molecule = at_place("--charge", [&] { return job.molecule.with_charge(*options.charge); });
+    job.places["charge"] = "--charge";
+  }
   if (options.multiplicity) {
     if (*options.multiplicity < 1) {
       throw Error(
@@ -81,6 +84,7 @@ Job read_job_with(const JobOptions& options) {
     }
     job.hueckel.multiplicity = options.multiplicity;
     job.hueckel.electrons_by_irrep.clear();
+    job.places["multiplicity"] = "--multiplicity";
   }
   if (!options.parameters.empty()) {
     job.parameters = read_parameters(options.parameters);
@@ -103,18 +107,24 @@ Job read_job_with(const JobOptions& options) {
         in_range("--tolerance", *options.tolerance, largest_tolerance_angstrom);
   if (!options.z.empty()) {
     job.symmetry.z = at_place("--z", [&] { return parse_axis(options.z, job.molecule); });
+    job.places["z"] = "--z";
   }
   if (!options.x.empty()) {
     job.symmetry.x = at_place("--x", [&] { return parse_axis(options.x, job.molecule); });
+    job.places["x"] = "--x";
   }
   if (!options.group.empty()) {
     job.symmetry.group =
         at_place("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
+    job.places["group"] = "--symmetry";
   }
   if (options.limit) {
     job.symmetry.limit_angstrom = in_range("--limit", *options.limit, largest_tolerance_angstrom);
   }
-  if (!options.subgroup.empty()) job.symmetry.subgroup = options.subgroup;
+  if (!options.subgroup.empty()) {
+    job.symmetry.subgroup = options.subgroup;
+    job.places["subgroup"] = "--subgroup";
+  }
   return job;
 }
 

@@ -33,6 +33,10 @@ void check_usage(const LevelsOptions& options) {
       throw CLI::ValidationError("--from and --to need a finite energy in eV");
     }
   }
+  const LevelWindow& window = options.window;
+  if (window.from_ev && window.to_ev && *window.from_ev > *window.to_ev) {
+    throw CLI::ValidationError("--from lies above --to; exchange the two");
+  }
   const bool has_range = options.window.from_ev || options.window.to_ev;
   if (has_range && (format == Format::Json || format == Format::Csv)) {
     throw CLI::ValidationError(

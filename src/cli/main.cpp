@@ -85,6 +85,20 @@ int answer_parse_error(const CLI::App& program, const CLI::ParseError& error,
                 wrong_usage);
 }
 
+// An empty word is a variable of a script that was not set: passed over, it would mean the default.
+int refuse_empty_words(int argc, char** argv) {
+  for (int i = 1; i < argc; ++i) {
+    const std::string word = argv[i];
+    const bool lacks_value = word.starts_with("--") && word.ends_with("=");
+    if (!word.empty() && !lacks_value) continue;
+    const std::string before = i > 1 ? argv[i - 1] : "irrepwise";
+    const std::string place = lacks_value ? word.substr(0, word.size() - 1) : "behind " + before;
+    return report(place + ": found nothing, expected a value or name; give one, or leave it out",
+                  wrong_usage);
+  }
+  return 0;
+}
+
 // The command line so that a shell reads it back as the same words.
 std::string repeated(int argc, char** argv) {
   std::string command = "irrepwise";
@@ -136,6 +150,7 @@ int run(int argc, char** argv) {
                                               cli::add_draw(program),
                                               cli::add_report(program, repeated(argc, argv)),
                                               cli::add_parameters(program)};
+  if (const int code = refuse_empty_words(argc, argv); code != 0) return code;
   try {
     program.parse(argc, argv);
     for (const cli::Command& command : commands) {

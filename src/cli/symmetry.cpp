@@ -7,6 +7,7 @@
 
 #include "basis/atom_kinds.hpp"
 #include "cli/commands.hpp"
+#include "cli/in_job.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "cli/variant_option.hpp"
@@ -187,13 +188,14 @@ void run(SymmetryCommandOptions options) {
     options.symmetrise =
         at_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
   }
-  const Job job = read_job_with(options.job);
+  Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
   if (!options.symmetrise.empty()) {
+    job.places["group"] = "--symmetrise";
     return emit(options.output,
-                at_place(job_place(options.job), [&] { return symmetrised_xyz(job, options); }));
+                in_job(job, job_place(options.job), [&] { return symmetrised_xyz(job, options); }));
   }
-  Computed computed = at_place(job_place(options.job), [&] { return compute(job, options); });
+  Computed computed = in_job(job, job_place(options.job), [&] { return compute(job, options); });
   computed.result.answers = answers(computed.result.symmetry.group, options);
   const std::string text = written(computed.result, {job.title, computed.warnings}, options);
   print_warnings(options.output, computed.warnings);
@@ -215,7 +217,8 @@ Command add_symmetry(CLI::App& program) {
   flag("--operations", options->sections.operations,
        "Each operation and what it does to the atoms");
   flag("--salcs", options->sections.salcs, "SALCs of each set, shell and irrep");
-  flag("--local", options->local, "SALCs in each atom's own frame: σ and π along its bond towards the centre");
+  flag("--local", options->local,
+       "SALCs in each atom's own frame: σ and π along its bond towards the centre");
   flag("--transitions", options->transitions,
        "Selection rules between frontier levels, terms of an open shell, vibrations");
   flag("-a,--all", options->all, "All of these");

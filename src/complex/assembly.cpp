@@ -106,7 +106,14 @@ std::vector<Eigen::Vector3d> bridge_positions(const PlacedBridge& bridge,
   }
   const Eigen::Vector3d outwards =
       towards.norm() < 0.05 ? reference_direction(donor.normalized()) : -towards.normalized();
-  return posed(atoms, {axes_along(outwards, 0.0), false}, donor);
+  // x stands on the plane of the donor and the metals. Seen along the line of the metals it turns
+  // the same way at every bridge, so that two bent ligands point to opposite sides.
+  const Eigen::Vector3d normal = (-donor).cross(second_metal - donor);
+  if (normal.norm() < 0.05) return posed(atoms, {axes_along(outwards, 0.0), false}, donor);
+  const Eigen::Vector3d x = (bridge.request.mirrored ? -1.0 : 1.0) * normal.normalized();
+  Eigen::Matrix3d axes;
+  axes << x, outwards.cross(x), outwards;
+  return posed(atoms, {axes, false}, donor);
 }
 
 Eigen::Vector3d direction(const SeatedLigand& seated, const Polyhedron& polyhedron,

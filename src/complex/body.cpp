@@ -143,10 +143,9 @@ double scale_for_bite(const SeatedLigand& seated, double d1, double d2, double b
 }
 
 // Turns the ligand about its donor so that metal, donor and the next atom make the angle.
-std::vector<Atom> with_angle(const SeatedLigand& seated, double angle_degrees) {
-  const Ligand& ligand = *seated.ligand;
+std::vector<Atom> with_angle(const Ligand& ligand, const Binding& binding, double angle_degrees) {
   const Molecule free(ligand.atoms, 0);
-  const int donor = seated.binding->teeth[0][0];
+  const int donor = binding.teeth[0][0];
   std::vector<int> next;
   for (int atom = 0; atom < free.size(); ++atom) {
     if (atom != donor && are_bonded(free, donor, atom)) next.push_back(atom);
@@ -159,7 +158,7 @@ std::vector<Atom> with_angle(const SeatedLigand& seated, double angle_degrees) {
     throw Error(fmt::format("found an angle of {}°, expected 80 to 180", angle_degrees));
   }
   const Eigen::Vector3d origin = position(ligand, donor);
-  const Eigen::Vector3d to_metal = (seated.binding->metal - origin).normalized();
+  const Eigen::Vector3d to_metal = (binding.metal - origin).normalized();
   const Eigen::Vector3d to_next = (position(ligand, next[0]) - origin).normalized();
   const double now = std::acos(std::clamp(to_metal.dot(to_next), -1.0, 1.0));
   // A straight ligand bends towards its x, a bent one in its own plane.
@@ -264,7 +263,8 @@ LigandBody make_body(const SeatedLigand& seated, int metal) {
                                                              : below_one_donor(seated, d[0]);
   Eigen::Matrix3d axes;
   axes << place.x, place.z.cross(place.x), place.z;
-  body.atoms = request.angle_degrees ? with_angle(seated, *request.angle_degrees) : ligand.atoms;
+  body.atoms = request.angle_degrees ? with_angle(ligand, *seated.binding, *request.angle_degrees)
+                                     : ligand.atoms;
   for (Atom& atom : body.atoms) atom.position = axes.transpose() * (atom.position - place.metal);
   for (const std::vector<int>& tooth : seated.binding->teeth) {
     body.teeth.push_back(axes.transpose() * (centroid(ligand, tooth) - place.metal));
@@ -285,15 +285,12 @@ std::vector<Atom> make_bridge_body(const Ligand& ligand) {
                     "the electrons that each metal counts from it",
                     ligand.name));
   }
-  std::vector<Atom> atoms = ligand.atoms;
-  const Eigen::Vector3d donor = position(ligand, ligand.bindings.front().teeth[0][0]);
+  const Binding& binding = ligand.bindings.front();
+  std::vector<Atom> atoms = ligand.bridging_angle_degrees
+                                ? with_angle(ligand, binding, *ligand.bridging_angle_degrees)
+                                : ligand.atoms;
+  const Eigen::Vector3d donor = position(ligand, binding.teeth[0][0]);
   for (Atom& atom : atoms) atom.position -= donor;
-  if (!is_axial(atoms)) {
-    throw Error(
-        fmt::format("{} cannot bridge: only ligands whose atoms lie on one line with the "
-                    "donor are placed between metals",
-                    ligand.name));
-  }
   return atoms;
 }
 

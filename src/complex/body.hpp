@@ -27,10 +27,10 @@ struct LigandBody {
 ///                ligand that has none, an element without a radius
 [[nodiscard]] LigandBody make_body(const SeatedLigand& ligand, int metal);
 
-/// Between two metals: the metals lie symmetrically below the donor, in the xz plane; here the
-/// donor is at the origin and the ligand along +z.
-/// @throws Error  for a ligand that the library gives no electrons for between two metals, or whose
-///                atoms are not all on the axis
+/// Between two metals: the metals lie symmetrically below the donor, in the yz plane; here the
+/// donor is at the origin and the ligand along +z, bent towards +x.
+/// @throws Error  for a ligand that the library gives no electrons for between two metals, or that
+///                has an angle there and not one atom behind the donor
 [[nodiscard]] std::vector<Atom> make_bridge_body(const Ligand& ligand);
 
 /// How a body stands: right-handed unit axes in columns, then the centre added.

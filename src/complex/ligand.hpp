@@ -29,8 +29,10 @@ struct Ligand {
   std::vector<std::string> names;  // other names: "ammine"
   int charge = 0;                  // of the free ligand with closed shells
   std::vector<Atom> atoms;
-  std::vector<Binding> bindings;              // the usual one first; at least one
-  std::optional<int> bridging_electrons;      // for each of two metals that it bridges
+  std::vector<Binding> bindings;          // the usual one first; at least one
+  std::optional<int> bridging_electrons;  // for each of two metals that it bridges
+  // Of a bridge: middle of the metals, donor, next atom; as when terminal where absent.
+  std::optional<double> bridging_angle_degrees;
   double bridging_shortening_angstrom = 0.0;  // of each bond of a bridge, below the sum of radii
   double shortening_angstrom = 0.0;           // of the bond to the metal, below the sum of radii
   std::string shortening_source;

@@ -107,9 +107,9 @@ double read_shortening(const YamlNode& ligand, const char* key) {
 }
 
 Ligand read_ligand(const std::string& name, const YamlNode& node, const Sources& sources) {
-  node.expect_keys("a ligand", {"names", "charge", "binding", "bridging", "bridging_shortening",
-                                "bridging_shortening_source", "shortening", "shortening_source",
-                                "geometry", "source", "lengths", "atoms"});
+  node.expect_keys("a ligand", {"names", "charge", "binding", "bridging", "bridging_angle",
+                                "bridging_shortening", "bridging_shortening_source", "shortening",
+                                "shortening_source", "geometry", "source", "lengths", "atoms"});
   Ligand ligand;
   ligand.name = name;
   if (const YamlNode* const names = node.find("names")) {
@@ -129,6 +129,13 @@ Ligand read_ligand(const std::string& name, const YamlNode& node, const Sources&
   if (const YamlNode* const bridging = node.find("bridging")) {
     ligand.bridging_electrons = bridging->whole_number("a whole number of electrons");
     if (*ligand.bridging_electrons < 0) bridging->fail("expected 0 or more electrons");
+  }
+  if (const YamlNode* const angle = node.find("bridging_angle")) {
+    ligand.bridging_angle_degrees = angle->number("an angle in degrees");
+    if (!(*ligand.bridging_angle_degrees >= 80.0 && *ligand.bridging_angle_degrees <= 180.0)) {
+      angle->fail(
+          fmt::format("found an angle of {}°, expected 80 to 180", *ligand.bridging_angle_degrees));
+    }
   }
   ligand.shortening_angstrom = read_shortening(node, "shortening");
   ligand.bridging_shortening_angstrom = read_shortening(node, "bridging_shortening");

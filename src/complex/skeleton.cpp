@@ -33,8 +33,9 @@ Points skeleton_points(const Assembly& assembly, const std::vector<int>& metals)
     points.atoms.push_back({metals[m], assembly.metals[m]});
     points.kinds.push_back(assembly.n_kinds + metals[m]);
   }
-  const auto add = [&](const Eigen::Vector3d& position, int kind) {
-    points.atoms.push_back({1, position});  // the kind tells them apart, not the element
+  // Of a terminal ligand the kind tells it apart, not the element.
+  const auto add = [&](const Eigen::Vector3d& position, int kind, int element = 1) {
+    points.atoms.push_back({element, position});
     points.kinds.push_back(kind);
   };
   for (const Site& site : assembly.sites) {
@@ -44,7 +45,9 @@ Points skeleton_points(const Assembly& assembly, const std::vector<int>& metals)
     }
   }
   for (const PlacedBridge& bridge : assembly.bridges) {
-    for (const Eigen::Vector3d& position : bridge.positions) add(position, bridge.kind);
+    for (std::size_t i = 0; i < bridge.positions.size(); ++i) {
+      add(bridge.positions[i], bridge.kind, bridge.ligand->atoms[i].atomic_number);
+    }
   }
   return points;
 }

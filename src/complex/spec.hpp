@@ -43,6 +43,7 @@ struct BridgeRequest {
   std::string ligand;
   std::array<int, 2> vertices = {0, 0};
   std::array<std::optional<double>, 2> distances_angstrom;  // to each metal
+  bool mirrored = false;  // atoms behind the donor on the other side of the plane with the metals
   std::string place;
 };
 

@@ -105,6 +105,11 @@ class YamlBuilder final : public YAML::EventHandler {
       parent.key = std::move(value);
       parent.has_key = true;
     } else {
+      // The parser finds the end of nothing on the next line, where there is nothing to mend.
+      if (value.kind_ == YamlNode::Kind::Nothing && value.line_ > parent.key.line_) {
+        value.line_ = parent.key.line_;
+        value.column_ = parent.key.column_;
+      }
       parent.node.entries_.push_back({std::move(parent.key), std::move(value)});
       parent.has_key = false;
     }
@@ -115,16 +120,39 @@ class YamlBuilder final : public YAML::EventHandler {
   std::vector<Open> open_;
 };
 
+// One document is all there may be.
+class SecondDocument final : public YAML::EventHandler {
+ public:
+  explicit SecondDocument(const std::string& name) : name_(name) {}
+
+  void OnDocumentStart(const YAML::Mark& mark) override {
+    throw error_at(file_place(name_, mark.line + 1),
+                   Error("a second YAML document begins with '---'; keep one"));
+  }
+  void OnDocumentEnd() override {}
+  void OnNull(const YAML::Mark&, YAML::anchor_t) override {}
+  void OnAlias(const YAML::Mark&, YAML::anchor_t) override {}
+  void OnScalar(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                const std::string&) override {}
+  void OnSequenceStart(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                       YAML::EmitterStyle::value) override {}
+  void OnSequenceEnd() override {}
+  void OnMapStart(const YAML::Mark&, const std::string&, YAML::anchor_t,
+                  YAML::EmitterStyle::value) override {}
+  void OnMapEnd() override {}
+
+ private:
+  const std::string& name_;
+};
+
 YamlNode YamlNode::parse(std::string_view text, const std::string& file_name) {
   YamlBuilder builder(text, file_name);
   try {
     std::istringstream stream{std::string(text)};
     YAML::Parser parser(stream);
     parser.HandleNextDocument(builder);
-    YamlBuilder rest({}, file_name);
-    if (parser.HandleNextDocument(rest)) {
-      throw error_at(file_name, Error("a second YAML document begins with '---'; keep one"));
-    }
+    SecondDocument rest(file_name);
+    parser.HandleNextDocument(rest);
   } catch (const YAML::Exception& error) {
     throw error_at(file_place(file_name, error.mark.line + 1, error.mark.column + 1),
                    Error(fmt::format("this is not YAML: {}; check indentation, brackets and quotes",

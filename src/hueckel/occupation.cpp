@@ -5,7 +5,7 @@
 
 #include <fmt/format.h>
 
-#include "core/error.hpp"
+#include "core/error_about.hpp"
 
 namespace irrepwise {
 namespace {
@@ -22,21 +22,26 @@ void fill_by_multiplicity(std::vector<Level>& levels, int electrons, int multipl
   const int orbitals = std::accumulate(levels.begin(), levels.end(), 0,
                                        [](int sum, const Level& l) { return sum + l.degeneracy; });
   if (multiplicity < 1) {
-    throw Error(fmt::format("multiplicity = {}, expected 2S + 1, that is 1 or more", multiplicity));
+    throw ErrorAbout(
+        "multiplicity",
+        fmt::format("multiplicity = {}, expected 2S + 1, that is 1 or more", multiplicity));
   }
   const int unpaired = multiplicity - 1;
   if ((electrons - unpaired) % 2 != 0) {
-    throw Error(fmt::format(
-        "multiplicity {} is impossible with {} electrons: it must be {} (1, 3, 5 … with an even "
-        "number of electrons, 2, 4, 6 … with an odd one)",
-        multiplicity, electrons, electrons % 2 == 0 ? "odd" : "even"));
+    throw ErrorAbout("multiplicity",
+                     fmt::format("multiplicity {} is impossible with {} electrons: it must be {} "
+                                 "(1, 3, 5 … with an even "
+                                 "number of electrons, 2, 4, 6 … with an odd one)",
+                                 multiplicity, electrons, electrons % 2 == 0 ? "odd" : "even"));
   }
   int doubly = (electrons - unpaired) / 2;
   int singly = unpaired;
   if (doubly < 0 || doubly + singly > orbitals) {
-    throw Error(fmt::format(
-        "multiplicity {} is impossible: {} electrons in {} orbitals allow at most {}", multiplicity,
-        electrons, orbitals, std::min(electrons, 2 * orbitals - electrons) + 1));
+    throw ErrorAbout(
+        "multiplicity",
+        fmt::format("multiplicity {} is impossible: {} electrons in {} orbitals allow at most {}",
+                    multiplicity, electrons, orbitals,
+                    std::min(electrons, 2 * orbitals - electrons) + 1));
   }
   for (Level& level : levels) {
     const int full = std::min(doubly, level.degeneracy);
@@ -53,16 +58,18 @@ void fill_by_irrep(std::vector<Level>& levels, const PointGroup& group, int elec
   int sum = 0;
   for (const auto& [label, count] : by_irrep) {
     if (count < 0) {
-      throw Error(fmt::format("occupations: {} electrons in {}, expected 0 or more", count, label));
+      throw ErrorAbout(
+          "occupations",
+          fmt::format("occupations: {} electrons in {}, expected 0 or more", count, label));
     }
-    wanted[group.irrep_index(label)] += count;
+    wanted[about("occupations", [&] { return group.irrep_index(label); })] += count;
     sum += count;
   }
   if (sum != electrons) {
-    throw Error(fmt::format(
-        "occupations: the irreps hold {} electrons together, the molecule has {}; name every irrep "
-        "that holds valence electrons",
-        sum, electrons));
+    throw ErrorAbout("occupations", fmt::format("occupations: the irreps hold {} electrons "
+                                                "together, the molecule has {}; name every irrep "
+                                                "that holds valence electrons",
+                                                sum, electrons));
   }
   for (Level& level : levels) {
     const int here = std::min(wanted[level.irrep], 2 * level.degeneracy);
@@ -71,8 +78,9 @@ void fill_by_irrep(std::vector<Level>& levels, const PointGroup& group, int elec
   }
   for (std::size_t i = 0; i < wanted.size(); ++i) {
     if (wanted[i] > 0) {
-      throw Error(fmt::format("occupations: {} has room for {} electrons less than asked",
-                              level_label(group.irreps()[i].label), wanted[i]));
+      throw ErrorAbout("occupations",
+                       fmt::format("occupations: {} has room for {} electrons less than asked",
+                                   level_label(group.irreps()[i].label), wanted[i]));
     }
   }
 }
@@ -84,18 +92,21 @@ void occupy(std::vector<Level>& levels, const PointGroup& group, int electrons,
   int room = 0;
   for (const Level& level : levels) room += 2 * level.degeneracy;
   if (electrons < 1) {
-    throw Error(
+    throw ErrorAbout(
+        "charge",
         fmt::format("the charge leaves {} valence electrons, expected at least 1; check the "
                     "charge",
                     electrons));
   }
   if (electrons > room) {
-    throw Error(
+    throw ErrorAbout(
+        "charge",
         fmt::format("{} valence electrons, but the orbitals hold {} at most; check the charge",
                     electrons, room));
   }
   if (options.multiplicity && !options.electrons_by_irrep.empty()) {
-    throw Error("both a multiplicity and occupations by irrep are given; keep one of them");
+    throw ErrorAbout("multiplicity",
+                     "both a multiplicity and occupations by irrep are given; keep one of them");
   }
   if (options.multiplicity) {
     fill_by_multiplicity(levels, electrons, *options.multiplicity);

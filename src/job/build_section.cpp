@@ -86,8 +86,16 @@ CentreSpec read_centre(const YamlNode& node) {
   return centre;
 }
 
+double read_distance_angstrom(const YamlNode& node) {
+  const double distance = node.number("a distance in Å");
+  if (!(distance >= 0.5 && distance <= 6.0)) {
+    node.fail(fmt::format("found a distance of {} Å, expected 0.5 to 6", distance));
+  }
+  return distance;
+}
+
 BridgeRequest read_bridge(const YamlNode& node) {
-  node.expect_keys("a bridge", {"ligand", "vertices", "distance", "distances"});
+  node.expect_keys("a bridge", {"ligand", "vertices", "distance", "distances", "mirrored"});
   BridgeRequest bridge;
   bridge.place = node.place();
   bridge.ligand = node.at("ligand").word("the name of a ligand");
@@ -99,17 +107,15 @@ BridgeRequest read_bridge(const YamlNode& node) {
   const YamlNode* const distance = node.find("distance");
   const YamlNode* const distances = node.find("distances");
   if (distance && distances) distances->fail("`distance` and `distances` exclude each other");
-  if (distance) bridge.distances_angstrom.fill(distance->number("a distance in Å"));
+  if (distance) bridge.distances_angstrom.fill(read_distance_angstrom(*distance));
   if (distances) {
     const std::span<const YamlNode> both = distances->list_of(2, "a distance to each metal");
     for (std::size_t i = 0; i < 2; ++i) {
-      bridge.distances_angstrom[i] = both[i].number("a distance in Å");
+      bridge.distances_angstrom[i] = read_distance_angstrom(both[i]);
     }
   }
-  for (const std::optional<double>& value : bridge.distances_angstrom) {
-    if (value && !(*value >= 0.5 && *value <= 6.0)) {
-      node.fail(fmt::format("found a distance of {} Å, expected 0.5 to 6", *value));
-    }
+  if (const YamlNode* const mirrored = node.find("mirrored")) {
+    bridge.mirrored = read_truth(*mirrored);
   }
   return bridge;
 }
@@ -136,7 +142,9 @@ LigandRequest read_ligand_request(const YamlNode& node) {
   }
   request.denticity = read_optional_whole(node, "denticity", "a whole number of teeth");
   request.hapticity = read_optional_whole(node, "hapticity", "a whole number of atoms");
-  request.distance_angstrom = read_optional(node, "distance", "a distance in Å");
+  if (const YamlNode* const distance = node.find("distance")) {
+    request.distance_angstrom = read_distance_angstrom(*distance);
+  }
   request.twist_degrees = read_optional(node, "twist", "an angle in degrees");
   request.angle_degrees = read_optional(node, "angle", "an angle in degrees");
   request.bite_degrees = read_optional(node, "bite", "an angle in degrees");
@@ -244,7 +252,7 @@ Substitution read_substitution(const YamlNode& node) {
   if (const YamlNode* const distances = node.find("distances")) {
     for (const YamlNode::Entry& entry : distances->map("vertices with distances in Å")) {
       change.distances_angstrom.emplace_back(entry.key.whole_number("the number of a vertex"),
-                                             entry.value.number("a distance in Å"));
+                                             read_distance_angstrom(entry.value));
     }
   }
   return change;

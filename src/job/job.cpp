@@ -9,7 +9,7 @@
 #include <fmt/format.h>
 
 #include "basis/parameter_yaml.hpp"
-#include "core/error.hpp"
+#include "core/error_about.hpp"
 #include "core/file.hpp"
 #include "core/yaml.hpp"
 #include "job/job_file.hpp"
@@ -37,7 +37,8 @@ std::string read_named(const YamlNode& from, const std::string& path) {
 // The molecule with its own title, and defaults for all else.
 Job job_of(Molecule molecule) {
   std::string title = molecule.title();
-  return {std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}, {}, {}};
+  return {
+      std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}, {}, {}, {}};
 }
 
 // What a variant says in place of the job.
@@ -113,6 +114,22 @@ Job read_structure(const YamlNode& node, const YamlNode* variant, const Substitu
   return job;
 }
 
+// What is checked only when symmetry and electrons are known.
+void note_places(const YamlNode& job, const YamlNode* variant, Job& result) {
+  const auto note = [&](const YamlNode* from, const char* key) {
+    const YamlNode* const value = from ? from->find(key) : nullptr;
+    if (value) result.places[key] = value->place();
+  };
+  for (const YamlNode* const from : {&job, variant}) {
+    for (const char* const key : {"charge", "multiplicity", "occupations"}) note(from, key);
+  }
+  const YamlNode* const symmetry = find_in(job, variant, "symmetry");
+  if (!symmetry) return;
+  note(symmetry, "group");
+  note(symmetry, "subgroup");
+  for (const char* const key : {"z", "x"}) note(symmetry->find("axes"), key);
+}
+
 Job parse_job(const std::string& text, const std::string& path, FileChain& files) {
   return read_job_node(YamlNode::parse(text, path), nullptr, nullptr, path, files);
 }
@@ -155,6 +172,7 @@ Job read_job_node(const YamlNode& node, const YamlNode* variant, const Substitut
     job.symmetry = read_symmetry(*symmetry, job.molecule);
   }
   job.hueckel = read_hueckel(node, variant);
+  note_places(node, variant, job);
   files.open.pop_back();
   job.source_files = files.read;
   return job;
@@ -195,6 +213,12 @@ Job read_job(const std::string& path) {
   Job job = job_of(read_xyz(path).molecule);
   job.source_files = {path};
   return job;
+}
+
+Error error_in(const Job& job, const std::string& file, const Error& error) {
+  const auto* const from = dynamic_cast<const ErrorAbout*>(&error);
+  const auto place = from ? job.places.find(from->key()) : job.places.end();
+  return error_at(place == job.places.end() ? file : place->second, error);
 }
 
 }  // namespace irrepwise

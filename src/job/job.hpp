@@ -1,6 +1,7 @@
 // A job: everything the user says about one molecule, from a YAML file, an XYZ file and options.
 #pragma once
 
+#include <map>
 #include <optional>
 #include <string>
 #include <string_view>
@@ -10,6 +11,7 @@
 #include "basis/parameter_set.hpp"
 #include "complex/build.hpp"
 #include "complex/spec.hpp"
+#include "core/error.hpp"
 #include "hueckel/options.hpp"
 #include "molecule/molecule.hpp"
 #include "symmetry/options.hpp"
@@ -25,6 +27,9 @@ struct Job {
   HueckelOptions hueckel;
   // The job file and every file it read, so that no output overwrites an input.
   std::vector<std::string> source_files;
+  // Where the user gave what only the computation can judge, by its key: "job.yaml:3:9",
+  // "--charge".
+  std::map<std::string, std::string> places;
   // Of a job that builds its complex: what it says, and what came of it.
   std::optional<ComplexSpec> complex;
   std::optional<BuiltComplex> built;
@@ -35,5 +40,9 @@ struct Job {
 ///
 /// @throws Error  with file, line and column, what is wrong and what to do
 [[nodiscard]] Job read_job(const std::string& path);
+
+/// @returns  the error with the place of the value that it is about, if the job knows it, or else
+///           the file
+[[nodiscard]] Error error_in(const Job& job, const std::string& file, const Error& error);
 
 }  // namespace irrepwise

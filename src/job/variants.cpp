@@ -92,8 +92,9 @@ bool has_variants(const std::string& path) {
 
 std::vector<VariantJob> variant_jobs(const std::string& path) {
   const auto whole = [&] {
-    return std::vector<VariantJob>{
-        {std::filesystem::path(path).stem().string(), path, [path] { return read_job(path); }}};
+    return std::vector<VariantJob>{{std::filesystem::path(path).stem().string(), path,
+                                    [path] { return read_job(path); },
+                                    [](const Error& error) { return error; }}};
   };
   if (!is_job_file(path)) return whole();
   const auto node = std::make_shared<const YamlNode>(YamlNode::parse(read_text_file(path), path));
@@ -111,16 +112,21 @@ std::vector<VariantJob> variant_jobs(const std::string& path) {
         throw Error(fmt::format("{}: the name '{}' is used already at {}; names must differ",
                                 name ? name->place() : named.place, named.name, other.place));
       }
+      const auto with_name = [name = named.name, path, place = item.place()](const Error& error) {
+        return with_variant(error, name, path, place);
+      };
       // The tree is kept alive by `node`, of which the item is a part.
-      jobs.push_back(
-          {named.name, named.place, [node, &item, path, name = named.name, change = named.change] {
-             try {
-               FileChain files;
-               return read_job_node(*node, &item, change ? &*change : nullptr, path, files);
-             } catch (const Error& error) {
-               throw with_variant(error, name, path, item.place());
-             }
-           }});
+      jobs.push_back({named.name, named.place,
+                      [node, &item, path, with_name, change = named.change] {
+                        try {
+                          FileChain files;
+                          return read_job_node(*node, &item, change ? &*change : nullptr, path,
+                                               files);
+                        } catch (const Error& error) {
+                          throw with_name(error);
+                        }
+                      },
+                      with_name});
     }
   }
   return jobs;

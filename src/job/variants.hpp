@@ -5,6 +5,7 @@
 #include <string>
 #include <vector>
 
+#include "core/error.hpp"
 #include "job/job.hpp"
 
 namespace irrepwise {
@@ -15,6 +16,8 @@ struct VariantJob {
   std::string name;
   std::string place;          // "family.yaml:12:5", for messages
   std::function<Job()> read;  // throws Error as `read_job`
+  // The error with the name of the variant behind its place, as `read` throws it.
+  std::function<Error(const Error&)> named;
 };
 
 /// A job file with `variants:` gives one entry for each of them, in order; any other file is one

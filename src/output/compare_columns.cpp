@@ -14,6 +14,7 @@
 #include "core/parse.hpp"
 #include "core/text.hpp"
 #include "molecule/molecule.hpp"
+#include "output/bond_columns.hpp"
 
 namespace irrepwise {
 namespace {
@@ -26,6 +27,7 @@ struct SummaryColumn {
   Column column;
   Reader read;
   SummaryPart part = SummaryPart::Frontier;
+  bool shown = true;  // to people who picked no columns
 };
 
 Cell level_cell(const VariantResult& variant, const std::optional<int>& level) {
@@ -44,27 +46,6 @@ Cell gap_cell(const VariantResult& variant) {
   return Number{levels[static_cast<std::size_t>(*frontier.lumo)].energy_ev -
                     levels[static_cast<std::size_t>(*frontier.homo)].energy_ev,
                 3};
-}
-
-Cell bond_cell(const VariantResult& variant, const std::string& element) {
-  if (!variant.metal()) return {};
-  for (const MetalBonds& bonds : variant.metal()->bonds) {
-    if (bonds.element == element) return Number{bonds.overlap_population, 3};
-  }
-  return {};
-}
-
-std::vector<std::string> donor_elements(const Comparison& comparison) {
-  std::vector<std::string> elements;
-  for (const VariantResult& variant : comparison.variants) {
-    if (!variant.metal()) continue;
-    for (const MetalBonds& bonds : variant.metal()->bonds) {
-      if (std::find(elements.begin(), elements.end(), bonds.element) == elements.end()) {
-        elements.push_back(bonds.element);
-      }
-    }
-  }
-  return elements;
 }
 
 std::string frontier_words(const VariantResult& variant) {
@@ -106,10 +87,14 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
          return v.metal() ? Cell(Number{v.metal()->d_population, 3}) : Cell();
        },
        SummaryPart::Metal}};
-  for (const std::string& element : donor_elements(comparison)) {
-    columns.push_back({{"bond_" + element, "M–" + element, "", Align::Decimal, 2, false},
-                       [element](const V& v) { return bond_cell(v, element); },
-                       SummaryPart::Metal});
+  for (const BondColumn& bonds : bond_columns(comparison)) {
+    columns.push_back({{bonds.key, bonds.title, "", Align::Decimal, 2, false},
+                       [mean = bonds.mean](const V& v) {
+                         const std::optional<double> value = mean(v);
+                         return value ? Cell(Number{*value, 3}) : Cell();
+                       },
+                       SummaryPart::Metal,
+                       bonds.shown});
   }
   columns.push_back({{"sum_of_occupied_ev", "occupied", "eV", Align::Decimal, 3, false},
                      [](const V& v) {
@@ -148,8 +133,8 @@ std::vector<SummaryColumn> chosen_columns(const Comparison& comparison, const Su
   for (SummaryColumn& column : all) {
     const bool of_metal = column.part == SummaryPart::Metal;
     const bool sum = column.column.key == "sum_of_occupied_ev";
-    const bool wanted =
-        column.column.key == "name" || (split ? column.part == part : !of_metal || sum);
+    const bool wanted = column.column.key == "name" ||
+                        (split ? column.part == part && column.shown : !of_metal || sum);
     if (wanted) chosen.push_back(std::move(column));
   }
   return chosen;
@@ -204,18 +189,17 @@ bool has_several_metals(const VariantResult& variant) {
 // What the columns present mean, as far as their titles do not say it.
 std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
                                   const Comparison& comparison) {
-  bool fragile = false, metal = false, bonds = false, sum = false;
+  bool fragile = false, metal = false, sum = false;
+  std::vector<std::string> bonds;
   for (const SummaryColumn& column : columns) {
     const std::string& key = column.column.key;
     fragile = fragile || key == "fragile";
     metal = metal || key == "metal_charge" || key == "d_population";
-    bonds = bonds || key.starts_with("bond_");
+    if (key.starts_with("bond_")) bonds.push_back(column.column.header);
     sum = sum || key == "sum_of_occupied_ev";
   }
   std::string text;
-  const auto say = [&](const char* words) {
-    text += (text.empty() ? "" : " ") + std::string(words);
-  };
+  const auto say = [&](const std::string& words) { text += (text.empty() ? "" : " ") + words; };
   const auto& variants = comparison.variants;
   if (fragile && std::any_of(variants.begin(), variants.end(),
                              [](const VariantResult& v) { return v.robustness.fragile(); })) {
@@ -228,8 +212,9 @@ std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
     say("open shell: the HOMO is not full; the gap is that to the lowest empty level.");
   }
   if (metal) say("metal charge, d electrons: by Mulliken's populations.");
-  if (bonds) say("M–X: mean overlap population of the bonds from the metal to donor atoms X.");
-  if ((metal || bonds) && std::any_of(variants.begin(), variants.end(), has_several_metals)) {
+  if (!bonds.empty()) say(bond_words(bonds));
+  if ((metal || !bonds.empty()) &&
+      std::any_of(variants.begin(), variants.end(), has_several_metals)) {
     say("Of several metals the first is shown here; the d block has each.");
   }
   if (sum) {
@@ -240,6 +225,11 @@ std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
 }
 
 }  // namespace
+
+void check_columns(const Comparison& comparison, const std::vector<std::string>& keys) {
+  const std::vector<SummaryColumn> all = all_columns(comparison);
+  for (const std::string& key : keys) static_cast<void>(find_column(all, key));
+}
 
 std::vector<SummaryPart> summary_parts(const Comparison& comparison, const SummaryChoice& choice) {
   if (!choice.columns.empty() || !has_metal(comparison)) return {SummaryPart::Frontier};

@@ -64,14 +64,53 @@ Json parent_json(const MetalFacts* metal) {
   return parent;
 }
 
-Json bonds_json(const MetalFacts* metal) {
+const char* opposite_word(Opposite opposite) {
+  switch (opposite) {
+    case Opposite::None:
+      return "none";
+    case Opposite::Like:
+      return "like";
+    case Opposite::Other:
+      return "other";
+  }
+  return "";
+}
+
+const char* length_word(BondLength length) {
+  switch (length) {
+    case BondLength::Alike:
+      return "alike";
+    case BondLength::Short:
+      return "short";
+    case BondLength::Long:
+      return "long";
+  }
+  return "";
+}
+
+Json donors_json(const VariantResult& variant, const std::vector<MetalBond>& bonds) {
+  Json list = Json::array();
+  for (const MetalBond& bond : bonds) {
+    list.push_back(atom_name(variant.levels.molecule, bond.donor));
+  }
+  return list;
+}
+
+Json bonds_json(const VariantResult& variant, const MetalFacts* metal) {
   Json list = Json::array();
   if (!metal) return list;
-  for (const MetalBonds& bonds : metal->bonds) {
-    list.push_back({{"element", bonds.element},
-                    {"count", bonds.count},
-                    {"overlap_population", finite_number(bonds.overlap_population)},
-                    {"distance_angstrom", finite_number(bonds.distance_angstrom)}});
+  for (const BondType& type : metal->bonds) {
+    list.push_back({{"element", type.element},
+                    {"ligand", type.ligand},
+                    {"bridging", type.bridging},
+                    {"opposite", opposite_word(type.opposite)},
+                    {"opposite_element",
+                     type.opposite_element.empty() ? Json(nullptr) : Json(type.opposite_element)},
+                    {"length", length_word(type.length)},
+                    {"atoms", donors_json(variant, type.bonds)},
+                    {"count", type.bonds.size()},
+                    {"overlap_population", finite_number(type.overlap_population())},
+                    {"distance_angstrom", finite_number(type.distance_angstrom())}});
   }
   return list;
 }
@@ -114,7 +153,7 @@ Json metal_json(const VariantResult& variant, const MetalFacts* metal) {
           {"equivalent_metals", metal ? Json(metal->n_equivalent) : Json(0)},
           {"metal_charge", metal ? Json(finite_number(metal->charge)) : Json(nullptr)},
           {"d_population", metal ? Json(finite_number(metal->d_population)) : Json(nullptr)},
-          {"bonds", bonds_json(metal)},
+          {"bonds", bonds_json(variant, metal)},
           {"parent", parent_json(metal)},
           {"metal_levels", metal_levels_json(variant, metal)}};
 }
@@ -131,7 +170,8 @@ Json variant_json(const VariantResult& variant) {
                {"point_group", result.symmetry.group.symbol().name()},
                {"frontier", frontier_json(variant)}};
   json.update(metal_json(variant, variant.metal()));
-  json.update({{"other_metals", std::move(others)},
+  json.update({{"varied_donors", donors_json(variant, variant.varied_bonds)},
+               {"other_metals", std::move(others)},
                {"sum_of_occupied_ev", finite_number(result.levels.sum_of_occupied_ev)},
                {"fragile", variant.robustness.fragile()},
                {"robustness",

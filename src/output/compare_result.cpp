@@ -7,7 +7,6 @@
 #include <fmt/format.h>
 
 #include "analysis/donors.hpp"
-#include "molecule/element.hpp"
 
 namespace irrepwise {
 namespace {
@@ -23,28 +22,7 @@ MetalFacts metal_facts(const LevelsResult& result, int metal) {
     facts.d_population +=
         result.populations.gross_by_orbital.segment(shell.first_orbital, shell.size()).sum();
   }
-  const Molecule& molecule = result.symmetry.molecule;
-  std::vector<int> donors;
-  for (const DonorSite& site : donor_sites(molecule, result.basis, metal)) {
-    donors.insert(donors.end(), site.atoms.begin(), site.atoms.end());
-  }
-  for (const OverlapPopulation& pair : result.populations.overlap_populations) {
-    if (pair.atom_a != metal && pair.atom_b != metal) continue;
-    const int donor = pair.atom_a == metal ? pair.atom_b : pair.atom_a;
-    if (std::find(donors.begin(), donors.end(), donor) == donors.end()) continue;
-    const std::string element(
-        element_symbol(molecule.atoms()[static_cast<std::size_t>(donor)].atomic_number));
-    auto bonds = std::find_if(facts.bonds.begin(), facts.bonds.end(),
-                              [&](const MetalBonds& known) { return known.element == element; });
-    if (bonds == facts.bonds.end()) bonds = facts.bonds.insert(bonds, {element, 0, 0.0, 0.0});
-    ++bonds->count;
-    bonds->overlap_population += pair.value;
-    bonds->distance_angstrom += pair.distance_angstrom;
-  }
-  for (MetalBonds& bonds : facts.bonds) {
-    bonds.overlap_population /= bonds.count;
-    bonds.distance_angstrom /= bonds.count;
-  }
+  facts.bonds = bond_types(result.symmetry, result.basis, result.populations, metal);
   facts.d_block =
       find_d_block(result.symmetry, result.basis, result.levels, result.populations, metal);
   return facts;
@@ -93,7 +71,7 @@ std::string name_of_level(const VariantResult& variant, int level) {
 
 VariantResult analysed(std::string name, LevelsResult levels) {
   Robustness robustness = find_robustness(levels.symmetry, levels.basis, levels.levels);
-  VariantResult result{std::move(name), std::move(levels), std::move(robustness), {}};
+  VariantResult result{std::move(name), std::move(levels), std::move(robustness), {}, {}};
   result.metals = all_metals(result.levels);
   return result;
 }

@@ -8,17 +8,10 @@
 #include "analysis/d_block.hpp"
 #include "analysis/level_flips.hpp"
 #include "analysis/matching.hpp"
+#include "analysis/metal_bonds.hpp"
 #include "output/levels_result.hpp"
 
 namespace irrepwise {
-
-/// The bonds from the metal to donor atoms of one element.
-struct MetalBonds {
-  std::string element;
-  int count = 0;
-  double overlap_population = 0.0;  // mean
-  double distance_angstrom = 0.0;   // mean
-};
 
 /// A metal with a d shell; of several equivalent ones the first stands for all.
 struct MetalFacts {
@@ -26,8 +19,8 @@ struct MetalFacts {
   int n_equivalent = 1;
   double charge = 0.0;
   double d_population = 0.0;
-  std::vector<MetalBonds> bonds;  // in the order of the first donor of each element
-  DBlock d_block;                 // of all equivalent ones
+  std::vector<BondType> bonds;
+  DBlock d_block;  // of all equivalent ones
 };
 
 struct VariantResult {
@@ -35,6 +28,7 @@ struct VariantResult {
   LevelsResult levels;
   Robustness robustness;
   std::vector<MetalFacts> metals;  // in the order of the atoms; none where no metal has a d shell
+  std::vector<MetalBond> varied_bonds;  // of the first metal; see output/varied_bonds.hpp
 
   /// The one that stands in the summary; null where there is none.
   [[nodiscard]] const MetalFacts* metal() const {

@@ -7,7 +7,7 @@
 #include <fmt/format.h>
 #include <Eigen/Geometry>
 
-#include "core/error.hpp"
+#include "core/error_about.hpp"
 #include "symmetry/frame_merit.hpp"
 #include "symmetry/operation.hpp"
 #include "symmetry/standard_operations.hpp"
@@ -60,8 +60,9 @@ std::vector<Eigen::Matrix3d> turns_towards_atoms(const Molecule& molecule) {
   return turns;
 }
 
-Error not_an_axis(const char* name, const Schoenflies& symbol) {
-  return Error(
+ErrorAbout not_an_axis(const char* name, const Schoenflies& symbol) {
+  return ErrorAbout(
+      name,
       fmt::format("the wanted {} axis is no axis that {} can have there (to within {}°); leave it "
                   "out, or choose "
                   "a symmetry axis that the conventions allow as {}",
@@ -114,8 +115,9 @@ Eigen::Vector3d direction_of(const AxisDirection& wish, const char* name, const 
     const auto& atoms = std::get<std::vector<int>>(wish);
     for (int atom : atoms) {
       if (atom < 0 || atom >= molecule.size()) {
-        throw Error(fmt::format("the {} axis names atom {}; the molecule has atoms 1 to {}", name,
-                                atom + 1, molecule.size()));
+        throw ErrorAbout(
+            name, fmt::format("the {} axis names atom {}; the molecule has atoms 1 to {}", name,
+                              atom + 1, molecule.size()));
       }
     }
     const auto at = [&](std::size_t i) -> Eigen::Vector3d {
@@ -126,10 +128,10 @@ Eigen::Vector3d direction_of(const AxisDirection& wish, const char* name, const 
     if (atoms.size() == 3) direction = (at(1) - at(0)).cross(at(2) - at(0));
   }
   if (!direction.allFinite() || direction.norm() < 1e-6) {
-    throw Error(
-        fmt::format("the {} axis has no direction: a null vector, an atom at the origin, or "
-                    "atoms on one line; name others",
-                    name));
+    throw ErrorAbout(
+        name, fmt::format("the {} axis has no direction: a null vector, an atom at the origin, or "
+                          "atoms on one line; name others",
+                          name));
   }
   return direction.normalized();
 }
@@ -168,7 +170,8 @@ WantedAxes wanted_axes(const SymmetryOptions& options, const Molecule& molecule,
   if (options.z) wanted.z = direction_of(*options.z, "z", molecule, origin);
   if (options.x) wanted.x = direction_of(*options.x, "x", molecule, origin);
   if (wanted.z && wanted.x && wanted.z->cross(*wanted.x).norm() < 0.1) {
-    throw Error("the x axis is parallel to the z axis; choose another x, or leave it out");
+    throw ErrorAbout("x",
+                     "the x axis is parallel to the z axis; choose another x, or leave it out");
   }
   return wanted;
 }

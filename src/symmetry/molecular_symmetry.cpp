@@ -8,7 +8,7 @@
 #include <fmt/format.h>
 #include <Eigen/Geometry>
 
-#include "core/error.hpp"
+#include "core/error_about.hpp"
 #include "symmetry/approached_groups.hpp"
 #include "symmetry/axis_words.hpp"
 #include "symmetry/frames.hpp"
@@ -96,12 +96,13 @@ PlacedGroup general(const Molecule& molecule, const std::vector<int>& kinds,
   return made_exact(list, largest_group(list.table, held), positions);
 }
 
-Error nowhere_near(const Schoenflies& symbol, const Molecule& molecule,
-                   const SymmetryOptions& options) {
-  return Error(fmt::format(
-      "the structure is nowhere near {}: no set of operations of that group comes within {} Å; it "
-      "approaches {}",
-      symbol.name(), options.limit_angstrom, ladder_words(symmetry_ladder(molecule, options))));
+ErrorAbout nowhere_near(const Schoenflies& symbol, const Molecule& molecule,
+                        const SymmetryOptions& options) {
+  return ErrorAbout("group", fmt::format("the structure is nowhere near {}: no set of operations "
+                                         "of that group comes within {} Å; it "
+                                         "approaches {}",
+                                         symbol.name(), options.limit_angstrom,
+                                         ladder_words(symmetry_ladder(molecule, options))));
 }
 
 // A linear group that the structure approaches; raises the tolerance to where it holds.
@@ -192,7 +193,7 @@ MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions&
   std::string full_group;
   PlacedGroup found = [&] {
     if (options.group) {
-      const Schoenflies symbol = parse_schoenflies(*options.group);
+      const Schoenflies symbol = about("group", [&] { return parse_schoenflies(*options.group); });
       if (!symbol.is_finite() && shape != Shape::SingleAtom) {
         return near_linear(molecule, options, centred, symbol, tolerance);
       }
@@ -222,7 +223,9 @@ MolecularSymmetry find_symmetry(const Molecule& molecule, const SymmetryOptions&
   if (subgroup) {
     full_group = found.group.symbol().name();
     turn_to_conventions(found, molecule, {});
-    found = inside_subgroup(found, molecule, options.kinds, *subgroup, wanted);
+    found = about(options.subgroup ? "subgroup" : "group", [&] {
+      return inside_subgroup(found, molecule, options.kinds, *subgroup, wanted);
+    });
   } else {
     turn_to_conventions(found, molecule, wanted);
   }

@@ -7,7 +7,7 @@
 
 #include <fmt/format.h>
 
-#include "core/error.hpp"
+#include "core/error_about.hpp"
 #include "core/text.hpp"
 #include "symmetry/descent.hpp"
 #include "symmetry/held_operations.hpp"
@@ -126,7 +126,7 @@ std::optional<PlacedGroup> best_placed(const OperationList& list,
                                        const WantedAxes& wanted) {
   std::optional<PlacedGroup> best;
   std::vector<double> best_merit;
-  std::optional<Error> last_error;
+  std::optional<ErrorAbout> last_error;
   for (const Subset& subset : subsets) {
     if (!(identify_group(list.table, list.matrices, subset) == symbol)) continue;
     PlacedGroup found = made_exact(list, subset, positions);
@@ -134,7 +134,7 @@ std::optional<PlacedGroup> best_placed(const OperationList& list,
     try {
       choice =
           choose_frame(symbol, molecule.with_positions(found.positions), found.rotation, wanted);
-    } catch (const Error& error) {  // the wished axes may suit another subset of this symbol
+    } catch (const ErrorAbout& error) {  // the wished axes may suit another subset of this symbol
       last_error = error;
       continue;
     }

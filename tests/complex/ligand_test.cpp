@@ -149,6 +149,7 @@ TEST_CASE("unknown ligands and wrong libraries are refused with what to do") {
   CHECK(refusal(head) == "mine.yaml:3:5: the key 'binding' is missing here");
   CHECK(refusal(head + "    binding: [{donors: [[1]], electrons: 2}]\n    denticity: 1\n") ==
         "mine.yaml:6:5: unknown key 'denticity' in a ligand; known keys are names, charge, "
-        "binding, bridging, bridging_shortening, bridging_shortening_source, shortening, "
+        "binding, bridging, bridging_angle, bridging_shortening, bridging_shortening_source, "
+        "shortening, "
         "shortening_source, geometry, source, lengths and atoms");
 }

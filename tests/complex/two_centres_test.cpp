@@ -105,6 +105,52 @@ TEST_CASE("carbonyls bridge two metals with one electron to each") {
         1e-6);
 }
 
+TEST_CASE("hydroxide between two metals is planar, its hydrogen away from both") {
+  const BuiltComplex built = build_complex(pair_of("Cu", "SP-4", 2, {"Cl", "Cl"}, "OH", {1, 2}));
+  CHECK(built.point_group == "D2h");
+  CHECK(built.molecule.charge() == -2);
+  CHECK(built.centres[0].electrons.total == 9 + 2 * 2 + 2 * 2);
+  // Cu-O 1.93 in crystals of Cu2(OH)2 units, from memory.
+  const BuiltLigand& hydroxide = built.ligands.back();
+  CHECK(std::abs(hydroxide.distances_angstrom[0] - 1.93) < 0.1);
+  const int oxygen = hydroxide.atoms[0], hydrogen = hydroxide.atoms[1];
+  const double at_oxygen = angle(built.molecule, 0, oxygen, 1);
+  CHECK(std::abs(angle(built.molecule, 0, oxygen, hydrogen) - (180.0 - at_oxygen / 2)) < 1e-6);
+  CHECK(std::abs(distances(built.molecule, 8, 1, 1.2).front() - 0.96) < 0.01);
+}
+
+TEST_CASE("two thiolates between metals point to opposite sides, or to one where one is mirrored") {
+  for (const char* const ligand : {"SMe", "SH"}) {
+    CAPTURE(std::string(ligand));
+    ComplexSpec spec = pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, ligand, {1, 2});
+    const BuiltComplex anti = build_complex(spec);
+    CHECK(anti.point_group == "C2h");
+    CHECK(anti.molecule.charge() == -2);
+    CHECK(anti.centres[1].electrons.total == 16);
+    spec.bridges[1].mirrored = true;
+    const BuiltComplex syn = build_complex(spec);
+    CHECK(syn.point_group == "C2v");
+    // Pd-S 2.33 in dimers with thiolate bridges, from memory.
+    CHECK(std::abs(anti.ligands.back().distances_angstrom[0] - 2.33) < 0.1);
+    for (const BuiltComplex& built : {anti, syn}) {
+      const std::vector<int>& atoms = built.ligands.back().atoms;
+      // Pyramidal sulfur: 100 to 115 degrees from either metal, common practice.
+      for (const int metal : {0, 1}) {
+        const double at_sulfur = angle(built.molecule, metal, atoms[0], atoms[1]);
+        CHECK(at_sulfur > 98.0);
+        CHECK(at_sulfur < 115.0);
+      }
+    }
+  }
+}
+
+TEST_CASE("three thiolates on one face turn the same way") {
+  const BuiltComplex built =
+      build_complex(pair_of("Co", "OC-6", 3, {"NH3", "NH3", "NH3"}, "SMe", {1, 2, 3}));
+  CHECK(built.centres[0].electrons.total == 18);
+  CHECK(built.point_group == "C3h");
+}
+
 TEST_CASE("different metals keep both distances") {
   ComplexSpec spec = pair_of("Pd", "SP-4", 2, {"Cl", "Cl"}, "Cl", {1, 2});
   spec.centres[1].atomic_number = 78;

@@ -125,7 +125,7 @@ TEST_CASE("what cannot be built is refused with its line and column") {
         "job.yaml:4:14: the oxidation state +5 takes more electrons from Ti than its 4 valence "
         "electrons; check oxidation state, charge and ligands");
   CHECK(refusal(square + "    - {ligand: Cl, vertices: [1, 2, 3, 4], distance: 0}\n") ==
-        "job.yaml:6:7: found a distance of 0 Å, expected 0.5 to 6");
+        "job.yaml:6:54: found a distance of 0 Å, expected 0.5 to 6");
   CHECK(refusal(square + "    - {ligand: Cl, vertex: 1}\n") ==
         "job.yaml:6:20: unknown key 'vertex' in a ligand; known keys are ligand, vertices, covers, "
         "denticity, hapticity, distance, twist, angle, bite and mirrored");
