@@ -18,21 +18,13 @@ import os
 import struct
 import subprocess
 import sys
-import tempfile
 import xml.etree.ElementTree as ElementTree
 import zlib
 
+from checking import check_each, expect
+
 BOHR = 0.529177210544  # angstrom, CODATA 2022
 SVG = "{http://www.w3.org/2000/svg}"
-
-
-class Failed(Exception):
-    pass
-
-
-def expect(condition, words):
-    if not condition:
-        raise Failed(words)
 
 
 def draw(program, arguments, output):
@@ -377,16 +369,7 @@ def check(program, job, folder):
 
 
 def main():
-    program, jobs = sys.argv[1], sys.argv[2:]
-    failures = 0
-    for job in jobs:
-        with tempfile.TemporaryDirectory() as folder:
-            try:
-                print(f"{os.path.basename(job)}: as it should be ({check(program, job, folder)})")
-            except Failed as failure:
-                failures += 1
-                print(f"{os.path.basename(job)}: {failure}")
-    return 1 if failures or not jobs else 0
+    return check_each(check, sys.argv[1], sys.argv[2:])
 
 
 if __name__ == "__main__":

@@ -15,7 +15,8 @@ import re
 import shutil
 import subprocess
 import sys
-import tempfile
+
+from checking import check_each, expect
 
 try:
     from selenium import webdriver
@@ -30,15 +31,6 @@ SKIPPED = 77
 LARGEST_PAGE = 3_000_000  # bytes
 # CSS pixels; 320 is the width without scrolling sideways of WCAG 2.1, 1.4.10.
 PHONE, DESK, PAPER = (320, 844), (1280, 900), (680, 1000)
-
-
-class Failed(Exception):
-    pass
-
-
-def expect(condition, words):
-    if not condition:
-        raise Failed(words)
 
 
 def report(program, job, output, *options):
@@ -156,6 +148,41 @@ def check_levels(driver):
     expect(picture(driver) != seen, "a click on a level does not change the picture")
 
 
+def check_rounding(driver):
+    """Surfaces are carried with few triangles and rounded by the page: an icosahedron comes near the
+    sphere of its corners, and stays closed."""
+    phi = (1 + 5 ** 0.5) / 2
+    corners = [turn for a in (1, -1) for b in (phi, -phi)
+               for turn in ((0, a, b), (a, b, 0), (b, 0, a))]
+    corners = [[x / (1 + phi * phi) ** 0.5 for x in corner] for corner in corners]
+    near = [[j for j in range(12) if 0.4 < sum(map(float.__mul__, corners[i], corners[j])) < 0.5]
+            for i in range(12)]
+    faces = [(i, j, k) for i in range(12) for j in near[i] for k in near[i]
+             if i < j < k and k in near[j]]
+    flat = [x for corner in corners for x in corner]
+    rounded = driver.execute_script("""
+        const {vertices, normals, triangles} = parted({
+          vertices: Float32Array.from(arguments[0]), normals: Float32Array.from(arguments[0]),
+          triangles: Uint32Array.from(arguments[1])});
+        return [vertices, normals, triangles].map(numbers => [...numbers]);""",
+                                    flat, [corner for face in faces for corner in face])
+    vertices, normals = ([values[i:i + 3] for i in range(0, len(values), 3)]
+                         for values in rounded[:2])
+    expect(len(vertices) == 12 + 30 and len(rounded[2]) == 3 * 80, "a triangle is not parted in four")
+    edges = {}
+    for i in range(0, len(rounded[2]), 3):
+        for j in range(3):
+            edge = frozenset((rounded[2][i + j], rounded[2][i + (j + 1) % 3]))
+            edges[edge] = edges.get(edge, 0) + 1
+    expect(len(edges) == 120 and set(edges.values()) == {2}, "the rounded surface is not closed")
+    for vertex, normal in zip(vertices[12:], normals[12:]):
+        radius = sum(x * x for x in vertex) ** 0.5
+        # cos(t) (1 + sin(t)^2 / 2), t half the angle of an edge (cos 2t = 1/sqrt 5), by the cubic's
+        # formula; flat it would be cos(t) = 0.851.
+        expect(abs(radius - 0.9682) < 1e-3, f"the middle of an edge lies at {radius:.4f} of the radius")
+        expect(abs(sum(x * y for x, y in zip(vertex, normal)) / radius - 1) < 1e-5, "a normal leans")
+
+
 def check_keyboard(driver):
     before = energy_words(driver)
     driver.switch_to.active_element.send_keys(Keys.ARROW_UP)
@@ -194,6 +221,17 @@ def check_sorting(driver):
         expect(column.get_attribute("aria-sort") ==
                ("ascending" if direction > 0 else "descending"), "aria-sort does not say so")
     expect(sum(len(values) for values in parts) > 1, "nothing to sort")
+
+
+def check_captions(driver):
+    """A short caption stays in one line, however narrow its table, and the table stays narrow."""
+    broken = driver.execute_script("""
+        return [...document.querySelectorAll('.table caption .caption')].filter(words => {
+          const style = getComputedStyle(words);
+          const short = words.childElementCount === 0 && words.textContent.length < 40;
+          return short && words.getBoundingClientRect().height > 2 * parseFloat(style.fontSize);
+        }).map(words => words.textContent);""")
+    expect(not broken, f"captions break: {broken}")
 
 
 def check_print(driver, folder):
@@ -282,8 +320,10 @@ def check(program, job, folder):
         check_loading(driver, page)
         check_structure(driver)
         check_levels(driver)
+        check_rounding(driver)
         check_keyboard(driver)
         check_sorting(driver)
+        check_captions(driver)
         check_print(driver, folder)
         check_phone(driver)
         check_dark(driver)
@@ -299,15 +339,7 @@ def main():
     if shutil.which("chromium") is None or shutil.which("chromedriver") is None:
         print("skipped: chromium and chromium-driver are not installed")
         return SKIPPED
-    failures = 0
-    for job in jobs:
-        with tempfile.TemporaryDirectory() as folder:
-            try:
-                print(f"{os.path.basename(job)}: as it should be ({check(program, job, folder)})")
-            except Failed as failure:
-                failures += 1
-                print(f"{os.path.basename(job)}: {failure}")
-    return 1 if failures or not jobs else 0
+    return check_each(check, program, jobs)
 
 
 if __name__ == "__main__":

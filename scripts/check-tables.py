@@ -20,17 +20,10 @@ import subprocess
 import sys
 import tempfile
 
+from checking import Failed, expect
+
 FARTHEST_INTO_MARGIN = 40.0  # pt; the outer margin of a page has twice that and more
 VOID = {"meta", "br", "hr", "img", "link", "input", "col"}
-
-
-class Failed(Exception):
-    pass
-
-
-def expect(condition, words):
-    if not condition:
-        raise Failed(words)
 
 
 def written(program, *arguments):

@@ -27,7 +27,8 @@ std::vector<std::string> orbitals_in_irrep(const SymmetryResult& result, const B
   }
   std::vector<std::string> names;
   for (int m = 0; m < shell.size(); ++m) {
-    if (std::abs(projector(m, m)) > 1e-6) names.push_back(salc_orbital_name(shell, m, false));
+    if (std::abs(projector(m, m)) > 1e-6)
+      names.push_back(salc_orbital_name(shell, m, OrbitalFrame::Standard));
   }
   return names;
 }

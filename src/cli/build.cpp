@@ -8,6 +8,7 @@
 
 #include "cli/commands.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
 #include "complex/build.hpp"
 #include "core/error.hpp"
 #include "core/parse.hpp"
@@ -26,6 +27,7 @@ struct BuildOptions {
   std::optional<double> angle;
   std::string ligands;
   std::string list;
+  std::string variant;
   OutputOptions output;
 };
 
@@ -121,6 +123,9 @@ struct Built {
 
 Built build(const BuildOptions& options) {
   if (options.words.size() >= 2 && !is_job(options.words[0])) {
+    if (!options.variant.empty()) {
+      throw CLI::ValidationError("--variant is one of a job file; a complex in words has none");
+    }
     std::vector<std::string> files;
     if (!options.ligands.empty()) files.push_back(options.ligands);
     return {build_complex(spec_of_words(options)), "", files};
@@ -135,18 +140,27 @@ Built build(const BuildOptions& options) {
         "--oxidation, --charge, --angle and --ligands go with a complex on the command line; in a "
         "job they stand in the file");
   }
-  Job job = read_job(options.words[0]);
+  Job job = read_job_or_variant(options.words[0], options.variant);
   if (!job.built) {
     throw Error(
         fmt::format("{}: has no section `build`; give a metal, a polyhedron and ligands "
                     "there",
-                    options.words[0]));
+                    job_place(options.words[0], options.variant)));
   }
   return {std::move(*job.built), job.title, job.source_files};
 }
 
+Report report_of(const Built& built, const BuildOptions& options) {
+  Report report = build_report(built.complex, built.title);
+  const std::string& file = options.words[0];
+  if (is_job(file)) add_variants_fact(report, file, options.variant);
+  return report;
+}
+
 void run_list(const BuildOptions& options) {
-  if (!options.words.empty()) throw CLI::ValidationError("--list stands alone");
+  if (!options.words.empty() || !options.variant.empty()) {
+    throw CLI::ValidationError("--list stands alone");
+  }
   if (wants_xyz(options.output) || options.output.format == "json") {
     throw CLI::ValidationError("--list is written as text, markdown, latex or html");
   }
@@ -162,15 +176,14 @@ void run(const BuildOptions& options) {
   refuse_to_overwrite(options.output, built.files_read);
   if (!wants_xyz(options.output)) {
     const bool json = chosen_format(options.output) == Format::Json;
-    return emit(options.output,
-                json ? build_json(built.complex, built.title)
-                     : written_report(build_report(built.complex, built.title), options.output));
+    return emit(options.output, json ? build_json(built.complex, built.title)
+                                     : written_report(report_of(built, options), options.output));
   }
   emit(options.output, build_xyz(built.complex, built.title));
   if (options.output.output.empty()) return;
   OutputOptions terminal;
   terminal.width = options.output.width;
-  emit(terminal, written_report(build_report(built.complex, built.title), terminal));
+  emit(terminal, written_report(report_of(built, options), terminal));
 }
 
 }  // namespace
@@ -185,6 +198,7 @@ Command add_build(CLI::App& program) {
                   "order of the vertices. NAME@1,3 puts a ligand on each of these vertices, "
                   "NAME@1+2+3 one over all of them: a π ligand, or a chelate with as many teeth")
       ->option_text("JOB | METAL POLYHEDRON LIGAND ...");
+  add_variant_option(*app, options->variant);
   app->add_option("--oxidation", options->oxidation, "Oxidation state of the metal")
       ->option_text("N")
       ->group("Complex");

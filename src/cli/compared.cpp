@@ -9,10 +9,9 @@
 #include <fmt/format.h>
 
 #include "cli/computed.hpp"
+#include "cli/variant_option.hpp"
 #include "core/error.hpp"
 #include "core/parallel.hpp"
-#include "core/parse.hpp"
-#include "core/text.hpp"
 #include "job/variants.hpp"
 #include "output/varied_bonds.hpp"
 
@@ -37,14 +36,8 @@ std::vector<VariantJob> all_variants(const std::vector<std::string>& files) {
 int find_reference(const std::vector<VariantJob>& variants, const std::string& name) {
   if (name.empty()) return 0;
   std::vector<std::string> names;
-  for (std::size_t i = 0; i < variants.size(); ++i) {
-    if (variants[i].name == name) return static_cast<int>(i);
-    names.push_back(variants[i].name);
-  }
-  const std::string nearest = nearest_word(name, names);
-  throw Error(fmt::format(
-      "--reference: there is no variant {}{}; the first is '{}'", irrepwise::quoted(name),
-      nearest.empty() ? "" : " (did you mean '" + nearest + "'?)", names.front()));
+  for (const VariantJob& variant : variants) names.push_back(variant.name);
+  return find_variant("--reference", names, name);
 }
 
 // A line that counts, on a terminal only: a pipe or a log gets nothing. It is gone at the end, also

@@ -14,6 +14,8 @@
 #include "cli/draw_variants.hpp"
 #include "cli/orbital_choice.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "core/output_file.hpp"
 #include "figure/gltf.hpp"
@@ -27,16 +29,6 @@
 
 namespace irrepwise::cli {
 namespace {
-
-// Adds the name of the option as the place of any error.
-template <typename Action>
-auto named(const char* option, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    throw error_at(option, error);
-  }
-}
 
 struct Drawn {
   std::string bytes;
@@ -87,7 +79,7 @@ Camera camera_for(const LevelsResult& result, const std::vector<OrbitalScene>& s
 SurfaceChoice surface_choice(const DrawOptions& options) {
   SurfaceChoice choice;
   if (options.share) {
-    named("--share", [&] { check_share(*options.share); });
+    at_place("--share", [&] { check_share(*options.share); });
     choice.share = *options.share;
   }
   choice.spacing_angstrom = options.spacing_angstrom;
@@ -105,17 +97,10 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
   diagram.to_ev = options.to_ev.value_or(window.to_ev);
   Drawn out;
   if (options.pictures) {
-    std::vector<OrbitalChoice> choices;
-    for (const std::optional<int>& level :
-         {result.levels.frontier.homo, result.levels.frontier.lumo}) {
-      if (!level) continue;
-      const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
-      choices.insert(choices.end(), partners.begin(), partners.end());
-    }
-    const ChosenOrbitals chosen = chosen_orbitals(result, choices);
+    const ChosenOrbitals chosen = chosen_orbitals(result, frontier_orbitals(result.levels));
     const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
     const Camera camera =
-        named("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
+        at_place("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
     constexpr int picture_px = 260;
     for (std::size_t i = 0; i < surfaces.scenes.size(); ++i) {
       const auto level = static_cast<std::size_t>(chosen.choices[i].level);
@@ -123,6 +108,10 @@ Drawn draw_levels(const LevelsResult& result, const DrawOptions& options) {
           std::make_shared<const Raster>(surface_picture(surfaces.scenes[i], camera, picture_px)));
     }
     out.remarks = surfaces.remarks;
+    diagram.notes.push_back(plain_text(fmt::format(
+        "Pictures: surfaces that enclose {:g}\u00A0% of the density, blue where the orbital is "
+        "positive, amber where it is negative; degenerate partners side by side.",
+        100.0 * surfaces.scenes.front().share)));
   }
   out.bytes = picture_bytes(level_diagram_figure(diagram), draw_format(options.output));
   return out;
@@ -155,7 +144,7 @@ Drawn draw_contours(const LevelsResult& result, const ChosenOrbitals& chosen,
   for (std::size_t i = 0; i < chosen.choices.size(); ++i) {
     const OrbitalField field(molecule, result.basis,
                              chosen.coefficients.col(static_cast<Eigen::Index>(i)));
-    planes.push_back(named("--plane", [&] { return plane_for(result, field, 0, options); }));
+    planes.push_back(at_place("--plane", [&] { return plane_for(result, field, 0, options); }));
     maps.push_back(contour_map(field, 0, planes.back(), contour_levels()));
   }
   const Figure figure =
@@ -172,7 +161,7 @@ Drawn draw_surfaces(const LevelsResult& result, const ChosenOrbitals& chosen,
                     const DrawOptions& options) {
   const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, surface_choice(options));
   const Camera camera =
-      named("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
+      at_place("--view", [&] { return camera_for(result, surfaces.scenes, options.view); });
   const Figure figure = surface_sheet(sheet_heading(result), result.symmetry.molecule,
                                       chosen.captions, surfaces.scenes, camera);
   return {picture_bytes(figure, draw_format(options.output)), surfaces.remarks};
@@ -257,11 +246,12 @@ void run(DrawOptions options) {
   OutputOptions output;
   output.output = options.output;
   refuse_to_overwrite(output, job.source_files);
-  const LevelsResult result = computed(job, options.job.file);
+  const LevelsResult result = computed(job, job_place(options.job));
   const Drawn picture = drawn(result, options, kind);
   print_warnings(output, result.warnings);
   write_file(options.output, picture.bytes);
-  std::string remarks;
+  const std::string variants = words_on_variants(options.job.file, options.job.variant);
+  std::string remarks = variants.empty() ? "" : "variant: " + variants + "\n";
   for (const std::string& remark : picture.remarks) remarks += remark + "\n";
   write_descriptor(STDOUT_FILENO, remarks, "standard output");
 }
@@ -321,6 +311,7 @@ Command add_draw(CLI::App& program) {
       "Examples:\n"
       "  irrepwise draw complex.xyz --charge -2 --output levels.svg\n"
       "  irrepwise draw family.yaml --reference chloride --output variants.svg\n"
+      "  irrepwise draw family.yaml homo --variant chloride --output homo.png\n"
       "  irrepwise draw complex.xyz homo-1..lumo --output orbitals.png\n"
       "  irrepwise draw complex.xyz 2eg --plane xy --output contours.svg\n"
       "  irrepwise draw complex.xyz 2eg:1 --share 0.8 --output orbital.glb");

@@ -30,6 +30,11 @@ void check_options(const DrawOptions& options, DrawKind kind) {
   const bool grid = surface || kind == DrawKind::Grid || (levels && options.pictures);
   refuse(!variants && !options.reference.empty(), "--reference", "variants side by side");
   refuse(!variants && !options.variants.empty(), "--variants", "variants side by side");
+  if (variants && !options.job.variant.empty()) {
+    throw CLI::ValidationError(
+        "--variant takes one molecule of one job; leave the other files out, or name variants to "
+        "lay side by side with --variants");
+  }
   if (variants && options.job.is_used()) {
     throw CLI::ValidationError(
         "options that change charge, method or symmetry are for one molecule; for variants, write "
@@ -95,7 +100,8 @@ DrawKind draw_kind(const DrawOptions& options) {
         "orbitals are drawn of one molecule; give one file with them, or several without");
   }
   DrawKind kind = DrawKind::Levels;
-  if (!options.others.empty() || (options.orbitals.empty() && has_variants(options.job.file))) {
+  const bool whole_job = options.orbitals.empty() && options.job.variant.empty();
+  if (!options.others.empty() || (whole_job && has_variants(options.job.file))) {
     kind = DrawKind::Variants;
   }
   if (!options.orbitals.empty()) {

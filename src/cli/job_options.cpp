@@ -5,21 +5,13 @@
 #include <fmt/format.h>
 
 #include "cli/axis.hpp"
+#include "cli/variant_option.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "symmetry/schoenflies.hpp"
 
 namespace irrepwise::cli {
 namespace {
-
-// Adds the option's name as the place of any error.
-template <typename Action>
-auto named(const char* option, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    throw error_at(option, error);
-  }
-}
 
 // The same limits as in a job file: beyond them the decimal point has slipped.
 constexpr double largest_k = 10.0;
@@ -48,6 +40,7 @@ void add_job_options(CLI::App& command, JobOptions& options, FileOption file) {
         ->required(file == FileOption::Required)
         ->option_text("FILE");
   }
+  add_variant_option(command, options.variant);
   const auto add = [&](const char* name, auto& value, const char* text, const char* help,
                        const char* group) {
     command.add_option(name, value, help)->option_text(text)->group(group);
@@ -74,10 +67,14 @@ void add_job_options(CLI::App& command, JobOptions& options, FileOption file) {
   add("--subgroup", options.subgroup, "GROUP", "Work in this subgroup: D2h, C2v …", "Symmetry");
 }
 
+std::string job_place(const JobOptions& options) {
+  return job_place(options.file, options.variant);
+}
+
 Job read_job_with(const JobOptions& options) {
-  Job job = read_job(options.file);
+  Job job = read_job_or_variant(options.file, options.variant);
   if (options.charge) {
-    job.molecule = named("--charge", [&] { return job.molecule.with_charge(*options.charge); });
+    job.molecule = at_place("--charge", [&] { return job.molecule.with_charge(*options.charge); });
     job.places["charge"] = "--charge";
   }
   if (options.multiplicity) {
@@ -94,7 +91,7 @@ Job read_job_with(const JobOptions& options) {
     job.source_files.push_back(options.parameters);
   }
   if (!options.rule.empty()) {
-    const Rule rule = named("--rule", [&] { return parse_rule(options.rule); });
+    const Rule rule = at_place("--rule", [&] { return parse_rule(options.rule); });
     if (rule != job.hueckel.rule) job.hueckel.k.reset();  // the job's K was meant for its rule
     job.hueckel.rule = rule;
   }
@@ -109,16 +106,16 @@ Job read_job_with(const JobOptions& options) {
     job.symmetry.tolerance_angstrom =
         in_range("--tolerance", *options.tolerance, largest_tolerance_angstrom);
   if (!options.z.empty()) {
-    job.symmetry.z = named("--z", [&] { return parse_axis(options.z, job.molecule); });
+    job.symmetry.z = at_place("--z", [&] { return parse_axis(options.z, job.molecule); });
     job.places["z"] = "--z";
   }
   if (!options.x.empty()) {
-    job.symmetry.x = named("--x", [&] { return parse_axis(options.x, job.molecule); });
+    job.symmetry.x = at_place("--x", [&] { return parse_axis(options.x, job.molecule); });
     job.places["x"] = "--x";
   }
   if (!options.group.empty()) {
     job.symmetry.group =
-        named("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
+        at_place("--symmetry", [&] { return parse_schoenflies(options.group).name(); });
     job.places["group"] = "--symmetry";
   }
   if (options.limit) {

@@ -12,6 +12,7 @@ namespace irrepwise::cli {
 
 struct JobOptions {
   std::string file;
+  std::string variant;  // of the job file; empty: the job as it is
   std::optional<int> charge;
   std::optional<int> multiplicity;
   std::string parameters;
@@ -24,7 +25,7 @@ struct JobOptions {
   std::string group;
   std::optional<double> limit;
 
-  /// Whether any of them, the file aside, was given.
+  /// Whether any of them, file and variant aside, was given.
   [[nodiscard]] bool is_used() const;
 };
 
@@ -32,6 +33,9 @@ enum class FileOption { Required, Optional, None };
 
 void add_job_options(CLI::App& command, JobOptions& options,
                      FileOption file = FileOption::Required);
+
+/// @returns  the file, and the variant where there is one: how messages call the job
+[[nodiscard]] std::string job_place(const JobOptions& options);
 
 /// Reads the file and applies the options.
 /// @throws Error  as read_job; for an option, with its name as the place

@@ -8,6 +8,7 @@
 #include "cli/computed.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
 #include "output/levels_json.hpp"
 #include "output/levels_report.hpp"
 
@@ -57,14 +58,18 @@ std::string written(const LevelsResult& result, const LevelsOptions& options) {
     case Format::Yaml:
       break;
   }
-  return written_report(levels_report(result, options.window), options.output);
+  LevelWindow window = options.window;
+  if (chosen_format(options.output) == Format::Text) window.hint = LevelsHint::NameAllOption;
+  Report report = levels_report(result, window);
+  add_variants_fact(report, options.job.file, options.job.variant);
+  return written_report(report, options.output);
 }
 
 void run(const LevelsOptions& options) {
   check_usage(options);
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
-  const LevelsResult result = computed(job, options.job.file);
+  const LevelsResult result = computed(job, job_place(options.job));
   const std::string text = written(result, options);
   print_warnings(options.output, result.warnings);
   emit(options.output, text);

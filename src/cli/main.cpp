@@ -12,6 +12,7 @@
 #include <unistd.h>
 
 #include "cli/commands.hpp"
+#include "cli/help_format.hpp"
 #include "core/error.hpp"
 #include "core/output_file.hpp"
 #include "core/text.hpp"
@@ -126,6 +127,7 @@ int run(int argc, char** argv) {
       "Takes a geometry, finds its point group, and answers with the orbital energies, each with\n"
       "its irreducible representation, what it is made of, and the charges and bonds that follow.",
       "irrepwise");
+  program.formatter(cli::help_format());  // commands take it over as they are added
   program.set_help_flag("-h,--help", "Show this help");
   program.set_version_flag("--version", "irrepwise " IRREPWISE_VERSION, "Show the version");
   program.require_subcommand(1);

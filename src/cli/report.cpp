@@ -14,6 +14,7 @@
 #include "cli/commands.hpp"
 #include "cli/compared.hpp"
 #include "cli/computed.hpp"
+#include "cli/draw_variants.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
 #include "core/error.hpp"
@@ -30,6 +31,7 @@ struct ReportOptions {
   std::vector<std::string> files;
   JobOptions job;
   std::string reference;
+  std::vector<std::string> variants;
   PageOptions page;
   std::optional<int> threads;
   OutputOptions output;
@@ -69,7 +71,7 @@ Written molecule(const ReportOptions& options, const std::string& command) {
   job_options.file = options.files.front();
   const Job job = read_job_with(job_options);
   refuse_to_overwrite(options.output, job.source_files);
-  const LevelsResult result = computed(job, job_options.file);
+  const LevelsResult result = computed(job, job_place(job_options));
   const SymmetryResult symmetry = symmetry_answer(job, result.basis);
   return {molecule_page(result, symmetry, provenance(command, job.source_files), options.page),
           result.warnings};
@@ -78,7 +80,9 @@ Written molecule(const ReportOptions& options, const std::string& command) {
 Written comparison(const ReportOptions& options, const std::string& command) {
   const Compared result = compared(options.files, options.reference, options.threads);
   refuse_to_overwrite(options.output, result.files_read);
-  return {comparison_page(result.comparison, provenance(command, result.files_read), options.page),
+  PageOptions page = options.page;
+  page.variants = chosen_variants(result.comparison, options.variants);
+  return {comparison_page(result.comparison, provenance(command, result.files_read), page),
           warnings_of(result.comparison)};
 }
 
@@ -88,7 +92,12 @@ void run(ReportOptions options, const std::string& command) {
                             options.output.output));
   }
   options.page.threads = options.threads.value_or(hardware_threads());
-  const bool several = options.files.size() > 1 || has_variants(options.files.front());
+  if (options.files.size() > 1 && !options.job.variant.empty()) {
+    throw CLI::ValidationError(
+        "--variant takes one molecule of one job; leave the other files out");
+  }
+  const bool several = options.files.size() > 1 ||
+                       (options.job.variant.empty() && has_variants(options.files.front()));
   if (several && options.job.is_used()) {
     throw CLI::ValidationError(
         "options of a single job (charge, method, symmetry) cannot hold for a comparison; write "
@@ -96,6 +105,9 @@ void run(ReportOptions options, const std::string& command) {
   }
   if (!several && !options.reference.empty()) {
     throw CLI::ValidationError("--reference needs variants; there is one molecule");
+  }
+  if (!several && !options.variants.empty()) {
+    throw CLI::ValidationError("--variants needs variants; there is one molecule");
   }
   const Written page = several ? comparison(options, command) : molecule(options, command);
   print_warnings({"text", options.output.output, {}}, page.warnings);
@@ -123,6 +135,12 @@ Command add_report(CLI::App& program, const std::string& command) {
                   "Variant that the others are matched with (the first by default)")
       ->option_text("NAME")
       ->group("Comparison");
+  app->add_option("--variants", options->variants,
+                  "Those in the diagram, in this order, with commas; by default the first 12. The "
+                  "tables have all")
+      ->delimiter(',')
+      ->option_text("NAMES")
+      ->group("Comparison");
   app->add_option("--from", options->page.from_ev, "Lowest energy of the level diagram")
       ->option_text("eV")
       ->group("Level diagram");
@@ -139,7 +157,8 @@ Command add_report(CLI::App& program, const std::string& command) {
       "copy.\n\n"
       "Examples:\n"
       "  irrepwise report complex.xyz --charge -2 --output report.html\n"
-      "  irrepwise report family.yaml --reference chloride --output family.html");
+      "  irrepwise report family.yaml --reference chloride --output family.html\n"
+      "  irrepwise report family.yaml --variant carbonyl --output carbonyl.html");
   return {app, [options, command] { run(*options, command); }};
 }
 

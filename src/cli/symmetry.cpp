@@ -9,6 +9,8 @@
 #include "cli/commands.hpp"
 #include "cli/job_options.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "molecule/xyz.hpp"
 #include "output/symmetry_json.hpp"
@@ -77,31 +79,21 @@ Computed compute(const Job& job, const SymmetryCommandOptions& options) {
   return {std::move(result), std::move(warnings)};
 }
 
-// Adds the option as the place of any error.
-template <typename Action>
-auto for_place(const std::string& place, Action action) {
-  try {
-    return action();
-  } catch (const Error& error) {
-    throw error_at(place, error);
-  }
-}
-
 // Adds the place of what is wrong in the job.
 template <typename Action>
 auto for_job(const Job& job, const SymmetryCommandOptions& options, Action action) {
   try {
     return action();
   } catch (const Error& error) {
-    throw error_in(job, options.job.file, error);
+    throw error_in(job, job_place(options.job), error);
   }
 }
 
 // The questions of the command line, each with its option as the place of any error.
 GroupAnswers answers(const PointGroup& group, const SymmetryCommandOptions& options) {
-  return {for_place("--product", [&] { return answer_products(group, options.products); }),
-          for_place("--terms", [&] { return answer_terms(group, options.terms); }),
-          for_place("--descent", [&] { return answer_descents(group, options.descents); })};
+  return {at_place("--product", [&] { return answer_products(group, options.products); }),
+          at_place("--terms", [&] { return answer_terms(group, options.terms); }),
+          at_place("--descent", [&] { return answer_descents(group, options.descents); })};
 }
 
 // The structure made exact, turned and shifted back to where the input had it.
@@ -147,9 +139,10 @@ std::string written(const SymmetryResult& result, const SymmetryHeadings& headin
     case Format::Yaml:
       break;
   }
-  return written_report(
-      symmetry_report(result, headings, options.sections, width_of_tables(options.output)),
-      options.output);
+  Report report =
+      symmetry_report(result, headings, options.sections, width_of_tables(options.output));
+  add_variants_fact(report, options.job.file, options.job.variant);
+  return written_report(report, options.output);
 }
 
 std::string written(const PointGroup& group, const GroupAnswers& asked,
@@ -179,6 +172,9 @@ void check_usage(const SymmetryCommandOptions& options) {
         "--group is for a group without a molecule; leave it or the FILE out (--symmetry makes the "
         "structure exact in a group)");
   }
+  if (!options.group.empty() && !options.job.variant.empty()) {
+    throw CLI::ValidationError("--variant is one of a job FILE; --group has none");
+  }
   if (!options.group.empty() && (options.sections.salcs || options.sections.operations ||
                                  options.transitions || !options.symmetrise.empty())) {
     throw CLI::ValidationError("--group has no molecule; the option needs a FILE");
@@ -194,12 +190,12 @@ void run(SymmetryCommandOptions options) {
   if (options.transitions) options.sections.vibrations = true;
   check_usage(options);
   if (!options.group.empty()) {
-    const PointGroup group(for_place("--group", [&] { return parse_schoenflies(options.group); }));
+    const PointGroup group(at_place("--group", [&] { return parse_schoenflies(options.group); }));
     return emit(options.output, written(group, answers(group, options), options));
   }
   if (!options.symmetrise.empty()) {
     options.symmetrise =
-        for_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
+        at_place("--symmetrise", [&] { return parse_schoenflies(options.symmetrise).name(); });
   }
   Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
@@ -230,7 +226,8 @@ Command add_symmetry(CLI::App& program) {
   flag("--operations", options->sections.operations,
        "Each operation and what it does to the atoms");
   flag("--salcs", options->sections.salcs, "SALCs of each set, shell and irrep");
-  flag("--local", options->local, "SALCs in each atom's own frame: σ and π about the centre");
+  flag("--local", options->local,
+       "SALCs in each atom's own frame: σ and π along its bond towards the centre");
   flag("--transitions", options->transitions,
        "Selection rules between frontier levels, terms of an open shell, vibrations");
   flag("-a,--all", options->all, "All of these");

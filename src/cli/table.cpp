@@ -10,9 +10,12 @@
 #include "cli/job_options.hpp"
 #include "cli/orbital_choice.hpp"
 #include "cli/output_options.hpp"
+#include "cli/variant_option.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "core/parse.hpp"
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/orbital_table_data.hpp"
 #include "output/orbital_table_layout.hpp"
 #include "output/population_document.hpp"
@@ -77,13 +80,16 @@ void check_usage(const TableOptions& options) {
 }
 
 // A report of tables alone: their legends say what other reports say on top.
-Report report_of(const LevelsResult& result, std::vector<Table> tables, Format format) {
+Report report_of(const LevelsResult& result, std::vector<Table> tables,
+                 const TableOptions& options) {
   Report report;
-  if (format == Format::Html) {  // a page has a title
-    report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+  if (chosen_format(options.output) == Format::Html) {  // a page has a title
+    report.title = result.title.empty() ? readable_formula(result.molecule) : result.title;
   }
   report.tables = std::move(tables);
   report.warnings = result.warnings;
+  const std::string variants = words_on_variants(options.job.file, options.job.variant);
+  if (!variants.empty()) report.remarks.push_back("Variant: " + variants + ".");
   return report;
 }
 
@@ -114,7 +120,7 @@ std::string written_populations(const LevelsResult& result, const TableOptions& 
   if (format == Format::Json) return populations_json(result, source);
   if (format == Format::Csv) return populations_csv(result);
   const Grouping grouping = options.all ? Grouping::Single : Grouping::Equivalent;
-  return written_report(report_of(result, population_tables(result, grouping, source), format),
+  return written_report(report_of(result, population_tables(result, grouping, source), options),
                         options.output);
 }
 
@@ -122,14 +128,10 @@ OrbitalTable table_asked_for(const LevelsResult& result, const TableOptions& opt
   OrbitalTableOptions table;
   if (options.of == "shares") table.entries = TableEntries::Shares;
   if (options.over == "salcs") table.functions = TableFunctions::Salcs;
-  if (options.frame == "local") table.frame = TableFrame::Local;
+  if (options.frame == "local") table.frame = OrbitalFrame::Local;
   const std::vector<OrbitalChoice> choices =
       choose_orbitals(options.orbitals.empty() ? default_orbitals : options.orbitals, result);
-  try {
-    return orbital_table(result, choices, table);
-  } catch (const Error& error) {
-    throw error_at(options.job.file, error);
-  }
+  return at_place(job_place(options.job), [&] { return orbital_table(result, choices, table); });
 }
 
 std::string written(const LevelsResult& result, const TableOptions& options) {
@@ -149,7 +151,7 @@ std::string written(const LevelsResult& result, const TableOptions& options) {
                                                                        : smallest_coefficient);
   layout.width = width_of_tables(options.output);
   layout.source = source;
-  return written_report(report_of(result, orbital_tables(result, table, layout), format),
+  return written_report(report_of(result, orbital_tables(result, table, layout), options),
                         options.output);
 }
 
@@ -157,7 +159,7 @@ void run(const TableOptions& options) {
   check_usage(options);
   const Job job = read_job_with(options.job);
   refuse_to_overwrite(options.output, job.source_files);
-  const LevelsResult result = computed(job, options.job.file);
+  const LevelsResult result = computed(job, job_place(options.job));
   const std::string text = written(result, options);
   print_warnings(options.output, result.warnings);
   emit(options.output, text);
@@ -186,7 +188,7 @@ Command add_table(CLI::App& program) {
       "orbitals (default), or salcs: those of `irrepwise symmetry --salcs`")
       ->check(one_of({"orbitals", "salcs"}));
   add("--frame", options->frame, "FRAME",
-      "standard (default), or local: σ and π of each atom about the centre")
+      "standard (default), or local: σ and π of each atom, z along its bond towards the centre")
       ->check(one_of({"standard", "local"}));
   add("--threshold", options->threshold, "X",
       "Leave smaller entries blank: 0.05 by default, 1 % for shares, 0 in json and csv");

@@ -10,8 +10,8 @@
 
 #include <fmt/format.h>
 
-#include "complex/at_place.hpp"
 #include "complex/second_centre.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 
 namespace irrepwise {

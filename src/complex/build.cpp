@@ -11,9 +11,9 @@
 #include <fmt/format.h>
 
 #include "complex/assembly.hpp"
-#include "complex/at_place.hpp"
 #include "complex/charges.hpp"
 #include "complex/conformation.hpp"
+#include "core/at_place.hpp"
 #include "molecule/element.hpp"
 #include "symmetry/molecular_symmetry.hpp"
 

@@ -6,8 +6,8 @@
 
 #include <fmt/format.h>
 
-#include "complex/at_place.hpp"
 #include "complex/spec.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "core/text.hpp"
 

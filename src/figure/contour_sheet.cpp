@@ -172,6 +172,19 @@ std::string level_words(std::span<const ContourMap> maps) {
   return words;
 }
 
+// "x", "(0.71, 0.00, 0.71)"
+std::string direction_words(const Eigen::Vector3d& direction) {
+  for (int i = 0; i < 3; ++i) {
+    if (direction(i) > 1.0 - 1e-9) return std::string(1, "xyz"[i]);
+  }
+  const auto number = [](double value) {
+    const std::string digits = fmt::format("{:.2f}", std::abs(value));
+    return (value < 0.0 && digits != "0.00" ? "−" : "") + digits;
+  };
+  return fmt::format("({}, {}, {})", number(direction.x()), number(direction.y()),
+                     number(direction.z()));
+}
+
 }  // namespace
 
 Figure contour_sheet(const SheetWords& words, const Molecule& molecule,
@@ -196,6 +209,9 @@ Figure contour_sheet(const SheetWords& words, const Molecule& molecule,
     add_scale_bar(cell.elements, scale);
     cell.caption = caption_lines(caption);
     cell.caption.push_back(plain_text(planes[i].words));
+    cell.caption.push_back(
+        plain_text(fmt::format("{} to the right, {} upwards", direction_words(planes[i].right),
+                               direction_words(planes[i].up))));
     if (maps[i].contours.empty()) cell.caption.push_back(plain_text("zero here, or nearly so"));
     sheet.description += cell.title + ". ";
     sheet.cells.push_back(std::move(cell));

@@ -3,6 +3,7 @@
 #include <algorithm>
 #include <cmath>
 #include <cstddef>
+#include <set>
 
 #include "figure/level_lanes.hpp"
 #include "figure/level_placing.hpp"
@@ -16,6 +17,9 @@ constexpr double least_bar = 7.0;
 constexpr double lane_gap = 8.0;   // between levels that share the width
 constexpr double clearance = 2.6;  // px of white between bars one above the other
 constexpr double leader = 14.0;    // room between bars and labels
+constexpr double tag_leader = 10.0;
+constexpr double crowd = 11.0;  // px: closer than this, two lines cannot be told apart
+constexpr int most_stairs = 6;  // bars that rise side by side
 
 // What a level needs above and below its line.
 double half_extent(const DiagramLevel& level) {
@@ -43,12 +47,15 @@ std::vector<Cluster> clusters_of(const std::vector<ColumnLevel>& levels) {
     reach = std::min(reach, levels[i].y - half);
   }
   for (Cluster& cluster : clusters) {
+    int bars = 0;
+    for (const std::size_t i : cluster.members) bars += levels[i].level->degeneracy;
+    const bool stairs = bars <= most_stairs;
     for (const std::size_t i : cluster.members) {
       std::vector<bool> taken(cluster.members.size() + 1, false);
       for (std::size_t k = 0; k < cluster.lanes.size(); ++k) {
         const ColumnLevel& other = levels[cluster.members[k]];
         const double needed = half_extent(*levels[i].level) + half_extent(*other.level);
-        if (std::abs(levels[i].y - other.y) < needed) taken[cluster.lanes[k]] = true;
+        if (stairs || std::abs(levels[i].y - other.y) < needed) taken[cluster.lanes[k]] = true;
       }
       std::size_t lane = 0;
       while (taken[lane]) ++lane;
@@ -87,6 +94,36 @@ std::vector<ColumnLevel> shown_levels(const LevelDiagram& diagram, const Diagram
     levels.push_back(drawn);
   }
   return levels;
+}
+
+// Tags for levels that links from the left end at, moved apart like the labels; one that stands
+// alone needs none, unless it was moved.
+double place_tags(std::vector<ColumnLevel>& levels, const std::set<int>& linked, const Font& font) {
+  std::vector<std::size_t> meant;
+  std::vector<double> places;
+  for (std::size_t i = levels.size(); i-- > 0;) {
+    if (!levels[i].level->labelled || linked.count(levels[i].index) == 0) continue;
+    meant.push_back(i);
+    places.push_back(levels[i].y);
+  }
+  const std::vector<double> middles = spread_apart(places, column_tag_height);
+  double widest = 0.0;
+  for (std::size_t k = 0; k < meant.size(); ++k) {
+    ColumnLevel& level = levels[meant[k]];
+    if (!level.crowded && std::abs(middles[k] - level.y) < 0.5) continue;
+    level.tag_y = middles[k];
+    level.tag_width = font.width(label_text(level.level->label), column_tag_size);
+    widest = std::max(widest, level.tag_width);
+  }
+  return widest;
+}
+
+void mark_crowded(std::vector<ColumnLevel>& levels) {  // ascending energy
+  for (std::size_t i = 1; i < levels.size(); ++i) {
+    if (levels[i - 1].y - levels[i].y >= crowd) continue;
+    levels[i - 1].crowded = true;
+    levels[i].crowded = true;
+  }
 }
 
 // Labels are moved apart; y runs downwards, levels upwards.
@@ -146,11 +183,19 @@ double column_scale(const LevelDiagram& diagram) {
   return height / range;
 }
 
-LevelColumn place_level_column(const LevelDiagram& diagram, const DiagramColumn& column,
-                               const Font& font, double left, double top, double per_ev) {
+LevelColumn place_level_column(const LevelDiagram& diagram, std::size_t column, const Font& font,
+                               double left, double top, double per_ev) {
   LevelColumn out;
+  out.levels = shown_levels(diagram, diagram.columns[column], top, per_ev);
+  mark_crowded(out.levels);
+  std::set<int> linked;
+  for (const DiagramLink& link : diagram.links) {
+    if (link.column + 1 == static_cast<int>(column)) linked.insert(link.right_level);
+  }
+  const double tags = place_tags(out.levels, linked, font);
+  out.tags_right = left + tags;
+  if (tags > 0.0) left += tags + tag_leader;
   out.left = left;
-  out.levels = shown_levels(diagram, column, top, per_ev);
   const std::vector<Cluster> clusters = clusters_of(out.levels);
   double width = least_bars_width;
   for (const Cluster& cluster : clusters) {

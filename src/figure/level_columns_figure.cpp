@@ -29,9 +29,17 @@ Group level_group(const ColumnLevel& drawn, const LevelColumn& column, const std
   const Bars bars{drawn.left, drawn.bar, column_bar_gap, drawn.y};
   add_bars(group, level, bars, column_bar_thickness);
   if (is_partly_filled(level)) add_electrons(group, level, bars, column_arrow_height);
+  if (drawn.tag_width > 0.0) {
+    group.elements.emplace_back(
+        line(column.tags_right + 2.0, drawn.tag_y, drawn.left - 1.5, drawn.y, palette::faint, 0.8));
+    group.elements.emplace_back(
+        text_at({column.tags_right - drawn.tag_width, drawn.tag_y + 0.35 * column_tag_size},
+                label_text(level.label), column_tag_size,
+                level.frontier == FrontierMark::None ? palette::muted : level_colour(level)));
+  }
   if (!level.labelled) return group;
   if (std::abs(drawn.label_y - drawn.y) > 2.0) {
-    group.elements.emplace_back(line(column.bars_right + 2.0, drawn.y, column.labels_left - 2.0,
+    group.elements.emplace_back(line(drawn.right + 1.5, drawn.y, column.labels_left - 2.0,
                                      drawn.label_y, palette::faint, 0.8));
   }
   const Colour colour = level_colour(level);
@@ -60,11 +68,21 @@ Stroke link_stroke(const DiagramLink& link) {
   return stroke;
 }
 
-// Where a link may run level through the strip of labels: not across any of them.
-bool is_free(const LevelColumn& column, double y) {
+// Where a link may run level through the strip of labels, or of tags: not across any of them.
+bool is_free_of_labels(const LevelColumn& column, double y) {
   return std::none_of(column.levels.begin(), column.levels.end(), [&](const ColumnLevel& level) {
     return level.label_width > 0.0 && std::abs(level.label_y - y) < 0.5 * column_label_height + 1.0;
   });
+}
+bool is_free_of_tags(const LevelColumn& column, double y) {
+  return std::none_of(column.levels.begin(), column.levels.end(), [&](const ColumnLevel& level) {
+    return level.tag_width > 0.0 && std::abs(level.tag_y - y) < 0.5 * column_tag_height + 1.0;
+  });
+}
+double widest_tag(const LevelColumn& column) {
+  double widest = 0.0;
+  for (const ColumnLevel& level : column.levels) widest = std::max(widest, level.tag_width);
+  return widest;
 }
 
 const ColumnLevel* find(const LevelColumn& column, int index) {
@@ -78,17 +96,25 @@ Path link_path(const DiagramLink& link, const LevelColumn& left, const ColumnLev
                const LevelColumn& right, const ColumnLevel& to) {
   Path path;
   path.stroke = link_stroke(link);
-  // From height to height of the levels, so that it rises where the energy does; labels, which may
-  // stand away from their levels, interrupt it.
+  // From height to height of the levels, so that it rises where the energy does; where labels had
+  // to be moved apart, from name to name, so that each line has ends of its own.
   std::vector<Point2> points;
-  if (is_free(left, from.y)) {
-    points.push_back({left.bars_right + 3.0, from.y});
-  } else if (from.label_width > 0.0 && std::abs(from.label_y - from.y) < 0.5) {
-    points.push_back(
-        {left.labels_left + from.label_width + 4.0, from.y});  // its own label, in line
+  const bool from_label = from.label_width > 0.0;
+  const double from_y = from_label ? from.label_y : from.y;
+  if (from_label) {
+    points.push_back({left.labels_left + from.label_width + 4.0, from_y});
+  } else if (is_free_of_labels(left, from_y)) {
+    points.push_back({left.bars_right + 3.0, from_y});
   }
-  points.push_back({left.right, from.y});
-  points.push_back({right.left - 3.0, to.y});
+  points.push_back({left.right, from_y});
+  const double arrival = right.tags_right - widest_tag(right) - 3.0;
+  if (to.tag_width > 0.0) {
+    points.push_back({arrival, to.tag_y});
+    points.push_back({right.tags_right - to.tag_width - 3.0, to.tag_y});
+  } else {
+    points.push_back({arrival, to.y});
+    if (is_free_of_tags(right, to.y)) points.push_back({right.left - 3.0, to.y});
+  }
   path.lines = {std::move(points)};
   return path;
 }
@@ -153,7 +179,7 @@ std::vector<LevelColumn> placed_columns(const LevelDiagram& diagram, const Font&
   std::vector<LevelColumn> columns;
   double x = margin + axis_width + 24.0;
   for (const DiagramColumn& column : diagram.columns) {
-    columns.push_back(place_level_column(diagram, column, font, x, top, per_ev));
+    columns.push_back(place_level_column(diagram, columns.size(), font, x, top, per_ev));
     // No word of a title is broken, however long.
     double widest = 0.0;
     for (const RichText& row : wrapped(font, plain_text(column.title), column_title_size, 0.0)) {

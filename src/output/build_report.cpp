@@ -10,8 +10,8 @@
 #include "molecule/element.hpp"
 #include "molecule/polyhedra.hpp"
 #include "molecule/xyz.hpp"
+#include "output/caption_words.hpp"
 #include "output/json_text.hpp"
-#include "output/levels_result.hpp"
 
 namespace irrepwise {
 namespace {
@@ -121,7 +121,7 @@ Table atom_table(const Molecule& molecule) {
 }
 
 std::string title_or_formula(const BuiltComplex& complex, const std::string& title) {
-  return title.empty() ? charged_formula(complex.molecule) : title;
+  return title.empty() ? readable_formula(complex.molecule) : title;
 }
 
 }  // namespace
@@ -129,7 +129,7 @@ std::string title_or_formula(const BuiltComplex& complex, const std::string& tit
 Report build_report(const BuiltComplex& complex, const std::string& title) {
   Report report;
   report.title = title_or_formula(complex, title);
-  report.facts.push_back({"formula", {charged_formula(complex.molecule)}});
+  report.facts.push_back({"formula", {readable_formula(complex.molecule)}});
   report.facts.push_back({"group", {complex.point_group}});
   for (std::size_t c = 0; c < complex.centres.size(); ++c) {
     const BuiltCentre& centre = complex.centres[c];

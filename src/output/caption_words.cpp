@@ -1,15 +1,34 @@
 #include "output/caption_words.hpp"
 
+#include <array>
+#include <cstddef>
+#include <cstdlib>
 #include <string>
 #include <vector>
 
 #include <fmt/format.h>
+
+#include "output/symmetry_words.hpp"
 
 namespace irrepwise {
 
 std::string readable_group(std::string name) {
   const std::size_t at = name.find("inf");
   return at == std::string::npos ? name : name.replace(at, 3, "∞");
+}
+
+std::string readable_formula(const Molecule& molecule) {
+  constexpr std::array<const char*, 10> below = {"₀", "₁", "₂", "₃", "₄", "₅", "₆", "₇", "₈", "₉"};
+  const auto is_digit = [](char c) { return c >= '0' && c <= '9'; };
+  const auto figure = [](char c) { return static_cast<std::size_t>(c - '0'); };
+  std::string words;
+  for (const char c : hill_formula(molecule)) {
+    words += is_digit(c) ? below[figure(c)] : std::string(1, c);
+  }
+  const int charge = molecule.charge();
+  if (charge == 0) return words;
+  if (std::abs(charge) > 1) words += superscript(std::abs(charge));
+  return words + (charge > 0 ? "⁺" : "⁻");
 }
 
 std::string geometry_sentence(const LevelsResult& result, const std::string& source) {
@@ -19,7 +38,7 @@ std::string geometry_sentence(const LevelsResult& result, const std::string& sou
     group += ", a subgroup of " + readable_group(symmetry.full_group);
   }
   std::string words =
-      fmt::format("Geometry: {}, {}, {}", source, charged_formula(result.molecule), group);
+      fmt::format("Geometry: {}, {}, {}", source, readable_formula(result.molecule), group);
   constexpr double worth_a_word_angstrom = 5e-5;
   if (symmetry.largest_shift_angstrom >= worth_a_word_angstrom) {
     words += fmt::format(" (atoms shifted by up to {:.4f} Å to be exact)",
@@ -43,6 +62,12 @@ std::string axes_sentence(const LevelsResult& result) {
   std::string words;
   for (const std::string& axis : axes) words += (words.empty() ? "" : "; ") + axis;
   return "Axes: " + words + ".";
+}
+
+std::string outer_frame_sentence() {
+  return "Beyond the donors z points along the bond towards it; x and y are those of the atom "
+         "before where the ligand is straight, otherwise x or y, whichever was nearer to it there, "
+         "stands across the plane of the bonds.";
 }
 
 }  // namespace irrepwise

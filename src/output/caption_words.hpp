@@ -10,7 +10,10 @@ namespace irrepwise {
 /// "Dinfh" -> "D∞h"
 [[nodiscard]] std::string readable_group(std::string symbol);
 
-/// "Geometry: square.xyz, Cl4Pt 2−, D4h."
+/// "Cl₄Pt²⁻": the formula in Hill order with its charge, in signs that stand below and above.
+[[nodiscard]] std::string readable_formula(const Molecule& molecule);
+
+/// "Geometry: square.xyz, Cl₄Pt²⁻, D4h."
 /// @param source  the file, without its folders
 [[nodiscard]] std::string geometry_sentence(const LevelsResult& result, const std::string& source);
 
@@ -20,5 +23,8 @@ namespace irrepwise {
 /// "Axes: z = C4 through Pt1; x = C2' through Cl2 and Cl4.", with a note on the frame where there
 /// are no words for it.
 [[nodiscard]] std::string axes_sentence(const LevelsResult& result);
+
+/// How local frames go on beyond the donor atoms.
+[[nodiscard]] std::string outer_frame_sentence();
 
 }  // namespace irrepwise

@@ -61,8 +61,9 @@ std::string complex_text(const std::complex<double>& value, Notation& notation) 
   }
   for (const double sign : {1.0, -1.0}) {
     const double turns = std::arg(sign * value) / (2.0 * std::numbers::pi) * notation.root;
+    constexpr double near_whole = 1e-6;  // turns; arg is right to 1e-15
     const double whole = std::round(turns);
-    if (std::abs(turns - whole) > 1e-6) continue;
+    if (std::abs(turns - whole) > near_whole) continue;
     const int k = (static_cast<int>(whole) % notation.root + notation.root) % notation.root;
     return (sign < 0.0 ? "-" : "") + power_of_epsilon(k, notation);
   }

@@ -1,7 +1,10 @@
 #include "output/html_text.hpp"
 
+#include <cstddef>
+
 #include "core/parse.hpp"
 #include "output/label_parts.hpp"
+#include "output/orbital_notation.hpp"
 
 namespace irrepwise {
 
@@ -37,6 +40,25 @@ std::string html_text(std::string_view text) {
         }
       }
     }
+  }
+  return out;
+}
+
+std::string html_words(std::string_view words) {
+  std::string out;
+  for (const NotationRun& run : notation_runs(words)) {
+    out += html_text(run.text);
+    if (run.below.empty()) continue;
+    std::string below;
+    for (std::size_t i = 0; i < run.below.size(); ++i) {
+      const char c = run.below[i];
+      if (is_exponent(run.below, i)) {
+        below += c == '2' ? "²" : "³";
+      } else {
+        below += c == '-' ? "−" : std::string(1, c);
+      }
+    }
+    out += "<sub>" + below + "</sub>";
   }
   return out;
 }

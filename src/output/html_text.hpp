@@ -10,6 +10,9 @@ namespace irrepwise {
 /// characters, which HTML forbids, replaced.
 [[nodiscard]] std::string html_text(std::string_view text);
 
+/// Plain words between tags, names of orbitals among them typeset: "5d<sub>x²−y²</sub>".
+[[nodiscard]] std::string html_words(std::string_view words);
+
 /// @param ascii  "2e1g", "A1\"", "Sigmag+"
 /// @returns      "2<i>e</i><sub>1g</sub>": number upright, letter in italics, the rest below or
 /// above

@@ -7,6 +7,7 @@
 #include <utility>
 
 #include "output/label_parts.hpp"
+#include "output/orbital_notation.hpp"
 
 namespace irrepwise {
 namespace {
@@ -129,6 +130,28 @@ std::string latex_text(std::string_view text) {
     const bool is_prime = out.ends_with("$'$");
     after_symbol = is_word(text[used - 1]) || is_prime;
     text.remove_prefix(used);
+  }
+  return out;
+}
+
+std::string latex_words(std::string_view words) {
+  std::string out;
+  for (const NotationRun& run : notation_runs(words)) {
+    if (run.below.empty()) {
+      out += latex_text(run.text);
+      continue;
+    }
+    // The letter of the shell stands upright, as where nothing is below: "2s".
+    out += "$" + run.text.substr(0, 1) + "\\mathrm{" + run.text.substr(1) + "}_{";
+    for (std::size_t i = 0; i < run.below.size();) {
+      const std::string_view rest = std::string_view(run.below).substr(i);
+      const Replacement* letter = start_of(rest, in_mathematics);
+      if (is_exponent(run.below, i)) out += '^';
+      out += letter ? std::string(letter->second) + " " : std::string(1, rest.front());
+      i += letter ? letter->first.size() : 1;
+    }
+    if (out.ends_with(' ')) out.pop_back();
+    out += "}$";
   }
   return out;
 }

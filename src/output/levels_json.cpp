@@ -56,7 +56,7 @@ Json composition_json(const LevelsResult& result, int level) {
   return list;
 }
 
-Json orbitals_json(const LevelsResult& result, bool coefficients) {
+Json orbitals_json(const LevelsResult& result, const LevelsJsonParts& parts) {
   const PointGroup& group = result.symmetry.group;
   Json list = Json::array();
   for (std::size_t i = 0; i < result.levels.levels.size(); ++i) {
@@ -69,7 +69,7 @@ Json orbitals_json(const LevelsResult& result, bool coefficients) {
                   {"energy_ev", finite_number(level.energy_ev)},
                   {"occupation", finite_number(level.occupation)},
                   {"composition", composition_json(result, static_cast<int>(i))}};
-    if (coefficients) {
+    if (parts.coefficients) {
       entry["coefficients"] =
           matrix_json(input_frame_orbitals(result, static_cast<int>(i)).transpose());
     }
@@ -168,7 +168,7 @@ std::string levels_json(const LevelsResult& result, const LevelsJsonParts& parts
                    {"point_group", result.symmetry.group.symbol().name()},
                    {"symmetry", symmetry_json(result.symmetry)},
                    {"method", method_json(result)},
-                   {"orbitals", orbitals_json(result, parts.coefficients)},
+                   {"orbitals", orbitals_json(result, parts)},
                    {"frontier", frontier_json(result)},
                    {"atoms", atoms_json(result, computed)},
                    {"overlap_populations", overlap_populations_json(result.populations)},

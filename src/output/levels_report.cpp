@@ -6,6 +6,8 @@
 
 #include <fmt/format.h>
 
+#include "analysis/d_block.hpp"
+#include "analysis/donors.hpp"
 #include "core/error.hpp"
 #include "core/text.hpp"
 #include "output/caption_words.hpp"
@@ -18,7 +20,7 @@ namespace {
 
 constexpr int show_all_up_to = 24;  // levels; a table that still fits a screen
 constexpr int occupied_shown = 10;  // otherwise so many from the HOMO down
-constexpr int empty_shown = 6;      // and from the LUMO up
+constexpr int empty_shown = 6;      // and from the LUMO up, and all of the d block
 
 std::string method_words(const Levels& levels) {
   std::string words = rule_name(levels.rule);
@@ -39,7 +41,7 @@ std::string group_words(const MolecularSymmetry& symmetry) {
 std::vector<Fact> header(const LevelsResult& result, const std::vector<AtomSet>& sets) {
   const MolecularSymmetry& symmetry = result.symmetry;
   std::vector<Fact> facts;
-  facts.push_back({"formula", {charged_formula(result.molecule)}});
+  facts.push_back({"formula", {readable_formula(result.molecule)}});
   facts.push_back({"electrons",
                    {fmt::format("{} in {} valence orbitals", result.levels.electrons,
                                 result.basis.n_orbitals)}});
@@ -68,7 +70,23 @@ struct Range {
   int end;
 };
 
-Range shown_levels(const Levels& levels, const LevelWindow& window) {
+// Widened until it holds the d block of every metal.
+Range with_d_blocks(Range range, const LevelsResult& result) {
+  const std::vector<int> metals = metal_atoms(result.symmetry.molecule, result.basis);
+  for (const EquivalentAtoms& set : result.levels.salcs.sets) {
+    if (std::find(metals.begin(), metals.end(), set.representative()) == metals.end()) continue;
+    const DBlock block = find_d_block(result.symmetry, result.basis, result.levels,
+                                      result.populations, set.representative());
+    for (const DLevel& level : block.levels) {
+      range.first = std::min(range.first, level.level);
+      range.end = std::max(range.end, level.level + 1);
+    }
+  }
+  return range;
+}
+
+Range shown_levels(const LevelsResult& result, const LevelWindow& window) {
+  const Levels& levels = result.levels;
   const int n = static_cast<int>(levels.levels.size());
   if (window.from_ev || window.to_ev) {
     Range range{n, 0};
@@ -91,7 +109,8 @@ Range shown_levels(const Levels& levels, const LevelWindow& window) {
   if (window.all || n <= show_all_up_to) return {0, n};
   const int homo = levels.frontier.homo.value_or(-1);
   const int first_empty = homo + 1;
-  return {std::max(0, first_empty - occupied_shown), std::min(n, first_empty + empty_shown)};
+  return with_d_blocks(
+      {std::max(0, first_empty - occupied_shown), std::min(n, first_empty + empty_shown)}, result);
 }
 
 std::string frontier_mark(const Frontier& frontier, int level) {
@@ -112,13 +131,16 @@ std::optional<Separator> line_below(const Levels& levels, int level) {
 Table level_table(const LevelsResult& result, const std::vector<AtomSet>& sets,
                   const LevelWindow& window) {
   const Levels& levels = result.levels;
-  const Range range = shown_levels(levels, window);
+  const Range range = shown_levels(result, window);
   const int n = static_cast<int>(levels.levels.size());
   Table table;
   table.caption = range.end - range.first == n
                       ? "Levels"
-                      : fmt::format("Levels {} to {} of {} (--all shows every one)",
-                                    range.first + 1, range.end, n);
+                      : fmt::format("Levels {} to {} of {}", range.first + 1, range.end, n);
+  const bool left_out = range.end - range.first < n;
+  if (left_out && window.hint == LevelsHint::NameAllOption) {
+    table.caption += " (--all shows every one)";
+  }
   table.columns = {{"frontier", "", "", Align::Left, 0, false},
                    {"label", "level", "", Align::Right, 0, false},
                    {"energy_ev", "energy", "eV", Align::Decimal, 0, false},
@@ -146,7 +168,8 @@ std::string words_on_partly_filled(const LevelsResult& result) {
   for (std::size_t i = result.levels.levels.size(); i-- > 0;) {
     const Level& level = result.levels.levels[i];
     const int room = 2 * level.degeneracy;
-    if (level.occupation < 1e-9 || level.occupation > room - 1e-9) continue;
+    constexpr double rounding = 1e-9;  // electrons
+    if (level.occupation < rounding || level.occupation > room - rounding) continue;
     const bool is_homo = homo == static_cast<int>(i);
     holds.push_back(
         fmt::format("{} holds {:g} of {} electrons",
@@ -178,7 +201,7 @@ std::vector<std::string> remarks(const LevelsResult& result) {
 Report levels_report(const LevelsResult& result, const LevelWindow& window) {
   const std::vector<AtomSet> sets = atom_sets(result.symmetry);
   Report report;
-  report.title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+  report.title = result.title.empty() ? readable_formula(result.molecule) : result.title;
   report.facts = header(result, sets);
   report.tables.push_back(level_table(result, sets, window));
   const Grouping grouping = window.all ? Grouping::Single : Grouping::Equivalent;

@@ -8,11 +8,14 @@
 
 namespace irrepwise {
 
-/// Which levels to show. By default those around the frontier.
+/// Which levels to show. By default those around the frontier, with the whole d block
+/// of every metal.
+enum class LevelsHint { NameAllOption, None };
 struct LevelWindow {
   bool all = false;
   std::optional<double> from_ev = {};  // either turns the default window off
   std::optional<double> to_ev = {};
+  LevelsHint hint = LevelsHint::None;  // at a terminal, how to see what is left out
 };
 
 /// Levels from high to low with the frontier marked; charges, gross populations and the overlap

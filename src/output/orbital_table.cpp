@@ -19,17 +19,17 @@ struct Frames {
   std::vector<std::optional<LocalFrames>> by_set;  // all empty for the standard frame
 };
 
-Frames frames_for(const LevelsResult& result, TableFrame frame) {
+Frames frames_for(const LevelsResult& result, OrbitalFrame frame) {
   Frames frames;
   frames.sets = equivalent_atoms(result.symmetry);
-  if (frame == TableFrame::Local) {
+  if (frame == OrbitalFrame::Local) {
     frames.by_set = frames_of_sets(result.symmetry, frames.sets);
   } else {
     frames.by_set.resize(frames.sets.size());
   }
   const bool any = std::any_of(frames.by_set.begin(), frames.by_set.end(),
                                [](const auto& local) { return local.has_value(); });
-  if (frame == TableFrame::Local && !any) {
+  if (frame == OrbitalFrame::Local && !any) {
     throw Error(
         "no atom has a local frame: the molecule has no central atom with neighbours around it; "
         "use the standard frame");
@@ -47,7 +47,7 @@ std::vector<TableFunction> atomic_functions(const LevelsResult& result, const Fr
                                             std::vector<int>& basis_orbitals) {
   std::vector<TableFunction> functions;
   for (std::size_t set = 0; set < sets.size(); ++set) {
-    const bool local = frames.by_set[set].has_value();
+    const OrbitalFrame frame = frames.by_set[set] ? OrbitalFrame::Local : OrbitalFrame::Standard;
     for (const int atom : sets[set].atoms) {
       const auto at = static_cast<std::size_t>(atom);
       for (int s = result.basis.first_shell[at]; s < result.basis.first_shell[at + 1]; ++s) {
@@ -56,8 +56,8 @@ std::vector<TableFunction> atomic_functions(const LevelsResult& result, const Fr
           TableFunction function;
           function.set = static_cast<int>(set);
           function.atom = atom;
-          function.local = local;
-          function.name = salc_orbital_name(shell, m, local);
+          function.frame = frame;
+          function.name = salc_orbital_name(shell, m, frame);
           functions.push_back(std::move(function));
           basis_orbitals.push_back(shell.first_orbital + m);
         }
@@ -79,7 +79,7 @@ std::string single_atom_name(const std::vector<const SalcFunction*>& partners, c
       found = salc->components[static_cast<std::size_t>(c)];
     }
     if (found < 0) return {};
-    name += (name.empty() ? "" : ", ") + salc_orbital_name(shell, found, salc->local);
+    name += (name.empty() ? "" : ", ") + salc_orbital_name(shell, found, salc->frame);
   }
   return name;
 }
@@ -91,7 +91,7 @@ std::string salc_name(const std::vector<const SalcFunction*>& partners, const Sh
     if (!name.empty()) return name;
   }
   const SalcFunction& salc = *partners.front();
-  const bool named_part = salc.local && shell.l > 0;
+  const bool named_part = salc.frame == OrbitalFrame::Local && shell.l > 0;
   return fmt::format("{}{}{}", shell.n(), shell_letter(shell.l),
                      named_part ? part_name(salc.part) : "");
 }
@@ -119,7 +119,7 @@ void add_salcs(const LevelsResult& result, const Frames& frames,
     }
     const Shell& shell = result.basis.shells[static_cast<std::size_t>(salc.shell)];
     function.set = salc.set;
-    function.local = salc.local;
+    function.frame = salc.frame;
     function.name =
         salc_name(partners, shell, frames.sets[static_cast<std::size_t>(salc.set)].size());
     function.irrep = irrep;
@@ -208,10 +208,13 @@ OrbitalTable orbital_table(const LevelsResult& result, const std::vector<Orbital
   OrbitalTable table;
   table.options = options;
   table.sets = atom_sets(result.symmetry);
-  if (options.frame == TableFrame::Local) {
+  if (options.frame == OrbitalFrame::Local) {
     const std::optional<Centre> centre = find_centre(result.symmetry);
     table.centre_words =
         centre && centre->atom ? atom_name(result.symmetry.molecule, *centre->atom) : "the centre";
+    table.beyond_donors =
+        std::any_of(frames.by_set.begin(), frames.by_set.end(),
+                    [](const auto& local) { return local && local->beyond_donors; });
   }
   return options.functions == TableFunctions::Orbitals
              ? over_orbitals(result, frames, choices, std::move(table))

@@ -10,29 +10,29 @@
 #include "output/equivalence.hpp"
 #include "output/levels_result.hpp"
 #include "output/orbital_choice.hpp"
+#include "salc/salc_table.hpp"
 
 namespace irrepwise {
 
 enum class TableEntries { Coefficients, Shares };
 enum class TableFunctions { Orbitals, Salcs };
-enum class TableFrame { Standard, Local };
 
 struct OrbitalTableOptions {
   TableEntries entries = TableEntries::Coefficients;
   TableFunctions functions = TableFunctions::Orbitals;
-  TableFrame frame = TableFrame::Standard;
+  OrbitalFrame frame = OrbitalFrame::Standard;
 };
 
 /// An atomic orbital, or a SALC.
 struct TableFunction {
   int set = 0;              // index in the sets of atoms
   std::optional<int> atom;  // of an atomic orbital
-  bool local = false;       // in each atom's own frame
-  std::string name;         // "5dx2-y2", "3pσ"; of a SALC "3p", "5dxz, 5dyz" on a single atom
-  int irrep = 0;            // of a SALC
-  int number = 1;           // of a SALC: of those of the same name and irrep
-  int of_number = 1;        // and how many there are
-  int partner = 0;          // of a SALC of a complex pair: 1 or 2; otherwise 0
+  OrbitalFrame frame = OrbitalFrame::Standard;
+  std::string name;   // "5dx2-y2", "3pσ"; of a SALC "3p", "5dxz, 5dyz" on a single atom
+  int irrep = 0;      // of a SALC
+  int number = 1;     // of a SALC: of those of the same name and irrep
+  int of_number = 1;  // and how many there are
+  int partner = 0;    // of a SALC of a complex pair: 1 or 2; otherwise 0
 };
 
 /// A partner of a level; over SALCs, where all partners are alike, the level as a whole.
@@ -49,6 +49,7 @@ struct OrbitalTable {
   Eigen::MatrixXd coefficients;  // `n_functions x n_orbitals`, with overlap: c^T S c = 1
   Eigen::MatrixXd shares;        // the same shape, Mulliken's; columns sum to 1
   std::string centre_words;      // what local frames point to: "Pt1"; empty without any
+  bool beyond_donors = false;    // some of them belong to atoms not bonded to the centre
 };
 
 /// @param choices  over SALCs, a level counts once, whichever partner is chosen; functions of other

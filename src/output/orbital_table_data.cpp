@@ -62,7 +62,7 @@ Json function_json(const LevelsResult& result, const OrbitalTable& table,
     entry["number"] = function.number;
     if (function.partner > 0) entry["partner"] = function.partner;
   }
-  entry["frame"] = function.local ? "local" : "standard";
+  entry["frame"] = function.frame == OrbitalFrame::Local ? "local" : "standard";
   return entry;
 }
 
@@ -155,7 +155,7 @@ std::string orbital_table_json(const LevelsResult& result, const OrbitalTable& t
   document["of"] = as_shares(table) ? "shares" : "coefficients";
   document["unit"] = as_shares(table) ? "%" : "";
   document["over"] = over_salcs(table) ? "salcs" : "orbitals";
-  document["frame"] = table.options.frame == TableFrame::Local ? "local" : "standard";
+  document["frame"] = table.options.frame == OrbitalFrame::Local ? "local" : "standard";
   document["threshold"] = data.threshold;
   document["orbitals"] = std::move(orbitals);
   document["rows"] = std::move(rows);

@@ -230,7 +230,7 @@ class Layout {
           result_.symmetry.group.irreps()[static_cast<std::size_t>(level(columns.front()).irrep)];
       words += ", " + readable_label(level_label(irrep.label));
     }
-    words += ": " + (result_.title.empty() ? charged_formula(result_.molecule) : result_.title);
+    words += ": " + (result_.title.empty() ? readable_formula(result_.molecule) : result_.title);
     if (part > 0) words += fmt::format(" (part {} of {})", part, parts);
     return words;
   }
@@ -240,19 +240,19 @@ class Layout {
                         method_sentence(result_) + " " + axes_sentence(result_);
     if (salcs_) {
       words += fmt::format(" SALCs as in irrepwise symmetry --{}, {}.",
-                           table_.options.frame == TableFrame::Local ? "local" : "salcs",
+                           table_.options.frame == OrbitalFrame::Local ? "local" : "salcs",
                            has_pair() ? "of complex conjugate irreps both partners"
                                       : "with the same coefficient for every partner");
-    } else if (table_.options.frame == TableFrame::Standard) {
+    } else if (table_.options.frame == OrbitalFrame::Standard) {
       words += " Orbitals in this frame.";
     }
-    if (table_.options.frame == TableFrame::Local) words += " " + frame_words();
+    if (table_.options.frame == OrbitalFrame::Local) words += " " + frame_words();
     if (shares_) {
       words +=
           " Mulliken shares c(Sc) in per cent: 100 for each orbital, single ones may be negative.";
     } else {
       words += " Coefficients without unit, cᵀSc = 1; the largest of a level's first partner";
-      words += table_.options.frame == TableFrame::Local
+      words += table_.options.frame == OrbitalFrame::Local
                    ? ", in the frame of the molecule, is positive."
                    : " is positive.";
     }
@@ -270,9 +270,11 @@ class Layout {
         "the mirror plane that holds the line, and symmetry carries it from atom to atom, sign "
         "included.",
         table_.centre_words);
+    if (table_.beyond_donors) words += " " + outer_frame_sentence();
     std::vector<bool> standard(table_.sets.size(), true);
     for (const TableFunction& function : table_.functions) {
-      if (function.local) standard[static_cast<std::size_t>(function.set)] = false;
+      if (function.frame == OrbitalFrame::Local)
+        standard[static_cast<std::size_t>(function.set)] = false;
     }
     std::string others;
     for (std::size_t set = 0; set < table_.sets.size(); ++set) {

@@ -31,7 +31,7 @@ std::vector<Table> population_tables(const LevelsResult& result, Grouping groupi
   std::vector<Table> tables = {charge_table(result, atom_sets(result.symmetry), grouping)};
   Table pairs = overlap_population_table(result, grouping);
   if (!pairs.lines.empty()) tables.push_back(std::move(pairs));
-  const std::string title = result.title.empty() ? charged_formula(result.molecule) : result.title;
+  const std::string title = result.title.empty() ? readable_formula(result.molecule) : result.title;
   for (Table& table : tables) table.caption += ": " + title;
   tables.front().legend = geometry_sentence(result, source) + " " + method_sentence(result) +
                           " Mulliken's populations in electrons; charge in e: valence electrons "

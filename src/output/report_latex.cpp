@@ -12,7 +12,7 @@ std::string report_latex(const Report& report) {
     for (const Fact& fact : report.facts) {
       out += "\\item[" + latex_text(fact.name) + "]";
       for (std::size_t i = 0; i < fact.lines.size(); ++i) {
-        out += (i > 0 ? "; " : " ") + latex_text(fact.lines[i]);
+        out += (i > 0 ? "; " : " ") + latex_words(fact.lines[i]);
       }
       out += '\n';
     }
@@ -20,9 +20,9 @@ std::string report_latex(const Report& report) {
   }
   for (const Table& table : report.tables) out += '\n' + table_latex(table);
   for (const std::string& warning : report.warnings) {
-    out += "\n\\textbf{Warning:} " + latex_text(warning) + "\n";
+    out += "\n\\textbf{Warning:} " + latex_words(warning) + "\n";
   }
-  for (const std::string& remark : report.remarks) out += '\n' + latex_text(remark) + '\n';
+  for (const std::string& remark : report.remarks) out += '\n' + latex_words(remark) + '\n';
   return out;
 }
 

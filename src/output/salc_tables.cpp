@@ -7,6 +7,7 @@
 
 #include "core/exact_number.hpp"
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/display_width.hpp"
 #include "output/equivalence.hpp"
 
@@ -27,7 +28,7 @@ std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
   const Shell& shell = result.orbitals->basis.shells[salc.shell];
   std::vector<std::string> names;
   for (const int component : salc.components) {
-    names.push_back(salc_orbital_name(shell, component, salc.local));
+    names.push_back(salc_orbital_name(shell, component, salc.frame));
   }
   return fmt::format("SALCs of {} on {}{}", joined(names),
                      atom_sets(result.symmetry)[salc.set].name,
@@ -36,18 +37,21 @@ std::string caption(const SymmetryResult& result, const SalcFunction& salc) {
                                                        : "");
 }
 
+enum class OfIrrep { One, Several };  // SALCs of one part and irrep
+
 // Which of several SALCs of one irrep, and which partner: "1", "2·1" where there are several.
-std::string partner_words(const SymmetryResult& result, const SalcFunction& salc, bool several) {
+std::string partner_words(const SymmetryResult& result, const SalcFunction& salc, OfIrrep salcs) {
   const bool degenerate = result.symmetry.group.irreps()[salc.irrep].dimension > 1;
   const std::string partner = degenerate ? std::to_string(salc.partner) : "";
-  if (!several) return partner;
+  if (salcs == OfIrrep::One) return partner;
   return std::to_string(salc.number) + (degenerate ? "." + partner : "");
 }
 
-bool several_in(const Functions& functions, int irrep) {
-  return std::any_of(functions.begin(), functions.end(), [&](const SalcFunction* salc) {
-    return salc->irrep == irrep && salc->number > 1;
-  });
+OfIrrep salcs_of(const Functions& functions, int irrep) {
+  const bool several = std::any_of(
+      functions.begin(), functions.end(),
+      [&](const SalcFunction* salc) { return salc->irrep == irrep && salc->number > 1; });
+  return several ? OfIrrep::Several : OfIrrep::One;
 }
 
 Table atoms_in_columns(const SymmetryResult& result, const Functions& functions) {
@@ -65,14 +69,14 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
   }
   for (const SalcFunction* salc : functions) {
     std::string label = irrep_label(result, *salc);
-    std::string partner = partner_words(result, *salc, several_in(functions, salc->irrep));
+    std::string partner = partner_words(result, *salc, salcs_of(functions, salc->irrep));
     if (salc->partner > 1) label.clear();
     for (std::size_t i = 0; i < salc->components.size(); ++i) {
       const Eigen::VectorXd column = salc->coefficients.col(static_cast<Eigen::Index>(i));
       if (column.isZero(0.0)) continue;
       Row row{{SymmetryLabel{label}, partner}};
       if (!one_orbital)
-        row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->local));
+        row.cells.emplace_back(salc_orbital_name(shell, salc->components[i], salc->frame));
       for (const double value : column) row.cells.emplace_back(coefficient_text(value));
       table.lines.emplace_back(std::move(row));
       label.clear();
@@ -82,7 +86,7 @@ Table atoms_in_columns(const SymmetryResult& result, const Functions& functions)
   return table;
 }
 
-Table partners_in_columns(const SymmetryResult& result, const Functions& chosen, bool several) {
+Table partners_in_columns(const SymmetryResult& result, const Functions& chosen, OfIrrep salcs) {
   const SalcFunction& first = *chosen.front();
   const Shell& shell = result.orbitals->basis.shells[first.shell];
   const std::string label = irrep_label(result, first);
@@ -91,7 +95,7 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& chosen,
   table.columns = {{"atom", "atom", "", Align::Left, 0, false},
                    {"orbital", "orbital", "", Align::Left, 0, false}};
   for (const SalcFunction* salc : chosen) {
-    const std::string words = partner_words(result, *salc, several);
+    const std::string words = partner_words(result, *salc, salcs);
     const std::string header = readable_label(label) + (words.empty() ? "" : " " + words);
     table.columns.push_back({header, header, "", Align::Right, 0, false});
   }
@@ -99,7 +103,7 @@ Table partners_in_columns(const SymmetryResult& result, const Functions& chosen,
   for (std::size_t atom = 0; atom < atoms.size(); ++atom) {
     std::string name = atom_name(result.symmetry.molecule, atoms[atom]);
     for (std::size_t i = 0; i < first.components.size(); ++i) {
-      Row row{{name, salc_orbital_name(shell, first.components[i], first.local)}};
+      Row row{{name, salc_orbital_name(shell, first.components[i], first.frame)}};
       bool any = false;
       for (const SalcFunction* salc : chosen) {
         const double value =
@@ -129,7 +133,7 @@ std::vector<Table> tables_by_irrep(const SymmetryResult& result, const Functions
     const bool next_fits =
         !last && functions[i + 1]->irrep == irrep && with_next <= most_partners_in_columns;
     if (next_is_partner || next_fits) continue;
-    tables.push_back(partners_in_columns(result, chosen, several_in(functions, irrep)));
+    tables.push_back(partners_in_columns(result, chosen, salcs_of(functions, irrep)));
     chosen.clear();
   }
   return tables;
@@ -180,8 +184,9 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
     }
     for (Table& table : tables_by_irrep(result, functions)) tables.push_back(std::move(table));
   }
-  const bool local =
-      std::any_of(salcs.begin(), salcs.end(), [](const SalcFunction& salc) { return salc.local; });
+  const bool local = std::any_of(salcs.begin(), salcs.end(), [](const SalcFunction& salc) {
+    return salc.frame == OrbitalFrame::Local;
+  });
   const bool several = std::any_of(salcs.begin(), salcs.end(), [&](const SalcFunction& salc) {
     return salc.number > 1 && result.sets[salc.set].size() > 1;
   });
@@ -196,6 +201,10 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
                                           "across the mirror plane that holds the line, and "
                                           "symmetry carries it from atom to atom."
                                         : "Orbitals of the standard frame.");
+    const bool beyond_donors =
+        local && std::any_of(result.frames.begin(), result.frames.end(),
+                             [](const auto& frames) { return frames && frames->beyond_donors; });
+    if (beyond_donors) tables.back().notes.back() += " " + outer_frame_sentence();
   }
   return tables;
 }

@@ -107,7 +107,7 @@ void add_orbitals(Rows& rows, const SymmetryResult& result) {
                   level_label(result.symmetry.group.irreps()[salc.irrep].label),
                   std::to_string(salc.number) + "." + std::to_string(salc.partner),
                   std::to_string(atoms[atom] + 1),
-                  salc_orbital_name(shell, salc.components[i], salc.local)},
+                  salc_orbital_name(shell, salc.components[i], salc.frame)},
                  Number{value});
       }
     }

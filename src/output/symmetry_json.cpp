@@ -22,8 +22,9 @@ Json counts_json(const Reduction& reduction) {
 
 // Rounding of the matrices kept out of characters that are whole or half numbers.
 double tidy(double value) {
+  constexpr double rounding = 1e-12;
   const double halves = std::round(2.0 * value) / 2.0;
-  return finite_number(std::abs(value - halves) < 1e-12 ? halves : value);
+  return finite_number(std::abs(value - halves) < rounding ? halves : value);
 }
 
 Json vector_json(const Eigen::Ref<const Eigen::VectorXd>& values) {
@@ -186,7 +187,7 @@ Json salcs_json(const SymmetryResult& result) {
             salc.coefficients(static_cast<Eigen::Index>(atom), static_cast<Eigen::Index>(i));
         if (value == 0.0) continue;
         Json entry = {{"atom", atoms[atom] + 1},
-                      {"orbital", salc_orbital_name(shell, salc.components[i], salc.local)},
+                      {"orbital", salc_orbital_name(shell, salc.components[i], salc.frame)},
                       {"value", finite_number(value)}};
         if (const auto exact = exact_form(value)) entry["exact"] = *exact;
         coefficients.push_back(std::move(entry));
@@ -198,7 +199,7 @@ Json salcs_json(const SymmetryResult& result) {
                     {"set", numbers_from_one(atoms)},
                     {"part", part_key(salc.part, shell.l)},
                     {"shell", std::to_string(shell.n()) + shell_letter(shell.l)},
-                    {"frame", salc.local ? "local" : "standard"},
+                    {"frame", salc.frame == OrbitalFrame::Local ? "local" : "standard"},
                     {"coefficients", std::move(coefficients)}});
   }
   return list;
@@ -225,11 +226,15 @@ void add_frontier(Json& document, const PointGroup& group, const FrontierSymmetr
   }
 }
 
-Json changes_json(const std::vector<Relabelled>& changes, bool irreps) {
+enum class Relabel { Irreps, Classes };
+
+Json changes_json(const std::vector<Relabelled>& changes, Relabel what) {
+  const auto name = [&](const std::string& label) {
+    return what == Relabel::Irreps ? level_label(label) : label;
+  };
   Json list = Json::array();
   for (const Relabelled& change : changes) {
-    list.push_back({{"default", irreps ? level_label(change.before) : change.before},
-                    {"here", irreps ? level_label(change.after) : change.after}});
+    list.push_back({{"default", name(change.before)}, {"here", name(change.after)}});
   }
   return list;
 }
@@ -256,8 +261,9 @@ std::string symmetry_json(const SymmetryResult& result, const SymmetryHeadings& 
   }
   document["limit_angstrom"] = finite_number(result.limit_angstrom);
   document["axes"] = symmetry.axes;
-  document["relabelled"] = {{"irreps", changes_json(result.axis_effect.irreps, true)},
-                            {"classes", changes_json(result.axis_effect.classes, false)}};
+  document["relabelled"] = {
+      {"irreps", changes_json(result.axis_effect.irreps, Relabel::Irreps)},
+      {"classes", changes_json(result.axis_effect.classes, Relabel::Classes)}};
   document["operations"] = operations_json(result);
   document["equivalent_atoms"] = Json::array();
   for (const EquivalentAtoms& set : result.sets) {

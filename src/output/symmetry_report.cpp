@@ -7,9 +7,9 @@
 #include <fmt/format.h>
 
 #include "core/text.hpp"
+#include "output/caption_words.hpp"
 #include "output/character_tables.hpp"
 #include "output/group_answers.hpp"
-#include "output/levels_result.hpp"
 #include "output/salc_tables.hpp"
 #include "output/symmetry_tables.hpp"
 #include "output/symmetry_words.hpp"
@@ -71,7 +71,7 @@ std::vector<std::string> effect_words(const AxisEffect& effect) {
 std::vector<Fact> header(const SymmetryResult& result) {
   const MolecularSymmetry& symmetry = result.symmetry;
   std::vector<Fact> facts;
-  facts.push_back({"formula", {charged_formula(result.molecule)}});
+  facts.push_back({"formula", {readable_formula(result.molecule)}});
   facts.push_back({"group", {group_words(symmetry)}});
   facts.push_back({"shift to be exact",
                    {fmt::format("largest {:.4f} Å, root mean square {:.4f} Å",
@@ -109,7 +109,7 @@ void append(std::vector<Table>& tables, std::vector<Table> more) {
 Report symmetry_report(const SymmetryResult& result, const SymmetryHeadings& headings,
                        const SymmetrySections& sections, int width) {
   Report report;
-  report.title = headings.title.empty() ? charged_formula(result.molecule) : headings.title;
+  report.title = headings.title.empty() ? readable_formula(result.molecule) : headings.title;
   report.facts = header(result);
   const PointGroup& group = result.symmetry.group;
   append(report.tables, character_tables(group, width));

@@ -1,5 +1,6 @@
 #include "output/symmetry_tables.hpp"
 
+#include <algorithm>
 #include <cmath>
 
 #include <fmt/format.h>
@@ -13,14 +14,16 @@ namespace irrepwise {
 namespace {
 
 std::string direction_words(const Eigen::Vector3d& axis) {
+  constexpr double along = 1e-9;  // of a unit vector: axes of the standard frame are exact
+  constexpr double shown = 5e-4;  // smaller parts are 0.000 to three decimals
   static constexpr const char* names[] = {"x", "y", "z"};
   for (int i = 0; i < 3; ++i) {
-    if (std::abs(std::abs(axis[i]) - 1.0) < 1e-9)
+    if (std::abs(std::abs(axis[i]) - 1.0) < along)
       return (axis[i] < 0 ? "-" : "") + std::string(names[i]);
   }
   std::string words;
   for (int i = 0; i < 3; ++i) {
-    const double value = std::abs(axis[i]) < 5e-4 ? 0.0 : axis[i];
+    const double value = std::abs(axis[i]) < shown ? 0.0 : axis[i];
     words += fmt::format("{}{:.3f}", i == 0 ? "(" : ", ", value);
   }
   return words + ")";
@@ -173,13 +176,18 @@ Table reduction_table(const SymmetryResult& result) {
   }
   table.notes.push_back(
       fmt::format("The shells add up to {} orbitals, as many as the valence orbitals.", total));
-  bool has_parts = false;
-  for (const auto& frames : result.frames) has_parts = has_parts || frames;
-  if (has_parts) {
+  const auto any = [&](auto&& holds) {
+    return std::any_of(result.frames.begin(), result.frames.end(),
+                       [&](const auto& frames) { return frames && holds(*frames); });
+  };
+  if (any([](const LocalFrames&) { return true; })) {
+    const std::string centre = result.central_atom
+                                   ? atom_name(result.symmetry.molecule, *result.central_atom)
+                                   : std::string("the centre");
+    const bool beyond_donors = any([](const LocalFrames& local) { return local.beyond_donors; });
     table.notes.push_back(
-        fmt::format("σ: along the line to {}; π: across it.",
-                    result.central_atom ? atom_name(result.symmetry.molecule, *result.central_atom)
-                                        : std::string("the centre")));
+        fmt::format("σ: along the line to {}{}; π: across it.", centre,
+                    beyond_donors ? ", beyond the donors along the bond towards it" : ""));
   }
   return table;
 }

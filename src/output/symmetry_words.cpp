@@ -14,12 +14,14 @@ namespace {
 constexpr std::array<std::string_view, 10> superscripts = {"⁰", "¹", "²", "³", "⁴",
                                                            "⁵", "⁶", "⁷", "⁸", "⁹"};
 
-Words sum_words(const Reduction& reduction, bool of_levels) {
+enum class Of { Levels, States };  // lower-case labels, or those of irreps
+
+Words sum_words(const Reduction& reduction, Of of) {
   std::string words;
   for (const IrrepCount& part : reduction) {
     if (!words.empty()) words += " + ";
     if (part.count > 1) words += std::to_string(part.count);
-    words += "{" + (of_levels ? level_label(part.label) : part.label) + "}";
+    words += "{" + (of == Of::Levels ? level_label(part.label) : part.label) + "}";
   }
   return {words.empty() ? "nothing" : words};
 }
@@ -73,9 +75,9 @@ std::string readable_functions(const FunctionSet& set) {
   return text;
 }
 
-Words reduction_words(const Reduction& reduction) { return sum_words(reduction, true); }
+Words reduction_words(const Reduction& reduction) { return sum_words(reduction, Of::Levels); }
 
-Words state_words(const Reduction& reduction) { return sum_words(reduction, false); }
+Words state_words(const Reduction& reduction) { return sum_words(reduction, Of::States); }
 
 Words term_words(const std::vector<Term>& terms) {
   std::string words;

@@ -39,7 +39,7 @@ std::string body_cell(const Column& column, const Cell& cell, int digits_after) 
     shown = html_label(label->ascii);
   } else if (const auto* words = std::get_if<Words>(&cell)) {
     for (const WordsPart& part : parts_of(*words)) {
-      shown += part.is_label ? html_label(part.text) : html_text(part.text);
+      shown += part.is_label ? html_label(part.text) : html_words(part.text);
     }
   } else if (std::holds_alternative<Number>(cell)) {
     const DecimalParts parts = decimal_parts(cell);
@@ -48,7 +48,7 @@ std::string body_cell(const Column& column, const Cell& cell, int digits_after) 
                                             : parts.after;
   } else {
     const std::string text = cell_text(cell);  // "-1/2" stands in a right column as a text
-    shown = html_text(column.align == Align::Left ? text : with_true_minus(text));
+    shown = html_words(column.align == Align::Left ? text : with_true_minus(text));
   }
   return "<td" + class_of(column) + " data-value=\"" + html_text(cell_exact(cell)) + "\">" + shown +
          "</td>";
@@ -76,9 +76,9 @@ std::string table_html(const Table& table) {
   out += "<table>\n";
   if (!table.caption.empty()) {
     // The inner block keeps its place while a wide table scrolls beneath it.
-    out += "<caption><div class=\"caption\">" + html_text(table.caption);
+    out += "<caption><div class=\"caption\">" + html_words(table.caption);
     if (!table.legend.empty()) {
-      out += " <span class=\"legend\">" + html_text(table.legend) + "</span>";
+      out += " <span class=\"legend\">" + html_words(table.legend) + "</span>";
     }
     out += "</div>";
     out += "</caption>\n";
@@ -98,7 +98,7 @@ std::string table_html(const Table& table) {
       begin_part();
       if (separator->words.empty()) continue;
       out += "<tr class=\"separator\"><th scope=\"rowgroup\" colspan=\"" +
-             std::to_string(table.columns.size()) + "\">" + html_text(separator->words) +
+             std::to_string(table.columns.size()) + "\">" + html_words(separator->words) +
              "</th></tr>\n";
       continue;
     }
@@ -113,7 +113,7 @@ std::string table_html(const Table& table) {
   if (open) out += "</tbody>\n";
   out += "</table>\n</div>\n";
   for (const std::string& note : table.notes) {
-    out += "<p class=\"note\">" + html_text(note) + "</p>\n";
+    out += "<p class=\"note\">" + html_words(note) + "</p>\n";
   }
   return out + "</div>\n";
 }

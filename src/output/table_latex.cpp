@@ -13,10 +13,10 @@ namespace {
 constexpr std::ptrdiff_t most_rows_on_a_page = 40;  // of a float, caption and notes beside them
 
 std::string latex_title(const Column& column) {
-  if (column.label.empty()) return latex_text(column_title(column));
+  if (column.label.empty()) return latex_words(column_title(column));
   Column without = column;
   without.label.clear();
-  return latex_label(column.label) + latex_text(column_title(without));
+  return latex_label(column.label) + latex_words(column_title(without));
 }
 
 std::string latex_cell(const Cell& cell, int digits_after) {
@@ -24,11 +24,11 @@ std::string latex_cell(const Cell& cell, int digits_after) {
   if (const auto* words = std::get_if<Words>(&cell)) {
     std::string text;
     for (const WordsPart& part : parts_of(*words)) {
-      text += part.is_label ? latex_label(part.text) : latex_text(part.text);
+      text += part.is_label ? latex_label(part.text) : latex_words(part.text);
     }
     return text;
   }
-  if (!std::holds_alternative<Number>(cell)) return latex_text(cell_text(cell));
+  if (!std::holds_alternative<Number>(cell)) return latex_words(cell_text(cell));
   const DecimalParts parts = decimal_parts(cell);
   std::string text = "$" + parts.before + parts.after + "$";
   const int missing = digits_after - static_cast<int>(parts.after.size());
@@ -66,7 +66,7 @@ std::string latex_body(const Table& table, const LatexPart& part) {
       if (!body.empty()) body += "\\midrule\n";
       if (!separator->words.empty()) {
         body += "\\multicolumn{" + std::to_string(part.columns.size()) + "}{c}{\\textit{" +
-                latex_text(separator->words) + "}} \\\\\n\\midrule\n";
+                latex_words(separator->words) + "}} \\\\\n\\midrule\n";
       }
       continue;
     }
@@ -113,15 +113,15 @@ std::string latex_part(const Table& table, const LatexPart& part, const std::str
 std::string table_latex(const Table& table) {
   std::string notes;
   for (const std::string& note : table.notes) {
-    notes += "\\par\\smallskip{\\footnotesize " + latex_text(note) + "\\par}\n";
+    notes += "\\par\\smallskip{\\footnotesize " + latex_words(note) + "\\par}\n";
   }
   const std::vector<LatexPart> parts = latex_parts(table);
   std::string out;
   for (const LatexPart& part : parts) {
     const bool first = &part == &parts.front();
-    std::string caption = latex_text(table.caption);
+    std::string caption = latex_words(table.caption);
     if (!first) caption += " (continued)";
-    if (first && !table.legend.empty()) caption += ". " + latex_text(table.legend);
+    if (first && !table.legend.empty()) caption += ". " + latex_words(table.legend);
     if (!first) out += '\n';
     out += latex_part(table, part, caption, &part == &parts.back() ? notes : "");
   }

@@ -187,6 +187,30 @@ DiagramColumn variant_column(const Shown& shown, const Trails& trails, std::size
   return column;
 }
 
+// A link to a level so near a labelled one would seem to mean that: it is labelled too.
+void label_neighbours(LevelDiagram& diagram) {
+  constexpr double near_ev = 0.2;
+  std::vector<std::set<int>> linked(diagram.columns.size());
+  for (const DiagramLink& link : diagram.links) {
+    linked[static_cast<std::size_t>(link.column)].insert(link.left_level);
+    linked[static_cast<std::size_t>(link.column) + 1].insert(link.right_level);
+  }
+  for (std::size_t i = 0; i < diagram.columns.size(); ++i) {
+    std::vector<DiagramLevel>& levels = diagram.columns[i].levels;
+    std::vector<double> labelled_ev;
+    for (const DiagramLevel& level : levels) {
+      if (level.labelled) labelled_ev.push_back(level.energy_ev);
+    }
+    for (const int k : linked[i]) {
+      DiagramLevel& level = levels[static_cast<std::size_t>(k)];
+      level.labelled = level.labelled ||
+                       std::any_of(labelled_ev.begin(), labelled_ev.end(), [&](double energy_ev) {
+                         return std::abs(energy_ev - level.energy_ev) < near_ev;
+                       });
+    }
+  }
+}
+
 // What bears a label for its own sake, and some room around it.
 EnergyWindow variant_window(const LevelDiagram& diagram, const Trails& trails) {
   constexpr double below_ev = 2.5;
@@ -245,9 +269,9 @@ std::vector<RichText> diagram_notes(const Shown& shown, const LevelDiagram& diag
   if (shown.at.size() > 1) {
     notes.push_back(plain_text(fmt::format(
         "Lines join levels of neighbours that share a symmetry and at least {:.0f}\u00A0% of their "
-        "orbitals on atoms in the same places; dashed below {:.0f}\u00A0%. Blue and orange lines: "
-        "what "
-        "became of HOMO and LUMO of {}.",
+        "orbitals on atoms in the same places; dashed below {:.0f}\u00A0%. Where levels crowd, "
+        "lines "
+        "run from name to name. Blue and orange: what became of HOMO and LUMO of {}.",
         100.0 * least_drawn_overlap, 100.0 * dashed_below, shown.reference().name)));
   }
   return notes;
@@ -268,6 +292,7 @@ LevelDiagram variant_diagram(const Comparison& comparison, const VariantDiagramC
       diagram.links.push_back(link);
     }
   }
+  label_neighbours(diagram);
   diagram.notes = diagram_notes(shown, diagram);
   const EnergyWindow window = variant_window(diagram, trails);
   diagram.from_ev = choice.from_ev.value_or(window.from_ev);

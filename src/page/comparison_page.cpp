@@ -7,9 +7,11 @@
 #include <fmt/format.h>
 #include <Eigen/Core>
 
+#include "core/text.hpp"
 #include "output/character_tables.hpp"
 #include "output/compare_report.hpp"
 #include "output/html_parts.hpp"
+#include "output/html_text.hpp"
 #include "output/population_tables.hpp"
 #include "output/table_html.hpp"
 #include "output/variant_diagram.hpp"
@@ -23,14 +25,28 @@ constexpr int all_columns = 10'000;  // a page scrolls where a terminal breaks
 constexpr int levels_around_frontier = 2;
 const Eigen::Vector3d usual_eye(0.45, -0.8, 0.4);  // no axis hides behind another
 
-// The first ones, as many as a diagram holds, the reference among them.
-std::vector<int> shown_variants(const Comparison& comparison) {
+// Those chosen, or the first ones, as many as a diagram holds, the reference among them.
+std::vector<int> shown_variants(const Comparison& comparison, const std::vector<int>& chosen) {
+  if (!chosen.empty()) return chosen;
   std::vector<int> shown(comparison.variants.size());
   std::iota(shown.begin(), shown.end(), 0);
   if (shown.size() <= most_columns) return shown;
   shown.resize(most_columns);
   if (comparison.reference >= most_columns) shown.back() = comparison.reference;
   return shown;
+}
+
+std::string words_on_shown(const Comparison& comparison, const std::vector<int>& shown) {
+  std::vector<std::string> names;
+  for (const int i : shown) {
+    names.push_back(comparison.variants[static_cast<std::size_t>(i)].name);
+  }
+  const std::string words = fmt::format(
+      "The diagram and the view show {} of the {} variants: {}. The tables have all. To see "
+      "others, "
+      "make the page again with the option --variants and their names, with commas.",
+      shown.size(), comparison.variants.size(), joined(names));
+  return "<p>" + html_text(words) + "</p>\n";
 }
 
 std::string character_tables_html(const Comparison& comparison) {
@@ -67,7 +83,7 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
   CompareParts parts;
   parts.differences = comparison.variants.size() > 1;
   const Report report = compare_report(comparison, parts);
-  const std::vector<int> shown = shown_variants(comparison);
+  const std::vector<int> shown = shown_variants(comparison, options.variants);
   const LevelDiagram diagram = variant_diagram(
       comparison, {.variants = shown, .from_ev = options.from_ev, .to_ev = options.to_ev});
 
@@ -87,9 +103,7 @@ std::string comparison_page(const Comparison& comparison, const Provenance& prov
       {"summary", "Summary", tables_html({report.tables.begin(), report.tables.begin() + 1})});
   PageSection levels = levels_section(level_diagram_figure(diagram), DiagramRoom::Above);
   if (shown.size() < comparison.variants.size()) {
-    levels.html = fmt::format("<p>The diagram holds {} of the {} variants.</p>\n", shown.size(),
-                              comparison.variants.size()) +
-                  levels.html;
+    levels.html = words_on_shown(comparison, shown) + levels.html;
   }
   page.sections.push_back(std::move(levels));
   page.sections.push_back({"comparison", "d block, frontier, robustness",

@@ -8,7 +8,7 @@
 
 namespace irrepwise {
 
-/// Of more variants than a diagram holds, it shows the first; the tables have all.
+/// The diagram shows the variants chosen, or as many of the first as it holds; the tables have all.
 /// @throws Error  as `level_diagram_figure`
 [[nodiscard]] std::string comparison_page(const Comparison& comparison,
                                           const Provenance& provenance, const PageOptions& options);

@@ -16,6 +16,7 @@ namespace irrepwise {
 
 // Embedded by the build from src/page/assets.
 extern const std::string_view page_css;
+extern const std::string_view page_surfaces_js;
 extern const std::string_view page_view_js;
 extern const std::string_view page_tables_js;
 extern const std::string_view page_levels_js;
@@ -78,6 +79,7 @@ std::string html_document(const HtmlPage& page) {
       "</main>\n<footer class=\"small\">{}</footer>\n"
       "<script type=\"application/json\" id=\"page-data\">{}</script>\n<script>\n",
       html_text(page.generator), page.data);
+  html += page_surfaces_js;
   html += page_view_js;
   html += page_tables_js;
   html += page_levels_js;

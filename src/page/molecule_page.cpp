@@ -8,6 +8,7 @@
 #include "core/text.hpp"
 #include "figure/level_diagram.hpp"
 #include "figure/svg.hpp"
+#include "output/caption_words.hpp"
 #include "output/html_parts.hpp"
 #include "output/levels_report.hpp"
 #include "output/orbital_pictures.hpp"
@@ -69,14 +70,7 @@ struct FrontierFigure {
 };
 
 FrontierFigure frontier_figure(const LevelsResult& result) {
-  std::vector<OrbitalChoice> choices;
-  for (const std::optional<int>& level :
-       {result.levels.frontier.homo, result.levels.frontier.lumo}) {
-    if (!level) continue;
-    const std::vector<OrbitalChoice> partners = partners_of(result.levels, *level);
-    choices.insert(choices.end(), partners.begin(), partners.end());
-  }
-  const ChosenOrbitals chosen = chosen_orbitals(result, std::move(choices));
+  const ChosenOrbitals chosen = chosen_orbitals(result, frontier_orbitals(result.levels));
   const OrbitalSurfaces surfaces = orbital_surfaces(result, chosen, {});
   std::vector<Scene> scenes;
   for (const OrbitalScene& scene : surfaces.scenes) scenes.push_back(scene.scene);
@@ -98,7 +92,7 @@ std::string molecule_page(const LevelsResult& result, const SymmetryResult& symm
   const LevelDiagram diagram = diagram_of(result, options);
 
   std::vector<PageMolecule> molecules = {
-      page_molecule(charged_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
+      page_molecule(readable_formula(result.molecule), result, {diagram.from_ev, diagram.to_ev})};
   add_surfaces(molecules, every_level, options.threads);
 
   const FrontierFigure frontier = frontier_figure(result);

@@ -3,6 +3,7 @@
 
 #include <optional>
 #include <string>
+#include <vector>
 
 #include "analysis/symmetry_result.hpp"
 #include "output/levels_result.hpp"
@@ -14,6 +15,8 @@ struct PageOptions {
   std::optional<double> from_ev;  // window of the level diagram; by default around the frontier
   std::optional<double> to_ev;
   int threads = 1;  // changes no byte
+  std::vector<int> variants =
+      {};  // of a comparison: those in the diagram, by index; empty: the first
 };
 
 /// @param symmetry  of the same molecule with the same options

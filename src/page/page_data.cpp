@@ -22,19 +22,6 @@ constexpr double to_coefficient = 1e5;
 constexpr double to_length = 1e4;
 constexpr double to_energy = 1e4;
 
-// "5dx2-y2" -> "5d<sub>x²−y²</sub>"
-std::string orbital_html(const Shell& shell, int component) {
-  const std::string name = shell_orbital_name(shell, component);
-  const std::size_t letter = name.find(shell_letter(shell.l));
-  std::string below;
-  for (const char c : name.substr(letter + 1)) {
-    below += c == '2' ? "²" : c == '3' ? "³" : c == '-' ? "−" : std::string(1, c);
-  }
-  std::string html = name.substr(0, letter + 1);
-  if (!below.empty()) html += "<sub>" + below + "</sub>";
-  return html;
-}
-
 Json colour_json(const Colour& colour) { return {colour.red, colour.green, colour.blue}; }
 
 Json surface_json(const std::optional<PackedSurface>& surface) {
@@ -95,7 +82,7 @@ Json level_json(const LevelsResult& result, const PageLevel& shown,
   json["occupation"] = rounded(level.occupation, to_coefficient);
   json["degeneracy"] = level.degeneracy;
   json["mark"] = mark_of(result.levels.frontier, shown.level);
-  json["made_of"] = composition_words(result, sets, groups, shown.level);
+  json["made_of"] = html_words(composition_words(result, sets, groups, shown.level));
   json["coefficients"] = coefficients_json(result, shown.level);
   json["shares"] = shares_json(result, shown.level);
   json["orbitals"] = orbitals_json(shown.orbitals);
@@ -123,7 +110,8 @@ Json molecule_json(const PageMolecule& shown) {
   json["orbitals"] = Json::array();
   for (const Shell& shell : result.basis.shells) {
     for (int component = 0; component < shell.size(); ++component) {
-      json["orbitals"].push_back({atom_name(molecule, shell.atom), orbital_html(shell, component)});
+      json["orbitals"].push_back(
+          {atom_name(molecule, shell.atom), html_words(shell_orbital_name(shell, component))});
     }
   }
   const std::vector<AtomSet> sets = atom_sets(result.symmetry);

@@ -6,6 +6,7 @@
 
 #include <Eigen/Geometry>
 
+#include "salc/bond_plane.hpp"
 #include "symmetry/operation.hpp"
 
 namespace irrepwise {
@@ -13,6 +14,8 @@ namespace {
 
 constexpr int least_neighbours = 2;  // fewer make no centre
 constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
+constexpr double in_plane_angstrom = 1e-4;
+constexpr double least_across = 1e-3;  // a shorter direction would be along z
 
 bool fixes_one_point(Family family) {
   switch (family) {
@@ -47,19 +50,12 @@ bool is_kept(const MolecularSymmetry& symmetry, int atom) {
                      [&](const std::vector<int>& images) { return images[atom] == atom; });
 }
 
-int neighbours(const Molecule& molecule, int atom) {
-  int count = 0;
-  for (int other = 0; other < molecule.size(); ++other) {
-    count += other != atom && are_bonded(molecule, atom, other) ? 1 : 0;
-  }
-  return count;
-}
-
 int atoms_in_plane(const Molecule& molecule, const Eigen::Vector3d& point,
                    const Eigen::Vector3d& normal) {
-  return static_cast<int>(std::count_if(
-      molecule.atoms().begin(), molecule.atoms().end(),
-      [&](const Atom& atom) { return std::abs(normal.dot(atom.position - point)) < 1e-4; }));
+  return static_cast<int>(
+      std::count_if(molecule.atoms().begin(), molecule.atoms().end(), [&](const Atom& atom) {
+        return std::abs(normal.dot(atom.position - point)) < in_plane_angstrom;
+      }));
 }
 
 // The sign for which the first component from z over y to x that is not zero is positive.
@@ -79,40 +75,15 @@ bool better(const Merit& a, const Merit& b) {
   return false;
 }
 
-// y of the representative: across the mirror that holds x and the line to the centre.
-Eigen::Vector3d first_y(const MolecularSymmetry& symmetry, const EquivalentAtoms& set,
-                        const Eigen::Vector3d& z) {
-  const Eigen::Vector3d at = symmetry.molecule.atoms()[set.representative()].position;
-  std::optional<Eigen::Vector3d> best;
-  Merit best_merit{};
-  for (const int g : set.site_group) {
-    const SymmetryOperation operation = classify_operation(symmetry.group.operations()[g]);
-    if (operation.kind != OperationKind::Reflection) continue;
-    const Eigen::Vector3d normal = operation.axis;
-    if (std::abs(normal.dot(z)) > same) continue;
-    const double across_principal = std::abs(normal[2]) > 1.0 - same ? 1.0 : 0.0;
-    const int in_plane = atoms_in_plane(symmetry.molecule, at, normal);
-    const double molecular_plane = in_plane == symmetry.molecule.size() ? 1.0 : 0.0;
-    const Merit merit = {std::max(across_principal, molecular_plane), double(in_plane),
-                         std::abs(normal[1]), std::abs(normal[0])};
-    if (!best || better(merit, best_merit)) {
-      best = upwards(normal);
-      best_merit = merit;
-    }
-  }
-  if (best) return *best;
-  for (const int i : {2, 1}) {
-    const Eigen::Vector3d wish = Eigen::Vector3d::Unit(i);
-    const Eigen::Vector3d across = wish - wish.dot(z) * z;
-    if (across.norm() > 1e-3) return across.normalized();
-  }
-  return Eigen::Vector3d::UnitX();
-}
-
 Eigen::Matrix3d frame_of(const Eigen::Vector3d& y, const Eigen::Vector3d& z) {
   Eigen::Matrix3d frame;
   frame << y.cross(z), y, z;
   return frame;
+}
+
+// 2 where x and y are those wished for, -2 where both are opposite, 0 for no wish.
+double nearness_to(const Eigen::Matrix3d& wish, const Eigen::Matrix3d& frame) {
+  return wish.col(0).dot(frame.col(0)) + wish.col(1).dot(frame.col(1));
 }
 
 // The mirror plane that makes "in plane" mean something: σh, or the plane of a planar molecule.
@@ -141,7 +112,8 @@ std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   std::pair<int, int> best_merit = {one_point ? -1 : least_neighbours, 0};
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
-    const std::pair merit = {neighbours(molecule, atom), molecule.atoms()[atom].atomic_number};
+    const std::pair merit = {static_cast<int>(bonded_atoms(molecule, atom).size()),
+                             molecule.atoms()[atom].atomic_number};
     if (merit == best_merit) best.reset();  // two alike: neither is the centre
     if (merit <= best_merit) continue;
     best = atom;
@@ -150,6 +122,39 @@ std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   if (best) return Centre{molecule.atoms()[*best].position, best};
   if (one_point) return Centre{};
   return std::nullopt;
+}
+
+Eigen::Vector3d first_y(const MolecularSymmetry& symmetry, const EquivalentAtoms& set,
+                        const Eigen::Vector3d& z) {
+  const Eigen::Vector3d at = symmetry.molecule.atoms()[set.representative()].position;
+  std::optional<Eigen::Vector3d> best;
+  Merit best_merit{};
+  for (const int g : set.site_group) {
+    const SymmetryOperation operation = classify_operation(symmetry.group.operations()[g]);
+    if (operation.kind != OperationKind::Reflection) continue;
+    const Eigen::Vector3d normal = operation.axis;
+    if (std::abs(normal.dot(z)) > same) continue;
+    const double across_principal = std::abs(normal[2]) > 1.0 - same ? 1.0 : 0.0;
+    const int in_plane = atoms_in_plane(symmetry.molecule, at, normal);
+    const double molecular_plane = in_plane == symmetry.molecule.size() ? 1.0 : 0.0;
+    const Merit merit = {std::max(across_principal, molecular_plane), double(in_plane),
+                         std::abs(normal[1]), std::abs(normal[0])};
+    if (!best || better(merit, best_merit)) {
+      best = upwards(normal);
+      best_merit = merit;
+    }
+  }
+  if (best) return *best;
+  if (const auto flat = bond_plane_normal(symmetry.molecule, set.representative())) {
+    const Eigen::Vector3d across = *flat - flat->dot(z) * z;
+    if (across.norm() > least_across) return upwards(across.normalized());
+  }
+  for (const int i : {2, 1}) {
+    const Eigen::Vector3d wish = Eigen::Vector3d::Unit(i);
+    const Eigen::Vector3d across = wish - wish.dot(z) * z;
+    if (across.norm() > least_across) return across.normalized();
+  }
+  return Eigen::Vector3d::UnitX();
 }
 
 std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
@@ -161,19 +166,31 @@ std::optional<LocalFrames> local_frames(const MolecularSymmetry& symmetry,
   constexpr double at_centre_angstrom = 1e-4;  // an atom there has no line to the centre
   if ((centre.position - at).norm() < at_centre_angstrom) return std::nullopt;
   const Eigen::Vector3d z = (centre.position - at).normalized();
-  const Eigen::Vector3d x = frame_of(first_y(symmetry, set, z), z).col(0);
+  const std::vector<Eigen::Matrix3d> no_wishes(set.atoms.size(), Eigen::Matrix3d::Zero());
+  return carried_frames(symmetry, set, first_y(symmetry, set, z), z, no_wishes);
+}
+
+LocalFrames carried_frames(const MolecularSymmetry& symmetry, const EquivalentAtoms& set,
+                           const Eigen::Vector3d& y, const Eigen::Vector3d& z,
+                           const std::vector<Eigen::Matrix3d>& wishes) {
+  const double nearness = nearness_to(wishes.front(), frame_of(y, z));
+  const bool decides = std::abs(nearness) > same;
+  const Eigen::Vector3d first = !decides ? upwards(y) : nearness < 0.0 ? Eigen::Vector3d(-y) : y;
+  const Eigen::Vector3d x = frame_of(first, z).col(0);
 
   LocalFrames local;
-  for (const int atom : set.atoms) {
-    const Eigen::Vector3d atom_z = (centre.position - molecule.atoms()[atom].position).normalized();
+  for (std::size_t i = 0; i < set.atoms.size(); ++i) {
     std::optional<Eigen::Matrix3d> best;
     Merit best_merit{};
     for (int g = 0; g < symmetry.group.order(); ++g) {
-      if (symmetry.images[g][set.representative()] != atom) continue;
-      const Eigen::Vector3d y = atom_z.cross(symmetry.group.operations()[g] * x);
-      const Merit merit = {y[2], y[1], y[0], 0.0};
+      if (symmetry.images[g][set.representative()] != set.atoms[i]) continue;
+      const Eigen::Matrix3d& operation = symmetry.group.operations()[g];
+      const Eigen::Vector3d atom_z = operation * z;
+      const Eigen::Vector3d atom_y = atom_z.cross(operation * x);
+      const Eigen::Matrix3d frame = frame_of(atom_y, atom_z);
+      const Merit merit = {nearness_to(wishes[i], frame), atom_y[2], atom_y[1], atom_y[0]};
       if (!best || better(merit, best_merit)) {
-        best = frame_of(y, atom_z);
+        best = frame;
         best_merit = merit;
       }
     }

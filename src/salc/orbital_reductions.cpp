@@ -1,8 +1,10 @@
 #include "salc/orbital_reductions.hpp"
 
 #include <stdexcept>
+#include <utility>
 
 #include "harmonics/real_harmonics.hpp"
+#include "salc/outer_frames.hpp"
 
 namespace irrepwise {
 namespace {
@@ -135,7 +137,8 @@ std::vector<std::optional<LocalFrames>> frames_of_sets(const MolecularSymmetry& 
   for (const EquivalentAtoms& set : sets) {
     frames.push_back(centre ? local_frames(symmetry, set, *centre) : std::nullopt);
   }
-  return frames;
+  if (!centre || !centre->atom) return frames;
+  return with_outer_frames(symmetry, sets, *centre->atom, std::move(frames));
 }
 
 std::vector<OrbitalReduction> orbital_reductions(

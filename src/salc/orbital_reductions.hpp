@@ -32,7 +32,8 @@ struct OrbitalReduction {
     const MolecularSymmetry& symmetry, const Basis& basis, const std::vector<EquivalentAtoms>& sets,
     const std::vector<std::optional<LocalFrames>>& frames);
 
-/// @returns  frames of every set about the centre of the molecule, nothing where there is none
+/// Frames of every set: about the centre of the molecule, and further out along the bonds.
+/// @returns  by set; all empty where the molecule has no centre
 [[nodiscard]] std::vector<std::optional<LocalFrames>> frames_of_sets(
     const MolecularSymmetry& symmetry, const std::vector<EquivalentAtoms>& sets);
 

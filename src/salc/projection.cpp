@@ -6,10 +6,12 @@
 namespace irrepwise {
 namespace {
 
+constexpr double near_whole = 1e-6;
+
 // Theory demands a whole number; anything else is a mistake of ours, not of the input.
 int whole(double value) {
   const double rounded = std::round(value);
-  if (std::abs(value - rounded) > 1e-6) {
+  if (std::abs(value - rounded) > near_whole) {
     throw std::logic_error("an irrep occurs a fractional number of times");
   }
   return static_cast<int>(rounded);
@@ -61,14 +63,16 @@ std::vector<Eigen::MatrixXd> site_invariants(const Irrep& irrep, const Equivalen
       projected.push_back(project(unit));
     }
   }
+  constexpr double tie = 1e-9;      // lengths that differ by rounding only
+  constexpr double nothing = 1e-6;  // a projection of this length is none
   // The projections of single functions, the longest first, each freed of those taken before.
   std::vector<Eigen::MatrixXd> chosen;
   while (static_cast<int>(chosen.size()) < wanted) {
     const Eigen::MatrixXd* longest = &projected.front();
     for (const Eigen::MatrixXd& candidate : projected) {
-      if (candidate.norm() > longest->norm() + 1e-9) longest = &candidate;
+      if (candidate.norm() > longest->norm() + tie) longest = &candidate;
     }
-    if (longest->norm() < 1e-6) throw std::logic_error("too few invariants of a site group");
+    if (longest->norm() < nothing) throw std::logic_error("too few invariants of a site group");
     const Eigen::MatrixXd unit = longest->normalized();
     chosen.push_back(unit);
     std::vector<Eigen::MatrixXd> taken = {unit};

@@ -16,9 +16,11 @@ std::vector<Eigen::MatrixXd> spherical_invariants(int irrep_l, int l) {
   return {Eigen::MatrixXd::Identity(2 * l + 1, 2 * l + 1)};
 }
 
+constexpr double nothing = 1e-14;
+
 // Rounding leaves 1e-17 where theory has 0; zeros keep SALCs sparse and readable.
 Eigen::MatrixXd tidy(const Eigen::MatrixXd& x) {
-  return x.unaryExpr([](double value) { return std::abs(value) < 1e-14 ? 0.0 : value; });
+  return x.unaryExpr([](double value) { return std::abs(value) < nothing ? 0.0 : value; });
 }
 
 }  // namespace

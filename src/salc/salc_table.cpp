@@ -12,9 +12,11 @@ namespace {
 
 constexpr double tie = 1e-6;
 
+constexpr double nothing = 1e-13;
+
 // Rounding leaves 1e-16 where theory has 0.
 Eigen::MatrixXd tidy(const Eigen::MatrixXd& x) {
-  return x.unaryExpr([](double value) { return std::abs(value) < 1e-13 ? 0.0 : value; });
+  return x.unaryExpr([](double value) { return std::abs(value) < nothing ? 0.0 : value; });
 }
 
 double phase(const Eigen::MatrixXd& first_partner) {
@@ -37,7 +39,7 @@ class Writer {
   // All partners of the SALCs of one part of a shell.
   void add(std::vector<SalcFunction>& list, SalcFunction blank, int l) const {
     const bool spherical = group_.symbol().family == Family::Kh;
-    const SiteFunctions functions = blank.local
+    const SiteFunctions functions = blank.frame == OrbitalFrame::Local
                                         ? part_functions(group_, set_, *frames_, blank.part, l)
                                         : whole_shell(group_, set_, l);
     blank.components = part_components(blank.part, l);
@@ -69,7 +71,8 @@ class Writer {
       const int g = set_.from_representative[position];
       Eigen::MatrixXd on_atom = group_.irreps()[blank.irrep].matrices[g] * representative *
                                 harmonic_rotation(l, group_.operations()[g]).transpose();
-      if (blank.local) on_atom = (on_atom * harmonic_rotation(l, frames_->frames[position])).eval();
+      if (blank.frame == OrbitalFrame::Local)
+        on_atom = (on_atom * harmonic_rotation(l, frames_->frames[position])).eval();
       for (std::size_t r = 0; r < partners.size(); ++r) {
         for (Eigen::Index i = 0; i < columns; ++i) {
           partners[r](position, i) =
@@ -107,7 +110,7 @@ std::vector<SalcFunction> salc_table(const MolecularSymmetry& symmetry, const Ba
       SalcFunction blank;
       blank.set = s;
       blank.shell = shell;
-      blank.local = local != nullptr;
+      blank.frame = local ? OrbitalFrame::Local : OrbitalFrame::Standard;
       if (!local) {
         writer.add(list, blank, l);
         continue;
@@ -121,8 +124,9 @@ std::vector<SalcFunction> salc_table(const MolecularSymmetry& symmetry, const Ba
   return list;
 }
 
-std::string salc_orbital_name(const Shell& shell, int component, bool local) {
-  if (!local) return fmt::format("{}{}", shell.n(), orbital_name(shell.l, component));
+std::string salc_orbital_name(const Shell& shell, int component, OrbitalFrame frame) {
+  if (frame == OrbitalFrame::Standard)
+    return fmt::format("{}{}", shell.n(), orbital_name(shell.l, component));
   static constexpr std::array<std::array<const char*, 7>, 4> names = {
       {{""},
        {"πx", "πy", "σ"},

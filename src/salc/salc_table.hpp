@@ -12,12 +12,15 @@
 
 namespace irrepwise {
 
+/// Whose axes orbitals are written in: the molecule's, or each atom's own.
+enum class OrbitalFrame { Standard, Local };
+
 /// One partner of one SALC.
 struct SalcFunction {
   int set = 0;    // index in the sets
   int shell = 0;  // of the representative, in the basis
   Part part = Part::Shell;
-  bool local = false;  // over orbitals of each atom's own frame
+  OrbitalFrame frame = OrbitalFrame::Standard;
   int irrep = 0;
   int number = 1;                // of the SALCs of this part and irrep
   int partner = 1;               // from 1
@@ -35,6 +38,6 @@ struct SalcFunction {
     const std::vector<std::optional<LocalFrames>>& frames = {});
 
 /// @returns  "3pz" in the standard frame, "3s", "3pσ", "3pπx", "3dδxy" in the local one
-[[nodiscard]] std::string salc_orbital_name(const Shell& shell, int component, bool local);
+[[nodiscard]] std::string salc_orbital_name(const Shell& shell, int component, OrbitalFrame frame);
 
 }  // namespace irrepwise

@@ -80,7 +80,7 @@ std::vector<std::string> axis_words(const PointGroup& group, const Molecule& mol
     case Family::C1:
     case Family::Ci:
     case Family::Kh:
-      words = {"axes as in the input"};
+      words = {"as in the input"};
       break;
     case Family::Cs:
       words = {plane_phrase("xy", "mirror plane", molecule, z)};

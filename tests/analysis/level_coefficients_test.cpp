@@ -138,6 +138,30 @@ TEST_CASE("in a square the ligands take part by σ or by one π as symmetry says
   }
 }
 
+TEST_CASE("in a hexacarbonyl a1g is σ on carbon and oxygen alike, t2g and t1g are π on both") {
+  // Oh: σ of six ligands on the axes span a1g + eg + t1u, π span t1g + t2g + t1u + t2u (any
+  // textbook of ligand field theory), so a1g and eg have no π and t1g, t2g, t2u no σ.
+  const Framed all = framed(moved(test_molecule("hexacarbonylchromium").molecule, 9).molecule);
+  int levels = 0;
+  for (const Level& level : all.run.levels.levels) {
+    const std::string name = level_name(all.run.symmetry.group, level);
+    const std::string irrep = name.substr(name.find_first_not_of("0123456789"));
+    const bool no_pi = irrep == "a1g" || irrep == "eg";
+    const bool no_sigma = irrep == "t1g" || irrep == "t2g" || irrep == "t2u";
+    if (!no_pi && !no_sigma) continue;
+    CAPTURE(name);
+    ++levels;
+    for (std::size_t set = 0; set < all.sets.size(); ++set) {
+      if (all.sets[set].size() != 6) continue;
+      const Eigen::Vector3d found = largest_of_kind(all, static_cast<int>(set), name);
+      if (no_pi) CHECK(std::max(found[0], found[1]) < 1e-10);
+      if (no_sigma) CHECK(found[2] < 1e-10);
+      CHECK(found.maxCoeff() > 0.01);
+    }
+  }
+  CHECK(levels > 10);
+}
+
 TEST_CASE("in a linear molecule σ levels have no π part and π levels no σ part") {
   const Molecule carbon_dioxide({{6, {0, 0, 0}}, {8, {0, 1.16, 0}}, {8, {0, -1.16, 0}}}, 0, "CO2");
   const Framed all = framed(carbon_dioxide);
@@ -195,7 +219,8 @@ TEST_CASE("coefficients over SALCs expand to those over atomic orbitals, one for
 }
 
 TEST_CASE("σ and π shares of a level do not depend on how the molecule lies and is numbered") {
-  for (const char* name : {"sulfur hexafluoride", "phosphorus pentafluoride"}) {
+  for (const char* name :
+       {"sulfur hexafluoride", "phosphorus pentafluoride", "hexacarbonylchromium"}) {
     CAPTURE(name);
     const Molecule& molecule = test_molecule(name).molecule;
     const Framed first = framed(molecule);

@@ -8,11 +8,13 @@
 #include <set>
 #include <string>
 #include <utility>
+#include <vector>
 
 #include <doctest/doctest.h>
 
 #include "core/error.hpp"
 #include "figure/collisions.hpp"
+#include "figure/font.hpp"
 #include "figure/rich_text.hpp"
 #include "support/molecules.hpp"
 #include "support/run.hpp"
@@ -197,7 +199,10 @@ TEST_CASE("columns with links stand side by side, and links of equal levels run 
   CHECK(links == shown);
 }
 
-TEST_CASE("a link runs between the heights of its two levels, however far labels are moved") {
+TEST_CASE(
+    "where levels crowd, a link runs from the name of one to the name of the other and no other "
+    "link "
+    "ends there; elsewhere it runs between their heights") {
   // Six levels within 0.05 eV: labels need 14 px each, the bars stand less than 1 px apart.
   LevelDiagram diagram;
   for (int c = 0; c < 2; ++c) {
@@ -221,22 +226,47 @@ TEST_CASE("a link runs between the heights of its two levels, however far labels
   diagram.to_ev = -5.0;
   const Figure figure = level_diagram_figure(diagram);
   CHECK(first_text_collision(figure) == "");
-  std::map<std::string, double> bar;  // by column and level
+  std::map<std::string, double> bar;              // by column and level
+  std::map<std::string, std::vector<Box>> names;  // their texts, from the left
+  const Font font;
   for (const Group& group : figure.groups) {
     if (group.kind != "level") continue;
-    bar[group.facts[0].second + group.name] = std::get<Path>(group.elements.front()).lines[0][0].y;
+    const std::string level = group.facts[0].second + group.name;
+    for (const Element& element : group.elements) {
+      if (const auto* text = std::get_if<Text>(&element)) names[level].push_back(font.box(*text));
+    }
+    bar[level] = std::get<Path>(group.elements.front()).lines[0][0].y;
   }
-  int links = 0;
+  std::vector<double> starts;
+  std::vector<double> ends;
   for (const Group& group : figure.groups) {
     if (group.kind != "link") continue;
-    ++links;
     const auto& way = std::get<Path>(group.elements.front()).lines[0];
+    const std::string from = group.facts[0].second + group.facts[1].second;
+    const std::string to = group.facts[2].second + group.facts[3].second;
     CAPTURE(group.title);
-    CHECK(std::abs(way.front().y - bar.at(group.facts[0].second + group.facts[1].second)) < 0.5);
-    CHECK(std::abs(way.back().y - bar.at(group.facts[2].second + group.facts[3].second)) < 0.5);
-    if (group.facts[1].second != "7a") CHECK(way.back().y < way.front().y);  // all rise by 0.02 eV
+    starts.push_back(way.front().y);
+    ends.push_back(way.back().y);
+    const auto is_beside = [](const Box& text, double y) {
+      return text.top < y && y < text.bottom;
+    };
+    CHECK(is_beside(names.at(from).back(), way.front().y));
+    CHECK(names.at(from).back().right < way.front().x);
+    if (group.facts[1].second == "7a") {  // nothing near it
+      CHECK(names.at(to).size() == 1);
+      CHECK(way.front().y == doctest::Approx(bar.at(from)).epsilon(1e-12));
+      CHECK(way.back().y == doctest::Approx(bar.at(to)).epsilon(1e-12));
+    } else {
+      REQUIRE(names.at(to).size() == 2);
+      CHECK(is_beside(names.at(to).front(), way.back().y));
+      CHECK(way.back().x < names.at(to).front().left);
+    }
   }
-  CHECK(links == 7);
+  REQUIRE(starts.size() == 7);
+  for (std::vector<double>* places : {&starts, &ends}) {
+    std::sort(places->begin(), places->end());
+    for (std::size_t i = 1; i < places->size(); ++i) CHECK((*places)[i] - (*places)[i - 1] > 12.0);
+  }
 }
 
 TEST_CASE("a window without levels, or upside down, is refused") {

@@ -110,8 +110,12 @@ TEST_CASE("a share outside 0 to 1, or a spacing that cannot serve, is refused") 
   CHECK_THROWS_WITH_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, 1.5)),
                        "share of the density: found 1.5, expected more than 0 and less than 1",
                        Error);
-  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, 0.0)), Error);
-  CHECK_THROWS_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, std::nan(""))), Error);
+  CHECK_THROWS_WITH_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, 0.0)),
+                       "share of the density: found 0, expected more than 0 and less than 1",
+                       Error);
+  CHECK_THROWS_WITH_AS(static_cast<void>(enclosing_isovalue(field, grid, 0, std::nan(""))),
+                       "share of the density: found nan, expected more than 0 and less than 1",
+                       Error);
   CHECK_THROWS_WITH_AS(static_cast<void>(sample(field, 5.0)),
                        "spacing of the grid: found 5, expected 0.02 to 1 Å", Error);
 }

@@ -1,3 +1,7 @@
+#include <span>
+#include <string>
+#include <vector>
+
 #include <doctest/doctest.h>
 
 #include "figure/collisions.hpp"
@@ -93,4 +97,28 @@ TEST_CASE("a sheet of any number of cells has them all, in rows that do not over
     CHECK(first_text_collision(figure) == "");
     CHECK(text_boxes(figure).size() == 1 + 2 * n);
   }
+}
+
+TEST_CASE("a contour drawing says where the axes of its plane run") {
+  const Prepared p = frontier_of("tetrachloroplatinate(II)");
+  const Molecule& molecule = p.r.symmetry.molecule;
+  const OrbitalField field(molecule, p.r.basis, p.coefficients.col(0));
+  const auto captions_in = [&](const Plane& plane) {
+    const Figure figure = contour_sheet(
+        {"", plain_text("")}, molecule, std::span(p.captions).first(1),
+        std::vector{contour_map(field, 0, plane, contour_levels())}, std::vector{plane});
+    std::string captions;
+    for (const NamedBox& text : text_boxes(figure)) captions += text.name + '\n';
+    return captions;
+  };
+  const auto says = [](const std::string& captions, const std::string& words) {
+    CAPTURE(captions);
+    CHECK(captions.find(":" + words + '\n') != std::string::npos);
+  };
+  says(captions_in(axes_plane("xy")), "x to the right, y upwards");
+  says(captions_in(axes_plane("zx")), "x to the right, z upwards");
+  says(captions_in(axes_plane("yz", 0.5)), "y to the right, z upwards");
+  Plane tilted;  // turned about x by the angle of a 3-4-5 triangle
+  tilted.up = {0.0, -0.6, 0.8};
+  says(captions_in(tilted), "x to the right, (0.00, −0.60, 0.80) upwards");
 }

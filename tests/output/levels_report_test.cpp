@@ -5,11 +5,14 @@
 
 #include <doctest/doctest.h>
 
+#include "analysis/d_block.hpp"
+#include "analysis/donors.hpp"
 #include "core/error.hpp"
 #include "output/composition.hpp"
 #include "output/display_width.hpp"
 #include "output/example.hpp"
 #include "output/levels_json.hpp"
+#include "support/molecules.hpp"
 
 using namespace irrepwise;
 
@@ -86,6 +89,50 @@ TEST_CASE("a range of energies shows just its levels, and an empty one is refuse
   CHECK_THROWS_AS(static_cast<void>(levels_report(result, {.from_ev = 1e4})), Error);
 }
 
+TEST_CASE("the default window holds the frontier and the whole d block of every metal") {
+  int widened = 0;
+  for (const TestMolecule& test : test_molecules()) {
+    const std::string name = test.name;
+    CAPTURE(name);
+    const std::vector<int> metals =
+        metal_atoms(test.molecule, make_basis(test.molecule, published_parameters()));
+    if (metals.empty()) continue;
+    const LevelsResult result = result_of(test.molecule);
+    const Table table = levels_report(result).tables.front();
+    std::vector<std::string> shown;
+    for (const auto& line : table.lines) {
+      if (const Row* row = std::get_if<Row>(&line)) shown.push_back(cell_exact(row->cells[1]));
+    }
+    const auto is_shown = [&](int level) {
+      const Level& wanted = result.levels.levels[static_cast<std::size_t>(level)];
+      return std::count(shown.begin(), shown.end(), level_name(result.symmetry.group, wanted)) == 1;
+    };
+    if (result.levels.frontier.homo) CHECK(is_shown(*result.levels.frontier.homo));
+    if (result.levels.frontier.lumo) CHECK(is_shown(*result.levels.frontier.lumo));
+    for (const int metal : metals) {
+      const DBlock block =
+          find_d_block(result.symmetry, result.basis, result.levels, result.populations, metal);
+      for (const DLevel& level : block.levels) {
+        CHECK(is_shown(level.level));
+        const int above = level.level - result.levels.frontier.homo.value_or(0);
+        widened += above > 6 || above < -9 ? 1 : 0;
+      }
+    }
+  }
+  CHECK(widened > 5);  // in some the d block reaches beyond ten levels down and six up
+}
+
+TEST_CASE("a terminal alone is told which option shows the levels left out") {
+  const LevelsResult result = result_of(benzene());
+  LevelWindow window{.from_ev = -20.0, .to_ev = 0.0};
+  CHECK(levels_report(result, window).tables.front().caption.find("--all") == std::string::npos);
+  window.hint = LevelsHint::NameAllOption;
+  CHECK(levels_report(result, window).tables.front().caption.ends_with("(--all shows every one)"));
+  CHECK(levels_report(result, {.all = true, .hint = LevelsHint::NameAllOption})
+            .tables.front()
+            .caption == "Levels");
+}
+
 TEST_CASE("the whole report keeps to 40 columns and more, but for the narrow tables themselves") {
   const Report report = levels_report(result_of(benzene()));
   for (const int width : {60, 80, 100, 200}) {
@@ -119,7 +166,7 @@ TEST_CASE("an open shell is said so") {
   const Molecule oxygen({{8, {0.0, 0.0, 0.0}}, {8, {0.0, 0.0, 1.21}}}, 0, "");
   const std::string text = report_text(levels_report(result_of(oxygen)), 100);
   CHECK(text.find("Open shell: the HOMO holds 2 of 4 electrons") != std::string::npos);
-  CHECK(text.substr(0, 2) == "O2");  // no title: the formula stands for it
+  CHECK(text.starts_with("O₂\n"));  // no title: the formula stands for it
 }
 
 TEST_CASE("every level that a multiplicity leaves partly filled is named") {

@@ -84,7 +84,7 @@ TEST_CASE("the first table says what it needs to stand alone") {
       orbital_tables(result, orbital_table(result, {{0, 0}}, {}), layout);
   REQUIRE(tables.size() == 1);
   CHECK(tables[0].caption == "Orbital coefficients over atomic orbitals: a square");
-  for (const char* words : {"square.xyz", "Cl4Pt 2−", "D4h", "weighted rule, K\u00A0=\u00A01.75",
+  for (const char* words : {"square.xyz", "Cl₄Pt²⁻", "D4h", "weighted rule, K\u00A0=\u00A01.75",
                             "parameters: published", "z = C4 through Pt1", "eV", "cᵀSc = 1"}) {
     CAPTURE(words);
     CHECK(holds(tables[0].legend, words));
@@ -156,7 +156,7 @@ TEST_CASE("in local frames a molecule without a centre is refused") {
   const LevelsResult result =
       result_of(Molecule({{1, {0, 0, 0}}, {17, {0, 0, 1.27}}}, 0, "hydrogen chloride"));
   OrbitalTableOptions options;
-  options.frame = TableFrame::Local;
+  options.frame = OrbitalFrame::Local;
   CHECK_THROWS_WITH_AS(
       static_cast<void>(orbital_table(result, {{0, 0}}, options)),
       "no atom has a local frame: the molecule has no central atom with neighbours around it; use "

@@ -72,7 +72,7 @@ DrawnBars drawn_bars(const Figure& figure) {
       if (path == nullptr || path->lines[0].size() != 2) continue;
       const Point2 a = path->lines[0][0];
       const Point2 b = path->lines[0][1];
-      if (a.y != b.y) continue;  // a leader to its label
+      if (a.y != b.y || path->stroke->width < 1.0) continue;  // a leader to its label
       ++out.count[name];
       const double half = 0.5 * path->stroke->width;
       const NamedBox bar{name.first + " " + name.second, {a.x, a.y - half, b.x, b.y + half}};
@@ -108,14 +108,87 @@ std::multiset<LinkEnds> drawn_links(const Figure& figure) {
   return links;
 }
 
+// Whether a line from a to b touches the box, by walking along it.
+bool runs_through(const Box& box, const Point2& a, const Point2& b) {
+  constexpr int steps = 400;
+  for (int i = 0; i <= steps; ++i) {
+    const double t = double(i) / steps;
+    const double x = a.x + t * (b.x - a.x);
+    const double y = a.y + t * (b.y - a.y);
+    if (box.left < x && x < box.right && box.top < y && y < box.bottom) return true;
+  }
+  return false;
+}
+
+// The first link that runs through the name of a level.
+std::string crossed_text(const Figure& figure) {
+  const Font font;
+  std::vector<NamedBox> texts;
+  for (const Group& group : figure.groups) {
+    if (group.kind != "level") continue;
+    for (const Element& element : group.elements) {
+      if (const auto* text = std::get_if<Text>(&element))
+        texts.push_back({group.name, font.box(*text)});
+    }
+  }
+  for (const Group& group : figure.groups) {
+    if (group.kind != "link") continue;
+    const auto& way = std::get<Path>(group.elements.front()).lines[0];
+    for (std::size_t i = 1; i < way.size(); ++i) {
+      for (const NamedBox& text : texts) {
+        if (runs_through(text.box, way[i - 1], way[i]))
+          return group.title + " through " + text.name;
+      }
+    }
+  }
+  return {};
+}
+
+// The first two links that end too near each other to be told apart, at different levels with
+// names.
+std::string doubtful_link(const Figure& figure, const LevelDiagram& diagram) {
+  constexpr double apart_px = 10.0;  // about the height of the letters
+  std::set<std::pair<std::string, std::string>> labelled;
+  for (const DiagramColumn& column : diagram.columns) {
+    for (const DiagramLevel& level : column.levels) {
+      if (level.labelled) labelled.insert({column.title, level.label});
+    }
+  }
+  struct End {
+    std::pair<std::string, std::string> level;
+    double y;
+  };
+  for (const bool start : {true, false}) {
+    const std::string which = start ? "from" : "to";
+    std::vector<End> ends;
+    for (const Group& group : figure.groups) {
+      if (group.kind != "link") continue;
+      const auto& way = std::get<Path>(group.elements.front()).lines[0];
+      const End end{{fact(group, which + "-column"), fact(group, which + "-level")},
+                    start ? way.front().y : way.back().y};
+      if (labelled.count(end.level) == 0) continue;
+      for (const End& other : ends) {
+        if (other.level.first != end.level.first || other.level == end.level) continue;
+        if (std::abs(other.y - end.y) < apart_px) {
+          return group.title + ": " + end.level.second + " and " + other.level.second;
+        }
+      }
+      ends.push_back(end);
+    }
+  }
+  return {};
+}
+
 }  // namespace
 
 TEST_CASE(
-    "in a diagram of two, three, six, eight, ten or twelve variants nothing overlaps, and every "
-    "level of the window appears once in its column, with a bar for each partner") {
+    "in a diagram of two, three, six, eight, ten or twelve variants nothing overlaps, links "
+    "end apart, and every level of the window appears once in its column, with a bar for each "
+    "partner") {
   const Comparison platform = comparison_of({"trans_to_hydride.yaml"});
   const Comparison stepwise = comparison_of({"stepwise_octahedron.yaml"});
-  const Comparison mixed = comparison_of({"ligand_series.yaml", "trans_to_hydride.yaml"}, 9 - 2);
+  Comparison mixed = comparison_of({"ligand_series.yaml", "trans_to_hydride.yaml"}, 9 - 2);
+  for (std::size_t i = 7; i < mixed.variants.size(); ++i) mixed.variants[i].name += " on platinum";
   const Comparison open_shells =
       comparison_of({"high_spin_octahedron.yaml", "high_spin_tetrahedron.yaml"});
   const Comparison plain = comparison_of({"benzene.xyz", "ethane_staggered.xyz", "cage_c60.xyz"});
@@ -142,6 +215,8 @@ TEST_CASE(
       CAPTURE(diagram.columns.size());
       const Figure figure = level_diagram_figure(diagram);
       CHECK(first_text_collision(figure) == "");
+      CHECK(crossed_text(figure) == "");
+      CHECK(doubtful_link(figure, diagram) == "");
       const DrawnBars bars = drawn_bars(figure);
       CHECK(bars.collision == "");
       CHECK(bars.twice.empty());

@@ -93,5 +93,7 @@ TEST_CASE("a window without levels is refused") {
   PageOptions options;
   options.from_ev = 100.0;
   options.to_ev = 110.0;
-  CHECK_THROWS_AS(page_of(result, options), Error);
+  CHECK_THROWS_WITH_AS(page_of(result, options),
+                       "no level lies between 100 and 110 eV; they run from -27.113 to 12.881 eV",
+                       Error);
 }

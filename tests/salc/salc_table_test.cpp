@@ -44,7 +44,7 @@ Eigen::VectorXd spread(const Tables& all, const SalcFunction& salc) {
     for (std::size_t c = 0; c < salc.components.size(); ++c) {
       on_atom[salc.components[c]] = salc.coefficients(i, static_cast<Eigen::Index>(c));
     }
-    if (salc.local) {
+    if (salc.frame == OrbitalFrame::Local) {
       on_atom = (harmonic_rotation(shell.l, all.frames[salc.set]->frames[i]) * on_atom).eval();
     }
     vector.segment(shell.first_orbital, shell.size()) = on_atom;
@@ -178,7 +178,7 @@ TEST_CASE("orbitals are called by their frame") {
   const Basis basis =
       make_basis(test_molecule("titanium tetrachloride").molecule, published_parameters());
   const Shell& p = basis.shells[basis.first_shell[1] + 1];
-  CHECK(salc_orbital_name(p, 2, true) == "3pσ");
-  CHECK(salc_orbital_name(p, 0, true) == "3pπx");
-  CHECK(salc_orbital_name(p, 2, false) == "3pz");
+  CHECK(salc_orbital_name(p, 2, OrbitalFrame::Local) == "3pσ");
+  CHECK(salc_orbital_name(p, 0, OrbitalFrame::Local) == "3pπx");
+  CHECK(salc_orbital_name(p, 2, OrbitalFrame::Standard) == "3pz");
 }

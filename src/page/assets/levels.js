@@ -105,7 +105,7 @@ function fillPanel() {
     : page.no_surface);
   facts.replaceChildren(
     element("p", {class: "lead"}, words.join(" \u00B7 ")), partnerButtons(level),
-    element("p", {}, level.made_of),
+    element("p", {}, labelled(level.made_of)),
     element("p", {class: "small"}, picture), box,
     element("p", {class: "small"}, page.coefficient_note));
   view.show(molecule, orbital);

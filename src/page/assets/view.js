@@ -5,28 +5,6 @@
 const LIGHT = [-0.41, 0.52, 0.75];  // in the frame of the eye: x right, y up, z towards it
 const SURFACE_OPACITY = 0.8;
 
-// Little-endian numbers of one kind, as the page carries them.
-function unpacked(base64, ArrayType) {
-  const text = atob(base64);
-  const bytes = new Uint8Array(text.length);
-  for (let i = 0; i < text.length; ++i) bytes[i] = text.charCodeAt(i);
-  return new ArrayType(bytes.buffer);
-}
-
-function unpackedSurface(packed, colour) {
-  if (!packed) return null;
-  const places = unpacked(packed.places, Int16Array);
-  const directions = unpacked(packed.normals, Int8Array);
-  const vertices = new Float32Array(places.length);
-  const normals = new Float32Array(directions.length);
-  for (let i = 0; i < places.length; ++i) {
-    vertices[i] = packed.middle[i % 3] + packed.scale * places[i];
-    normals[i] = directions[i] / 127;
-  }
-  const triangles = unpacked(packed.triangles, packed.wide ? Uint32Array : Uint16Array);
-  return {vertices, normals, triangles, colour};
-}
-
 // A stick as a mesh, its ends inside the balls.
 function stickBetween(a, b, radius, colour) {
   const sectors = 12;
@@ -227,8 +205,8 @@ class View {
           atom => Math.hypot(...atom.place.map((x, k) => x - this.centre[k]))));
     }
     this.surfaces = !orbital ? [] : [
-      unpackedSurface(orbital.positive, this.look.positive),
-      unpackedSurface(orbital.negative, this.look.negative),
+      roundedSurface(orbital.positive, this.look.positive),
+      roundedSurface(orbital.negative, this.look.negative),
     ].filter(surface => surface);
     this.draw();
   }
