@@ -34,7 +34,7 @@ std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis,
     if (std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
     if (!are_bonded(molecule, metal, atom)) continue;
     // Joins every site that holds a neighbour.
-    DonorSite site{{atom}, {}};
+    DonorSite site{{atom}};
     std::vector<DonorSite> rest;
     for (DonorSite& other : sites) {
       const bool touches = std::any_of(other.atoms.begin(), other.atoms.end(), [&](int donor) {
