@@ -3,14 +3,10 @@
 #include <algorithm>
 #include <utility>
 
+#include "molecule/metals.hpp"
+
 namespace irrepwise {
 namespace {
-
-// Groups 3 to 12 with the lanthanides and actinides.
-bool is_d_or_f_block(int z) {
-  return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) ||
-         (z >= 89 && z <= 112);
-}
 
 bool has_d_shell(const Basis& basis, int atom) {
   const auto at = static_cast<std::size_t>(atom);
