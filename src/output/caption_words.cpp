@@ -93,7 +93,7 @@ std::string further_frame_sentences(const std::vector<std::optional<LocalFrames>
   }
   if (any_frames(frames, &LocalFrames::side_on)) {
     words +=
-        " Of atoms bound side-on, π is along the normal of the ligand's plane, on the side of the "
+        " Of a ring or π bond over a metal, π is along the normal of its plane, on the side of the "
         "metal; in the plane r points to the neighbours that bind with it, t across r.";
   }
   return words;

@@ -204,8 +204,8 @@ Table reduction_table(const SymmetryResult& result) {
   }
   if (const std::string sets = side_on_sets(result, names); !sets.empty()) {
     table.notes.push_back(fmt::format(
-        "{} bound side-on: π is along the normal of the ligand's plane, towards the metal; s and "
-        "in plane make the bonds within the ligand above all.",
+        "{}, a ring or π bond over the metal: π is along the normal of its plane; s and in plane "
+        "make σ bonds within the ligand above all.",
         sets));
   }
   return table;
