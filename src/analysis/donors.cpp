@@ -3,7 +3,7 @@
 #include <algorithm>
 #include <utility>
 
-#include "molecule/element_block.hpp"
+#include "molecule/metals.hpp"
 
 namespace irrepwise {
 namespace {

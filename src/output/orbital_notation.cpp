@@ -6,6 +6,7 @@
 #include <cstddef>
 
 #include "basis/shell.hpp"
+#include "salc/salc_table.hpp"
 
 namespace irrepwise {
 namespace {
@@ -27,6 +28,7 @@ std::size_t function_at(std::string_view text, int l) {
   };
   for (int component = 0; l > 0 && component <= 2 * l; ++component) {
     consider(orbital_name(l, component).substr(1));
+    consider(side_on_name(l, component).substr(1));
   }
   for (const std::string_view name : local_functions) consider(name);
   return longest;

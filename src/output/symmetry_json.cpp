@@ -199,7 +199,7 @@ Json salcs_json(const SymmetryResult& result) {
                     {"set", numbers_from_one(atoms)},
                     {"part", part_key(salc.part, shell.l)},
                     {"shell", std::to_string(shell.n()) + shell_letter(shell.l)},
-                    {"frame", salc.frame == OrbitalFrame::Local ? "local" : "standard"},
+                    {"frame", salc.frame == OrbitalFrame::Standard ? "standard" : "local"},
                     {"coefficients", std::move(coefficients)}});
   }
   return list;

@@ -145,6 +145,14 @@ std::string part_words(const SymmetryResult& result, const OrbitalReduction& red
   return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
 }
 
+std::string side_on_sets(const SymmetryResult& result, const std::vector<AtomSet>& names) {
+  std::vector<std::string> sets;
+  for (std::size_t s = 0; s < names.size(); ++s) {
+    if (result.frames[s] && result.frames[s]->side_on) sets.push_back(names[s].name);
+  }
+  return sets.empty() ? "" : joined(sets);
+}
+
 Table reduction_table(const SymmetryResult& result) {
   Table table;
   const std::vector<AtomSet> names = atom_sets(result.symmetry);
@@ -180,14 +188,25 @@ Table reduction_table(const SymmetryResult& result) {
     return std::any_of(result.frames.begin(), result.frames.end(),
                        [&](const auto& frames) { return frames && holds(*frames); });
   };
-  if (any([](const LocalFrames&) { return true; })) {
-    const std::string centre = result.central_atom
-                                   ? atom_name(result.symmetry.molecule, *result.central_atom)
-                                   : std::string("the centre");
+  if (any([](const LocalFrames& local) { return !local.side_on; })) {
+    const bool own_metal = any([](const LocalFrames& local) { return local.to_own_metal; });
+    const std::string goal =
+        result.central_atom
+            ? "along the line to " + atom_name(result.symmetry.molecule, *result.central_atom)
+        : own_metal ? std::string(
+                          "along the bond to the metal (of several, to their midpoint; of "
+                          "a metal itself, to the centre)")
+                    : std::string("along the line to the centre");
     const bool beyond_donors = any([](const LocalFrames& local) { return local.beyond_donors; });
     table.notes.push_back(
-        fmt::format("σ: along the line to {}{}; π: across it.", centre,
+        fmt::format("σ: {}{}; π: across it.", goal,
                     beyond_donors ? ", beyond the donors along the bond towards it" : ""));
+  }
+  if (const std::string sets = side_on_sets(result, names); !sets.empty()) {
+    table.notes.push_back(fmt::format(
+        "{}, a ring or π bond over the metal: π is along the normal of its plane; s and in plane "
+        "make σ bonds within the ligand above all.",
+        sets));
   }
   return table;
 }

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <sstream>
+#include <string>
 
 #include <doctest/doctest.h>
 
@@ -68,6 +69,37 @@ TEST_CASE("a square d8 complex has an empty b1g level of dx2-y2 as its LUMO") {
   CHECK(text.find("LUMO") != std::string::npos);
   CHECK(text.find("HOMO") > text.find("LUMO"));  // from high to low
   CHECK(text.find("Open shell") == std::string::npos);
+}
+
+TEST_CASE("orbitals of equivalent atoms are named where they are the same on all") {
+  // A quadruple bond, x towards chlorine: sigma and sigma* are a1g and a2u of dz2, pi and pi* eu
+  // and eg of dxz and dyz, delta and delta* b2g and b1u of dxy (Cotton, from memory).
+  const LevelsResult result = result_of(test_molecule("octachlorodirhenate(III)").molecule);
+  const std::vector<AtomSet> sets = atom_sets(result.symmetry);
+  const std::vector<ShellGroup> groups = shell_groups(result, sets);
+  int seen = 0;
+  for (std::size_t i = 0; i < result.levels.levels.size(); ++i) {
+    const std::string words = composition_words(result, sets, groups, static_cast<int>(i));
+    const std::string irrep =
+        result.symmetry.group.irreps()[static_cast<std::size_t>(result.levels.levels[i].irrep)]
+            .label;
+    const std::size_t at = words.find("Re\u00A05d");
+    if (at == std::string::npos) continue;
+    const std::string named = words.substr(at + std::string("Re\u00A05").size());
+    CAPTURE(irrep);
+    if (irrep == "A1g" || irrep == "A2u") CHECK(named.starts_with("dz2"));
+    if (irrep == "Eg" || irrep == "Eu") CHECK(named.starts_with("d(xz,yz)"));
+    if (irrep == "B2g" || irrep == "B1u") CHECK(named.starts_with("dxy"));
+    ++seen;
+  }
+  CHECK(seen >= 6);
+  // Of the chlorines of a square, some have px and some py: no name is right for all.
+  const LevelsResult square = result_of(skew_square());
+  const std::vector<AtomSet> square_sets = atom_sets(square.symmetry);
+  const int lumo = square.levels.frontier.lumo.value();
+  const std::string words =
+      composition_words(square, square_sets, shell_groups(square, square_sets), lumo);
+  CHECK(words.ends_with("Cl\u00A03p"));
 }
 
 TEST_CASE("equivalent charges and bonds stand once, and each by itself with all") {
