@@ -6,6 +6,7 @@
 
 #include "core/error.hpp"
 #include "figure/rich_text.hpp"
+#include "output/caption_words.hpp"
 
 namespace irrepwise {
 namespace {
@@ -42,7 +43,7 @@ SheetWords sheet_heading(const LevelsResult& result) {
   RichText method = formula_text(result.molecule) + plain_text(" · ") +
                     group_text(result.symmetry.group.symbol().name()) +
                     plain_text(" · " + method_words(result));
-  return {result.title.empty() ? charged_formula(result.molecule) : result.title,
+  return {result.title.empty() ? readable_formula(result.molecule) : result.title,
           std::move(method)};
 }
 
