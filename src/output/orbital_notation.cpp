@@ -74,17 +74,20 @@ bool any_of_starts(std::string_view text, const std::array<std::string_view, n>&
                      [&](std::string_view start) { return text.starts_with(start); });
 }
 
-// Whether "C4" between these words is an axis or a group, not the fourth atom.
+// Whether "C4" between these words is an axis or a group, not the fourth atom; "Cs" and "Th" a
+// group, not an element.
 bool is_symmetry_between(std::string_view before, std::string_view after) {
-  constexpr std::array<std::string_view, 8> leads = {
-      "x = ", "y = ", "z = ", "subgroup of ", "group ", "Descent from ", "→ ", "→\u00a0"};
+  constexpr std::array<std::string_view, 10> leads = {
+      "x = ",         "y = ",         "z = ", "subgroup of ", "Character table of ",
+      "Point group ", "point group ", "→ ",   "→\u00a0",      "Descent from "};
   constexpr std::array<std::string_view, 7> follows = {
       " at tolerance", "\u00a0at\u00a0",  ", a subgroup of", " →", "\u00a0→",
       " (S",           " in the yz plane"};
+  const bool descent = before.starts_with("Descent from ") && before.ends_with(" to ");
   // "C4 (S8)"
   const bool second = before.ends_with(" (") && after.starts_with(')') && before.size() > 2 &&
                       is_digit(before, before.size() - 3);
-  return any_of_ends(before, leads) || any_of_starts(after, follows) || second;
+  return any_of_ends(before, leads) || any_of_starts(after, follows) || descent || second;
 }
 
 // The name of a group or an axis that starts here; without text where none does.
@@ -95,6 +98,12 @@ NotationRun symmetry_at(std::string_view words, std::size_t at) {
     if (!rest.starts_with(name) || goes_on_a_word(rest, name.size())) continue;
     return {std::string(name.substr(0, name.size() - 1)), std::string(name.substr(name.size() - 1)),
             Notation::Symmetry};
+  }
+  constexpr std::array<std::string_view, 3> by_words = {"Cs", "Ci", "Th"};
+  for (const std::string_view name : by_words) {
+    if (!rest.starts_with(name) || goes_on_a_word(rest, name.size())) continue;
+    if (!is_symmetry_between(words.substr(0, at), rest.substr(name.size()))) return {};
+    return {std::string(name.substr(0, 1)), std::string(name.substr(1)), Notation::Symmetry};
   }
   const char letter = rest.empty() ? ' ' : rest[0];
   if (letter != 'C' && letter != 'D' && letter != 'S') return {};

@@ -81,6 +81,10 @@ TEST_CASE("groups and axes are typeset, atoms of the same spelling are not") {
   CHECK(html_words("x = C2' through C2 and C4") == "x = C<sub>2</sub>′ through C2 and C4");
   CHECK(html_words("z = C4 (S8) through C1") == "z = C<sub>4</sub> (S<sub>8</sub>) through C1");
   CHECK(html_words("C4, a subgroup of S4") == "C<sub>4</sub>, a subgroup of S<sub>4</sub>");
+  CHECK(html_words("Character table of Cs, order 2") ==
+        "Character table of C<sub>s</sub>, order 2");
+  CHECK(html_words("Th at tolerance 0.01 Å") == "T<sub>h</sub> at tolerance 0.01 Å");
+  CHECK(html_words("Descent from D4h to C4") == "Descent from D<sub>4h</sub> to C<sub>4</sub>");
   CHECK(html_words("D∞h") == "D<sub>∞h</sub>");
   CHECK(html_words("xz = σv through O1") == "xz = σ<sub>v</sub> through O1");
   CHECK(html_words("Td → D3") == "T<sub>d</sub> → D<sub>3</sub>");
@@ -88,8 +92,9 @@ TEST_CASE("groups and axes are typeset, atoms of the same spelling are not") {
   CHECK(latex_words("C∞v") == "$C_{\\infty v}$");
   CHECK(latex_words("x = C2' through Cl2") == "x = $C_{2}'$ through Cl2");
   CHECK(latex_words("σh") == "$\\sigma_{h}$");
-  for (const std::string words : {"C4–O2", "equivalent: C×4 = C1, C2, C3 and C4", "S4", "C12H10",
-                                  "Dy4", "C2v1", "(C4)", "5C4h", "C4h_a", "Ohm", "Cs"}) {
+  for (const std::string words :
+       {"C4–O2", "equivalent: C×4 = C1, C2, C3 and C4", "S4", "C12H10", "Dy4", "C2v1", "(C4)",
+        "5C4h", "C4h_a", "Ohm", "Cs", "Th1", "from Pt1 to C4"}) {
     CAPTURE(words);
     for (const NotationRun& run : notation_runs(words)) CHECK(run.below.empty());
     CHECK(put_together(words) == words);
