@@ -3,17 +3,20 @@
 #include <algorithm>
 #include <array>
 #include <cmath>
+#include <cstddef>
+#include <tuple>
 
 #include <Eigen/Geometry>
 
+#include "molecule/element_block.hpp"
 #include "salc/bond_plane.hpp"
 #include "symmetry/operation.hpp"
 
 namespace irrepwise {
 namespace {
 
-constexpr int least_neighbours = 2;  // fewer make no centre
-constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
+constexpr std::size_t least_neighbours = 2;  // fewer make no centre
+constexpr double same = 1e-6;                // of unit vectors; coordinates are exact here
 constexpr double in_plane_angstrom = 1e-4;
 constexpr double least_across = 1e-3;  // a shorter direction would be along z
 
@@ -108,12 +111,15 @@ std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry
 std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   const Molecule& molecule = symmetry.molecule;
   const bool one_point = fixes_one_point(symmetry.group.symbol().family);
+  const std::size_t least = one_point ? 0 : least_neighbours;
   std::optional<int> best;
-  std::pair<int, int> best_merit = {one_point ? -1 : least_neighbours, 0};
+  std::tuple<bool, std::size_t, int> best_merit;
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
-    const std::pair merit = {static_cast<int>(bonded_atoms(molecule, atom).size()),
-                             molecule.atoms()[atom].atomic_number};
+    const std::size_t neighbours = bonded_atoms(molecule, atom).size();
+    if (neighbours < least) continue;
+    const int z = molecule.atoms()[atom].atomic_number;
+    const std::tuple merit = {is_d_or_f_block(z), neighbours, z};
     if (merit == best_merit) best.reset();  // two alike: neither is the centre
     if (merit <= best_merit) continue;
     best = atom;

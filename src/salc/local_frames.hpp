@@ -17,8 +17,9 @@ struct Centre {
 };
 
 /// The atom at the one point that every operation keeps, or that point, if the group has just one;
-/// otherwise, of the atoms that every operation keeps in place, the one with most neighbours, two
-/// at least (of equal ones the heaviest, which must be one alone).
+/// otherwise, of the atoms that every operation keeps in place and that have two neighbours at
+/// least, a metal of the d or f block, then the one with most neighbours (of equal ones the
+/// heaviest, which must be one alone).
 [[nodiscard]] std::optional<Centre> find_centre(const MolecularSymmetry& symmetry);
 
 struct LocalFrames {
