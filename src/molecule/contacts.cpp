@@ -1,19 +1,18 @@
 #include "molecule/contacts.hpp"
 
 #include <algorithm>
-#include <array>
 #include <cassert>
 #include <cstddef>
 #include <limits>
 #include <optional>
 #include <string>
-#include <utility>
 #include <vector>
 
 #include <fmt/format.h>
 
 #include "core/constants.hpp"
 #include "molecule/element.hpp"
+#include "molecule/metals.hpp"
 #include "molecule/molecule.hpp"
 #include "molecule/pairs.hpp"
 
@@ -31,16 +30,6 @@ constexpr double bond_without_radius_angstrom = 3.0;
 const Atom& atom_at(const Molecule& molecule, int index) {
   assert(index >= 0 && index < molecule.size());
   return molecule.atoms()[static_cast<std::size_t>(index)];
-}
-
-// All elements but hydrogen, the p block on and beyond the line from boron to polonium, and the
-// noble gases.
-bool is_metal(int atomic_number) {
-  constexpr std::array<std::pair<int, int>, 6> metals = {
-      {{3, 4}, {11, 13}, {19, 31}, {37, 50}, {55, 83}, {87, max_atomic_number - 2}}};
-  return std::any_of(metals.begin(), metals.end(), [&](const std::pair<int, int>& range) {
-    return atomic_number >= range.first && atomic_number <= range.second;
-  });
 }
 
 // As a multiple of the sum of the radii.
