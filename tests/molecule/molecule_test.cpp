@@ -11,7 +11,6 @@
 #include "core/error.hpp"
 #include "molecule/contacts.hpp"
 #include "molecule/element.hpp"
-#include "molecule/metals.hpp"
 #include "molecule/pairs.hpp"
 
 using namespace irrepwise;
@@ -84,20 +83,6 @@ TEST_CASE("bonds are judged by radii, and by 3 Å where there is no radius") {
   const Molecule heavy({{97, {0, 0, 0}}, {17, {0, 0, 2.9}}, {17, {0, 0, -3.1}}}, 0);
   CHECK(are_bonded(heavy, 0, 1));
   CHECK_FALSE(are_bonded(heavy, 2, 0));
-}
-
-TEST_CASE("metals are told from the other elements") {
-  // Common practice; germanium, antimony and polonium count with the half-metals.
-  for (const char* symbol : {"Li", "Be", "Na", "Al", "K",  "Sc", "Zn", "Ga", "Ag", "In",
-                             "Sn", "Cs", "La", "Lu", "Au", "Hg", "Tl", "Pb", "Bi", "U"}) {
-    CAPTURE(symbol);
-    CHECK(is_metal(atomic_number(symbol).value()));
-  }
-  for (const char* symbol : {"H", "He", "B", "C", "Ne", "Si", "Cl", "Ar", "Ge", "As", "Se", "Kr",
-                             "Sb", "Te", "I", "Xe", "Po", "At", "Rn"}) {
-    CAPTURE(symbol);
-    CHECK_FALSE(is_metal(atomic_number(symbol).value()));
-  }
 }
 
 TEST_CASE("two metals are bonded within a tighter limit than other atoms") {
