@@ -13,11 +13,15 @@ namespace irrepwise {
 /// One place at a metal: a donor atom, or several that are bonded to each other and bind side by
 /// side (the five carbons of a cyclopentadienyl ring).
 struct DonorSite {
-  std::vector<int> atoms;     // ascending
-  Eigen::Vector3d direction;  // unit vector from the metal to their centroid
+  std::vector<int> atoms;                               // ascending
+  Eigen::Vector3d direction = Eigen::Vector3d::Zero();  // unit vector from the metal to their
+                                                        // centroid
 };
 
-/// Atoms of the d and f blocks with a d shell in the basis.
+/// Atoms of the d and f blocks, also those without a d shell in the basis, such as zinc.
+[[nodiscard]] std::vector<int> centre_atoms(const Molecule& molecule);
+
+/// Those of them with a d shell in the basis.
 [[nodiscard]] std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis);
 
 /// Bonded atoms of other kinds than metals, by covalent radii; in the order of their first atoms.

@@ -1,6 +1,8 @@
 #include "output/compare_tables.hpp"
 
+#include <algorithm>
 #include <cmath>
+#include <cstddef>
 #include <optional>
 #include <string>
 #include <utility>
@@ -8,6 +10,7 @@
 #include <fmt/format.h>
 
 #include "molecule/molecule.hpp"
+#include "output/frontier_fate.hpp"
 
 namespace irrepwise {
 namespace {
@@ -37,22 +40,21 @@ Row flip_row(const VariantResult& variant, const std::string& name, const char* 
   return row;
 }
 
-// Two cells, the level and its shift, of what the reference's frontier level became.
-void add_fate(const Comparison& comparison, int index, FrontierSide side, Row& row) {
-  const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
-  const VariantResult& reference =
-      comparison.variants[static_cast<std::size_t>(comparison.reference)];
-  const std::optional<FrontierFate> fate = frontier_fate(comparison, index, side);
-  if (!fate || !fate->match) {
-    row.cells.resize(row.cells.size() + 4);
+// Level, shift, overlap and whether it is still the frontier level: of one of those that the
+// reference's became, or blank where there are fewer.
+void add_part(const Comparison& comparison, int index, const std::optional<FrontierFate>& fate,
+              std::size_t which, Row& row) {
+  if (!fate || which >= fate->parts.size()) {
+    row.cells.resize(row.cells.size() + 3);
+    row.cells.emplace_back(fate && which == 0 ? Cell(stays_word(fate->stays)) : Cell());
     return;
   }
-  row.cells.emplace_back(SymmetryLabel{name_of_level(variant, fate->match->variant)});
-  row.cells.emplace_back(Number{level_of(variant, fate->match->variant).energy_ev -
-                                    level_of(reference, fate->reference_level).energy_ev,
-                                3, true});
-  row.cells.emplace_back(percent(fate->match->overlap));
-  row.cells.emplace_back(fate->stays ? "yes" : "no");
+  const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
+  const FatePart& part = fate->parts[which];
+  row.cells.emplace_back(SymmetryLabel{name_of_level(variant, part.match.variant)});
+  row.cells.emplace_back(Number{shift_ev(comparison, index, part.match), 3, true});
+  row.cells.emplace_back(percent(part.match.overlap));
+  row.cells.emplace_back(stays_word(part.at_frontier ? fate->stays : Stays::No));
 }
 
 // Neighbours in energy: "a1g–eg 0.015, eg–b2g 0.216".
@@ -97,6 +99,7 @@ Table d_block_table(const Comparison& comparison) {
                    {"occupation", "electrons", "", Align::Decimal, 1, false}};
   for (const VariantResult& variant : comparison.variants) {
     for (const MetalFacts& metal : variant.metals) {
+      if (!metal.has_d_shell) continue;
       const DBlock& block = metal.d_block;
       table.lines.emplace_back(Separator{metal_words(variant, metal) + parent_words(block)});
       for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
@@ -169,12 +172,18 @@ Table frontier_match_table(const Comparison& comparison) {
   for (int i = 0; i < static_cast<int>(comparison.variants.size()); ++i) {
     if (i == comparison.reference) continue;
     const Matching& matching = comparison.matchings[static_cast<std::size_t>(i)];
-    Row row{{comparison.variants[static_cast<std::size_t>(i)].name, matching.common_group,
-             Number{static_cast<double>(matching.shared_atoms), 0},
-             Number{static_cast<double>(matching.replaced_donors), 0}}};
-    add_fate(comparison, i, FrontierSide::Homo, row);
-    add_fate(comparison, i, FrontierSide::Lumo, row);
-    table.lines.emplace_back(std::move(row));
+    const std::optional<FrontierFate> homo = frontier_fate(comparison, i, FrontierSide::Homo);
+    const std::optional<FrontierFate> lumo = frontier_fate(comparison, i, FrontierSide::Lumo);
+    const std::size_t n_rows =
+        std::max({std::size_t{1}, homo ? homo->parts.size() : 0, lumo ? lumo->parts.size() : 0});
+    for (std::size_t part = 0; part < n_rows; ++part) {
+      Row row{{comparison.variants[static_cast<std::size_t>(i)].name, matching.common_group,
+               Number{static_cast<double>(matching.shared_atoms), 0},
+               Number{static_cast<double>(matching.replaced_donors), 0}}};
+      add_part(comparison, i, homo, part, row);
+      add_part(comparison, i, lumo, part, row);
+      table.lines.emplace_back(std::move(row));
+    }
     for (const FrontierSide side : {FrontierSide::Homo, FrontierSide::Lumo}) {
       std::string words = crossing_words(comparison, i, side);
       if (!words.empty()) table.notes.push_back(std::move(words));

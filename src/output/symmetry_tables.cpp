@@ -2,12 +2,16 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstddef>
+#include <type_traits>
+#include <utility>
 
 #include <fmt/format.h>
 
 #include "core/text.hpp"
 #include "output/equivalence.hpp"
 #include "output/symmetry_words.hpp"
+#include "output/table_text.hpp"
 #include "symmetry/operation.hpp"
 
 namespace irrepwise {
@@ -211,7 +215,9 @@ Table reduction_table(const SymmetryResult& result) {
   return table;
 }
 
-Table bonding_table(const SymmetryResult& result) {
+namespace {
+
+Table whole_bonding_table(const SymmetryResult& result) {
   Table table;
   const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = result.central_atom
@@ -220,8 +226,7 @@ Table bonding_table(const SymmetryResult& result) {
                       : "What can mix by symmetry";
   table.columns.push_back({"irrep", "irrep", "", Align::Left, 0, false});
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
-    table.columns.push_back({names[s].name, names[s].name, "", Align::Left,
-                             static_cast<int>(s) > 3 ? static_cast<int>(s) : 0, true});
+    table.columns.push_back({names[s].name, names[s].name, "", Align::Left, 0, true});
   }
   table.columns.push_back({"verdict", "by symmetry", "", Align::Left, 0, true});
   for (const BondingIrrep& row : bonding_by_irrep(result)) {
@@ -231,6 +236,43 @@ Table bonding_table(const SymmetryResult& result) {
     table.lines.emplace_back(std::move(line));
   }
   return table;
+}
+
+// The first column and some of the others.
+Table part_of(const Table& table, std::size_t first, std::size_t end) {
+  Table part;
+  part.caption = table.caption + (first > 1 ? " (continued)" : "");
+  const auto taken = [&](const auto& all) {
+    std::decay_t<decltype(all)> some = {all.front()};
+    some.insert(some.end(), all.begin() + static_cast<std::ptrdiff_t>(first),
+                all.begin() + static_cast<std::ptrdiff_t>(end));
+    return some;
+  };
+  part.columns = taken(table.columns);
+  for (const auto& line : table.lines) {
+    part.lines.emplace_back(Row{taken(std::get<Row>(line).cells)});
+  }
+  return part;
+}
+
+}  // namespace
+
+std::vector<Table> bonding_tables(const SymmetryResult& result, int width) {
+  constexpr int narrowest = 24;  // to which a column may be folded, with the space before it
+  const Table whole = whole_bonding_table(result);
+  const std::vector<int> widths = text_widths(whole);
+  std::vector<Table> tables;
+  for (std::size_t first = 1; first < widths.size();) {
+    int used = widths.front() + std::min(widths[first], narrowest);
+    std::size_t end = first + 1;
+    for (; end < widths.size(); ++end) {
+      used += std::min(widths[end], narrowest);
+      if (used > width) break;
+    }
+    tables.push_back(part_of(whole, first, end));
+    first = end;
+  }
+  return tables;
 }
 
 Table vibration_table(const SymmetryResult& result) {

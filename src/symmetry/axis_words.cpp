@@ -25,7 +25,7 @@ std::string through_atoms(const Molecule& molecule, Distance distance) {
   if (names.size() == static_cast<std::size_t>(molecule.size()) && names.size() > 2) {
     return " through all atoms";
   }
-  if (names.size() > most_names) {
+  if (names.size() > most_names + 1) {  // "1 more" is as long as a name
     const std::size_t more = names.size() - most_names;
     names.resize(most_names);
     return fmt::format(" through {} and {} more", fmt::join(names, ", "), more);

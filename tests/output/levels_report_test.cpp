@@ -9,11 +9,15 @@
 #include "analysis/d_block.hpp"
 #include "analysis/donors.hpp"
 #include "core/error.hpp"
+#include "job/job.hpp"
+#include "molecule/contacts.hpp"
 #include "output/composition.hpp"
 #include "output/display_width.hpp"
 #include "output/example.hpp"
 #include "output/levels_json.hpp"
 #include "support/molecules.hpp"
+#include "support/paths.hpp"
+#include "support/result.hpp"
 
 using namespace irrepwise;
 
@@ -231,4 +235,45 @@ TEST_CASE("every level that a multiplicity leaves partly filled is named") {
     ++named;
   }
   CHECK(named == open_levels);
+}
+
+TEST_CASE("a spin state that partly fills orbitals of the ligands gets a warning") {
+  // The sextet of an octahedral d5 complex has its five unpaired electrons in t2g and eg (common
+  // practice); six more must go elsewhere.
+  Job job = read_job(source_path("inputs/high_spin_octahedron.yaml"));
+  CHECK(levels_result(job).warnings.empty());
+  const int stated = job.hueckel.multiplicity.value();
+  job.hueckel.multiplicity = stated + 6;
+  const LevelsResult forced = levels_result(job);
+  REQUIRE(forced.warnings.size() == 1);
+  const std::string& warning = forced.warnings.front();
+  CAPTURE(warning);
+  CHECK(warning.starts_with("the multiplicity " + std::to_string(stated + 6) + " leaves "));
+  // Every level that it names is partly filled, and has its share beside it.
+  int named = 0;
+  for (const Level& level : forced.levels.levels) {
+    const std::string name = level_name(forced.symmetry.group, level) + " (";
+    if (warning.find(" " + name) == std::string::npos) continue;
+    ++named;
+    CHECK(level.occupation > 0.0);
+    CHECK(level.occupation < 2.0 * level.degeneracy);
+  }
+  CHECK(named > 0);
+  CHECK(warning.find("less than half metal d: ") != std::string::npos);
+  // Electrons that nobody placed are no reason for a word.
+  job.hueckel.multiplicity.reset();
+  CHECK(levels_result(job).warnings.empty());
+}
+
+TEST_CASE("two metals in a bridged dimer are not listed as a bond, and the criterion is told") {
+  const LevelsResult result = input_result("bridged_pd2cl6.yaml");
+  const Report report = levels_report(result);
+  const Table& bonds = report.tables.back();
+  CHECK(bonds.caption == "Overlap populations of bonds");
+  for (const auto& line : bonds.lines) {
+    const std::string pair = cell_text(std::get<Row>(line).cells.front());
+    CHECK(pair.find("Pd1–Pd2") == std::string::npos);
+  }
+  REQUIRE(bonds.notes.size() == 1);
+  CHECK(bonds.notes.front() == bond_criterion(result.molecule));
 }

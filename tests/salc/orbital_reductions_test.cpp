@@ -145,11 +145,21 @@ TEST_CASE("local frames are right-handed, look at the centre, and lie in the pla
   CHECK(with_plane > 20);
 }
 
-TEST_CASE("the centre is the atom with most neighbours among those that stay") {
+TEST_CASE("the centre is a metal, otherwise the atom with most neighbours, among those that stay") {
   const auto centre_of = [](const char* name) {
     return find_centre(find_symmetry(test_molecule(name).molecule));
   };
   CHECK(centre_of("tetrachlorooxovanadate(IV)")->atom == 0);  // V, though O lies on the axis too
+  // Phosphorus has four neighbours, gold two (C3v; distances common practice).
+  const Molecule linear({{15, {0, 0, 0}},
+                         {79, {0, 0, 2.25}},
+                         {17, {0, 0, 4.55}},
+                         {1, {1.2, 0, -0.7}},
+                         {1, {-0.6, 1.2 * std::sqrt(0.75), -0.7}},
+                         {1, {-0.6, -1.2 * std::sqrt(0.75), -0.7}}},
+                        0, "chlorido(phosphane)gold(I)");
+  CHECK(find_symmetry(linear).group.symbol().name() == "C3v");
+  CHECK(find_centre(find_symmetry(linear))->atom == 1);
   CHECK(centre_of("benzene")->atom == std::nullopt);
   CHECK(centre_of("benzene")->position.norm() == 0.0);
   CHECK_FALSE(centre_of("disulfur dichloride"));  // C2: a line of points stays
