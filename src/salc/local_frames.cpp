@@ -15,8 +15,8 @@
 namespace irrepwise {
 namespace {
 
-constexpr std::size_t least_neighbours = 2;  // fewer make no centre
-constexpr double same = 1e-6;                // of unit vectors; coordinates are exact here
+constexpr int least_neighbours = 2;  // fewer make no centre
+constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
 constexpr double in_plane_angstrom = 1e-4;
 constexpr double least_across = 1e-3;  // a shorter direction would be along z
 

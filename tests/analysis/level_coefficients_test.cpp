@@ -282,3 +282,30 @@ TEST_CASE("partners go over into each other by the group's operations") {
     CHECK(worst < 1e-9);
   }
 }
+
+TEST_CASE("the pi orbitals of a ring over a metal are one function of each atom") {
+  // Lithium has s and p alone, a1 and e1 of C6v, so that the e2 and b levels are those of benzene
+  // itself, each pure pi or without any: b2g and e2u of Hückel's theory are pi.
+  for (const unsigned seed : {0U, 8U}) {
+    const Molecule& given = test_molecule("benzene with lithium ion").molecule;
+    const Framed all = framed(seed == 0U ? given : moved(given, seed).molecule);
+    int pure = 0;
+    double worst = 0.0;
+    for (int k = 0; k < static_cast<int>(all.run.levels.levels.size()); ++k) {
+      const Level& level = all.run.levels.levels[static_cast<std::size_t>(k)];
+      const std::string label =
+          all.run.symmetry.group.irreps()[static_cast<std::size_t>(level.irrep)].label;
+      if (label != "E2" && label != "B1" && label != "B2") continue;
+      const Eigen::MatrixXd shares =
+          in_local_frames(of_level(all, k), all.run.basis, all.sets, all.local).shares();
+      double pi = 0.0;
+      for (const Shell& shell : all.run.basis.shells) {
+        if (shell.l == 1) pi += shares.row(shell.first_orbital + 2).mean();
+      }
+      worst = std::max(worst, std::min(std::abs(pi), std::abs(pi - 1.0)));
+      pure += pi > 0.5 ? 1 : 0;
+    }
+    CHECK(worst < 1e-9);
+    CHECK(pure == 2);
+  }
+}

@@ -159,7 +159,7 @@ TEST_CASE("in local frames a molecule without a centre is refused") {
   options.frame = OrbitalFrame::Local;
   CHECK_THROWS_WITH_AS(
       static_cast<void>(orbital_table(result, {{0, 0}}, options)),
-      "no atom has a local frame: the molecule has no central atom with neighbours around it; use "
+      "no atom has a local frame: the molecule has neither a central atom nor several metals; use "
       "the standard frame",
       Error);
 }

@@ -44,7 +44,7 @@ Eigen::VectorXd spread(const Tables& all, const SalcFunction& salc) {
     for (std::size_t c = 0; c < salc.components.size(); ++c) {
       on_atom[salc.components[c]] = salc.coefficients(i, static_cast<Eigen::Index>(c));
     }
-    if (salc.frame == OrbitalFrame::Local) {
+    if (salc.frame != OrbitalFrame::Standard) {
       on_atom = (harmonic_rotation(shell.l, all.frames[salc.set]->frames[i]) * on_atom).eval();
     }
     vector.segment(shell.first_orbital, shell.size()) = on_atom;
