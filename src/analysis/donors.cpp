@@ -22,12 +22,18 @@ bool has_d_shell(const Basis& basis, int atom) {
 
 }  // namespace
 
-std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis) {
-  std::vector<int> metals;
+std::vector<int> centre_atoms(const Molecule& molecule) {
+  std::vector<int> centres;
   for (int atom = 0; atom < molecule.size(); ++atom) {
     const int z = molecule.atoms()[static_cast<std::size_t>(atom)].atomic_number;
-    if (is_d_or_f_block(z) && has_d_shell(basis, atom)) metals.push_back(atom);
+    if (is_d_or_f_block(z)) centres.push_back(atom);
   }
+  return centres;
+}
+
+std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis) {
+  std::vector<int> metals = centre_atoms(molecule);
+  std::erase_if(metals, [&](int atom) { return !has_d_shell(basis, atom); });
   return metals;
 }
 
@@ -35,7 +41,7 @@ std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis,
   const std::vector<int> metals = metal_atoms(molecule, basis);
   std::vector<DonorSite> sites;
   for (int atom = 0; atom < molecule.size(); ++atom) {
-    if (std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
+    if (atom == metal || std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
     if (!are_bonded(molecule, metal, atom)) continue;
     // Joins every site that holds a neighbour.
     DonorSite site{{atom}, {}};

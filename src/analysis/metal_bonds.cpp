@@ -30,12 +30,11 @@ struct Donor {
   int first_equivalent = 0;
 };
 
-Kind kind_of(const Molecule& molecule, const Basis& basis, const std::vector<int>& metals,
-             int donor) {
+Kind kind_of(const Molecule& molecule, const std::vector<int>& metals, int donor) {
   const auto n_metals = std::count_if(
       metals.begin(), metals.end(), [&](int metal) { return are_bonded(molecule, metal, donor); });
   return {molecule.atoms()[static_cast<std::size_t>(donor)].atomic_number,
-          ligand_formula(molecule, basis, donor), n_metals > 1};
+          ligand_formula(molecule, donor), n_metals > 1};
 }
 
 // The site most nearly across the metal.
@@ -62,7 +61,7 @@ int first_equivalent(const MolecularSymmetry& symmetry, int atom) {
 std::vector<Donor> donors_of(const MolecularSymmetry& symmetry, const Basis& basis,
                              const Populations& populations, int metal) {
   const Molecule& molecule = symmetry.molecule;
-  const std::vector<int> metals = metal_atoms(molecule, basis);
+  const std::vector<int> metals = centre_atoms(molecule);
   const std::vector<DonorSite> sites = donor_sites(molecule, basis, metal);
   std::vector<Donor> donors;
   for (const DonorSite& site : sites) {
@@ -70,10 +69,10 @@ std::vector<Donor> donors_of(const MolecularSymmetry& symmetry, const Basis& bas
     for (const int atom : site.atoms) {
       Donor donor;
       donor.bond.donor = atom;
-      donor.kind = kind_of(molecule, basis, metals, atom);
+      donor.kind = kind_of(molecule, metals, atom);
       donor.first_equivalent = first_equivalent(symmetry, atom);
       if (across) {
-        const Kind other = kind_of(molecule, basis, metals, across->atoms.front());
+        const Kind other = kind_of(molecule, metals, across->atoms.front());
         donor.opposite = other == donor.kind ? Opposite::Like : Opposite::Other;
         donor.opposite_element = other.element;
       }
@@ -156,9 +155,9 @@ double BondType::distance_angstrom() const {
   return sum / static_cast<double>(bonds.size());
 }
 
-std::string ligand_formula(const Molecule& molecule, const Basis& basis, int donor) {
+std::string ligand_formula(const Molecule& molecule, int donor) {
   std::vector<bool> seen(molecule.atoms().size(), false);
-  for (const int metal : metal_atoms(molecule, basis)) seen[static_cast<std::size_t>(metal)] = true;
+  for (const int metal : centre_atoms(molecule)) seen[static_cast<std::size_t>(metal)] = true;
   std::vector<int> reached = {donor};
   seen[static_cast<std::size_t>(donor)] = true;
   for (std::size_t next = 0; next < reached.size(); ++next) {

@@ -45,12 +45,13 @@ inline constexpr double length_gap_angstrom = 0.05;
 /// all or none of them bridge, and no gap parts their distances; equivalent donors therefore are of
 /// one type.
 ///
+/// @param metal  of the d or f block, with or without a d shell
 /// @returns  in the order of their first donors
 [[nodiscard]] std::vector<BondType> bond_types(const MolecularSymmetry& symmetry,
                                                const Basis& basis, const Populations& populations,
                                                int metal);
 
 /// @returns  formula of what hangs together with the donor when all metals are taken away
-[[nodiscard]] std::string ligand_formula(const Molecule& molecule, const Basis& basis, int donor);
+[[nodiscard]] std::string ligand_formula(const Molecule& molecule, int donor);
 
 }  // namespace irrepwise

@@ -30,10 +30,10 @@ struct Laid {
 
 constexpr std::size_t most_landmarks = 12;
 
-Laid laid_out(const Molecule& molecule, const Basis& basis) {
+Laid laid_out(const Molecule& molecule, const Basis& basis, bool on_metal) {
   Laid laid;
   laid.molecule = &molecule;
-  const std::vector<int> metals = metal_atoms(molecule, basis);
+  const std::vector<int> metals = on_metal ? centre_atoms(molecule) : std::vector<int>{};
   if (!metals.empty()) {
     laid.metal = metals.front();
     laid.anchor = molecule.atoms()[static_cast<std::size_t>(metals.front())].position;
@@ -232,15 +232,11 @@ Eigen::Matrix3d refined(const Laid& first, const Laid& second, const Best& best)
 
 SharedAtoms find_shared_atoms(const MolecularSymmetry& first, const Basis& first_basis,
                               const MolecularSymmetry& second, const Basis& second_basis) {
-  Laid a = laid_out(first.molecule, first_basis);
-  Laid b = laid_out(second.molecule, second_basis);
-  if (a.metal.has_value() != b.metal.has_value()) {
-    // Nothing to lay on a metal: then all atoms count.
-    Laid& with_metal = a.metal ? a : b;
-    Basis none = a.metal ? first_basis : second_basis;
-    for (Shell& shell : none.shells) shell.l = 0;
-    with_metal = laid_out(*with_metal.molecule, none);
-  }
+  // Where one has nothing to lay on a metal, all atoms count.
+  const bool on_metals =
+      !centre_atoms(first.molecule).empty() && !centre_atoms(second.molecule).empty();
+  const Laid a = laid_out(first.molecule, first_basis, on_metals);
+  const Laid b = laid_out(second.molecule, second_basis, on_metals);
   Best best;
   consider(a, b, first.rotation * second.rotation.transpose(), best);
   const std::size_t most = std::min(first.molecule.atoms().size(), second.molecule.atoms().size());

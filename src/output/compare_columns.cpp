@@ -13,6 +13,7 @@
 #include "core/error.hpp"
 #include "core/parse.hpp"
 #include "core/text.hpp"
+#include "molecule/element.hpp"
 #include "molecule/molecule.hpp"
 #include "output/bond_columns.hpp"
 
@@ -48,17 +49,40 @@ Cell gap_cell(const VariantResult& variant) {
                 3};
 }
 
-std::string frontier_words(const VariantResult& variant) {
-  const bool open = variant.levels.levels.frontier.open_shell;
-  const bool fragile = variant.robustness.fragile();
-  return std::string(open ? "open shell" : "") + (open && fragile ? ", " : "") +
-         (fragile ? "fragile" : "");
+bool is_open(const VariantResult& variant) { return variant.levels.levels.frontier.open_shell; }
+
+bool is_fragile(const VariantResult& variant) { return variant.robustness.fragile(); }
+
+bool any_of(const Comparison& comparison, const std::function<bool(const VariantResult&)>& holds) {
+  return std::any_of(comparison.variants.begin(), comparison.variants.end(), holds);
+}
+
+bool charges_differ(const Comparison& comparison) {
+  const int first = comparison.variants.front().levels.molecule.charge();
+  return any_of(comparison,
+                [&](const VariantResult& v) { return v.levels.molecule.charge() != first; });
 }
 
 std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
   using V = VariantResult;
   std::vector<SummaryColumn> columns = {
       {{"name", "variant", "", Align::Left, 0, true}, [](const V& v) { return Cell(v.name); }},
+      {{"formula", "formula", "", Align::Left, 0, false},
+       [](const V& v) { return Cell(hill_formula(v.levels.molecule)); },
+       SummaryPart::Frontier,
+       false},
+      {{"charge", "charge", "e", Align::Right, 0, false},
+       [](const V& v) {
+         return Cell(Number{static_cast<double>(v.levels.molecule.charge()), 0, true});
+       },
+       SummaryPart::Frontier,
+       charges_differ(comparison)},
+      {{"electrons", "electrons", "", Align::Right, 0, false},
+       [](const V& v) {
+         return Cell(Number{static_cast<double>(v.levels.levels.electrons), 0});
+       },
+       SummaryPart::Frontier,
+       false},
       {{"point_group", "group", "", Align::Left, 0, false},
        [](const V& v) { return Cell(v.levels.symmetry.group.symbol().name()); }},
       {{"homo", "HOMO", "", Align::Right, 0, false},
@@ -70,8 +94,14 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
       {{"lumo_ev", "LUMO", "eV", Align::Decimal, 0, false},
        [](const V& v) { return energy_cell(v, v.levels.levels.frontier.lumo); }},
       {{"gap_ev", "gap", "eV", Align::Decimal, 0, false}, gap_cell},
-      {{"fragile", "frontier", "", Align::Left, 0, false},
-       [](const V& v) { return Cell(frontier_words(v)); }},
+      {{"open_shell", "shell", "", Align::Left, 0, false},
+       [](const V& v) { return Cell(is_open(v) ? "open" : ""); },
+       SummaryPart::Frontier,
+       any_of(comparison, is_open)},
+      {{"fragile", "order", "", Align::Left, 0, false},
+       [](const V& v) { return Cell(is_fragile(v) ? "fragile" : ""); },
+       SummaryPart::Frontier,
+       any_of(comparison, is_fragile)},
       {{"metal", "metal", "", Align::Left, 5, false},
        [](const V& v) {
          return v.metal() ? Cell(atom_name(v.levels.molecule, v.metal()->atom)) : Cell();
@@ -84,7 +114,8 @@ std::vector<SummaryColumn> all_columns(const Comparison& comparison) {
        SummaryPart::Metal},
       {{"d_population", "d electrons", "", Align::Decimal, 1, false},
        [](const V& v) {
-         return v.metal() ? Cell(Number{v.metal()->d_population, 3}) : Cell();
+         return v.metal() && v.metal()->has_d_shell ? Cell(Number{v.metal()->d_population, 3})
+                                                    : Cell();
        },
        SummaryPart::Metal}};
   for (const BondColumn& bonds : bond_columns(comparison)) {
@@ -118,8 +149,7 @@ const SummaryColumn& find_column(const std::vector<SummaryColumn>& columns,
 }
 
 bool has_metal(const Comparison& comparison) {
-  return std::any_of(comparison.variants.begin(), comparison.variants.end(),
-                     [](const VariantResult& v) { return v.metal() != nullptr; });
+  return any_of(comparison, [](const VariantResult& v) { return v.metal() != nullptr; });
 }
 
 // The name goes with every part. Without metals there is one part, and in it no column of theirs.
@@ -134,7 +164,7 @@ std::vector<SummaryColumn> chosen_columns(const Comparison& comparison, const Su
     const bool of_metal = column.part == SummaryPart::Metal;
     const bool sum = column.column.key == "sum_of_occupied_ev";
     const bool wanted = column.column.key == "name" ||
-                        (split ? column.part == part && column.shown : !of_metal || sum);
+                        (column.shown && (split ? column.part == part : !of_metal || sum));
     if (wanted) chosen.push_back(std::move(column));
   }
   return chosen;
@@ -178,46 +208,60 @@ Cell difference(const Cell& cell, const Cell& reference) {
 }
 
 bool holds_numbers(const SummaryColumn& column, const Comparison& comparison) {
-  return std::any_of(comparison.variants.begin(), comparison.variants.end(),
-                     [&](const VariantResult& v) { return number_in(column.read(v)).has_value(); });
+  return any_of(comparison,
+                [&](const VariantResult& v) { return number_in(column.read(v)).has_value(); });
 }
 
 bool has_several_metals(const VariantResult& variant) {
   return variant.metals.size() > 1 || (variant.metal() && variant.metal()->n_equivalent > 1);
 }
 
+// Elements of metals shown that have no d shell in the parameters: "Zn, Cd".
+std::string without_d_shell(const Comparison& comparison) {
+  std::vector<std::string> elements;
+  for (const VariantResult& variant : comparison.variants) {
+    if (!variant.metal() || variant.metal()->has_d_shell) continue;
+    const auto& atoms = variant.levels.molecule.atoms();
+    std::string element(
+        element_symbol(atoms[static_cast<std::size_t>(variant.metal()->atom)].atomic_number));
+    if (std::find(elements.begin(), elements.end(), element) == elements.end()) {
+      elements.push_back(std::move(element));
+    }
+  }
+  return joined(elements);
+}
+
 // What the columns present mean, as far as their titles do not say it.
 std::vector<std::string> notes_on(const std::vector<SummaryColumn>& columns,
                                   const Comparison& comparison) {
-  bool fragile = false, metal = false, sum = false;
   std::vector<std::string> bonds;
   for (const SummaryColumn& column : columns) {
-    const std::string& key = column.column.key;
-    fragile = fragile || key == "fragile";
-    metal = metal || key == "metal_charge" || key == "d_population";
-    if (key.starts_with("bond_")) bonds.push_back(column.column.header);
-    sum = sum || key == "sum_of_occupied_ev";
+    if (column.column.key.starts_with("bond_")) bonds.push_back(column.column.header);
   }
+  const auto has = [&](const char* key) {
+    return std::any_of(columns.begin(), columns.end(),
+                       [&](const SummaryColumn& column) { return column.column.key == key; });
+  };
   std::string text;
   const auto say = [&](const std::string& words) { text += (text.empty() ? "" : " ") + words; };
-  const auto& variants = comparison.variants;
-  if (fragile && std::any_of(variants.begin(), variants.end(),
-                             [](const VariantResult& v) { return v.robustness.fragile(); })) {
+  if (has("electrons")) say("electrons: valence electrons, all that the levels hold.");
+  if (has("fragile") && any_of(comparison, is_fragile)) {
     say("fragile: a small change of one parameter turns the order of two frontier levels, see "
         "below.");
   }
-  if (fragile && std::any_of(variants.begin(), variants.end(), [](const VariantResult& v) {
-        return v.levels.levels.frontier.open_shell;
-      })) {
-    say("open shell: the HOMO is not full; the gap is that to the lowest empty level.");
+  if (has("open_shell") && any_of(comparison, is_open)) {
+    say("open: the HOMO is not full; the gap is that to the lowest empty level.");
   }
+  const bool metal = has("metal_charge") || has("d_population");
   if (metal) say("metal charge, d electrons: by Mulliken's populations.");
+  if (const std::string bare = without_d_shell(comparison); has("d_population") && !bare.empty()) {
+    say(bare + ": no d shell among the parameters, thus no d electrons and no d block.");
+  }
   if (!bonds.empty()) say(bond_words(bonds));
-  if ((metal || !bonds.empty()) &&
-      std::any_of(variants.begin(), variants.end(), has_several_metals)) {
+  if ((metal || !bonds.empty()) && any_of(comparison, has_several_metals)) {
     say("Of several metals the first is shown here; the d block has each.");
   }
-  if (sum) {
+  if (has("sum_of_occupied_ev")) {
     say("occupied: sum of the energies of all electrons, which is not a total energy: no reaction "
         "energy follows from differences of it.");
   }

@@ -4,6 +4,7 @@
 #include <utility>
 
 #include "molecule/molecule.hpp"
+#include "output/frontier_fate.hpp"
 #include "output/json_text.hpp"
 #include "output/table_csv.hpp"
 
@@ -122,8 +123,12 @@ Json flip_json(const VariantResult& variant, const std::optional<LevelFlip>& fli
       {"upper", name_of_level(variant, flip->upper)},
       {"lower", name_of_level(variant, flip->lower)},
       {"gap_ev", finite_number(flip->gap_ev)},
-      {"parameter", parameters[static_cast<std::size_t>(flip->parameter)].name},
-      {"first_order_ev", finite_number(flip->first_order_ev)},
+      {"coincide", flip->coincide()},
+      {"parameter", flip->parameter
+                        ? Json(parameters[static_cast<std::size_t>(*flip->parameter)].name)
+                        : Json(nullptr)},
+      {"first_order_ev",
+       flip->parameter ? Json(finite_number(flip->first_order_ev)) : Json(nullptr)},
       {"change_ev", flip->change_ev ? Json(finite_number(*flip->change_ev)) : Json(nullptr)},
       {"fragile", flip->fragile}};
   if (flip->other) {
@@ -152,7 +157,8 @@ Json metal_json(const VariantResult& variant, const MetalFacts* metal) {
   return {{"metal", metal ? Json(atom_name(variant.levels.molecule, metal->atom)) : Json(nullptr)},
           {"equivalent_metals", metal ? Json(metal->n_equivalent) : Json(0)},
           {"metal_charge", metal ? Json(finite_number(metal->charge)) : Json(nullptr)},
-          {"d_population", metal ? Json(finite_number(metal->d_population)) : Json(nullptr)},
+          {"d_population",
+           metal && metal->has_d_shell ? Json(finite_number(metal->d_population)) : Json(nullptr)},
           {"bonds", bonds_json(variant, metal)},
           {"parent", parent_json(metal)},
           {"metal_levels", metal_levels_json(variant, metal)}};
@@ -167,6 +173,7 @@ Json variant_json(const VariantResult& variant) {
   Json json = {{"name", variant.name},
                {"formula", hill_formula(result.molecule)},
                {"charge", result.molecule.charge()},
+               {"valence_electrons", result.levels.electrons},
                {"point_group", result.symmetry.group.symbol().name()},
                {"frontier", frontier_json(variant)}};
   json.update(metal_json(variant, variant.metal()));
@@ -182,6 +189,37 @@ Json variant_json(const VariantResult& variant) {
   return json;
 }
 
+const char* stays_key(Stays stays) {
+  switch (stays) {
+    case Stays::No:
+      return "no";
+    case Stays::InPart:
+      return "in_part";
+    case Stays::Whole:
+      return "yes";
+  }
+  return "";
+}
+
+Json fate_json(const Comparison& comparison, int index, FrontierSide side) {
+  const std::optional<FrontierFate> fate = frontier_fate(comparison, index, side);
+  if (!fate) return nullptr;
+  const VariantResult& reference =
+      comparison.variants[static_cast<std::size_t>(comparison.reference)];
+  const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
+  Json levels = Json::array();
+  for (const FatePart& part : fate->parts) {
+    levels.push_back({{"reference", name_of_level(reference, part.match.reference)},
+                      {"variant", name_of_level(variant, part.match.variant)},
+                      {"overlap", finite_number(part.match.overlap)},
+                      {"shift_ev", finite_number(shift_ev(comparison, index, part.match))},
+                      {"still_frontier", part.at_frontier}});
+  }
+  return {{"reference", name_of_level(reference, fate->reference_level)},
+          {"stays", stays_key(fate->stays)},
+          {"levels", std::move(levels)}};
+}
+
 Json matches_json(const Comparison& comparison) {
   const VariantResult& reference =
       comparison.variants[static_cast<std::size_t>(comparison.reference)];
@@ -192,12 +230,12 @@ Json matches_json(const Comparison& comparison) {
     const Matching& matching = comparison.matchings[i];
     Json pairs = Json::array();
     for (const LevelMatch& match : matching.matches) {
-      pairs.push_back({{"reference", name_of_level(reference, match.reference)},
-                       {"variant", name_of_level(variant, match.variant)},
-                       {"irrep", match.irrep},
-                       {"overlap", finite_number(match.overlap)},
-                       {"shift_ev", finite_number(energy_ev(variant, match.variant) -
-                                                  energy_ev(reference, match.reference))}});
+      pairs.push_back(
+          {{"reference", name_of_level(reference, match.reference)},
+           {"variant", name_of_level(variant, match.variant)},
+           {"irrep", match.irrep},
+           {"overlap", finite_number(match.overlap)},
+           {"shift_ev", finite_number(shift_ev(comparison, static_cast<int>(i), match))}});
     }
     Json crossings = Json::array();
     for (const FrontierSide side : {FrontierSide::Homo, FrontierSide::Lumo}) {
@@ -210,6 +248,8 @@ Json matches_json(const Comparison& comparison) {
                     {"shared_atoms", matching.shared_atoms},
                     {"replaced_donors", matching.replaced_donors},
                     {"levels", std::move(pairs)},
+                    {"homo", fate_json(comparison, static_cast<int>(i), FrontierSide::Homo)},
+                    {"lumo", fate_json(comparison, static_cast<int>(i), FrontierSide::Lumo)},
                     {"crossings", std::move(crossings)}});
   }
   return list;

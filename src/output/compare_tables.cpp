@@ -1,6 +1,8 @@
 #include "output/compare_tables.hpp"
 
+#include <algorithm>
 #include <cmath>
+#include <cstddef>
 #include <optional>
 #include <string>
 #include <utility>
@@ -8,6 +10,7 @@
 #include <fmt/format.h>
 
 #include "molecule/molecule.hpp"
+#include "output/frontier_fate.hpp"
 
 namespace irrepwise {
 namespace {
@@ -18,41 +21,43 @@ const Level& level_of(const VariantResult& variant, int level) {
 
 Cell percent(double share) { return Number{100.0 * share, 0}; }
 
-Row flip_row(const VariantResult& variant, const std::string& name, const char* side,
-             const LevelFlip& flip) {
-  const std::vector<Parameter>& parameters = variant.robustness.parameters;
-  Row row{{name, side,
-           readable_label(name_of_level(variant, flip.lower)) + " < " +
-               readable_label(name_of_level(variant, flip.upper)),
-           Number{flip.gap_ev, 3}, parameters[static_cast<std::size_t>(flip.parameter)].name,
-           Number{flip.first_order_ev, 3, true},
-           flip.change_ev ? Cell(Number{*flip.change_ev, 3, true}) : Cell()}};
-  if (flip.other) {
-    row.cells.emplace_back(parameters[static_cast<std::size_t>(*flip.other)].name);
-    row.cells.emplace_back(Number{100.0 * flip.other_relative, 1, true});
+Row flip_row(const VariantResult& variant, const char* side, const LevelFlip& flip) {
+  const auto parameter = [&](int index) {
+    return variant.robustness.parameters[static_cast<std::size_t>(index)].name;
+  };
+  const std::string lower = readable_label(name_of_level(variant, flip.lower));
+  const std::string upper = readable_label(name_of_level(variant, flip.upper));
+  Row row{{variant.name, side, lower + (flip.coincide() ? " = " : " < ") + upper,
+           Number{flip.gap_ev, 3}}};
+  if (flip.parameter) {
+    row.cells.emplace_back(parameter(*flip.parameter));
+    row.cells.emplace_back(Number{flip.first_order_ev, 3, true});
+    row.cells.emplace_back(flip.change_ev ? Cell(Number{*flip.change_ev, 3, true}) : Cell());
   } else {
-    row.cells.resize(9);
+    row.cells.resize(row.cells.size() + 3);
   }
-  row.cells.emplace_back(flip.fragile ? "fragile" : "");
+  row.cells.emplace_back(flip.other ? Cell(fmt::format("{} {:+.1f} %", parameter(*flip.other),
+                                                       100.0 * flip.other_relative))
+                                    : Cell());
+  row.cells.emplace_back(flip.coincide() ? "coincide" : flip.fragile ? "fragile" : "");
   return row;
 }
 
-// Two cells, the level and its shift, of what the reference's frontier level became.
-void add_fate(const Comparison& comparison, int index, FrontierSide side, Row& row) {
-  const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
-  const VariantResult& reference =
-      comparison.variants[static_cast<std::size_t>(comparison.reference)];
-  const std::optional<FrontierFate> fate = frontier_fate(comparison, index, side);
-  if (!fate || !fate->match) {
-    row.cells.resize(row.cells.size() + 4);
+// Level, shift, overlap and whether it is still the frontier level: of one of those that the
+// reference's became, or blank where there are fewer.
+void add_part(const Comparison& comparison, int index, const std::optional<FrontierFate>& fate,
+              std::size_t which, Row& row) {
+  if (!fate || which >= fate->parts.size()) {
+    row.cells.resize(row.cells.size() + 3);
+    row.cells.emplace_back(fate && which == 0 ? Cell(stays_word(fate->stays)) : Cell());
     return;
   }
-  row.cells.emplace_back(SymmetryLabel{name_of_level(variant, fate->match->variant)});
-  row.cells.emplace_back(Number{level_of(variant, fate->match->variant).energy_ev -
-                                    level_of(reference, fate->reference_level).energy_ev,
-                                3, true});
-  row.cells.emplace_back(percent(fate->match->overlap));
-  row.cells.emplace_back(fate->stays ? "yes" : "no");
+  const VariantResult& variant = comparison.variants[static_cast<std::size_t>(index)];
+  const FatePart& part = fate->parts[which];
+  row.cells.emplace_back(SymmetryLabel{name_of_level(variant, part.match.variant)});
+  row.cells.emplace_back(Number{shift_ev(comparison, index, part.match), 3, true});
+  row.cells.emplace_back(percent(part.match.overlap));
+  row.cells.emplace_back(stays_word(part.at_frontier ? fate->stays : Stays::No));
 }
 
 // Neighbours in energy: "a1g–eg 0.015, eg–b2g 0.216".
@@ -97,6 +102,7 @@ Table d_block_table(const Comparison& comparison) {
                    {"occupation", "electrons", "", Align::Decimal, 1, false}};
   for (const VariantResult& variant : comparison.variants) {
     for (const MetalFacts& metal : variant.metals) {
+      if (!metal.has_d_shell) continue;
       const DBlock& block = metal.d_block;
       table.lines.emplace_back(Separator{metal_words(variant, metal) + parent_words(block)});
       for (auto entry = block.levels.rbegin(); entry != block.levels.rend(); ++entry) {
@@ -169,22 +175,31 @@ Table frontier_match_table(const Comparison& comparison) {
   for (int i = 0; i < static_cast<int>(comparison.variants.size()); ++i) {
     if (i == comparison.reference) continue;
     const Matching& matching = comparison.matchings[static_cast<std::size_t>(i)];
-    Row row{{comparison.variants[static_cast<std::size_t>(i)].name, matching.common_group,
-             Number{static_cast<double>(matching.shared_atoms), 0},
-             Number{static_cast<double>(matching.replaced_donors), 0}}};
-    add_fate(comparison, i, FrontierSide::Homo, row);
-    add_fate(comparison, i, FrontierSide::Lumo, row);
-    table.lines.emplace_back(std::move(row));
+    const std::optional<FrontierFate> homo = frontier_fate(comparison, i, FrontierSide::Homo);
+    const std::optional<FrontierFate> lumo = frontier_fate(comparison, i, FrontierSide::Lumo);
+    const std::size_t n_rows =
+        std::max({std::size_t{1}, homo ? homo->parts.size() : 0, lumo ? lumo->parts.size() : 0});
+    for (std::size_t part = 0; part < n_rows; ++part) {
+      Row row{{comparison.variants[static_cast<std::size_t>(i)].name, matching.common_group,
+               Number{static_cast<double>(matching.shared_atoms), 0},
+               Number{static_cast<double>(matching.replaced_donors), 0}}};
+      add_part(comparison, i, homo, part, row);
+      add_part(comparison, i, lumo, part, row);
+      table.lines.emplace_back(std::move(row));
+    }
     for (const FrontierSide side : {FrontierSide::Homo, FrontierSide::Lumo}) {
       std::string words = crossing_words(comparison, i, side);
       if (!words.empty()) table.notes.push_back(std::move(words));
     }
   }
   table.notes.push_back(fmt::format(
-      "The level of each variant that resembles the reference's HOMO or LUMO most: by the overlap "
-      "of the two on the atoms that both molecules have and on donors in the same places, among "
-      "levels that share an irrep of the common group. shift: its energy less the reference's. "
-      "Levels within {} eV of the HOMO or LUMO count as it.",
+      "What resembles the reference's HOMO or LUMO most in each variant, of a degenerate one as "
+      "many "
+      "levels as it splits into: by the overlap on the atoms that both molecules have and on "
+      "donors "
+      "in the same places, among levels that share an irrep of the common group. shift: its energy "
+      "less the reference's. Levels within {} eV of the HOMO or LUMO count as it; in part: other "
+      "parts of the level do not.",
       tied_below_ev));
   return table;
 }
@@ -196,27 +211,28 @@ Table robustness_table(const Comparison& comparison) {
                    {"side", "side", "", Align::Left, 3, false},
                    {"pair", "order", "", Align::Left, 0, false},
                    {"gap_ev", "apart", "eV", Align::Decimal, 2, false},
-                   {"parameter", "change", "", Align::Left, 0, false},
+                   {"parameter", "parameter", "", Align::Left, 0, false},
                    {"first_order_ev", "by slope", "eV", Align::Decimal, 1, false},
                    {"change_ev", "solved", "eV", Align::Decimal, 0, false},
-                   {"other", "or", "", Align::Left, 4, false},
-                   {"other_percent", "by", "%", Align::Decimal, 4, false},
+                   {"other", "other parameter and change", "", Align::Left, 4, false},
                    {"fragile", "", "", Align::Left, 0, false}};
   for (const VariantResult& variant : comparison.variants) {
     const Robustness& robustness = variant.robustness;
     if (robustness.occupied) {
-      table.lines.emplace_back(flip_row(variant, variant.name, "occupied", *robustness.occupied));
+      table.lines.emplace_back(flip_row(variant, "occupied", *robustness.occupied));
     }
     if (robustness.empty) {
-      table.lines.emplace_back(flip_row(variant, variant.name, "empty", *robustness.empty));
+      table.lines.emplace_back(flip_row(variant, "empty", *robustness.empty));
     }
   }
   table.notes = {fmt::format(
       "The two highest occupied and the two lowest empty levels of different symmetry. by slope: "
-      "first order in the parameter; solved: computed again until the levels meet, where less than "
-      "1 eV is expected; or, by: the exponent or K that does it soonest, first order. fragile: "
-      "turns for less than {} eV in one H_ii.",
-      fragile_below_ev)};
+      "what "
+      "the parameter must change by, first order; solved: the same computed again until the levels "
+      "meet, where less than 1 eV is expected; other parameter: the exponent or K that does it "
+      "soonest, first order. fragile: turns for less than {} eV in one H_ii; coincide: less than "
+      "{} eV apart, thus without an order.",
+      fragile_below_ev, coincide_below_ev)};
   return table;
 }
 
