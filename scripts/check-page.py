@@ -137,6 +137,16 @@ def check_levels(driver):
         expect(abs(float(stated) - float(shown)) < 0.006, f"{title}: the panel says {shown} eV")
     expect(len({words for _, words in energies}) == len(energies), "two levels fill the panel alike")
 
+    # The share stands in the last column, and up to three partners leave room for it.
+    for level, columns, table, room in driver.execute_script("""
+        return [...document.querySelectorAll('.diagram g.level')].map(g => {
+          g.dispatchEvent(new MouseEvent('click', {bubbles: true}));
+          const table = document.querySelector('.panel table');
+          return [g.querySelector('title').textContent, table.rows[0].cells.length,
+                  table.offsetWidth, document.querySelector('.panel .table .scroll').clientWidth];
+        });"""):
+        expect(columns > 6 or table <= room, f"{level}: {table} px of coefficients in {room} px")
+
     # A real click, not only an event.
     other = next(level for level in levels if level.get_attribute("aria-pressed") != "true")
     driver.execute_script("arguments[0].scrollIntoView({block: 'center'})", other)

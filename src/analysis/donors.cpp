@@ -3,14 +3,10 @@
 #include <algorithm>
 #include <utility>
 
+#include "molecule/metals.hpp"
+
 namespace irrepwise {
 namespace {
-
-// Groups 3 to 12 with the lanthanides and actinides.
-bool is_d_or_f_block(int z) {
-  return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) ||
-         (z >= 89 && z <= 112);
-}
 
 bool has_d_shell(const Basis& basis, int atom) {
   const auto at = static_cast<std::size_t>(atom);
@@ -44,7 +40,7 @@ std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis,
     if (atom == metal || std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
     if (!are_bonded(molecule, metal, atom)) continue;
     // Joins every site that holds a neighbour.
-    DonorSite site{{atom}, {}};
+    DonorSite site{{atom}};
     std::vector<DonorSite> rest;
     for (DonorSite& other : sites) {
       const bool touches = std::any_of(other.atoms.begin(), other.atoms.end(), [&](int donor) {

@@ -13,8 +13,9 @@ namespace irrepwise {
 /// One place at a metal: a donor atom, or several that are bonded to each other and bind side by
 /// side (the five carbons of a cyclopentadienyl ring).
 struct DonorSite {
-  std::vector<int> atoms;     // ascending
-  Eigen::Vector3d direction;  // unit vector from the metal to their centroid
+  std::vector<int> atoms;                               // ascending
+  Eigen::Vector3d direction = Eigen::Vector3d::Zero();  // unit vector from the metal to their
+                                                        // centroid
 };
 
 /// Atoms of the d and f blocks, also those without a d shell in the basis, such as zinc.

@@ -135,10 +135,10 @@ Built build(const BuildOptions& options) {
         "expected a job file (.yaml), or a metal, a polyhedron and ligands such as "
         "Pt SP-4 Cl NH3 Cl NH3 --oxidation 2");
   }
-  if (options.oxidation || options.charge || options.angle || !options.ligands.empty()) {
+  if (options.oxidation || options.angle || !options.ligands.empty()) {
     throw CLI::ValidationError(
-        "--oxidation, --charge, --angle and --ligands go with a complex on the command line; in a "
-        "job they stand in the file");
+        "--oxidation, --angle and --ligands go with a complex on the command line; in a job they "
+        "stand in the file");
   }
   Job job = read_job_or_variant(options.words[0], options.variant);
   if (!job.built) {
@@ -147,6 +147,7 @@ Built build(const BuildOptions& options) {
                     "there",
                     job_place(options.words[0], options.variant)));
   }
+  if (options.charge) set_charge(job, *options.charge, "--charge");
   return {std::move(*job.built), job.title, job.source_files};
 }
 

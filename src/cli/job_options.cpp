@@ -73,10 +73,7 @@ std::string job_place(const JobOptions& options) {
 
 Job read_job_with(const JobOptions& options) {
   Job job = read_job_or_variant(options.file, options.variant);
-  if (options.charge) {
-    job.molecule = at_place("--charge", [&] { return job.molecule.with_charge(*options.charge); });
-    job.places["charge"] = "--charge";
-  }
+  if (options.charge) set_charge(job, *options.charge, "--charge");
   if (options.multiplicity) {
     if (*options.multiplicity < 1) {
       throw Error(

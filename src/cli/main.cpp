@@ -63,8 +63,11 @@ std::string usage_message(const CLI::App& program, const CLI::ParseError& error,
     const std::size_t option = message.find("--");
     const std::size_t equals = message.find(" = ", option);
     if (option != std::string::npos && equals != std::string::npos) {
-      return message.substr(option, equals - option) + ": found '" + message.substr(equals + 3) +
-             "', expected a number (a whole one where the help says N)";
+      const std::string name = message.substr(option, equals - option);
+      const CLI::Option* const known = chosen.back()->get_option_no_throw(name);
+      const bool whole = known != nullptr && known->get_type_name() == "INT";
+      return name + ": found '" + message.substr(equals + 3) + "', expected a " +
+             (whole ? "whole number" : "number");
     }
   }
   return error.what();

@@ -188,7 +188,8 @@ Command add_table(CLI::App& program) {
       "orbitals (default), or salcs: those of `irrepwise symmetry --salcs`")
       ->check(one_of({"orbitals", "salcs"}));
   add("--frame", options->frame, "FRAME",
-      "standard (default), or local: σ and π of each atom, z along its bond towards the centre")
+      "standard (default), or local: σ and π of each atom, z along its bond towards the metal or "
+      "centre")
       ->check(one_of({"standard", "local"}));
   add("--threshold", options->threshold, "X",
       "Leave smaller entries blank: 0.05 by default, 1 % for shares, 0 in json and csv");

@@ -14,12 +14,12 @@
 namespace irrepwise::cli {
 namespace {
 
-// "chloride, fluoride, water", of many the first ones.
+// "chloride, fluoride, water", of many the first ones; "1 more" would be as long as the name.
 std::string listed(const std::vector<std::string>& names) {
   constexpr std::size_t most = 12;
-  std::vector<std::string> shown(
-      names.begin(), names.begin() + static_cast<std::ptrdiff_t>(std::min(names.size(), most)));
-  if (names.size() > most) shown.push_back(fmt::format("{} more", names.size() - most));
+  if (names.size() <= most + 1) return joined(names);
+  std::vector<std::string> shown(names.begin(), names.begin() + static_cast<std::ptrdiff_t>(most));
+  shown.push_back(fmt::format("{} more", names.size() - most));
   return joined(shown);
 }
 

@@ -40,6 +40,16 @@ void check_bridges(const ComplexSpec& complex) {
   if (complex.centres.empty() || complex.centres.size() > 2) {
     throw Error(fmt::format("found {} centres, expected one or two", complex.centres.size()));
   }
+  if (complex.metal_metal_bond != 0) {
+    at_place(complex.metal_metal_bond_place, [&] {
+      constexpr int highest = 5;
+      const int order = complex.metal_metal_bond;
+      if (!two) throw Error("`metal_metal_bond` needs two centres; leave it out");
+      if (order < 0 || order > highest) {
+        throw Error(fmt::format("found a bond of order {}, expected 0 to {}", order, highest));
+      }
+    });
+  }
   if (two == complex.bridges.empty()) {
     throw Error(two ? "two centres need at least one bridge" : "bridges need two centres");
   }

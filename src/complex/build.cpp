@@ -86,8 +86,10 @@ std::vector<BuiltCentre> count_centres(const ComplexSpec& complex, const Charges
       if (here) donated += ligand.electrons;
     }
     const std::string& place = spec.oxidation ? spec.oxidation_place : complex.charge_place;
-    const ElectronCount electrons = at_place(
-        place, [&] { return count_electrons(spec.atomic_number, charges.oxidation[c], donated); });
+    const ElectronCount electrons = at_place(place, [&] {
+      return count_electrons(spec.atomic_number, charges.oxidation[c], donated,
+                             complex.metal_metal_bond);
+    });
     centres.push_back({static_cast<int>(c), std::string(spec.polyhedron.kind().symbol), electrons});
   }
   return centres;
@@ -130,6 +132,9 @@ std::string how_made(const ComplexSpec& complex, const std::vector<BuiltCentre>&
     }
   }
   for (const BuiltLigand& ligand : ligands) words += "; " + ligand_words(ligand);
+  if (complex.metal_metal_bond > 0) {
+    words += fmt::format("; bond of order {} between the metals counted", complex.metal_metal_bond);
+  }
   return words;
 }
 

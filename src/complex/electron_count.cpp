@@ -45,7 +45,7 @@ int valence_electrons(int atomic_number) {
 
 std::string signed_number(int number) { return number == 0 ? "0" : fmt::format("{:+}", number); }
 
-ElectronCount count_electrons(int atomic_number, int oxidation, int donated) {
+ElectronCount count_electrons(int atomic_number, int oxidation, int donated, int other_metal) {
   const Valence neutral = valence(atomic_number);
   const int left = neutral.electrons - oxidation;
   const std::string_view symbol = element_symbol(atomic_number);
@@ -61,7 +61,7 @@ ElectronCount count_electrons(int atomic_number, int oxidation, int donated) {
                     "that its valence shells hold; check oxidation state, charge and ligands",
                     signed_number(oxidation), left, symbol, most_electrons(neutral.shell)));
   }
-  return {oxidation, left, neutral.shell, donated, left + donated};
+  return {oxidation, left, neutral.shell, donated, left + donated + other_metal, other_metal};
 }
 
 }  // namespace irrepwise

@@ -53,7 +53,9 @@ struct ComplexSpec {
   std::optional<double>
       bridge_angle_degrees;               // metal-donor-metal of a single bridge; 180 if absent
   std::optional<double> torsion_degrees;  // turn of the second centre about a single bridge
-  std::optional<int> charge;              // of the complex
+  int metal_metal_bond = 0;               // order of the bond between the two metals, as stated
+  std::string metal_metal_bond_place;
+  std::optional<int> charge;  // of the complex
   std::string charge_place;
   LigandLibrary library = built_in_ligands();
 };

@@ -3,33 +3,51 @@
 #include <algorithm>
 #include <cctype>
 #include <numeric>
+#include <utility>
 
 namespace irrepwise {
 namespace {
 
 char lower(char c) { return static_cast<char>(std::tolower(static_cast<unsigned char>(c))); }
 
-std::size_t edit_distance(std::string_view a, std::string_view b) {
-  std::vector<std::size_t> row(b.size() + 1);
-  std::iota(row.begin(), row.end(), std::size_t{0});
-  for (std::size_t i = 0; i < a.size(); ++i) {
-    std::size_t diagonal = row[0];
-    row[0] = i + 1;
-    for (std::size_t j = 0; j < b.size(); ++j) {
-      const std::size_t changed = diagonal + (lower(a[i]) == lower(b[j]) ? 0 : 1);
-      diagonal = row[j + 1];
-      row[j + 1] = std::min({changed, row[j] + 1, diagonal + 1});
-    }
-  }
-  return row.back();
+bool begins_with(std::string_view word, std::string_view start) {
+  return word.size() >= start.size() &&
+         std::equal(start.begin(), start.end(), word.begin(),
+                    [](char a, char b) { return lower(a) == lower(b); });
 }
 
 constexpr std::string_view white_space = " \t\r\n\v\f";
 
 }  // namespace
 
+std::size_t edit_distance(std::string_view a, std::string_view b) {
+  // Rows of the table of distances between the first i letters of a and the first j of b.
+  std::vector<std::size_t> before;
+  std::vector<std::size_t> last(b.size() + 1);
+  std::iota(last.begin(), last.end(), std::size_t{0});
+  for (std::size_t i = 1; i <= a.size(); ++i) {
+    std::vector<std::size_t> row(b.size() + 1, i);
+    for (std::size_t j = 1; j <= b.size(); ++j) {
+      const auto same = [&](std::size_t m, std::size_t n) { return lower(a[m]) == lower(b[n]); };
+      row[j] = std::min({last[j] + 1, row[j - 1] + 1, last[j - 1] + (same(i - 1, j - 1) ? 0 : 1)});
+      if (i > 1 && j > 1 && same(i - 1, j - 2) && same(i - 2, j - 1)) {
+        row[j] = std::min(row[j], before[j - 2] + 1);
+      }
+    }
+    before = std::move(last);
+    last = std::move(row);
+  }
+  return last.back();
+}
+
 std::string nearest_word(std::string_view word, std::span<const std::string> known) {
+  constexpr std::size_t shortest_start = 3;
   std::string best;
+  for (const std::string& candidate : known) {
+    if (word.size() < shortest_start || !begins_with(candidate, word)) continue;
+    if (best.empty() || candidate.size() < best.size()) best = candidate;
+  }
+  if (!best.empty()) return best;
   std::size_t best_distance = 0;
   for (const std::string& candidate : known) {
     const std::size_t distance = edit_distance(word, candidate);

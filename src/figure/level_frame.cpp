@@ -145,7 +145,7 @@ double add_heading(Figure& figure, const LevelDiagram& diagram, const Font& font
   Group group;
   group.kind = "heading";
   double y = margin - 4.0;
-  for (const RichText& row : wrapped(font, plain_text(diagram.title), title_size, width)) {
+  for (const RichText& row : wrapped(font, heading_text(diagram.title), title_size, width)) {
     y += title_size + 3.0;
     group.elements.emplace_back(text_at({margin, y}, row, title_size, palette::ink));
   }

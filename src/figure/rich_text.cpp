@@ -1,5 +1,7 @@
 #include "figure/rich_text.hpp"
 
+#include <algorithm>
+#include <array>
 #include <cctype>
 #include <cmath>
 #include <cstddef>
@@ -66,6 +68,36 @@ RichText label_text(const std::string& ascii) {
 }
 
 RichText plain_text(const std::string& text) { return {{text, Script::Normal}}; }
+
+RichText heading_text(const std::string& text) {
+  struct Sign {
+    std::string_view sign;
+    const char* plain;
+    Script script;
+  };
+  constexpr std::array<Sign, 22> signs = {
+      {{"₀", "0", Script::Sub},   {"₁", "1", Script::Sub},   {"₂", "2", Script::Sub},
+       {"₃", "3", Script::Sub},   {"₄", "4", Script::Sub},   {"₅", "5", Script::Sub},
+       {"₆", "6", Script::Sub},   {"₇", "7", Script::Sub},   {"₈", "8", Script::Sub},
+       {"₉", "9", Script::Sub},   {"⁰", "0", Script::Super}, {"¹", "1", Script::Super},
+       {"²", "2", Script::Super}, {"³", "3", Script::Super}, {"⁴", "4", Script::Super},
+       {"⁵", "5", Script::Super}, {"⁶", "6", Script::Super}, {"⁷", "7", Script::Super},
+       {"⁸", "8", Script::Super}, {"⁹", "9", Script::Super}, {"⁺", "+", Script::Super},
+       {"⁻", "−", Script::Super}}};
+  RichText runs;
+  for (std::string_view rest = text; !rest.empty();) {
+    const std::string_view character = rest.substr(0, first_character(rest));
+    const auto sign = std::find_if(signs.begin(), signs.end(),
+                                   [&](const Sign& one) { return one.sign == character; });
+    if (sign != signs.end()) {
+      add(runs, sign->plain, sign->script);
+    } else {
+      add(runs, std::string(character), Script::Normal);
+    }
+    rest.remove_prefix(character.size());
+  }
+  return runs;
+}
 
 RichText formula_text(const Molecule& molecule) {
   RichText runs;

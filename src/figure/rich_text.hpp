@@ -13,6 +13,10 @@ namespace irrepwise {
 
 [[nodiscard]] RichText plain_text(const std::string& text);
 
+/// @returns  signs of Unicode that stand below or above, as in "Cl₄Pt²⁻", set as scripts, since few
+///           fonts have them all
+[[nodiscard]] RichText heading_text(const std::string& text);
+
 /// @returns  the formula in Hill order with its numbers below and its charge above the line
 [[nodiscard]] RichText formula_text(const Molecule& molecule);
 

@@ -93,7 +93,7 @@ Figure sheet_figure(const Sheet& sheet) {
   Group heading;
   heading.kind = "heading";
   double y = margin;
-  for (const RichText& line : wrapped(font, plain_text(sheet.title), title_size, width)) {
+  for (const RichText& line : wrapped(font, heading_text(sheet.title), title_size, width)) {
     y += title_size + 3.0;
     heading.elements.emplace_back(text_at({margin, y - 4.0}, line, title_size, palette::ink));
   }

@@ -155,8 +155,9 @@ LigandRequest read_ligand_request(const YamlNode& node) {
 }
 
 ComplexSpec read_build(const YamlNode& node, const std::string& beside, FileChain& files) {
-  node.expect_keys("the section `build`", {"metal", "polyhedron", "oxidation", "ligands", "centres",
-                                           "bridges", "bridge_angle", "torsion", "library"});
+  node.expect_keys("the section `build`",
+                   {"metal", "polyhedron", "oxidation", "ligands", "centres", "bridges",
+                    "bridge_angle", "torsion", "metal_metal_bond", "library"});
   ComplexSpec complex;
   if (const YamlNode* const library = node.find("library")) {
     const std::string path = path_beside(beside, library->word("the name of a file"));
@@ -187,6 +188,10 @@ ComplexSpec read_build(const YamlNode& node, const std::string& beside, FileChai
   }
   complex.bridge_angle_degrees = read_optional(node, "bridge_angle", "an angle in degrees");
   complex.torsion_degrees = read_optional(node, "torsion", "an angle in degrees");
+  if (const YamlNode* const bond = node.find("metal_metal_bond")) {
+    complex.metal_metal_bond = bond->whole_number("the order of the bond between the metals");
+    complex.metal_metal_bond_place = bond->place();
+  }
   return complex;
 }
 

@@ -37,7 +37,7 @@ bool is_job_file(const std::string& path) {
   return extension == ".yaml" || extension == ".yml";
 }
 
-Molecule read_geometry(const YamlNode& node, const std::string& beside, FileChain& files) {
+XyzFile read_geometry(const YamlNode& node, const std::string& beside, FileChain& files) {
   const auto from_file = [&](const YamlNode& name) {
     return read_geometry_file(name, path_beside(beside, name.word("the name of a file")), files);
   };
@@ -48,7 +48,7 @@ Molecule read_geometry(const YamlNode& node, const std::string& beside, FileChai
   if ((file != nullptr) == (atoms != nullptr)) {
     node.fail("expected either `file` or `atoms` in the geometry");
   }
-  if (atoms) return read_atoms(node, *atoms);
+  if (atoms) return {read_atoms(node, *atoms)};
   if (const YamlNode* const unit = node.find("unit")) {
     unit->fail("`unit` goes with `atoms`; an XYZ file is in Å");
   }

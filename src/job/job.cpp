@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <filesystem>
+#include <optional>
 #include <string_view>
 #include <system_error>
 #include <utility>
@@ -34,11 +35,22 @@ std::string read_named(const YamlNode& from, const std::string& path) {
   }
 }
 
-// The molecule with its own title, and defaults for all else.
-Job job_of(Molecule molecule) {
-  std::string title = molecule.title();
-  return {
-      std::move(title), std::move(molecule), published_parameters(), {}, {}, {}, {}, {}, {}, {}};
+// The molecule with its own title, what its file says of electrons, and defaults for all else.
+Job job_of(XyzFile file) {
+  std::string title = file.molecule.title();
+  Job job{std::move(title),
+          std::move(file.molecule),
+          published_parameters(),
+          {},
+          {},
+          {},
+          {},
+          {},
+          {},
+          {}};
+  job.hueckel.multiplicity = file.multiplicity;
+  if (file.multiplicity) job.places["multiplicity"] = file.multiplicity_place;
+  return job;
 }
 
 // What a variant says in place of the job.
@@ -108,7 +120,7 @@ Job read_structure(const YamlNode& node, const YamlNode* variant, const Substitu
   }
   if (const YamlNode* const charge = find_in(variant, "charge")) read_charge(*charge, complex);
   BuiltComplex built = built_at(complex, section, path);
-  Job job = job_of(built.molecule);
+  Job job = job_of({built.molecule});
   job.complex = std::move(complex);
   job.built = std::move(built);
   return job;
@@ -171,18 +183,21 @@ Job read_job_node(const YamlNode& node, const YamlNode* variant, const Substitut
   if (const YamlNode* const symmetry = find_in(node, variant, "symmetry")) {
     job.symmetry = read_symmetry(*symmetry, job.molecule);
   }
+  const std::optional<int> multiplicity_of_file = job.hueckel.multiplicity;
   job.hueckel = read_hueckel(node, variant);
+  const bool is_stated = job.hueckel.multiplicity || !job.hueckel.electrons_by_irrep.empty();
+  if (!is_stated) job.hueckel.multiplicity = multiplicity_of_file;
   note_places(node, variant, job);
   files.open.pop_back();
   job.source_files = files.read;
   return job;
 }
 
-Molecule read_geometry_file(const YamlNode& from, const std::string& path, FileChain& files) {
+XyzFile read_geometry_file(const YamlNode& from, const std::string& path, FileChain& files) {
   if (!is_job_file(path)) {
     const std::string text = read_named(from, path);
     files.read.push_back(path);
-    return parse_xyz(text, path).molecule;
+    return parse_xyz(text, path);
   }
   for (const std::string& open : files.open) {
     if (canonical(open) != canonical(path)) continue;
@@ -191,7 +206,7 @@ Molecule read_geometry_file(const YamlNode& from, const std::string& path, FileC
     from.fail(fmt::format("the geometry leads back to this file: {}{}; name a file with atoms",
                           chain, path));
   }
-  return parse_job(read_named(from, path), path, files).molecule;
+  return {parse_job(read_named(from, path), path, files).molecule};
 }
 
 ParameterSet read_job_parameters(const YamlNode& node, const std::string& beside,
@@ -210,9 +225,25 @@ Job read_job(const std::string& path) {
     FileChain files;
     return parse_job(read_text_file(path), path, files);
   }
-  Job job = job_of(read_xyz(path).molecule);
+  Job job = job_of(read_xyz(path));
   job.source_files = {path};
   return job;
+}
+
+void set_charge(Job& job, int charge, const std::string& place) {
+  if (job.complex) {
+    job.complex->charge = charge;
+    job.complex->charge_place = place;
+    job.built = build_complex(*job.complex);
+    job.molecule = job.built->molecule;
+  } else {
+    try {
+      job.molecule = job.molecule.with_charge(charge);
+    } catch (const Error& error) {
+      throw error_at(place, error);
+    }
+  }
+  job.places["charge"] = place;
 }
 
 Error error_in(const Job& job, const std::string& file, const Error& error) {

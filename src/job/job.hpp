@@ -41,6 +41,12 @@ struct Job {
 /// @throws Error  with file, line and column, what is wrong and what to do
 [[nodiscard]] Job read_job(const std::string& path);
 
+/// Gives the molecule this charge in place of what the job says; a complex that the job builds gets
+/// it by the rule for `charge` in the file.
+/// @param place   where the charge stands, for messages: "--charge"
+/// @throws Error  a charge out of range; one that contradicts the oxidation states
+void set_charge(Job& job, int charge, const std::string& place);
+
 /// @returns  the error with the place of the value that it is about, if the job knows it, or else
 ///           the file
 [[nodiscard]] Error error_in(const Job& job, const std::string& file, const Error& error);

@@ -15,6 +15,7 @@
 #include "hueckel/options.hpp"
 #include "job/job.hpp"
 #include "molecule/molecule.hpp"
+#include "molecule/xyz.hpp"
 #include "symmetry/options.hpp"
 
 namespace irrepwise {
@@ -28,9 +29,10 @@ struct FileChain {
 
 /// `geometry`: the name of a file, or `file`, or `atoms` with an optional `unit`.
 /// @param beside  the job file
-/// @returns       a molecule with the charge that its file states, otherwise 0
-[[nodiscard]] Molecule read_geometry(const YamlNode& node, const std::string& beside,
-                                     FileChain& files);
+/// @returns       a molecule with the charge that its file states, otherwise 0; the multiplicity
+///                that an XYZ file states
+[[nodiscard]] XyzFile read_geometry(const YamlNode& node, const std::string& beside,
+                                    FileChain& files);
 
 /// `build`: a metal, a polyhedron and ligands, or two centres with bridges, in place of `geometry`.
 /// @param beside  the job file, beside which a library of ligands is looked for
@@ -81,8 +83,8 @@ enum class AbsentElement { Refused, Skipped };
 
 /// The atoms of a job or an XYZ file, through a chain of files.
 /// @param from  the value that names the file; its place is blamed where the file cannot be read
-[[nodiscard]] Molecule read_geometry_file(const YamlNode& from, const std::string& path,
-                                          FileChain& files);
+[[nodiscard]] XyzFile read_geometry_file(const YamlNode& from, const std::string& path,
+                                         FileChain& files);
 
 /// Whether a name ends as those of job files do: .yaml or .yml.
 [[nodiscard]] bool is_job_file(const std::string& path);

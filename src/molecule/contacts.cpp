@@ -1,10 +1,13 @@
-// Contacts between atoms judged by covalent radii: bonds, and distances that look like a slip.
+#include "molecule/contacts.hpp"
+
 #include <algorithm>
+#include <array>
 #include <cassert>
 #include <cstddef>
 #include <limits>
 #include <optional>
 #include <string>
+#include <utility>
 #include <vector>
 
 #include <fmt/format.h>
@@ -18,14 +21,33 @@ namespace irrepwise {
 namespace {
 
 // Bonds of all orders lie between 0.66 (a quadruple bond of chromium) and 1.25 times the sum of the
-// radii (common practice); coordinates converted from bohr twice fall below 0.6.
+// radii (common practice); coordinates converted from bohr twice fall below 0.6. Two metals are
+// held at 1.2 and more by ligands that bridge them, without a bond.
 constexpr double longest_bond = 1.25;
+constexpr double longest_bond_of_metals = 1.15;
 constexpr double shortest_bond = 0.6;
 constexpr double bond_without_radius_angstrom = 3.0;
 
 const Atom& atom_at(const Molecule& molecule, int index) {
   assert(index >= 0 && index < molecule.size());
   return molecule.atoms()[static_cast<std::size_t>(index)];
+}
+
+// All elements but hydrogen, the p block on and beyond the line from boron to polonium, and the
+// noble gases.
+bool is_metal(int atomic_number) {
+  constexpr std::array<std::pair<int, int>, 6> metals = {
+      {{3, 4}, {11, 13}, {19, 31}, {37, 50}, {55, 83}, {87, max_atomic_number - 2}}};
+  return std::any_of(metals.begin(), metals.end(), [&](const std::pair<int, int>& range) {
+    return atomic_number >= range.first && atomic_number <= range.second;
+  });
+}
+
+// As a multiple of the sum of the radii.
+double longest_bond_between(const Molecule& molecule, int a, int b) {
+  const bool metals =
+      is_metal(atom_at(molecule, a).atomic_number) && is_metal(atom_at(molecule, b).atomic_number);
+  return metals ? longest_bond_of_metals : longest_bond;
 }
 
 // The distance as a multiple of the sum of the radii; nothing for elements without a radius.
@@ -98,8 +120,21 @@ bool are_bonded(const Molecule& molecule, int atom_a, int atom_b) {
   const NearPair pair{
       atom_a, atom_b,
       (atom_at(molecule, atom_a).position - atom_at(molecule, atom_b).position).norm()};
-  if (const std::optional<double> ratio = relative(molecule, pair)) return *ratio <= longest_bond;
+  if (const std::optional<double> ratio = relative(molecule, pair)) {
+    return *ratio <= longest_bond_between(molecule, atom_a, atom_b);
+  }
   return pair.distance_angstrom < bond_without_radius_angstrom;
+}
+
+std::string bond_criterion(const Molecule& molecule) {
+  const auto n_metals =
+      std::count_if(molecule.atoms().begin(), molecule.atoms().end(),
+                    [](const Atom& atom) { return is_metal(atom.atomic_number); });
+  if (n_metals < 2) return {};
+  return fmt::format(
+      "A bond is a distance of at most {} times the sum of the covalent radii, between two metals "
+      "of at most {} times.",
+      longest_bond, longest_bond_of_metals);
 }
 
 std::vector<std::string> geometry_warnings(const Molecule& molecule) {

@@ -54,8 +54,9 @@ class Molecule {
 /// radii say, or all contacts so short that the coordinates look like bohr.
 [[nodiscard]] std::vector<std::string> geometry_warnings(const Molecule& molecule);
 
-/// @returns  whether the distance is at most 1.25 times the sum of the covalent radii; for elements
-///           without a radius, whether it is below 3 Å
+/// @returns  whether the distance is at most 1.25 times the sum of the covalent radii, 1.15 times
+/// for
+///           two metals; where an element has no radius, whether it is below 3 Å
 [[nodiscard]] bool are_bonded(const Molecule& molecule, int atom_a, int atom_b);
 
 }  // namespace irrepwise

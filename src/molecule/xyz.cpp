@@ -52,18 +52,16 @@ class Reader {
 
   XyzFile read() const {
     const int count = read_count();
-    std::optional<int> charge;
-    std::string title;
-    AtomColumns columns;
-    if (lines_.size() > 1) read_comment(lines_[1], title, columns, charge);
+    const Comment comment = lines_.size() > 1 ? read_comment(lines_[1]) : Comment{};
     refuse_fewer(count);
     std::vector<Atom> atoms;
     for (const Line& line : std::span(lines_).subspan(2, static_cast<std::size_t>(count))) {
-      atoms.push_back(read_atom(line, columns));
+      atoms.push_back(read_atom(line, comment.columns));
     }
     refuse_more(count);
     try {
-      return {Molecule(std::move(atoms), charge.value_or(0), title), charge};
+      return {Molecule(std::move(atoms), comment.charge.value_or(0), comment.title), comment.charge,
+              comment.multiplicity, comment.multiplicity_place};
     } catch (const Error& error) {
       throw error_at(name_, error);
     }
@@ -97,37 +95,71 @@ class Reader {
     return *count;
   }
 
-  void read_comment(const Line& line, std::string& title, AtomColumns& columns,
-                    std::optional<int>& charge) const {
+  // What the comment says, besides the atoms.
+  struct Comment {
+    std::string title;
+    AtomColumns columns;
+    std::optional<int> charge;
+    std::optional<int> multiplicity;
+    std::string multiplicity_place;
+  };
+
+  Comment read_comment(const Line& line) const {
     const std::vector<CommentPiece> pieces = comment_pieces(line.text);
     bool extended = std::all_of(pieces.begin(), pieces.end(),
                                 [](const CommentPiece& piece) { return piece.value.has_value(); });
-    std::string stated_title;
+    Comment comment;
     for (const CommentPiece& piece : pieces) {
       if (!piece.value) continue;
+      const std::string key = comment_key(piece.key);
       if (piece.key == "Properties") {
         extended = true;
         try {
-          columns = atom_columns(*piece.value);
+          comment.columns = atom_columns(*piece.value);
         } catch (const Error& error) {
           throw error_at(file_place(name_, line.number, piece.column), error);
         }
-      } else if (piece.key == "charge" || piece.key == "Charge" || piece.key == "CHARGE") {
-        const std::optional<int> value = whole(*piece.value);
-        if (!value) {
+      } else if (key == "charge") {
+        read_stated(line, piece, "charge", "a whole number such as charge=-2", comment.charge);
+      } else if (key == "multiplicity") {
+        read_stated(line, piece, "multiplicity", "2S + 1, 1 or more, such as multiplicity=3",
+                    comment.multiplicity);
+        comment.multiplicity_place = file_place(name_, line.number, piece.value_column);
+        if (*comment.multiplicity < 1) {
           fail(line, piece.value_column,
-               fmt::format("found charge={}, expected a whole number such as charge=-2",
-                           quoted(*piece.value)));
+               fmt::format("found multiplicity={}, expected 2S + 1, 1 or more",
+                           *comment.multiplicity));
         }
-        if (charge && *charge != *value) {
-          fail(line, piece.column, "charge= stands here twice with different values; keep one");
-        }
-        charge = value;
-      } else if (piece.key == "title") {
-        stated_title = *piece.value;
+      } else if (key == "title") {
+        comment.title = *piece.value;
+      } else if (const std::string meant = misspelt_key(piece.key); !meant.empty()) {
+        fail(line, piece.column,
+             fmt::format("{}= has no meaning here (did you mean {}=?); correct it or take it out",
+                         quoted_key(piece.key), meant));
       }
     }
-    title = extended ? stated_title : std::string(trimmed(line.text));
+    if (!extended) comment.title = std::string(trimmed(line.text));
+    return comment;
+  }
+
+  static std::string quoted_key(const std::string& key) {
+    const std::string text = quoted(key);  // safe for a terminal
+    return text.substr(1, text.size() - 2);
+  }
+
+  // A whole number that the comment may say twice, but not with two values.
+  void read_stated(const Line& line, const CommentPiece& piece, const char* key,
+                   const char* expected, std::optional<int>& stated) const {
+    const std::optional<int> value = whole(*piece.value);
+    if (!value) {
+      fail(line, piece.value_column,
+           fmt::format("found {}={}, expected {}", key, quoted(*piece.value), expected));
+    }
+    if (stated && *stated != *value) {
+      fail(line, piece.column,
+           fmt::format("{}= stands here twice with different values; keep one", key));
+    }
+    stated = value;
   }
 
   // Some programs write every number with a decimal point: "-2.0" is as whole as "-2".

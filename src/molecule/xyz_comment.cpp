@@ -1,11 +1,14 @@
 #include "molecule/xyz_comment.hpp"
 
+#include <algorithm>
+#include <array>
 #include <cstddef>
 
 #include <fmt/format.h>
 
 #include "core/error.hpp"
 #include "core/parse.hpp"
+#include "core/text.hpp"
 
 namespace irrepwise {
 namespace {
@@ -70,6 +73,34 @@ std::vector<CommentPiece> comment_pieces(std::string_view comment) {
     }
     pieces.push_back(piece);
   }
+}
+
+std::string comment_key(std::string_view key) {
+  std::string lower(key);
+  std::transform(lower.begin(), lower.end(), lower.begin(), [](char c) {
+    return c >= 'A' && c <= 'Z' ? static_cast<char>(c - 'A' + 'a') : c;
+  });
+  return lower;
+}
+
+std::string misspelt_key(std::string_view key) {
+  // Short words are near many others: one slip, in the long word two.
+  struct Known {
+    std::string_view key;
+    std::size_t most_slips;
+  };
+  constexpr std::array<Known, 3> known = {{{"charge", 1}, {"multiplicity", 2}, {"Properties", 1}}};
+  constexpr std::size_t shortest_start = 4;
+  const std::string word = comment_key(key);
+  if (word == "change") return {};  // as of an energy
+  for (const Known& one : known) {
+    const std::string right = comment_key(one.key);
+    if (word == right) return key == one.key || right != "properties" ? "" : std::string(one.key);
+    const bool begins =
+        right != "properties" && word.size() >= shortest_start && right.starts_with(word);
+    if (begins || edit_distance(word, right) <= one.most_slips) return std::string(one.key);
+  }
+  return {};
 }
 
 AtomColumns atom_columns(std::string_view properties) {

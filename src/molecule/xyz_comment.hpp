@@ -19,6 +19,14 @@ struct CommentPiece {
 /// Splits at white space outside "…", '…', […] and {…} behind an equals sign.
 [[nodiscard]] std::vector<CommentPiece> comment_pieces(std::string_view comment);
 
+/// The key as its meaning is looked up: in lower case, as charge, Charge and CHARGE are one.
+[[nodiscard]] std::string comment_key(std::string_view key);
+
+/// @returns  which of the keys that are honoured this one looks like without being it: "charge" for
+///           "chrage", "multiplicity" for "mult"; empty for keys of their own such as Lattice, pbc
+///           and energy
+[[nodiscard]] std::string misspelt_key(std::string_view key);
+
 /// Where the columns of an atom line are, by `Properties=species:S:1:pos:R:3`.
 struct AtomColumns {
   int species = 0;   // index of the word from 0

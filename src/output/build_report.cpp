@@ -25,8 +25,10 @@ std::string configuration(const ElectronCount& count) {
 }
 
 std::string electron_words(const ElectronCount& count) {
-  return fmt::format("{}, {} electrons ({} + {} from ligands)", configuration(count), count.total,
-                     count.metal, count.donated);
+  const std::string bonds =
+      count.other_metal > 0 ? fmt::format(" + {} from the other metal", count.other_metal) : "";
+  return fmt::format("{}, {} electrons ({} + {} from ligands{})", configuration(count), count.total,
+                     count.metal, count.donated, bonds);
 }
 
 std::string metal_name(const BuiltComplex& complex, std::size_t centre) {
@@ -91,9 +93,14 @@ Table ligand_table(const BuiltComplex& complex) {
              distance_words(ligand), pose_words(ligand)}});
   }
   if (complex.centres.size() == 2) {
+    const int order = complex.centres.front().electrons.other_metal;
     table.notes.push_back(
-        "electrons of a bridge: to each metal; a bond between the metals is not "
-        "counted");
+        "electrons of a bridge: to each metal; " +
+        (order > 0 ? fmt::format("of the bond between the metals, {} to each as "
+                                 "`metal_metal_bond` says",
+                                 order)
+                   : "a bond between the metals is counted where `metal_metal_bond` gives its "
+                     "order, here none"));
   }
   return table;
 }
@@ -155,6 +162,7 @@ std::string build_json(const BuiltComplex& complex, const std::string& title) {
          {"metal_electrons", count.metal},
          {"metal_shell", std::string(1, count.shell)},
          {"donated_electrons", count.donated},
+         {"other_metal_electrons", count.other_metal},
          {"valence_electrons", count.total}});
   }
   Json ligands = Json::array();

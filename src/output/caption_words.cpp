@@ -1,5 +1,7 @@
 #include "output/caption_words.hpp"
 
+#include <algorithm>
+
 #include <array>
 #include <cstddef>
 #include <cstdlib>
@@ -11,6 +13,14 @@
 #include "output/symmetry_words.hpp"
 
 namespace irrepwise {
+namespace {
+
+bool any_frames(const std::vector<std::optional<LocalFrames>>& frames, bool LocalFrames::*kind) {
+  return std::any_of(frames.begin(), frames.end(),
+                     [&](const auto& local) { return local && (*local).*kind; });
+}
+
+}  // namespace
 
 std::string readable_group(std::string name) {
   const std::size_t at = name.find("inf");
@@ -64,10 +74,29 @@ std::string axes_sentence(const LevelsResult& result) {
   return "Axes: " + words + ".";
 }
 
-std::string outer_frame_sentence() {
-  return "Beyond the donors z points along the bond towards it; x and y are those of the atom "
-         "before where the ligand is straight, otherwise x or y, whichever was nearer to it there, "
-         "stands across the plane of the bonds.";
+std::string frame_goal_words(const Molecule& molecule,
+                             const std::vector<std::optional<LocalFrames>>& frames,
+                             const std::optional<int>& central_atom) {
+  if (central_atom) return atom_name(molecule, *central_atom);
+  return any_frames(frames, &LocalFrames::to_own_metal)
+             ? "the metal it is bonded to (to the midpoint of several), z of a metal to the centre"
+             : "the centre";
+}
+
+std::string further_frame_sentences(const std::vector<std::optional<LocalFrames>>& frames) {
+  std::string words;
+  if (any_frames(frames, &LocalFrames::beyond_donors)) {
+    words +=
+        " Beyond the donors z points along the bond towards it; x and y are those of the atom "
+        "before where the ligand is straight, otherwise x or y, whichever was nearer to it there, "
+        "stands across the plane of the bonds.";
+  }
+  if (any_frames(frames, &LocalFrames::side_on)) {
+    words +=
+        " Of a ring or π bond over a metal, π is along the normal of its plane, on the side of the "
+        "metal; in the plane r points to the neighbours that bind with it, t across r.";
+  }
+  return words;
 }
 
 }  // namespace irrepwise

@@ -1,9 +1,12 @@
 // Sentences below a caption, so that a table or figure stands alone in somebody's report.
 #pragma once
 
+#include <optional>
 #include <string>
+#include <vector>
 
 #include "output/levels_result.hpp"
+#include "salc/local_frames.hpp"
 
 namespace irrepwise {
 
@@ -24,7 +27,17 @@ namespace irrepwise {
 /// are no words for it.
 [[nodiscard]] std::string axes_sentence(const LevelsResult& result);
 
-/// How local frames go on beyond the donor atoms.
-[[nodiscard]] std::string outer_frame_sentence();
+/// What local frames look at, for "z of an atom points to …": the central atom, the centre or, in a
+/// complex without a central atom, each donor's own metal.
+/// @param frames  by set
+[[nodiscard]] std::string frame_goal_words(const Molecule& molecule,
+                                           const std::vector<std::optional<LocalFrames>>& frames,
+                                           const std::optional<int>& central_atom);
+
+/// How local frames go on beyond the donor atoms, and where they look otherwise: of atoms that bind
+/// side-on along the normal. Each sentence begins with a space; empty where there is nothing to
+/// say.
+[[nodiscard]] std::string further_frame_sentences(
+    const std::vector<std::optional<LocalFrames>>& frames);
 
 }  // namespace irrepwise

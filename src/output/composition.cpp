@@ -15,20 +15,32 @@ const Shell& first_shell(const LevelsResult& result, const ShellGroup& group) {
   return result.basis.shells[static_cast<std::size_t>(group.shells.front())];
 }
 
-// "5dx2-y2", "5d(xz,yz)" or, where more take part, "5d".
+// Which orbitals of a shell take part, of those that carry this share together.
+std::vector<int> orbitals_taking_part(const LevelsResult& result, const Shell& shell, int level,
+                                      double whole) {
+  std::vector<int> taking_part;
+  for (int m = 0; m < shell.size(); ++m) {
+    const double share = result.populations.shares(shell.first_orbital + m, level);
+    if (std::abs(share) >= takes_part * std::abs(whole)) taking_part.push_back(m);
+  }
+  return taking_part;
+}
+
+// "5dx2-y2", "5d(xz,yz)" or, where more take part or others on every atom, "5d".
 std::string orbitals_in_words(const LevelsResult& result, const ShellGroup& group, int level,
                               double whole) {
   const Shell& shell = first_shell(result, group);
   const std::string letter(1, shell_letter(shell.l));
   const std::string plain = fmt::format("{}{}", shell.n(), letter);
-  if (shell.l == 0 || group.shells.size() > 1) return plain;
-  std::vector<std::string> named;
-  for (int m = 0; m < shell.size(); ++m) {
-    const double share = result.populations.shares(shell.first_orbital + m, level);
-    if (std::abs(share) >= takes_part * std::abs(whole)) {
-      named.emplace_back(orbital_name(shell.l, m).substr(1));
-    }
+  if (shell.l == 0) return plain;
+  const double of_atom = whole / static_cast<double>(group.shells.size());
+  const std::vector<int> on_first = orbitals_taking_part(result, shell, level, of_atom);
+  for (const int s : group.shells) {
+    const Shell& other = result.basis.shells[static_cast<std::size_t>(s)];
+    if (orbitals_taking_part(result, other, level, of_atom) != on_first) return plain;
   }
+  std::vector<std::string> named;
+  for (const int m : on_first) named.emplace_back(orbital_name(shell.l, m).substr(1));
   if (named.empty() || static_cast<int>(named.size()) > (shell.size() + 1) / 2) return plain;
   if (named.size() == 1) return plain + named.front();
   std::string text = plain + "(";

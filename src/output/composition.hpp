@@ -38,8 +38,8 @@ struct ShellGroup {
 [[nodiscard]] double group_share(const LevelsResult& result, const ShellGroup& group, int level);
 
 /// In words, the largest first: "62 % Pt 5dx2-y2, 38 % Cl 3p", with no-break spaces inside the
-/// parts. On a set of one atom the orbitals are named where no more than half of the shell's take
-/// part.
+/// parts. The orbitals are named where no more than half of the shell's take part, the same ones of
+/// the standard frame on every atom of the set.
 ///
 /// @param threshold  groups with a smaller share are left out, but never the first
 [[nodiscard]] std::string composition_words(const LevelsResult& result,

@@ -108,10 +108,12 @@ Table transition_table(const PointGroup& group, const FrontierSymmetry& frontier
 }
 
 Words distortion_words(const TermDistortion& distortion) {
-  const std::string along = " along " + reduction_words(distortion.modes).marked;
+  const std::string along = " along " + mode_words(distortion.modes).marked;
   switch (distortion.kind) {
     case DistortionKind::None:
       return {"none: not degenerate"};
+    case DistortionKind::Atom:
+      return {"none: an atom has no vibration"};
     case DistortionKind::JahnTeller:
       return {"Jahn–Teller" +
               (distortion.modes.empty() ? ", but this molecule has no such mode" : along)};

@@ -44,11 +44,44 @@ std::string html_text(std::string_view text) {
   return out;
 }
 
+namespace {
+
+// A line may not break behind the hyphens of "--variants".
+std::string with_whole_options(const std::string& html) {
+  const auto is_letter = [&](std::size_t at) {
+    return at < html.size() && html[at] >= 'a' && html[at] <= 'z';
+  };
+  std::string out;
+  for (std::size_t at = 0; at < html.size();) {
+    const bool starts = html.compare(at, 2, "--") == 0 && is_letter(at + 2) &&
+                        (at == 0 || html[at - 1] == ' ' || html[at - 1] == '(');
+    if (!starts) {
+      out += html[at++];
+      continue;
+    }
+    std::size_t end = at + 2;
+    while (is_letter(end) || (end < html.size() && html[end] == '-')) ++end;
+    out += "<span style=\"white-space:nowrap\">" + html.substr(at, end - at) + "</span>";
+    at = end;
+  }
+  return out;
+}
+
+}  // namespace
+
 std::string html_words(std::string_view words) {
   std::string out;
   for (const NotationRun& run : notation_runs(words)) {
+    if (run.below.empty()) {
+      out += with_whole_options(html_text(run.text));
+      continue;
+    }
     out += html_text(run.text);
-    if (run.below.empty()) continue;
+    if (run.notation == Notation::Symmetry) {
+      out += "<sub>" + run.below + "</sub>";
+      for (const char prime : run.primes) out += prime == '"' ? "″" : "′";
+      continue;
+    }
     std::string below;
     for (std::size_t i = 0; i < run.below.size(); ++i) {
       const char c = run.below[i];

@@ -109,6 +109,24 @@ const Replacement* start_of(std::string_view text, const std::array<Replacement,
 bool is_word(char c) { return std::isalnum(static_cast<unsigned char>(c)) != 0; }
 bool is_letter(char c) { return std::isalpha(static_cast<unsigned char>(c)) != 0; }
 
+// "$C_{4h}$", "$C_{2}'$", "$C_{\infty v}$"
+std::string latex_symbol(const NotationRun& run) {
+  const auto in_symbols = [](std::string_view text) {
+    std::string out;
+    while (!text.empty()) {
+      const Replacement* sign = start_of(text, in_mathematics);
+      if (!out.empty() && out.back() != ' ' && sign) out += ' ';
+      out += sign ? std::string(sign->second) + " " : std::string(1, text.front());
+      text.remove_prefix(sign ? sign->first.size() : 1);
+    }
+    if (out.ends_with(' ')) out.pop_back();
+    return out;
+  };
+  std::string primes;
+  for (const char prime : run.primes) primes += prime == '"' ? "''" : "'";
+  return "$" + in_symbols(run.text) + "_{" + in_symbols(run.below) + "}" + primes + "$";
+}
+
 }  // namespace
 
 std::string latex_text(std::string_view text) {
@@ -139,6 +157,10 @@ std::string latex_words(std::string_view words) {
   for (const NotationRun& run : notation_runs(words)) {
     if (run.below.empty()) {
       out += latex_text(run.text);
+      continue;
+    }
+    if (run.notation == Notation::Symmetry) {
+      out += latex_symbol(run);
       continue;
     }
     // The letter of the shell stands upright, as where nothing is below: "2s".

@@ -1,14 +1,62 @@
 #include "output/levels_result.hpp"
 
+#include <algorithm>
+#include <cstddef>
 #include <cstdlib>
+#include <utility>
 
 #include <fmt/format.h>
 
+#include "analysis/donors.hpp"
 #include "basis/atom_kinds.hpp"
+#include "core/text.hpp"
 #include "harmonics/real_harmonics.hpp"
 #include "job/job.hpp"
 
 namespace irrepwise {
+namespace {
+
+double metal_d_share(const std::vector<int>& metals, const Basis& basis, const Populations& found,
+                     Eigen::Index level) {
+  double share = 0.0;
+  for (const Shell& shell : basis.shells) {
+    const bool of_metal = std::find(metals.begin(), metals.end(), shell.atom) != metals.end();
+    if (!of_metal || shell.l != 2) continue;
+    share += found.shares.col(level).segment(shell.first_orbital, shell.size()).sum();
+  }
+  return share;
+}
+
+// A spin state meant for one molecule, carried over to another whose d levels lie elsewhere, puts
+// electrons into orbitals of the ligands.
+std::vector<std::string> spin_warnings(const HueckelOptions& stated,
+                                       const MolecularSymmetry& symmetry, const Basis& basis,
+                                       const Levels& levels, const Populations& populations) {
+  constexpr double half = 0.5;
+  constexpr double rounding = 1e-9;  // electrons
+  const bool high_spin = stated.multiplicity.value_or(1) > 1;
+  if (!high_spin && stated.electrons_by_irrep.empty()) return {};
+  const std::vector<int> metals = metal_atoms(symmetry.molecule, basis);
+  if (metals.empty()) return {};
+  std::vector<std::string> outside;
+  for (std::size_t i = 0; i < levels.levels.size(); ++i) {
+    const Level& level = levels.levels[i];
+    if (level.occupation < rounding || level.occupation > 2 * level.degeneracy - rounding) continue;
+    const double share = metal_d_share(metals, basis, populations, static_cast<Eigen::Index>(i));
+    if (share >= half) continue;
+    outside.push_back(
+        fmt::format("{} ({:.0f} %)", level_name(symmetry.group, level), 100.0 * share));
+  }
+  if (outside.empty()) return {};
+  return {fmt::format(
+      "{} partly filled although less than half metal d: {}; check that this spin state is meant "
+      "for this molecule",
+      high_spin ? fmt::format("the multiplicity {} leaves levels", *stated.multiplicity)
+                : std::string("the occupations leave levels"),
+      joined(outside))};
+}
+
+}  // namespace
 
 LevelsResult levels_result(const Job& job) {
   Basis basis = make_basis(job.molecule, job.parameters, job.overrides);
@@ -19,6 +67,9 @@ LevelsResult levels_result(const Job& job) {
   Populations populations = mulliken_populations(symmetry, basis, levels);
   std::vector<std::string> warnings = geometry_warnings(job.molecule);
   warnings.insert(warnings.end(), levels.warnings.begin(), levels.warnings.end());
+  for (std::string& warning : spin_warnings(job.hueckel, symmetry, basis, levels, populations)) {
+    warnings.push_back(std::move(warning));
+  }
   return {job.title,        job.parameters.name(), job.molecule,           std::move(symmetry),
           std::move(basis), std::move(levels),     std::move(populations), std::move(warnings)};
 }

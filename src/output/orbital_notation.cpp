@@ -4,8 +4,10 @@
 #include <array>
 #include <cctype>
 #include <cstddef>
+#include <utility>
 
 #include "basis/shell.hpp"
+#include "salc/salc_table.hpp"
 
 namespace irrepwise {
 namespace {
@@ -27,6 +29,7 @@ std::size_t function_at(std::string_view text, int l) {
   };
   for (int component = 0; l > 0 && component <= 2 * l; ++component) {
     consider(orbital_name(l, component).substr(1));
+    consider(side_on_name(l, component).substr(1));
   }
   for (const std::string_view name : local_functions) consider(name);
   return longest;
@@ -57,6 +60,76 @@ std::size_t below_at(std::string_view text) {
   return 0;
 }
 
+bool is_digit(std::string_view text, std::size_t at) {
+  return at < text.size() && std::isdigit(static_cast<unsigned char>(text[at])) != 0;
+}
+
+template <std::size_t n>
+bool any_of_ends(std::string_view text, const std::array<std::string_view, n>& ends) {
+  return std::any_of(ends.begin(), ends.end(),
+                     [&](std::string_view end) { return text.ends_with(end); });
+}
+
+template <std::size_t n>
+bool any_of_starts(std::string_view text, const std::array<std::string_view, n>& starts) {
+  return std::any_of(starts.begin(), starts.end(),
+                     [&](std::string_view start) { return text.starts_with(start); });
+}
+
+// Whether "C4" between these words is an axis or a group, not the fourth atom; "Cs" and "Th" a
+// group, not an element.
+bool is_symmetry_between(std::string_view before, std::string_view after) {
+  constexpr std::array<std::string_view, 10> leads = {
+      "x = ",         "y = ",         "z = ", "subgroup of ", "Character table of ",
+      "Point group ", "point group ", "→ ",   "→\u00a0",      "Descent from "};
+  constexpr std::array<std::string_view, 7> follows = {
+      " at tolerance", "\u00a0at\u00a0",  ", a subgroup of", " →", "\u00a0→",
+      " (S",           " in the yz plane"};
+  const bool descent = before.starts_with("Descent from ") && before.ends_with(" to ");
+  // "C4 (S8)"
+  const bool second = before.ends_with(" (") && after.starts_with(')') && before.size() > 2 &&
+                      is_digit(before, before.size() - 3);
+  return any_of_ends(before, leads) || any_of_starts(after, follows) || descent || second;
+}
+
+// The name of a group or an axis that starts here; without text where none does.
+NotationRun symmetry_at(std::string_view words, std::size_t at) {
+  constexpr std::array<std::string_view, 5> by_letters = {"Td", "Oh", "Ih", "σv", "σh"};
+  const std::string_view rest = words.substr(at);
+  for (const std::string_view name : by_letters) {
+    if (!rest.starts_with(name) || goes_on_a_word(rest, name.size())) continue;
+    return {std::string(name.substr(0, name.size() - 1)), std::string(name.substr(name.size() - 1)),
+            Notation::Symmetry};
+  }
+  constexpr std::array<std::string_view, 3> by_words = {"Cs", "Ci", "Th"};
+  for (const std::string_view name : by_words) {
+    if (!rest.starts_with(name) || goes_on_a_word(rest, name.size())) continue;
+    if (!is_symmetry_between(words.substr(0, at), rest.substr(name.size()))) return {};
+    return {std::string(name.substr(0, 1)), std::string(name.substr(1)), Notation::Symmetry};
+  }
+  const char letter = rest.empty() ? ' ' : rest[0];
+  if (letter != 'C' && letter != 'D' && letter != 'S') return {};
+  constexpr std::string_view infinite = "∞";
+  std::size_t size = 1;
+  while (is_digit(rest, size)) ++size;
+  const bool has_order = size > 1;
+  const bool is_infinite = !has_order && rest.substr(1).starts_with(infinite);
+  if (is_infinite) size += infinite.size();
+  if (!has_order && !is_infinite) return {};
+  const bool has_letter =
+      letter != 'S' && size < rest.size() && std::string_view("hvd").find(rest[size]) < 3;
+  if (has_letter) ++size;
+  NotationRun run{std::string(1, letter), std::string(rest.substr(1, size - 1)),
+                  Notation::Symmetry};
+  while (size < rest.size() && !has_letter && (rest[size] == '\'' || rest[size] == '"')) {
+    run.primes += rest[size++];
+  }
+  if (goes_on_a_word(rest, size)) return {};
+  const bool certain = has_letter || letter == 'D' || (letter == 'C' && !run.primes.empty()) ||
+                       is_symmetry_between(words.substr(0, at), rest.substr(size));
+  return certain ? run : NotationRun{};
+}
+
 }  // namespace
 
 std::vector<NotationRun> notation_runs(std::string_view words) {
@@ -69,6 +142,15 @@ std::vector<NotationRun> notation_runs(std::string_view words) {
   for (std::size_t at = 0; at < words.size();) {
     const bool inside_word = at > 0 && goes_on_a_word(words, at - 1);
     const std::size_t below = inside_word ? 0 : below_at(words.substr(at));
+    if (!inside_word && below == 0) {
+      NotationRun symmetry = symmetry_at(words, at);
+      if (!symmetry.below.empty()) {
+        end_plain();
+        at += symmetry.text.size() + symmetry.below.size() + symmetry.primes.size();
+        runs.push_back(std::move(symmetry));
+        continue;
+      }
+    }
     if (below == 0) {
       plain += words[at++];
       continue;

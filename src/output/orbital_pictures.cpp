@@ -6,6 +6,7 @@
 
 #include "core/error.hpp"
 #include "figure/rich_text.hpp"
+#include "output/caption_words.hpp"
 
 namespace irrepwise {
 namespace {
@@ -39,11 +40,10 @@ std::string method_words(const LevelsResult& result) {
 }
 
 SheetWords sheet_heading(const LevelsResult& result) {
-  RichText method = formula_text(result.molecule) + plain_text(" · ") +
-                    group_text(result.symmetry.group.symbol().name()) +
-                    plain_text(" · " + method_words(result));
-  return {result.title.empty() ? charged_formula(result.molecule) : result.title,
-          std::move(method)};
+  const RichText method =
+      group_text(result.symmetry.group.symbol().name()) + plain_text(" · " + method_words(result));
+  if (result.title.empty()) return {readable_formula(result.molecule), method};
+  return {result.title, formula_text(result.molecule) + plain_text(" · ") + method};
 }
 
 ChosenOrbitals chosen_orbitals(const LevelsResult& result, std::vector<OrbitalChoice> choices) {

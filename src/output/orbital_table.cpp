@@ -8,6 +8,7 @@
 
 #include "analysis/level_coefficients.hpp"
 #include "core/error.hpp"
+#include "output/caption_words.hpp"
 #include "salc/orbital_reductions.hpp"
 
 namespace irrepwise {
@@ -31,7 +32,8 @@ Frames frames_for(const LevelsResult& result, OrbitalFrame frame) {
                                [](const auto& local) { return local.has_value(); });
   if (frame == OrbitalFrame::Local && !any) {
     throw Error(
-        "no atom has a local frame: the molecule has no central atom with neighbours around it; "
+        "no atom has a local frame: the molecule has neither a central atom nor several "
+        "metals; "
         "use the standard frame");
   }
   return frames;
@@ -47,7 +49,7 @@ std::vector<TableFunction> atomic_functions(const LevelsResult& result, const Fr
                                             std::vector<int>& basis_orbitals) {
   std::vector<TableFunction> functions;
   for (std::size_t set = 0; set < sets.size(); ++set) {
-    const OrbitalFrame frame = frames.by_set[set] ? OrbitalFrame::Local : OrbitalFrame::Standard;
+    const OrbitalFrame frame = orbital_frame(frames.by_set[set]);
     for (const int atom : sets[set].atoms) {
       const auto at = static_cast<std::size_t>(atom);
       for (int s = result.basis.first_shell[at]; s < result.basis.first_shell[at + 1]; ++s) {
@@ -91,7 +93,9 @@ std::string salc_name(const std::vector<const SalcFunction*>& partners, const Sh
     if (!name.empty()) return name;
   }
   const SalcFunction& salc = *partners.front();
-  const bool named_part = salc.frame == OrbitalFrame::Local && shell.l > 0;
+  if (salc.part == Part::FacePlane) return fmt::format("{}p(r,t)", shell.n());
+  const bool named_part =
+      salc.part == Part::FacePi || (salc.frame == OrbitalFrame::Local && shell.l > 0);
   return fmt::format("{}{}{}", shell.n(), shell_letter(shell.l),
                      named_part ? part_name(salc.part) : "");
 }
@@ -210,11 +214,9 @@ OrbitalTable orbital_table(const LevelsResult& result, const std::vector<Orbital
   table.sets = atom_sets(result.symmetry);
   if (options.frame == OrbitalFrame::Local) {
     const std::optional<Centre> centre = find_centre(result.symmetry);
-    table.centre_words =
-        centre && centre->atom ? atom_name(result.symmetry.molecule, *centre->atom) : "the centre";
-    table.beyond_donors =
-        std::any_of(frames.by_set.begin(), frames.by_set.end(),
-                    [](const auto& local) { return local && local->beyond_donors; });
+    table.centre_words = frame_goal_words(result.symmetry.molecule, frames.by_set,
+                                          centre ? centre->atom : std::nullopt);
+    table.frame_sentences = further_frame_sentences(frames.by_set);
   }
   return options.functions == TableFunctions::Orbitals
              ? over_orbitals(result, frames, choices, std::move(table))

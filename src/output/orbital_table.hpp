@@ -49,7 +49,7 @@ struct OrbitalTable {
   Eigen::MatrixXd coefficients;  // `n_functions x n_orbitals`, with overlap: c^T S c = 1
   Eigen::MatrixXd shares;        // the same shape, Mulliken's; columns sum to 1
   std::string centre_words;      // what local frames point to: "Pt1"; empty without any
-  bool beyond_donors = false;    // some of them belong to atoms not bonded to the centre
+  std::string frame_sentences;   // more about them, see `further_frame_sentences`
 };
 
 /// @param choices  over SALCs, a level counts once, whichever partner is chosen; functions of other

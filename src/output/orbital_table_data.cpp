@@ -62,7 +62,7 @@ Json function_json(const LevelsResult& result, const OrbitalTable& table,
     entry["number"] = function.number;
     if (function.partner > 0) entry["partner"] = function.partner;
   }
-  entry["frame"] = function.frame == OrbitalFrame::Local ? "local" : "standard";
+  entry["frame"] = function.frame == OrbitalFrame::Standard ? "standard" : "local";
   return entry;
 }
 

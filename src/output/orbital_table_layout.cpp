@@ -270,10 +270,10 @@ class Layout {
         "the mirror plane that holds the line, and symmetry carries it from atom to atom, sign "
         "included.",
         table_.centre_words);
-    if (table_.beyond_donors) words += " " + outer_frame_sentence();
+    words += table_.frame_sentences;
     std::vector<bool> standard(table_.sets.size(), true);
     for (const TableFunction& function : table_.functions) {
-      if (function.frame == OrbitalFrame::Local)
+      if (function.frame != OrbitalFrame::Standard)
         standard[static_cast<std::size_t>(function.set)] = false;
     }
     std::string others;

@@ -5,6 +5,8 @@
 #include <string>
 #include <utility>
 
+#include "molecule/contacts.hpp"
+
 namespace irrepwise {
 namespace {
 
@@ -92,6 +94,8 @@ Table overlap_population_table(const LevelsResult& result, Grouping grouping) {
       row.cells.emplace_back(Number{double(equivalent->second), 0});
     table.lines.emplace_back(std::move(row));
   }
+  const std::string criterion = bond_criterion(molecule);
+  if (grouping == Grouping::Equivalent && !criterion.empty()) table.notes.push_back(criterion);
   return table;
 }
 

@@ -185,7 +185,7 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
     for (Table& table : tables_by_irrep(result, functions)) tables.push_back(std::move(table));
   }
   const bool local = std::any_of(salcs.begin(), salcs.end(), [](const SalcFunction& salc) {
-    return salc.frame == OrbitalFrame::Local;
+    return salc.frame != OrbitalFrame::Standard;
   });
   const bool several = std::any_of(salcs.begin(), salcs.end(), [&](const SalcFunction& salc) {
     return salc.number > 1 && result.sets[salc.set].size() > 1;
@@ -196,15 +196,17 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
           "2.1: the first partner of the second SALC of that irrep; without a point the number "
           "alone.");
     }
-    tables.back().notes.push_back(local ? "Orbitals of each atom's own frame: z towards the "
-                                          "centre, x and y across it; y stands "
-                                          "across the mirror plane that holds the line, and "
-                                          "symmetry carries it from atom to atom."
-                                        : "Orbitals of the standard frame.");
-    const bool beyond_donors =
-        local && std::any_of(result.frames.begin(), result.frames.end(),
-                             [](const auto& frames) { return frames && frames->beyond_donors; });
-    if (beyond_donors) tables.back().notes.back() += " " + outer_frame_sentence();
+    if (local) {
+      tables.back().notes.push_back(fmt::format(
+          "Orbitals of each atom's own frame: z of an atom points to {}, x and y across it; y "
+          "stands "
+          "across the mirror plane that holds the line, and symmetry carries it from atom to "
+          "atom.{}",
+          frame_goal_words(result.symmetry.molecule, result.frames, result.central_atom),
+          further_frame_sentences(result.frames)));
+    } else {
+      tables.back().notes.push_back("Orbitals of the standard frame.");
+    }
   }
   return tables;
 }

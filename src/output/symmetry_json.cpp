@@ -199,10 +199,23 @@ Json salcs_json(const SymmetryResult& result) {
                     {"set", numbers_from_one(atoms)},
                     {"part", part_key(salc.part, shell.l)},
                     {"shell", std::to_string(shell.n()) + shell_letter(shell.l)},
-                    {"frame", salc.frame == OrbitalFrame::Local ? "local" : "standard"},
+                    {"frame", salc.frame == OrbitalFrame::Standard ? "standard" : "local"},
                     {"coefficients", std::move(coefficients)}});
   }
   return list;
+}
+
+const char* distortion_name(DistortionKind kind) {
+  switch (kind) {
+    case DistortionKind::None:
+    case DistortionKind::Atom:
+      return "none";
+    case DistortionKind::JahnTeller:
+      return "jahn-teller";
+    case DistortionKind::RennerTeller:
+      return "renner-teller";
+  }
+  return "";
 }
 
 void add_frontier(Json& document, const PointGroup& group, const FrontierSymmetry& frontier) {
@@ -218,9 +231,7 @@ void add_frontier(Json& document, const PointGroup& group, const FrontierSymmetr
   document["ground_terms"] = Json::array();
   for (const GroundTerm& ground : frontier.ground) {
     Json entry = term_json(ground.term);
-    entry["distortion"] = ground.distortion.kind == DistortionKind::None         ? "none"
-                          : ground.distortion.kind == DistortionKind::JahnTeller ? "jahn-teller"
-                                                                                 : "renner-teller";
+    entry["distortion"] = distortion_name(ground.distortion.kind);
     entry["modes"] = counts_json(ground.distortion.modes);
     document["ground_terms"].push_back(std::move(entry));
   }

@@ -118,7 +118,7 @@ Report symmetry_report(const SymmetryResult& result, const SymmetryHeadings& hea
   report.tables.push_back(equivalent_atoms_table(result));
   if (result.orbitals) {
     report.tables.push_back(reduction_table(result));
-    if (result.sets.size() > 1) report.tables.push_back(bonding_table(result));
+    if (result.sets.size() > 1) append(report.tables, bonding_tables(result, width));
     if (sections.salcs) append(report.tables, salc_tables(result));
   }
   if (sections.vibrations && !result.displacements.vibrations.empty()) {

@@ -2,12 +2,16 @@
 
 #include <algorithm>
 #include <cmath>
+#include <cstddef>
+#include <type_traits>
+#include <utility>
 
 #include <fmt/format.h>
 
 #include "core/text.hpp"
 #include "output/equivalence.hpp"
 #include "output/symmetry_words.hpp"
+#include "output/table_text.hpp"
 #include "symmetry/operation.hpp"
 
 namespace irrepwise {
@@ -145,6 +149,14 @@ std::string part_words(const SymmetryResult& result, const OrbitalReduction& red
   return fmt::format("{}{}", shell.n(), shell_letter(shell.l));
 }
 
+std::string side_on_sets(const SymmetryResult& result, const std::vector<AtomSet>& names) {
+  std::vector<std::string> sets;
+  for (std::size_t s = 0; s < names.size(); ++s) {
+    if (result.frames[s] && result.frames[s]->side_on) sets.push_back(names[s].name);
+  }
+  return sets.empty() ? "" : joined(sets);
+}
+
 Table reduction_table(const SymmetryResult& result) {
   Table table;
   const std::vector<AtomSet> names = atom_sets(result.symmetry);
@@ -180,19 +192,32 @@ Table reduction_table(const SymmetryResult& result) {
     return std::any_of(result.frames.begin(), result.frames.end(),
                        [&](const auto& frames) { return frames && holds(*frames); });
   };
-  if (any([](const LocalFrames&) { return true; })) {
-    const std::string centre = result.central_atom
-                                   ? atom_name(result.symmetry.molecule, *result.central_atom)
-                                   : std::string("the centre");
+  if (any([](const LocalFrames& local) { return !local.side_on; })) {
+    const bool own_metal = any([](const LocalFrames& local) { return local.to_own_metal; });
+    const std::string goal =
+        result.central_atom
+            ? "along the line to " + atom_name(result.symmetry.molecule, *result.central_atom)
+        : own_metal ? std::string(
+                          "along the bond to the metal (of several, to their midpoint; of "
+                          "a metal itself, to the centre)")
+                    : std::string("along the line to the centre");
     const bool beyond_donors = any([](const LocalFrames& local) { return local.beyond_donors; });
     table.notes.push_back(
-        fmt::format("σ: along the line to {}{}; π: across it.", centre,
+        fmt::format("σ: {}{}; π: across it.", goal,
                     beyond_donors ? ", beyond the donors along the bond towards it" : ""));
+  }
+  if (const std::string sets = side_on_sets(result, names); !sets.empty()) {
+    table.notes.push_back(fmt::format(
+        "{}, a ring or π bond over the metal: π is along the normal of its plane; s and in plane "
+        "make σ bonds within the ligand above all.",
+        sets));
   }
   return table;
 }
 
-Table bonding_table(const SymmetryResult& result) {
+namespace {
+
+Table whole_bonding_table(const SymmetryResult& result) {
   Table table;
   const std::vector<AtomSet> names = atom_sets(result.symmetry);
   table.caption = result.central_atom
@@ -201,8 +226,7 @@ Table bonding_table(const SymmetryResult& result) {
                       : "What can mix by symmetry";
   table.columns.push_back({"irrep", "irrep", "", Align::Left, 0, false});
   for (std::size_t s = 0; s < result.sets.size(); ++s) {
-    table.columns.push_back({names[s].name, names[s].name, "", Align::Left,
-                             static_cast<int>(s) > 3 ? static_cast<int>(s) : 0, true});
+    table.columns.push_back({names[s].name, names[s].name, "", Align::Left, 0, true});
   }
   table.columns.push_back({"verdict", "by symmetry", "", Align::Left, 0, true});
   for (const BondingIrrep& row : bonding_by_irrep(result)) {
@@ -212,6 +236,43 @@ Table bonding_table(const SymmetryResult& result) {
     table.lines.emplace_back(std::move(line));
   }
   return table;
+}
+
+// The first column and some of the others.
+Table part_of(const Table& table, std::size_t first, std::size_t end) {
+  Table part;
+  part.caption = table.caption + (first > 1 ? " (continued)" : "");
+  const auto taken = [&](const auto& all) {
+    std::decay_t<decltype(all)> some = {all.front()};
+    some.insert(some.end(), all.begin() + static_cast<std::ptrdiff_t>(first),
+                all.begin() + static_cast<std::ptrdiff_t>(end));
+    return some;
+  };
+  part.columns = taken(table.columns);
+  for (const auto& line : table.lines) {
+    part.lines.emplace_back(Row{taken(std::get<Row>(line).cells)});
+  }
+  return part;
+}
+
+}  // namespace
+
+std::vector<Table> bonding_tables(const SymmetryResult& result, int width) {
+  constexpr int narrowest = 24;  // to which a column may be folded, with the space before it
+  const Table whole = whole_bonding_table(result);
+  const std::vector<int> widths = text_widths(whole);
+  std::vector<Table> tables;
+  for (std::size_t first = 1; first < widths.size();) {
+    int used = widths.front() + std::min(widths[first], narrowest);
+    std::size_t end = first + 1;
+    for (; end < widths.size(); ++end) {
+      used += std::min(widths[end], narrowest);
+      if (used > width) break;
+    }
+    tables.push_back(part_of(whole, first, end));
+    first = end;
+  }
+  return tables;
 }
 
 Table vibration_table(const SymmetryResult& result) {

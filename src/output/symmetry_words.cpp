@@ -16,11 +16,14 @@ constexpr std::array<std::string_view, 10> superscripts = {"⁰", "¹", "²", "�
 
 enum class Of { Levels, States };  // lower-case labels, or those of irreps
 
-Words sum_words(const Reduction& reduction, Of of) {
+// A number right before a lower-case label is that of a level, 3eg the third one: counts of such
+// labels keep away from them.
+Words sum_words(const Reduction& reduction, Of of, const char* joiner) {
   std::string words;
   for (const IrrepCount& part : reduction) {
-    if (!words.empty()) words += " + ";
-    if (part.count > 1) words += std::to_string(part.count);
+    if (!words.empty()) words += joiner;
+    if (part.count > 1)
+      words += std::to_string(part.count) + (of == Of::Levels ? "\u00A0×\u00A0" : "");
     words += "{" + (of == Of::Levels ? level_label(part.label) : part.label) + "}";
   }
   return {words.empty() ? "nothing" : words};
@@ -75,9 +78,13 @@ std::string readable_functions(const FunctionSet& set) {
   return text;
 }
 
-Words reduction_words(const Reduction& reduction) { return sum_words(reduction, Of::Levels); }
+Words reduction_words(const Reduction& reduction) {
+  return sum_words(reduction, Of::Levels, " + ");
+}
 
-Words state_words(const Reduction& reduction) { return sum_words(reduction, Of::States); }
+Words mode_words(const Reduction& reduction) { return sum_words(reduction, Of::Levels, ", "); }
+
+Words state_words(const Reduction& reduction) { return sum_words(reduction, Of::States, " + "); }
 
 Words term_words(const std::vector<Term>& terms) {
   std::string words;

@@ -18,8 +18,11 @@ namespace irrepwise {
 /// "x2-y2" -> "x²−y²", "(x, y)" as it is
 [[nodiscard]] std::string readable_functions(const FunctionSet& set);
 
-/// Labels of levels: "a1g + 2eg"; "nothing" where there is none.
+/// What orbitals span, with the labels of levels: "a1g + 2 × eg"; "nothing" where there is none.
 [[nodiscard]] Words reduction_words(const Reduction& reduction);
+
+/// Vibrations: "a1g, 2 × eg".
+[[nodiscard]] Words mode_words(const Reduction& reduction);
 
 /// The same with capital labels, as of states and of products: "A1g + 2Eg".
 [[nodiscard]] Words state_words(const Reduction& reduction);

@@ -46,7 +46,7 @@ std::string words_on_shown(const Comparison& comparison, const std::vector<int>&
       "others, "
       "make the page again with the option --variants and their names, with commas.",
       shown.size(), comparison.variants.size(), joined(names));
-  return "<p>" + html_text(words) + "</p>\n";
+  return "<p>" + html_words(words) + "</p>\n";
 }
 
 std::string character_tables_html(const Comparison& comparison) {

@@ -27,20 +27,15 @@ bool is_straight(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
          std::sin(straight_within_degrees * radians_per_degree);
 }
 
-std::optional<Eigen::Vector3d> bond_plane_normal(const Molecule& molecule, int atom) {
-  std::vector<Eigen::Vector3d> bonds;
-  for (const int other : bonded_atoms(molecule, atom)) {
-    bonds.emplace_back(
-        (molecule.atoms()[other].position - molecule.atoms()[atom].position).normalized());
-  }
+std::optional<Eigen::Vector3d> common_normal(const std::vector<Eigen::Vector3d>& directions) {
   // Of all pairs the one nearest to a right angle spans the plane best. Products over all pairs,
   // turned to its side, weigh them alike, so that equivalent bonds have equal parts in it.
   Eigen::Vector3d best = Eigen::Vector3d::Zero();
   std::vector<Eigen::Vector3d> products;
-  for (std::size_t i = 0; i < bonds.size(); ++i) {
+  for (std::size_t i = 0; i < directions.size(); ++i) {
     for (std::size_t j = 0; j < i; ++j) {
-      if (is_straight(bonds[i], bonds[j])) continue;
-      products.emplace_back(bonds[i].cross(bonds[j]));
+      if (is_straight(directions[i], directions[j])) continue;
+      products.emplace_back(directions[i].cross(directions[j]));
       if (products.back().norm() > best.norm()) best = products.back();
     }
   }
@@ -49,12 +44,22 @@ std::optional<Eigen::Vector3d> bond_plane_normal(const Molecule& molecule, int a
   for (const Eigen::Vector3d& product : products) {
     normal += product.dot(best) < 0.0 ? Eigen::Vector3d(-product) : product;
   }
-  normal.normalize();
+  return normal.normalized();
+}
+
+std::optional<Eigen::Vector3d> bond_plane_normal(const Molecule& molecule, int atom) {
+  std::vector<Eigen::Vector3d> bonds;
+  for (const int other : bonded_atoms(molecule, atom)) {
+    bonds.emplace_back(
+        (molecule.atoms()[other].position - molecule.atoms()[atom].position).normalized());
+  }
+  const std::optional<Eigen::Vector3d> normal = common_normal(bonds);
+  if (!normal) return std::nullopt;
   const double highest = std::sin(flat_within_degrees * radians_per_degree);
   const bool flat = std::all_of(bonds.begin(), bonds.end(), [&](const Eigen::Vector3d& bond) {
-    return std::abs(bond.dot(normal)) < highest;
+    return std::abs(bond.dot(*normal)) < highest;
   });
-  return flat ? std::optional(normal) : std::nullopt;
+  return flat ? normal : std::nullopt;
 }
 
 }  // namespace irrepwise

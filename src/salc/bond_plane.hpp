@@ -23,6 +23,12 @@ inline constexpr double flat_within_degrees = 10.0;
 /// @returns  whether two directions are the same or opposite within `straight_within_degrees`
 [[nodiscard]] bool is_straight(const Eigen::Vector3d& a, const Eigen::Vector3d& b);
 
+/// The mean normal of the planes that directions span two by two.
+/// @param directions  unit vectors
+/// @returns  a unit vector, of either sign; nothing where all are one line
+[[nodiscard]] std::optional<Eigen::Vector3d> common_normal(
+    const std::vector<Eigen::Vector3d>& directions);
+
 /// @returns  the unit normal, of either sign; nothing for fewer than two bonds, for a straight line
 ///           and for bonds that lie in no plane
 [[nodiscard]] std::optional<Eigen::Vector3d> bond_plane_normal(const Molecule& molecule, int atom);

@@ -3,17 +3,20 @@
 #include <algorithm>
 #include <array>
 #include <cmath>
+#include <cstddef>
+#include <tuple>
 
 #include <Eigen/Geometry>
 
+#include "molecule/metals.hpp"
 #include "salc/bond_plane.hpp"
 #include "symmetry/operation.hpp"
 
 namespace irrepwise {
 namespace {
 
-constexpr int least_neighbours = 2;  // fewer make no centre
-constexpr double same = 1e-6;        // of unit vectors; coordinates are exact here
+constexpr std::size_t least_neighbours = 2;  // fewer make no centre
+constexpr double same = 1e-6;                // of unit vectors; coordinates are exact here
 constexpr double in_plane_angstrom = 1e-4;
 constexpr double least_across = 1e-3;  // a shorter direction would be along z
 
@@ -48,6 +51,45 @@ bool fixes_one_point(Family family) {
 bool is_kept(const MolecularSymmetry& symmetry, int atom) {
   return std::all_of(symmetry.images.begin(), symmetry.images.end(),
                      [&](const std::vector<int>& images) { return images[atom] == atom; });
+}
+
+using Bonds = std::vector<std::vector<int>>;  // by atom: the atoms bonded to it
+
+Bonds all_bonds(const Molecule& molecule) {
+  Bonds bonds;
+  for (int atom = 0; atom < molecule.size(); ++atom) {
+    bonds.push_back(bonded_atoms(molecule, atom));
+  }
+  return bonds;
+}
+
+// How many pieces its neighbours are in when an atom is taken away.
+int pieces_around(const Bonds& bonds, std::size_t atom) {
+  std::vector<bool> seen(bonds.size(), false);
+  seen[atom] = true;
+  int pieces = 0;
+  for (const int first : bonds[atom]) {
+    if (seen[static_cast<std::size_t>(first)]) continue;
+    ++pieces;
+    std::vector<int> piece = {first};
+    seen[static_cast<std::size_t>(first)] = true;
+    for (std::size_t i = 0; i < piece.size(); ++i) {
+      for (const int next : bonds[static_cast<std::size_t>(piece[i])]) {
+        if (seen[static_cast<std::size_t>(next)]) continue;
+        seen[static_cast<std::size_t>(next)] = true;
+        piece.push_back(next);
+      }
+    }
+  }
+  return pieces;
+}
+
+// Whether an atom that is no metal joins what is around it, and is not a member of a ring: of every
+// neighbour a piece of its own stays when it is taken away. At the one point that the group keeps
+// it may belong to several rings, one on each side (a spiro atom).
+bool holds_together(const Bonds& bonds, std::size_t atom, bool at_one_point) {
+  const int pieces = pieces_around(bonds, atom);
+  return pieces == static_cast<int>(bonds[atom].size()) || (at_one_point && pieces > 1);
 }
 
 int atoms_in_plane(const Molecule& molecule, const Eigen::Vector3d& point,
@@ -108,12 +150,18 @@ std::optional<Eigen::Vector3d> normal_of_plane(const MolecularSymmetry& symmetry
 std::optional<Centre> find_centre(const MolecularSymmetry& symmetry) {
   const Molecule& molecule = symmetry.molecule;
   const bool one_point = fixes_one_point(symmetry.group.symbol().family);
+  const std::vector<int> metals = metals_of_complex(molecule);
+  const Bonds bonds = all_bonds(molecule);
   std::optional<int> best;
-  std::pair<int, int> best_merit = {one_point ? -1 : least_neighbours, 0};
+  std::tuple<bool, int, int> best_merit = {false, -1, 0};
   for (int atom = 0; atom < molecule.size(); ++atom) {
     if (!is_kept(symmetry, atom)) continue;
-    const std::pair merit = {static_cast<int>(bonded_atoms(molecule, atom).size()),
-                             molecule.atoms()[atom].atomic_number};
+    const auto at = static_cast<std::size_t>(atom);
+    const int neighbours = static_cast<int>(bonds[at].size());
+    if (!one_point && neighbours < least_neighbours) continue;
+    const bool metal = std::find(metals.begin(), metals.end(), atom) != metals.end();
+    if (!metal && !holds_together(bonds, at, one_point)) continue;
+    const std::tuple merit = {metal, neighbours, molecule.atoms()[atom].atomic_number};
     if (merit == best_merit) best.reset();  // two alike: neither is the centre
     if (merit <= best_merit) continue;
     best = atom;

@@ -16,9 +16,12 @@ struct Centre {
   std::optional<int> atom;                             // the atom there, if any
 };
 
-/// The atom at the one point that every operation keeps, or that point, if the group has just one;
-/// otherwise, of the atoms that every operation keeps in place, the one with most neighbours, two
-/// at least (of equal ones the heaviest, which must be one alone).
+/// The centre is an atom that every operation keeps in place: a metal, or an atom that holds the
+/// molecule together, so that each of its neighbours is in a piece of its own when it is taken away
+/// (of a spiro atom at the one point that the group keeps, the rings are). A member of a ring is
+/// none. Metals of the complex come first, then the atom with most neighbours (two at least, but
+/// for the atom at the one point that the group keeps), then the heaviest, which must be one alone.
+/// Without such an atom the centre is the one point that every operation keeps, if there is one.
 [[nodiscard]] std::optional<Centre> find_centre(const MolecularSymmetry& symmetry);
 
 struct LocalFrames {
@@ -27,6 +30,11 @@ struct LocalFrames {
   bool in_plane = false;
   // z goes along a bond to the next atom on the way to the centre, not straight to the centre.
   bool beyond_donors = false;
+  // z goes along the bond to the metal, or to the midpoint of several, in a complex without a
+  // central atom.
+  bool to_own_metal = false;
+  // z is the normal of a ring or π bond that binds side-on, x points to the neighbours in it.
+  bool side_on = false;
 };
 
 /// y of a set's representative: across a mirror plane that contains z: σh or the plane of the

@@ -1,9 +1,11 @@
 #include "salc/orbital_reductions.hpp"
 
+#include <algorithm>
 #include <stdexcept>
 #include <utility>
 
 #include "harmonics/real_harmonics.hpp"
+#include "molecule/metals.hpp"
 #include "salc/outer_frames.hpp"
 
 namespace irrepwise {
@@ -18,6 +20,17 @@ std::vector<int> times_of(const PointGroup& group, const EquivalentAtoms& set,
                               : multiplicity(group.irreps()[i], set, functions));
   }
   return times;
+}
+
+// The parts of all shells up to one, each once.
+std::vector<Part> parts_up_to(const LocalFrames& frames, int largest_l) {
+  std::vector<Part> parts;
+  for (int l = 0; l <= largest_l; ++l) {
+    for (const Part part : parts_of_shell(frames, l)) {
+      if (std::find(parts.begin(), parts.end(), part) == parts.end()) parts.push_back(part);
+    }
+  }
+  return parts;
 }
 
 OrbitalReduction reduction(const MolecularSymmetry& symmetry,
@@ -60,6 +73,19 @@ std::vector<int> part_components(Part part, int l) {
     case Part::Phi:
       if (l < 3) return {};
       return {5, 6};
+    case Part::FacePi:
+      return l == 1 ? std::vector<int>{2} : std::vector<int>{};
+    case Part::FacePlane:
+      return l == 1 ? std::vector<int>{0, 1} : std::vector<int>{};
+    case Part::FaceS:
+      if (l != 0) return {};
+      break;
+    case Part::FaceD:
+      if (l != 2) return {};
+      break;
+    case Part::FaceF:
+      if (l != 3) return {};
+      break;
   }
   std::vector<int> all;
   for (int i = 0; i <= 2 * l; ++i) all.push_back(i);
@@ -82,6 +108,16 @@ const char* part_name(Part part) {
       return "δ";
     case Part::Phi:
       return "φ";
+    case Part::FacePi:
+      return "π";
+    case Part::FacePlane:
+      return "in plane";
+    case Part::FaceS:
+      return "s";
+    case Part::FaceD:
+      return "d";
+    case Part::FaceF:
+      return "f";
   }
   return "";
 }
@@ -102,11 +138,26 @@ std::string part_key(Part part, int l) {
       return "delta";
     case Part::Phi:
       return "phi";
+    case Part::FacePi:
+      return "pi_of_ligand";
+    case Part::FacePlane:
+      return "in_plane_of_ligand";
+    case Part::FaceS:
+      return "s_of_ligand";
+    case Part::FaceD:
+      return "d_of_ligand";
+    case Part::FaceF:
+      return "f_of_ligand";
   }
   return {};
 }
 
 std::vector<Part> parts_of_shell(const LocalFrames& frames, int l) {
+  if (frames.side_on) {
+    if (l == 0) return {Part::FaceS};
+    if (l == 1) return {Part::FacePi, Part::FacePlane};
+    return {l == 2 ? Part::FaceD : Part::FaceF};
+  }
   std::vector<Part> parts = {Part::Sigma};
   if (l >= 1 && !frames.in_plane) parts.push_back(Part::Pi);
   if (l >= 1 && frames.in_plane) {
@@ -137,8 +188,14 @@ std::vector<std::optional<LocalFrames>> frames_of_sets(const MolecularSymmetry& 
   for (const EquivalentAtoms& set : sets) {
     frames.push_back(centre ? local_frames(symmetry, set, *centre) : std::nullopt);
   }
-  if (!centre || !centre->atom) return frames;
-  return with_outer_frames(symmetry, sets, *centre->atom, std::move(frames));
+  std::vector<int> starts;
+  if (centre && centre->atom) {
+    starts = {*centre->atom};
+  } else {
+    starts = metals_of_complex(symmetry.molecule);
+    if (starts.size() < 2) return frames;
+  }
+  return with_outer_frames(symmetry, sets, starts, centre, std::move(frames));
 }
 
 std::vector<OrbitalReduction> orbital_reductions(
@@ -158,7 +215,7 @@ std::vector<OrbitalReduction> orbital_reductions(
     for (int shell = first; shell < end; ++shell) {
       largest_l = std::max(largest_l, basis.shells[shell].l);
     }
-    for (const Part part : parts_of_shell(*frames[s], largest_l)) {
+    for (const Part part : parts_up_to(*frames[s], largest_l)) {
       std::vector<int> holders;
       for (int shell = first; shell < end; ++shell) {
         if (!part_components(part, basis.shells[shell].l).empty()) holders.push_back(shell);

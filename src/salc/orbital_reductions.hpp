@@ -11,8 +11,23 @@
 
 namespace irrepwise {
 
-/// Part of a set's orbitals: a whole shell, or functions that look alike from the centre.
-enum class Part { Shell, Sigma, Pi, PiInPlane, PiOutOfPlane, Delta, Phi };
+/// Part of a set's orbitals: a whole shell, or functions that look alike from the centre. Of atoms
+/// that bind side-on: p along the normal of the ligand's plane, p in that plane, and whole shells
+/// of other kinds.
+enum class Part {
+  Shell,
+  Sigma,
+  Pi,
+  PiInPlane,
+  PiOutOfPlane,
+  Delta,
+  Phi,
+  FacePi,
+  FacePlane,
+  FaceS,
+  FaceD,
+  FaceF
+};
 
 struct OrbitalReduction {
   int set = 0;  // index in the sets
@@ -32,8 +47,9 @@ struct OrbitalReduction {
     const MolecularSymmetry& symmetry, const Basis& basis, const std::vector<EquivalentAtoms>& sets,
     const std::vector<std::optional<LocalFrames>>& frames);
 
-/// Frames of every set: about the centre of the molecule, and further out along the bonds.
-/// @returns  by set; all empty where the molecule has no centre
+/// Frames of every set: about the centre of the molecule, and further out along the bonds. Where
+/// several metals are and none of them is the centre, along the bonds from the metals.
+/// @returns  by set; all empty where the molecule has neither a centre nor several metals
 [[nodiscard]] std::vector<std::optional<LocalFrames>> frames_of_sets(
     const MolecularSymmetry& symmetry, const std::vector<EquivalentAtoms>& sets);
 

@@ -39,7 +39,7 @@ class Writer {
   // All partners of the SALCs of one part of a shell.
   void add(std::vector<SalcFunction>& list, SalcFunction blank, int l) const {
     const bool spherical = group_.symbol().family == Family::Kh;
-    const SiteFunctions functions = blank.frame == OrbitalFrame::Local
+    const SiteFunctions functions = blank.frame != OrbitalFrame::Standard
                                         ? part_functions(group_, set_, *frames_, blank.part, l)
                                         : whole_shell(group_, set_, l);
     blank.components = part_components(blank.part, l);
@@ -71,7 +71,7 @@ class Writer {
       const int g = set_.from_representative[position];
       Eigen::MatrixXd on_atom = group_.irreps()[blank.irrep].matrices[g] * representative *
                                 harmonic_rotation(l, group_.operations()[g]).transpose();
-      if (blank.frame == OrbitalFrame::Local)
+      if (blank.frame != OrbitalFrame::Standard)
         on_atom = (on_atom * harmonic_rotation(l, frames_->frames[position])).eval();
       for (std::size_t r = 0; r < partners.size(); ++r) {
         for (Eigen::Index i = 0; i < columns; ++i) {
@@ -110,7 +110,7 @@ std::vector<SalcFunction> salc_table(const MolecularSymmetry& symmetry, const Ba
       SalcFunction blank;
       blank.set = s;
       blank.shell = shell;
-      blank.frame = local ? OrbitalFrame::Local : OrbitalFrame::Standard;
+      blank.frame = frames.empty() ? OrbitalFrame::Standard : orbital_frame(frames[s]);
       if (!local) {
         writer.add(list, blank, l);
         continue;
@@ -124,9 +124,25 @@ std::vector<SalcFunction> salc_table(const MolecularSymmetry& symmetry, const Ba
   return list;
 }
 
+OrbitalFrame orbital_frame(const std::optional<LocalFrames>& frames) {
+  if (!frames) return OrbitalFrame::Standard;
+  return frames->side_on ? OrbitalFrame::SideOn : OrbitalFrame::Local;
+}
+
+std::string side_on_name(int l, int component) {
+  std::string name(orbital_name(l, component));
+  if (name == "pz") return "pπ";
+  for (char& letter : name) {
+    letter = letter == 'x' ? 'r' : letter == 'y' ? 't' : letter == 'z' ? 'n' : letter;
+  }
+  return name;
+}
+
 std::string salc_orbital_name(const Shell& shell, int component, OrbitalFrame frame) {
   if (frame == OrbitalFrame::Standard)
     return fmt::format("{}{}", shell.n(), orbital_name(shell.l, component));
+  if (frame == OrbitalFrame::SideOn)
+    return fmt::format("{}{}", shell.n(), side_on_name(shell.l, component));
   static constexpr std::array<std::array<const char*, 7>, 4> names = {
       {{""},
        {"πx", "πy", "σ"},

@@ -12,8 +12,11 @@
 
 namespace irrepwise {
 
-/// Whose axes orbitals are written in: the molecule's, or each atom's own.
-enum class OrbitalFrame { Standard, Local };
+/// Whose axes orbitals are written in: the molecule's, or each atom's own; the latter is named by
+/// σ and π or, where the atom binds side-on, by the plane of the ligand.
+enum class OrbitalFrame { Standard, Local, SideOn };
+
+[[nodiscard]] OrbitalFrame orbital_frame(const std::optional<LocalFrames>& frames);
 
 /// One partner of one SALC.
 struct SalcFunction {
@@ -37,7 +40,11 @@ struct SalcFunction {
     const MolecularSymmetry& symmetry, const Basis& basis, const std::vector<EquivalentAtoms>& sets,
     const std::vector<std::optional<LocalFrames>>& frames = {});
 
-/// @returns  "3pz" in the standard frame, "3s", "3pσ", "3pπx", "3dδxy" in the local one
+/// @returns  of an atom that binds side-on: "pπ" along the normal, "pr", "pt", "drn"
+[[nodiscard]] std::string side_on_name(int l, int component);
+
+/// @returns  "3pz" in the standard frame, "3s", "3pσ", "3pπx", "3dδxy" in the local one;
+///           side-on "2pπ" along the normal, "2pr" and "2pt" in the plane, "3drn" of higher shells
 [[nodiscard]] std::string salc_orbital_name(const Shell& shell, int component, OrbitalFrame frame);
 
 }  // namespace irrepwise

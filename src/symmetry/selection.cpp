@@ -32,7 +32,7 @@ TermDistortion term_distortion(const PointGroup& group, const std::string& term,
   const Reduction square = symmetric_power(group, label, 2);
   if (total_dimension(square) == 1) return {};
   if (!group.symbol().is_finite()) {
-    if (group.symbol().family == Family::Kh) return {};
+    if (group.symbol().family == Family::Kh) return {DistortionKind::Atom, {}};
     TermDistortion distortion{DistortionKind::RennerTeller, {}};
     for (const IrrepCount& mode : vibrations) {
       if (mode.dimension == 2) distortion.modes.push_back(mode);

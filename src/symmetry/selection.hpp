@@ -23,6 +23,7 @@ struct TransitionRule {
 
 enum class DistortionKind {
   None,         // the term is not degenerate
+  Atom,         // it is, but a single atom has no vibration
   JahnTeller,   // a non-linear molecule distorts along one of the modes
   RennerTeller  // linear molecules are exempt from the theorem; bending splits the term in 2nd
                 // order

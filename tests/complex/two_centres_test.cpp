@@ -89,6 +89,32 @@ TEST_CASE("a bent single bridge has the angle and torsion asked for") {
   CHECK(std::abs(angle(built.molecule, 0, oxygen, 1) - 150.0) < 1e-6);
 }
 
+TEST_CASE("a bond between the metals counts one electron of each order to both, if it is stated") {
+  // [Fe2(SMe)2(CO)6]: 18 electrons at each iron with one bond, 17 without; [W2Cl9]3-: 12 + 3 with
+  // its triple bond. Common practice.
+  ComplexSpec iron = pair_of("Fe", "SPY-5", 1, {"CO", "CO", "CO"}, "SMe", {2, 3});
+  CHECK(build_complex(iron).centres[0].electrons.total == 17);
+  iron.metal_metal_bond = 1;
+  const BuiltComplex bonded = build_complex(iron);
+  CHECK(bonded.molecule.charge() == 0);
+  for (const BuiltCentre& centre : bonded.centres) {
+    CHECK(centre.electrons.total == 18);
+    CHECK(centre.electrons.other_metal == 1);
+  }
+  CHECK(bonded.how.ends_with("; bond of order 1 between the metals counted"));
+  ComplexSpec tungsten = pair_of("W", "OC-6", 3, {"Cl", "Cl", "Cl"}, "Cl", {1, 2, 3});
+  tungsten.metal_metal_bond = 3;
+  CHECK(build_complex(tungsten).centres[1].electrons.total == 3 + 6 * 2 + 3);
+
+  tungsten.metal_metal_bond = 6;
+  CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(tungsten)),
+                       "found a bond of order 6, expected 0 to 5", Error);
+  ComplexSpec alone = spec_of("Pd", "SP-4", 2, {"Cl", "Cl", "Cl", "Cl"});
+  alone.metal_metal_bond = 1;
+  CHECK_THROWS_WITH_AS(static_cast<void>(build_complex(alone)),
+                       "`metal_metal_bond` needs two centres; leave it out", Error);
+}
+
 TEST_CASE("carbonyls bridge two metals with one electron to each") {
   ComplexSpec spec = pair_of("Co", "OC-6", 0, {"CO", "CO", "CO", "CO"}, "CO", {1, 2});
   const BuiltComplex built = build_complex(spec);

@@ -23,6 +23,12 @@ std::string marked(const RichText& runs) {
 
 }  // namespace
 
+TEST_CASE("signs that stand below and above in a heading are set as scripts") {
+  CHECK(marked(heading_text("Cl₄Pt²⁻, trans")) == "Cl_4|Pt^2−|, trans");
+  CHECK(marked(heading_text("C₁₂H⁺")) == "C_12|H^+|");
+  CHECK(marked(heading_text("η5-ring")) == "η5-ring");
+}
+
 TEST_CASE("labels are set with their number in line, the rest below, primes after it") {
   // As Mulliken's symbols are printed (J. Chem. Phys. 23, 1997 (1955)).
   CHECK(marked(label_text("2e1g")) == "2e_1g|");

@@ -77,6 +77,27 @@ TEST_CASE("the charge of the job gives the oxidation state, and other sections g
   CHECK(built.overrides.size() == 1);
 }
 
+TEST_CASE("a charge from outside the file obeys the rule for the one in it") {
+  Job stated = job(square + "    - Cl\n    - Cl\n    - Cl\n    - Cl\n");
+  set_charge(stated, -2, "--charge");
+  CHECK(stated.molecule.charge() == -2);
+  CHECK(stated.places["charge"] == "--charge");
+  std::string message;
+  try {
+    set_charge(stated, -1, "--charge");
+  } catch (const Error& error) {
+    message = error.what();
+  }
+  CHECK(message.starts_with("--charge: the charge "));
+  CHECK(message.find("contradicts oxidation state") != std::string::npos);
+  // Where the file leaves the oxidation state open, it follows.
+  Job open =
+      job("charge: -2\nbuild:\n  metal: Pt\n  polyhedron: SP-4\n  ligands: [Cl, Cl, Cl, Cl]\n");
+  set_charge(open, 0, "--charge");
+  CHECK(open.molecule.charge() == 0);
+  CHECK(open.built->centres[0].electrons.oxidation == 4);
+}
+
 TEST_CASE("two centres with bridges are read") {
   const Job built =
       job("build:\n  centres:\n"
@@ -94,10 +115,11 @@ TEST_CASE("what cannot be built is refused with its line and column") {
   CHECK(refusal(square + "    - Cl\n    - Cl\n    - NH33\n    - Cl\n") ==
         "job.yaml:8:7: no ligand is called 'NH33', did you mean 'NH3'? `irrepwise build --list "
         "ligands` shows all");
-  CHECK(refusal("build:\n  metal: Pt\n  polyhedron: SQ-4\n  ligands: []\n") ==
-        "job.yaml:3:15: 'SQ-4' is no polyhedral symbol; did you mean SP-4? Otherwise the known ones "
-        "are L-2, A-2, TP-3, TPY-3, TS-3, T-4, SP-4, SPY-4, SS-4, TBPY-5, SPY-5, OC-6, TPR-6, "
-        "PBPY-7, OCF-7, TPRS-7, CU-8, SAPR-8, DD-8, HBPY-8 and TPRS-9");
+  CHECK(
+      refusal("build:\n  metal: Pt\n  polyhedron: SQ-4\n  ligands: []\n") ==
+      "job.yaml:3:15: 'SQ-4' is no polyhedral symbol; did you mean SP-4? Otherwise the known ones "
+      "are L-2, A-2, TP-3, TPY-3, TS-3, T-4, SP-4, SPY-4, SS-4, TBPY-5, SPY-5, OC-6, TPR-6, "
+      "PBPY-7, OCF-7, TPRS-7, CU-8, SAPR-8, DD-8, HBPY-8 and TPRS-9");
   CHECK(refusal("build:\n  metal: Pq\n  polyhedron: SP-4\n") ==
         "job.yaml:2:10: 'Pq' is not an element; did you mean 'P'?");
   CHECK(refusal(square +

@@ -83,6 +83,23 @@ TEST_CASE("an XYZ file is a job of its own, with defaults") {
   CHECK(job.source_files == std::vector<std::string>{folder.file("square.xyz")});
 }
 
+TEST_CASE("the multiplicity of an XYZ file holds unless the job says how electrons stand") {
+  const Folder folder;
+  folder.write("oxygen.xyz", "2\nmultiplicity=3\nO 0 0 0\nO 0 0 1.21\n");
+  const Job alone = read_job(folder.file("oxygen.xyz"));
+  CHECK(alone.hueckel.multiplicity == 3);
+  CHECK(alone.places.at("multiplicity") == folder.file("oxygen.xyz") + ":2:14");
+  CHECK(folder.job("geometry: oxygen.xyz\n").hueckel.multiplicity == 3);
+  CHECK(folder.job("geometry: oxygen.xyz\nmultiplicity: 1\n").hueckel.multiplicity == 1);
+  const Job filled = folder.job("geometry: oxygen.xyz\noccupations: {a1g: 4}\n");
+  CHECK_FALSE(filled.hueckel.multiplicity.has_value());
+  // A slip in the comment stops the job at its place.
+  folder.write("slip.xyz", "1\nchrage=1\nF 0 0 0\n");
+  CHECK(folder.refusal("geometry: slip.xyz\n") ==
+        "slip.xyz:2:1: chrage= has no meaning here (did you mean charge=?); correct it or take it "
+        "out");
+}
+
 TEST_CASE("every part of a job file is read") {
   const Folder folder;
   folder.write("own.yaml",

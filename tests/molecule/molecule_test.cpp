@@ -9,6 +9,7 @@
 
 #include "core/constants.hpp"
 #include "core/error.hpp"
+#include "molecule/contacts.hpp"
 #include "molecule/pairs.hpp"
 
 using namespace irrepwise;
@@ -81,6 +82,36 @@ TEST_CASE("bonds are judged by radii, and by 3 Å where there is no radius") {
   const Molecule heavy({{97, {0, 0, 0}}, {17, {0, 0, 2.9}}, {17, {0, 0, -3.1}}}, 0);
   CHECK(are_bonded(heavy, 0, 1));
   CHECK_FALSE(are_bonded(heavy, 2, 0));
+}
+
+TEST_CASE("two metals are bonded within a tighter limit than other atoms") {
+  struct Pair {
+    int z;
+    double distance_angstrom;
+    bool bonded;
+  };
+  // Distances between the metals from memory of the trade: Re2Cl8(2-), Mn2(CO)10, Fe2(CO)9,
+  // Rh2(OAc)4 have bonds; of two square planes joined by two chlorides, and of neighbours in
+  // Na and Cu salts, there is none.
+  for (const Pair& pair : {Pair{75, 2.24, true},
+                           {25, 2.90, true},
+                           {26, 2.52, true},
+                           {45, 2.39, true},
+                           {45, 3.45, false},
+                           {46, 3.41, false},
+                           {29, 3.2, false},
+                           {11, 3.96, false}}) {
+    CAPTURE(pair.z);
+    const Molecule molecule({{pair.z, {0, 0, 0}}, {pair.z, {0, 0, pair.distance_angstrom}}}, 0);
+    CHECK(are_bonded(molecule, 0, 1) == pair.bonded);
+  }
+  // Rhodium and a non-metal keep the wider limit: 1.2 times the sum of the radii.
+  const Molecule mixed({{45, {0, 0, 0}}, {17, {0, 0, 1.2 * (1.42 + 1.02)}}}, 0);
+  CHECK(are_bonded(mixed, 0, 1));
+  CHECK(bond_criterion(mixed).empty());
+  CHECK(bond_criterion(Molecule({{45, {0, 0, 0}}, {45, {0, 0, 3}}}, 0)) ==
+        "A bond is a distance of at most 1.25 times the sum of the covalent radii, between two "
+        "metals of at most 1.15 times.");
 }
 
 TEST_CASE("an ordinary geometry and a single atom give no warning") {

@@ -179,3 +179,42 @@ TEST_CASE("what is written reads back as the same molecule") {
   // Ten decimals: half a unit in the last place.
   CHECK((file.molecule.positions() - molecule.positions()).cwiseAbs().maxCoeff() <= 0.5001e-10);
 }
+
+TEST_CASE("a multiplicity is honoured, and has a place") {
+  const XyzFile file = parse_xyz("2\ncharge=0 multiplicity=3\nO 0 0 0\nO 0 0 1.2\n", "a.xyz");
+  CHECK(file.multiplicity == 3);
+  CHECK(file.multiplicity_place == "a.xyz:2:23");
+  CHECK(file.molecule.title().empty());
+  CHECK(parse_xyz("1\nthe triplet Multiplicity=3\nO 0 0 0\n", "a.xyz").multiplicity == 3);
+  CHECK_FALSE(parse_xyz("1\ntriplet\nO 0 0 0\n", "a.xyz").multiplicity.has_value());
+  CHECK(refusal("1\nmultiplicity=0\nO 0 0 0\n") ==
+        "a.xyz:2:14: found multiplicity=0, expected 2S + 1, 1 or more");
+  CHECK(refusal("1\nmultiplicity=triplet\nO 0 0 0\n") ==
+        "a.xyz:2:14: found multiplicity='triplet', expected 2S + 1, 1 or more, such as "
+        "multiplicity=3");
+  CHECK(refusal("1\nmultiplicity=1 multiplicity=3\nO 0 0 0\n") ==
+        "a.xyz:2:16: multiplicity= stands here twice with different values; keep one");
+}
+
+TEST_CASE("keys that look like a slip are refused, those of other programs are not") {
+  CHECK(
+      refusal("1\nchrage=1\nF 0 0 0\n") ==
+      "a.xyz:2:1: chrage= has no meaning here (did you mean charge=?); correct it or take it out");
+  CHECK(
+      refusal("1\ncharge=-1 mutliplicity=3\nF 0 0 0\n") ==
+      "a.xyz:2:11: mutliplicity= has no meaning here (did you mean multiplicity=?); correct it or "
+      "take it out");
+  for (const char* key : {"charges", "Chagre", "mult", "MULTIPLICTY", "multiplcty"}) {
+    CAPTURE(key);
+    const std::string text = std::string("1\nanion ") + key + "=1\nF 0 0 0\n";
+    CHECK(refusal(text).starts_with("a.xyz:2:7: "));
+  }
+  CHECK(refusal("1\nproperties=species:S:1:pos:R:3\nF 0 0 0\n").find("did you mean Properties=?") !=
+        std::string::npos);
+  for (const char* key :
+       {"Lattice", "pbc", "energy", "free_energy", "stress", "virial", "dipole", "magmom", "time",
+        "Time", "step", "config_type", "name", "made", "spin", "change", "Title", "label"}) {
+    CAPTURE(key);
+    CHECK(refusal(std::string("1\n") + key + "=1\nF 0 0 0\n") == "accepted");
+  }
+}

@@ -2,17 +2,22 @@
 
 #include <algorithm>
 #include <sstream>
+#include <string>
 
 #include <doctest/doctest.h>
 
 #include "analysis/d_block.hpp"
 #include "analysis/donors.hpp"
 #include "core/error.hpp"
+#include "job/job.hpp"
+#include "molecule/contacts.hpp"
 #include "output/composition.hpp"
 #include "output/display_width.hpp"
 #include "output/example.hpp"
 #include "output/levels_json.hpp"
 #include "support/molecules.hpp"
+#include "support/paths.hpp"
+#include "support/result.hpp"
 
 using namespace irrepwise;
 
@@ -68,6 +73,37 @@ TEST_CASE("a square d8 complex has an empty b1g level of dx2-y2 as its LUMO") {
   CHECK(text.find("LUMO") != std::string::npos);
   CHECK(text.find("HOMO") > text.find("LUMO"));  // from high to low
   CHECK(text.find("Open shell") == std::string::npos);
+}
+
+TEST_CASE("orbitals of equivalent atoms are named where they are the same on all") {
+  // A quadruple bond, x towards chlorine: sigma and sigma* are a1g and a2u of dz2, pi and pi* eu
+  // and eg of dxz and dyz, delta and delta* b2g and b1u of dxy (Cotton, from memory).
+  const LevelsResult result = result_of(test_molecule("octachlorodirhenate(III)").molecule);
+  const std::vector<AtomSet> sets = atom_sets(result.symmetry);
+  const std::vector<ShellGroup> groups = shell_groups(result, sets);
+  int seen = 0;
+  for (std::size_t i = 0; i < result.levels.levels.size(); ++i) {
+    const std::string words = composition_words(result, sets, groups, static_cast<int>(i));
+    const std::string irrep =
+        result.symmetry.group.irreps()[static_cast<std::size_t>(result.levels.levels[i].irrep)]
+            .label;
+    const std::size_t at = words.find("Re\u00A05d");
+    if (at == std::string::npos) continue;
+    const std::string named = words.substr(at + std::string("Re\u00A05").size());
+    CAPTURE(irrep);
+    if (irrep == "A1g" || irrep == "A2u") CHECK(named.starts_with("dz2"));
+    if (irrep == "Eg" || irrep == "Eu") CHECK(named.starts_with("d(xz,yz)"));
+    if (irrep == "B2g" || irrep == "B1u") CHECK(named.starts_with("dxy"));
+    ++seen;
+  }
+  CHECK(seen >= 6);
+  // Of the chlorines of a square, some have px and some py: no name is right for all.
+  const LevelsResult square = result_of(skew_square());
+  const std::vector<AtomSet> square_sets = atom_sets(square.symmetry);
+  const int lumo = square.levels.frontier.lumo.value();
+  const std::string words =
+      composition_words(square, square_sets, shell_groups(square, square_sets), lumo);
+  CHECK(words.ends_with("Cl\u00A03p"));
 }
 
 TEST_CASE("equivalent charges and bonds stand once, and each by itself with all") {
@@ -199,4 +235,45 @@ TEST_CASE("every level that a multiplicity leaves partly filled is named") {
     ++named;
   }
   CHECK(named == open_levels);
+}
+
+TEST_CASE("a spin state that partly fills orbitals of the ligands gets a warning") {
+  // The sextet of an octahedral d5 complex has its five unpaired electrons in t2g and eg (common
+  // practice); six more must go elsewhere.
+  Job job = read_job(source_path("inputs/high_spin_octahedron.yaml"));
+  CHECK(levels_result(job).warnings.empty());
+  const int stated = job.hueckel.multiplicity.value();
+  job.hueckel.multiplicity = stated + 6;
+  const LevelsResult forced = levels_result(job);
+  REQUIRE(forced.warnings.size() == 1);
+  const std::string& warning = forced.warnings.front();
+  CAPTURE(warning);
+  CHECK(warning.starts_with("the multiplicity " + std::to_string(stated + 6) + " leaves "));
+  // Every level that it names is partly filled, and has its share beside it.
+  int named = 0;
+  for (const Level& level : forced.levels.levels) {
+    const std::string name = level_name(forced.symmetry.group, level) + " (";
+    if (warning.find(" " + name) == std::string::npos) continue;
+    ++named;
+    CHECK(level.occupation > 0.0);
+    CHECK(level.occupation < 2.0 * level.degeneracy);
+  }
+  CHECK(named > 0);
+  CHECK(warning.find("less than half metal d: ") != std::string::npos);
+  // Electrons that nobody placed are no reason for a word.
+  job.hueckel.multiplicity.reset();
+  CHECK(levels_result(job).warnings.empty());
+}
+
+TEST_CASE("two metals in a bridged dimer are not listed as a bond, and the criterion is told") {
+  const LevelsResult result = input_result("bridged_pd2cl6.yaml");
+  const Report report = levels_report(result);
+  const Table& bonds = report.tables.back();
+  CHECK(bonds.caption == "Overlap populations of bonds");
+  for (const auto& line : bonds.lines) {
+    const std::string pair = cell_text(std::get<Row>(line).cells.front());
+    CHECK(pair.find("Pd1–Pd2") == std::string::npos);
+  }
+  REQUIRE(bonds.notes.size() == 1);
+  CHECK(bonds.notes.front() == bond_criterion(result.molecule));
 }

@@ -15,7 +15,7 @@ namespace {
 
 std::string put_together(const std::string& words) {
   std::string text;
-  for (const NotationRun& run : notation_runs(words)) text += run.text + run.below;
+  for (const NotationRun& run : notation_runs(words)) text += run.text + run.below + run.primes;
   return text;
 }
 
@@ -72,4 +72,37 @@ TEST_CASE("formulas carry numbers below and the charge above") {
   CHECK(formula(-1) == "C₁₂H⁻");
   CHECK(formula(-2) == "C₁₂H²⁻");
   CHECK(formula(10) == "C₁₂H¹⁰⁺");
+}
+
+TEST_CASE("groups and axes are typeset, atoms of the same spelling are not") {
+  // Schoenflies symbols as the trade writes them: the letter with the rest below.
+  CHECK(html_words("C4h at tolerance 0.01 Å") == "C<sub>4h</sub> at tolerance 0.01 Å");
+  CHECK(html_words("z = C4 through Pt1") == "z = C<sub>4</sub> through Pt1");
+  CHECK(html_words("x = C2' through C2 and C4") == "x = C<sub>2</sub>′ through C2 and C4");
+  CHECK(html_words("z = C4 (S8) through C1") == "z = C<sub>4</sub> (S<sub>8</sub>) through C1");
+  CHECK(html_words("C4, a subgroup of S4") == "C<sub>4</sub>, a subgroup of S<sub>4</sub>");
+  CHECK(html_words("Character table of Cs, order 2") ==
+        "Character table of C<sub>s</sub>, order 2");
+  CHECK(html_words("Th at tolerance 0.01 Å") == "T<sub>h</sub> at tolerance 0.01 Å");
+  CHECK(html_words("Descent from D4h to C4") == "Descent from D<sub>4h</sub> to C<sub>4</sub>");
+  CHECK(html_words("D∞h") == "D<sub>∞h</sub>");
+  CHECK(html_words("xz = σv through O1") == "xz = σ<sub>v</sub> through O1");
+  CHECK(html_words("Td → D3") == "T<sub>d</sub> → D<sub>3</sub>");
+  CHECK(latex_words("D4h") == "$D_{4h}$");
+  CHECK(latex_words("C∞v") == "$C_{\\infty v}$");
+  CHECK(latex_words("x = C2' through Cl2") == "x = $C_{2}'$ through Cl2");
+  CHECK(latex_words("σh") == "$\\sigma_{h}$");
+  for (const std::string words :
+       {"C4–O2", "equivalent: C×4 = C1, C2, C3 and C4", "S4", "C12H10", "Dy4", "C2v1", "(C4)",
+        "5C4h", "C4h_a", "Ohm", "Cs", "Th1", "from Pt1 to C4"}) {
+    CAPTURE(words);
+    for (const NotationRun& run : notation_runs(words)) CHECK(run.below.empty());
+    CHECK(put_together(words) == words);
+  }
+}
+
+TEST_CASE("the name of an option is not broken in a page") {
+  CHECK(html_words("with the option --variants and -o") ==
+        "with the option <span style=\"white-space:nowrap\">--variants</span> and -o");
+  CHECK(html_words("a -- b") == "a -- b");
 }

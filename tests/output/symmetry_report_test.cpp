@@ -11,7 +11,9 @@
 #include "output/display_width.hpp"
 #include "output/salc_tables.hpp"
 #include "output/symmetry_json.hpp"
+#include "output/symmetry_tables.hpp"
 #include "output/symmetry_words.hpp"
+#include "output/table_text.hpp"
 #include "support/groups.hpp"
 #include "support/molecules.hpp"
 
@@ -109,4 +111,31 @@ TEST_CASE("words of symmetry are those of the trade") {
   CHECK(readable_functions({FunctionKind::Quadratic, {"x2-y2"}}) == "x²−y²");
   CHECK(coefficient_text(0.0) == "·");
   CHECK(coefficient_text(-0.37174) == "-0.3717");
+}
+
+TEST_CASE("counts of lower-case labels do not read as levels") {
+  const Reduction reduction = {{"A1g", 1, 1}, {"Eg", 2, 3}};
+  CHECK(cell_text(reduction_words(reduction)) == "a1g + 3\u00A0×\u00A0eg");
+  CHECK(cell_text(mode_words(reduction)) == "a1g, 3\u00A0×\u00A0eg");
+  CHECK(cell_text(state_words(reduction)) == "A1g + 3Eg");
+}
+
+TEST_CASE("what can bond leaves out no set of atoms, however narrow the text") {
+  const SymmetryResult result = symmetry_of_test_molecule("tricarbonylcyclopentadienylmanganese");
+  REQUIRE(result.sets.size() > 6);
+  for (const int width : {40, 80, 1000}) {
+    CAPTURE(width);
+    std::size_t columns = 0;
+    std::size_t tables = 0;
+    for (const Table& table : bonding_tables(result, width)) {
+      ++tables;
+      columns += table.columns.size() - 1;  // the irreps stand in each
+      const std::string text = table_text(table, width);
+      CHECK(text.find("Left out") == std::string::npos);
+      CHECK(widest_line(text) <= width);
+      CHECK(std::get<Row>(table.lines.front()).cells.size() == table.columns.size());
+    }
+    CHECK(columns == result.sets.size() + 1);  // and the verdict
+    CHECK((tables == 1) == (width == 1000));
+  }
 }

@@ -1,6 +1,7 @@
 #include "salc/orbital_reductions.hpp"
 
 #include <algorithm>
+#include <cmath>
 #include <map>
 #include <string>
 
@@ -144,12 +145,71 @@ TEST_CASE("local frames are right-handed, look at the centre, and lie in the pla
   CHECK(with_plane > 20);
 }
 
-TEST_CASE("the centre is the atom with most neighbours among those that stay") {
+TEST_CASE("the centre is a metal, otherwise the atom with most neighbours, among those that stay") {
   const auto centre_of = [](const char* name) {
     return find_centre(find_symmetry(test_molecule(name).molecule));
   };
   CHECK(centre_of("tetrachlorooxovanadate(IV)")->atom == 0);  // V, though O lies on the axis too
+  // Phosphorus has four neighbours, gold two (C3v; distances common practice).
+  const Molecule linear({{15, {0, 0, 0}},
+                         {79, {0, 0, 2.25}},
+                         {17, {0, 0, 4.55}},
+                         {1, {1.2, 0, -0.7}},
+                         {1, {-0.6, 1.2 * std::sqrt(0.75), -0.7}},
+                         {1, {-0.6, -1.2 * std::sqrt(0.75), -0.7}}},
+                        0, "chlorido(phosphane)gold(I)");
+  CHECK(find_symmetry(linear).group.symbol().name() == "C3v");
+  CHECK(find_centre(find_symmetry(linear))->atom == 1);
   CHECK(centre_of("benzene")->atom == std::nullopt);
   CHECK(centre_of("benzene")->position.norm() == 0.0);
   CHECK_FALSE(centre_of("disulfur dichloride"));  // C2: a line of points stays
+}
+
+TEST_CASE("a member of a ring is no centre, a spiro atom and a metal are") {
+  const auto centre_of = [](const std::vector<Atom>& atoms) {
+    return find_centre(find_symmetry(Molecule(atoms, 0)));
+  };
+  // Pyridine's skeleton and furan's: C2v, nitrogen or oxygen and a carbon stay in place.
+  std::vector<Atom> pyridine, furan;
+  for (int i = 0; i < 6; ++i) {
+    const double angle = i * std::acos(-1.0) / 3.0;
+    const Eigen::Vector3d out(std::cos(angle), std::sin(angle), 0.0);
+    pyridine.push_back({i == 0 ? 7 : 6, 1.4 * out});
+    if (i > 0) pyridine.push_back({1, 2.48 * out});
+  }
+  for (int i = 0; i < 5; ++i) {
+    const double angle = i * std::acos(-1.0) * 0.4;
+    const Eigen::Vector3d out(std::cos(angle), std::sin(angle), 0.0);
+    furan.push_back({i == 0 ? 8 : 6, 1.2 * out});
+    if (i > 0) furan.push_back({1, 2.28 * out});
+  }
+  CHECK_FALSE(centre_of(pyridine));
+  CHECK_FALSE(centre_of(furan));
+
+  // Two three-membered rings that share an atom, D2d: the only atom that the group keeps.
+  const std::vector<Atom> spiro = {{6, {0, 0, 0}},
+                                   {6, {0.76, 0, 1.27}},
+                                   {6, {-0.76, 0, 1.27}},
+                                   {6, {0, 0.76, -1.27}},
+                                   {6, {0, -0.76, -1.27}}};
+  REQUIRE(centre_of(spiro));
+  CHECK(centre_of(spiro)->atom == 0);
+
+  // Gold between chlorine and phosphine: phosphorus has four neighbours, gold is the metal.
+  const std::vector<Atom> gold = {{79, {0, 0, 0}},
+                                  {17, {0, 0, -2.28}},
+                                  {15, {0, 0, 2.24}},
+                                  {1, {1.27, 0, 2.85}},
+                                  {1, {-0.635, 1.0998523, 2.85}},
+                                  {1, {-0.635, -1.0998523, 2.85}}};
+  REQUIRE(centre_of(gold));
+  CHECK(centre_of(gold)->atom == 0);
+
+  for (const char* name : {"methane", "water", "sulfur hexafluoride"}) {
+    CAPTURE(name);
+    const MolecularSymmetry symmetry = find_symmetry(test_molecule(name).molecule);
+    REQUIRE(find_centre(symmetry));
+    REQUIRE(find_centre(symmetry)->atom);
+    CHECK(symmetry.molecule.atoms()[*find_centre(symmetry)->atom].atomic_number > 1);
+  }
 }

@@ -64,7 +64,55 @@ Molecule carbonyls(double bend_degrees) {
   return Molecule(atoms, 0, "carbonyls");
 }
 
+// Two square metals that share an edge of two chlorines, with two carbonyls each: D2h where the
+// chlorines lie in the plane, C2v where they are lifted out of it.
+Molecule bridged(double lifted_angstrom) {
+  std::vector<Atom> atoms;
+  for (const double x : {1.0, -1.0}) {
+    const Eigen::Vector3d metal(1.65 * x, 0, 0);
+    atoms.push_back({45, metal});
+    for (const double y : {1.0, -1.0}) {
+      const Eigen::Vector3d out = Eigen::Vector3d(x, y, 0).normalized();
+      atoms.push_back({6, metal + 1.84 * out});
+      atoms.push_back({8, metal + 2.99 * out});
+    }
+  }
+  for (const double y : {1.0, -1.0}) atoms.push_back({17, {0, 1.65 * y, lifted_angstrom}});
+  return Molecule(atoms, 0, "bridged");
+}
+
 }  // namespace
+
+TEST_CASE("with several metals each donor looks at its own, a bridge at their midpoint") {
+  for (const double lifted : {0.0, 0.5}) {
+    CAPTURE(lifted);
+    const Framed all = framed(moved(bridged(lifted), 6).molecule);
+    const Molecule& molecule = all.symmetry.molecule;
+    int terminal = 0;
+    int bridges = 0;
+    for (int atom = 0; atom < molecule.size(); ++atom) {
+      const int element = molecule.atoms()[atom].atomic_number;
+      if (element == 45) continue;
+      REQUIRE(all.of_atom(atom));
+      Eigen::Vector3d goal = Eigen::Vector3d::Zero();
+      std::vector<int> before = bonded_atoms(molecule, atom);
+      std::erase_if(before, [&](int other) {
+        return molecule.atoms()[other].atomic_number != (element == 8 ? 6 : 45);
+      });
+      REQUIRE(before.size() == (element == 17 ? 2 : 1));
+      for (const int other : before) goal += all.position(other) / double(before.size());
+      const Eigen::Vector3d along = (goal - all.position(atom)).normalized();
+      CHECK((all.of_atom(atom)->col(2) - along).norm() < 1e-9);
+      if (element == 8) {
+        ++terminal;
+        CHECK((*all.of_atom(atom) - *all.of_atom(before.front())).norm() < 1e-6);
+      }
+      bridges += element == 17 ? 1 : 0;
+    }
+    CHECK(terminal == 4);
+    CHECK(bridges == 2);
+  }
+}
 
 TEST_CASE("frames of equivalent atoms are images of each other, at any distance from the centre") {
   int beyond = 0;

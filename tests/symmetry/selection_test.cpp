@@ -64,6 +64,9 @@ TEST_CASE("Jahn-Teller active modes are those of the textbooks") {
   CHECK(distortion("carbon dioxide", "pig").kind == DistortionKind::RennerTeller);
   CHECK(reduction_text(distortion("carbon dioxide", "pig").modes) == "Piu");
   CHECK(distortion("carbon dioxide", "sigmag+").kind == DistortionKind::None);
+  // An atom's terms but S are degenerate, and it has nothing to vibrate.
+  CHECK(distortion("helium atom", "Fg").kind == DistortionKind::Atom);
+  CHECK(distortion("helium atom", "Sg").kind == DistortionKind::None);
 }
 
 TEST_CASE("every degenerate term of every non-linear molecule has an active mode") {

@@ -1,0 +1,40 @@
+#include "molecule/metals.hpp"
+
+#include <algorithm>
+#include <array>
+#include <cstddef>
+
+namespace irrepwise {
+namespace {
+
+constexpr std::array<int, 12> s_block = {3, 4, 11, 12, 19, 20, 37, 38, 55, 56, 87, 88};
+constexpr std::array<int, 12> p_block_metals = {13, 31, 49, 50, 81, 82, 83, 84, 113, 114, 115, 116};
+
+template <typename Accepts>
+std::vector<int> atoms_with(const Molecule& molecule, Accepts accepts) {
+  std::vector<int> atoms;
+  for (int atom = 0; atom < molecule.size(); ++atom) {
+    const int z = molecule.atoms()[static_cast<std::size_t>(atom)].atomic_number;
+    if (accepts(z)) atoms.push_back(atom);
+  }
+  return atoms;
+}
+
+}  // namespace
+
+bool is_d_or_f_block(int z) {
+  return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) ||
+         (z >= 89 && z <= 112);
+}
+
+bool is_metal(int z) {
+  return is_d_or_f_block(z) || std::find(s_block.begin(), s_block.end(), z) != s_block.end() ||
+         std::find(p_block_metals.begin(), p_block_metals.end(), z) != p_block_metals.end();
+}
+
+std::vector<int> metals_of_complex(const Molecule& molecule) {
+  std::vector<int> metals = atoms_with(molecule, is_d_or_f_block);
+  return metals.empty() ? atoms_with(molecule, is_metal) : metals;
+}
+
+}  // namespace irrepwise
