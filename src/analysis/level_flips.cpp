@@ -11,9 +11,8 @@
 namespace irrepwise {
 namespace {
 
-constexpr double worth_solving_ev = 1.0;     // larger changes are robust whatever the exact one is
-constexpr std::size_t most_solved = 3;       // of the parameters that flip soonest
-constexpr double undecided_below_ev = 1e-3;  // levels so near have no order worth the name
+constexpr double worth_solving_ev = 1.0;  // larger changes are robust whatever the exact one is
+constexpr std::size_t most_solved = 3;    // of the parameters that flip soonest
 constexpr double change_tolerance_ev = 1e-4;
 constexpr double smallest_slope = 1e-9;  // eV per unit: below it a parameter does not matter
 
@@ -104,6 +103,11 @@ double first_order_change(double gap_ev, double slope_of_gap) {
 
 void judge(LevelFlip& flip, const std::vector<Parameter>& parameters,
            const Eigen::VectorXd& slope_of_gap, const Resolver& resolver) {
+  if (flip.coincide()) {  // no order to lose, and slopes of nothing
+    flip.change_ev = 0.0;
+    flip.fragile = true;
+    return;
+  }
   std::vector<std::size_t> order;
   double soonest_other = std::numeric_limits<double>::infinity();
   for (std::size_t p = 0; p < parameters.size(); ++p) {
@@ -139,8 +143,6 @@ void judge(LevelFlip& flip, const std::vector<Parameter>& parameters,
       flip.change_ev = found;
     }
   }
-  // Levels that coincide have no order to lose.
-  if (flip.gap_ev < undecided_below_ev) flip.change_ev = 0.0;
   flip.fragile = flip.change_ev && std::abs(*flip.change_ev) < fragile_below_ev;
 }
 

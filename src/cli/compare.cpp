@@ -18,6 +18,7 @@ namespace {
 struct CompareOptions {
   std::vector<std::string> files;
   std::string reference;
+  std::vector<std::string> variants;
   CompareParts parts;
   std::optional<int> threads;
   OutputOptions output;
@@ -53,7 +54,8 @@ void check_columns(const Comparison& comparison, const char* option,
 
 void run(CompareOptions options) {
   options.parts.differences = !options.reference.empty();
-  const Compared result = compared(options.files, options.reference, options.threads);
+  const Compared result =
+      compared(options.files, options.reference, options.threads, options.variants);
   refuse_to_overwrite(options.output, result.files_read);
   check_columns(result.comparison, "--columns", options.parts.summary.columns);
   if (const std::string& key = options.parts.summary.sort_by; !key.empty()) {
@@ -80,6 +82,11 @@ Command add_compare(CLI::App& program) {
                   "Variant that the others are matched with (the first by default); adds "
                   "differences from it")
       ->option_text("NAME");
+  app->add_option("--variants", options->variants,
+                  "Which to compare, in this order, with commas; all by default. The first of them "
+                  "is the reference unless --reference names one")
+      ->delimiter(',')
+      ->option_text("NAMES");
   app->add_option("--columns", options->parts.summary.columns,
                   "Columns of the summary by their keys, with commas: name,homo_ev,gap_ev")
       ->delimiter(',')

@@ -1,5 +1,6 @@
 #include "cli/compared.hpp"
 
+#include <algorithm>
 #include <cstdio>
 #include <functional>
 #include <utility>
@@ -33,11 +34,27 @@ std::vector<VariantJob> all_variants(const std::vector<std::string>& files) {
   return variants;
 }
 
-int find_reference(const std::vector<VariantJob>& variants, const std::string& name) {
-  if (name.empty()) return 0;
+std::vector<std::string> names_of(const std::vector<VariantJob>& variants) {
   std::vector<std::string> names;
   for (const VariantJob& variant : variants) names.push_back(variant.name);
-  return find_variant("--reference", names, name);
+  return names;
+}
+
+int find_reference(const std::vector<VariantJob>& variants, const std::string& name) {
+  return name.empty() ? 0 : find_variant("--reference", names_of(variants), name);
+}
+
+std::vector<VariantJob> wanted_variants(std::vector<VariantJob> all, const std::string& reference,
+                                        const std::vector<std::string>& chosen) {
+  if (chosen.empty()) return all;
+  std::vector<int> wanted = find_variants("--variants", names_of(all), chosen);
+  const int first = reference.empty() ? wanted.front() : find_reference(all, reference);
+  if (std::find(wanted.begin(), wanted.end(), first) == wanted.end()) {
+    wanted.insert(wanted.begin(), first);
+  }
+  std::vector<VariantJob> variants;
+  for (const int i : wanted) variants.push_back(std::move(all[static_cast<std::size_t>(i)]));
+  return variants;
 }
 
 // A line that counts, on a terminal only: a pipe or a log gets nothing. It is gone at the end, also
@@ -68,8 +85,8 @@ class Progress {
 }  // namespace
 
 Compared compared(const std::vector<std::string>& files, const std::string& reference_name,
-                  std::optional<int> wanted_threads) {
-  const std::vector<VariantJob> jobs = all_variants(files);
+                  std::optional<int> wanted_threads, const std::vector<std::string>& chosen) {
+  const std::vector<VariantJob> jobs = wanted_variants(all_variants(files), reference_name, chosen);
   const int count = static_cast<int>(jobs.size());
   const int threads = wanted_threads.value_or(hardware_threads());
   Compared result;

@@ -1,9 +1,7 @@
 #include "cli/draw_variants.hpp"
 
-#include <algorithm>
 #include <cstddef>
 #include <string>
-#include <utility>
 #include <vector>
 
 #include <fmt/format.h>
@@ -14,42 +12,11 @@
 
 namespace irrepwise::cli {
 
-namespace {
-
-// A name may hold commas, at which the option was split: pieces that make a name together are one.
-std::vector<std::string> whole_names(const std::vector<std::string>& pieces,
-                                     const std::vector<std::string>& names) {
-  std::vector<std::string> out;
-  for (std::size_t i = 0; i < pieces.size();) {
-    std::string word = pieces[i];
-    std::size_t end = i + 1;
-    std::string longer = word;
-    for (std::size_t j = i + 1; j < pieces.size(); ++j) {
-      longer += "," + pieces[j];
-      if (std::find(names.begin(), names.end(), longer) == names.end()) continue;
-      word = longer;
-      end = j + 1;
-    }
-    out.push_back(std::move(word));
-    i = end;
-  }
-  return out;
-}
-
-}  // namespace
-
 std::vector<int> chosen_variants(const Comparison& comparison,
                                  const std::vector<std::string>& chosen) {
   std::vector<std::string> names;
   for (const VariantResult& variant : comparison.variants) names.push_back(variant.name);
-  std::vector<int> out;
-  for (const std::string& name : whole_names(chosen, names)) {
-    const int index = find_variant("--variants", names, name);
-    if (std::find(out.begin(), out.end(), index) != out.end()) {
-      throw Error(fmt::format("--variants: '{}' is named twice; name each once", name));
-    }
-    out.push_back(index);
-  }
+  std::vector<int> out = find_variants("--variants", names, chosen);
   if (out.size() > static_cast<std::size_t>(most_columns)) {
     throw Error(fmt::format(
         "--variants: {} are too many for one diagram, which holds up to {}; leave some out",

@@ -23,6 +23,26 @@ std::string listed(const std::vector<std::string>& names) {
   return joined(shown);
 }
 
+// A name may hold commas, at which the option was split: pieces that make a name together are one.
+std::vector<std::string> whole_names(const std::vector<std::string>& pieces,
+                                     const std::vector<std::string>& names) {
+  std::vector<std::string> out;
+  for (std::size_t i = 0; i < pieces.size();) {
+    std::string word = pieces[i];
+    std::size_t end = i + 1;
+    std::string longer = word;
+    for (std::size_t j = i + 1; j < pieces.size(); ++j) {
+      longer += "," + pieces[j];
+      if (std::find(names.begin(), names.end(), longer) == names.end()) continue;
+      word = longer;
+      end = j + 1;
+    }
+    out.push_back(std::move(word));
+    i = end;
+  }
+  return out;
+}
+
 }  // namespace
 
 void add_variant_option(CLI::App& command, std::string& name) {
@@ -41,6 +61,19 @@ int find_variant(const char* option, const std::vector<std::string>& names,
                           irrepwise::quoted(name),
                           nearest.empty() ? "" : " (did you mean '" + nearest + "'?)",
                           names.size() == 1 ? "is" : "are", listed(names)));
+}
+
+std::vector<int> find_variants(const char* option, const std::vector<std::string>& names,
+                               const std::vector<std::string>& pieces) {
+  std::vector<int> out;
+  for (const std::string& name : whole_names(pieces, names)) {
+    const int index = find_variant(option, names, name);
+    if (std::find(out.begin(), out.end(), index) != out.end()) {
+      throw Error(fmt::format("{}: '{}' is named twice; name each once", option, name));
+    }
+    out.push_back(index);
+  }
+  return out;
 }
 
 Job read_job_or_variant(const std::string& file, const std::string& variant) {

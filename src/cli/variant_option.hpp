@@ -20,6 +20,14 @@ void add_variant_option(CLI::App& command, std::string& name);
 [[nodiscard]] int find_variant(const char* option, const std::vector<std::string>& names,
                                const std::string& name);
 
+/// Several of them, as an option split them at commas, which names may hold as well.
+///
+/// @returns       their indices, in the order named
+/// @throws Error  as `find_variant`; for one named twice
+[[nodiscard]] std::vector<int> find_variants(const char* option,
+                                             const std::vector<std::string>& names,
+                                             const std::vector<std::string>& pieces);
+
 /// @param variant  the name of a variant; empty: the job as it is
 /// @throws Error   as `read_job`; for a file without variants, or without this one
 [[nodiscard]] Job read_job_or_variant(const std::string& file, const std::string& variant);

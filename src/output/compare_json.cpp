@@ -123,8 +123,12 @@ Json flip_json(const VariantResult& variant, const std::optional<LevelFlip>& fli
       {"upper", name_of_level(variant, flip->upper)},
       {"lower", name_of_level(variant, flip->lower)},
       {"gap_ev", finite_number(flip->gap_ev)},
-      {"parameter", parameters[static_cast<std::size_t>(flip->parameter)].name},
-      {"first_order_ev", finite_number(flip->first_order_ev)},
+      {"coincide", flip->coincide()},
+      {"parameter", flip->parameter
+                        ? Json(parameters[static_cast<std::size_t>(*flip->parameter)].name)
+                        : Json(nullptr)},
+      {"first_order_ev",
+       flip->parameter ? Json(finite_number(flip->first_order_ev)) : Json(nullptr)},
       {"change_ev", flip->change_ev ? Json(finite_number(*flip->change_ev)) : Json(nullptr)},
       {"fragile", flip->fragile}};
   if (flip->other) {

@@ -21,22 +21,25 @@ const Level& level_of(const VariantResult& variant, int level) {
 
 Cell percent(double share) { return Number{100.0 * share, 0}; }
 
-Row flip_row(const VariantResult& variant, const std::string& name, const char* side,
-             const LevelFlip& flip) {
-  const std::vector<Parameter>& parameters = variant.robustness.parameters;
-  Row row{{name, side,
-           readable_label(name_of_level(variant, flip.lower)) + " < " +
-               readable_label(name_of_level(variant, flip.upper)),
-           Number{flip.gap_ev, 3}, parameters[static_cast<std::size_t>(flip.parameter)].name,
-           Number{flip.first_order_ev, 3, true},
-           flip.change_ev ? Cell(Number{*flip.change_ev, 3, true}) : Cell()}};
-  if (flip.other) {
-    row.cells.emplace_back(parameters[static_cast<std::size_t>(*flip.other)].name);
-    row.cells.emplace_back(Number{100.0 * flip.other_relative, 1, true});
+Row flip_row(const VariantResult& variant, const char* side, const LevelFlip& flip) {
+  const auto parameter = [&](int index) {
+    return variant.robustness.parameters[static_cast<std::size_t>(index)].name;
+  };
+  const std::string lower = readable_label(name_of_level(variant, flip.lower));
+  const std::string upper = readable_label(name_of_level(variant, flip.upper));
+  Row row{{variant.name, side, lower + (flip.coincide() ? " = " : " < ") + upper,
+           Number{flip.gap_ev, 3}}};
+  if (flip.parameter) {
+    row.cells.emplace_back(parameter(*flip.parameter));
+    row.cells.emplace_back(Number{flip.first_order_ev, 3, true});
+    row.cells.emplace_back(flip.change_ev ? Cell(Number{*flip.change_ev, 3, true}) : Cell());
   } else {
-    row.cells.resize(9);
+    row.cells.resize(row.cells.size() + 3);
   }
-  row.cells.emplace_back(flip.fragile ? "fragile" : "");
+  row.cells.emplace_back(flip.other ? Cell(fmt::format("{} {:+.1f} %", parameter(*flip.other),
+                                                       100.0 * flip.other_relative))
+                                    : Cell());
+  row.cells.emplace_back(flip.coincide() ? "coincide" : flip.fragile ? "fragile" : "");
   return row;
 }
 
@@ -190,10 +193,13 @@ Table frontier_match_table(const Comparison& comparison) {
     }
   }
   table.notes.push_back(fmt::format(
-      "The level of each variant that resembles the reference's HOMO or LUMO most: by the overlap "
-      "of the two on the atoms that both molecules have and on donors in the same places, among "
-      "levels that share an irrep of the common group. shift: its energy less the reference's. "
-      "Levels within {} eV of the HOMO or LUMO count as it.",
+      "What resembles the reference's HOMO or LUMO most in each variant, of a degenerate one as "
+      "many "
+      "levels as it splits into: by the overlap on the atoms that both molecules have and on "
+      "donors "
+      "in the same places, among levels that share an irrep of the common group. shift: its energy "
+      "less the reference's. Levels within {} eV of the HOMO or LUMO count as it; in part: other "
+      "parts of the level do not.",
       tied_below_ev));
   return table;
 }
@@ -205,27 +211,28 @@ Table robustness_table(const Comparison& comparison) {
                    {"side", "side", "", Align::Left, 3, false},
                    {"pair", "order", "", Align::Left, 0, false},
                    {"gap_ev", "apart", "eV", Align::Decimal, 2, false},
-                   {"parameter", "change", "", Align::Left, 0, false},
+                   {"parameter", "parameter", "", Align::Left, 0, false},
                    {"first_order_ev", "by slope", "eV", Align::Decimal, 1, false},
                    {"change_ev", "solved", "eV", Align::Decimal, 0, false},
-                   {"other", "or", "", Align::Left, 4, false},
-                   {"other_percent", "by", "%", Align::Decimal, 4, false},
+                   {"other", "other parameter and change", "", Align::Left, 4, false},
                    {"fragile", "", "", Align::Left, 0, false}};
   for (const VariantResult& variant : comparison.variants) {
     const Robustness& robustness = variant.robustness;
     if (robustness.occupied) {
-      table.lines.emplace_back(flip_row(variant, variant.name, "occupied", *robustness.occupied));
+      table.lines.emplace_back(flip_row(variant, "occupied", *robustness.occupied));
     }
     if (robustness.empty) {
-      table.lines.emplace_back(flip_row(variant, variant.name, "empty", *robustness.empty));
+      table.lines.emplace_back(flip_row(variant, "empty", *robustness.empty));
     }
   }
   table.notes = {fmt::format(
       "The two highest occupied and the two lowest empty levels of different symmetry. by slope: "
-      "first order in the parameter; solved: computed again until the levels meet, where less than "
-      "1 eV is expected; or, by: the exponent or K that does it soonest, first order. fragile: "
-      "turns for less than {} eV in one H_ii.",
-      fragile_below_ev)};
+      "what "
+      "the parameter must change by, first order; solved: the same computed again until the levels "
+      "meet, where less than 1 eV is expected; other parameter: the exponent or K that does it "
+      "soonest, first order. fragile: turns for less than {} eV in one H_ii; coincide: less than "
+      "{} eV apart, thus without an order.",
+      fragile_below_ev, coincide_below_ev)};
   return table;
 }
 

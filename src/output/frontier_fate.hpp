@@ -30,10 +30,10 @@ struct FrontierFate {
                                 // a degenerate level that splits has several. Of a level tied with
                                 // the reference's, only what is at the frontier, where the
                                 // reference's own is not there whole
-  Stays stays = Stays::No;     // in part: some of the level's orbitals are at the frontier
-  bool found_whole = true;     // as many orbitals of the variant resemble it as it has
-  std::optional<int> now;      // the variant's HOMO (LUMO)
-  std::optional<int> now_was;  // the reference's level that this one was
+  Stays stays = Stays::No;      // in part: some of the level's orbitals are at the frontier
+  bool found_whole = true;      // as many orbitals of the variant resemble it as it has
+  std::optional<int> now;       // the variant's HOMO (LUMO)
+  std::optional<int> now_was;   // the reference's level that this one was
 };
 
 enum class FrontierSide { Homo, Lumo };

@@ -2,6 +2,7 @@
 
 #include <algorithm>
 #include <numeric>
+#include <string>
 
 #include "core/text.hpp"
 #include "output/display_width.hpp"
@@ -43,6 +44,15 @@ Printed print_column(const Table& table, std::size_t index) {
 int total_width(const std::vector<Printed>& columns) {
   return std::accumulate(columns.begin(), columns.end(), indent - gap,
                          [](int sum, const Printed& c) { return sum + gap + c.width; });
+}
+
+// With room for every column, wrapping ones as narrow as may be.
+int width_for_all(const std::vector<Printed>& columns) {
+  int width = total_width(columns);
+  for (const Printed& column : columns) {
+    if (column.column->wraps) width -= std::max(0, column.width - narrowest_wrap);
+  }
+  return width;
 }
 
 void narrow_wrapping(std::vector<Printed>& columns, int width, int narrowest) {
@@ -174,7 +184,10 @@ std::string table_text(const Table& table, int width) {
     ++row;
   }
   std::vector<std::string> notes = table.notes;
-  if (!dropped.empty()) notes.push_back("Left out for want of width: " + joined(dropped) + ".");
+  if (!dropped.empty()) {
+    notes.push_back("Left out for want of width: " + joined(dropped) + "; a width of " +
+                    std::to_string(width_for_all(all)) + " holds all.");
+  }
   for (const std::string& note : notes) {
     for (const std::string& line : wrapped(note, width - indent)) {
       add_line(out, std::string(indent, ' ') + line);

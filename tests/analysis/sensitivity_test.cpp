@@ -96,6 +96,18 @@ TEST_CASE("all energies scale with all H_ii, so that the slopes add up to the en
   CHECK(std::abs(sum - r.levels.levels[static_cast<std::size_t>(homo)].energy_ev) < 1e-9);
 }
 
+TEST_CASE("levels that coincide are said to, without a parameter that turns them") {
+  // Lone pairs of separate atoms, 20 Å apart: nothing splits σ from π, or g from u.
+  const Run r = run(Molecule({{9, {0, 0, 10}}, {9, {0, 0, -10}}}, -2));
+  const Robustness robustness = find_robustness(r.symmetry, r.basis, r.levels);
+  REQUIRE(robustness.occupied);
+  CHECK(robustness.occupied->coincide());
+  CHECK_FALSE(robustness.occupied->parameter);
+  CHECK_FALSE(robustness.occupied->other);
+  CHECK(robustness.occupied->change_ev == 0.0);
+  CHECK(robustness.fragile());
+}
+
 TEST_CASE("the change that flips two levels does so when it is made") {
   int solved = 0;
   for (const char* name :
@@ -114,8 +126,10 @@ TEST_CASE("the change that flips two levels does so when it is made") {
       CHECK(upper.irrep != lower.irrep);
       CHECK(upper.energy_ev - lower.energy_ev == flip->gap_ev);
       CHECK(flip->fragile == (flip->change_ev && std::abs(*flip->change_ev) < 0.3));
-      if (!flip->change_ev || flip->gap_ev < 1e-3) continue;
-      const Parameter& parameter = robustness.parameters[static_cast<std::size_t>(flip->parameter)];
+      REQUIRE(flip->parameter.has_value() == (flip->gap_ev >= 1e-3));
+      if (!flip->change_ev || !flip->parameter) continue;
+      const Parameter& parameter =
+          robustness.parameters[static_cast<std::size_t>(*flip->parameter)];
       CHECK(parameter.kind == ParameterKind::HIi);
       CAPTURE(std::string(name));
       // Just short of it the order is kept, just beyond it turned; found to 1e-4 eV.

@@ -67,7 +67,13 @@ TEST_CASE("a narrow terminal wraps first, then drops by priority and says so") {
   CHECK(wraps.find("Left out") == std::string::npos);
   CHECK(lines_of(wraps).size() > lines_of(wide).size());
   const std::string narrow = table_text(example(), 50);
-  CHECK(narrow.find("Left out for want of width: degeneracy.") != std::string::npos);
+  // And how wide it would have to be: at that width nothing is left out, below it something is.
+  CHECK(narrow.find("Left out for want of width: degeneracy; a") != std::string::npos);
+  const std::size_t number = narrow.find_first_of("0123456789", narrow.find("Left out"));
+  REQUIRE(number != std::string::npos);
+  const int enough = std::stoi(narrow.substr(number));
+  CHECK(table_text(example(), enough).find("Left out") == std::string::npos);
+  CHECK(table_text(example(), enough - 1).find("Left out") != std::string::npos);
   CHECK(narrow.find("made of") != std::string::npos);
 }
 
