@@ -18,8 +18,7 @@ install(DIRECTORY ${CMAKE_CURRENT_SOURCE_DIR}/ DESTINATION ${CMAKE_INSTALL_INCLU
   PATTERN "basis/parameter_yaml.hpp" EXCLUDE
   PATTERN "job/job_file.hpp" EXCLUDE
   PATTERN "output/json_text.hpp" EXCLUDE
-  PATTERN "output/table_document.hpp" EXCLUDE
-  PATTERN "output/table_json_value.hpp" EXCLUDE)
+  PATTERN "output/table_document.hpp" EXCLUDE)
 
 install(EXPORT irrepwiseTargets NAMESPACE irrepwise:: DESTINATION ${package_dir})
 configure_package_config_file(${CMAKE_CURRENT_SOURCE_DIR}/irrepwiseConfig.cmake.in

@@ -138,7 +138,7 @@ struct SigmaPair {
 std::vector<SigmaPair> sigma_pairs(const Molecule& molecule, const Basis& basis, int metal) {
   std::vector<SigmaPair> pairs;
   const Shell& shell = *d_shell(basis, metal);
-  for (const DonorSite& site : donor_sites(molecule, basis, metal)) {
+  for (const DonorSite& site : donor_sites(molecule, metal)) {
     for (const int donor : site.atoms) {
       const auto at = static_cast<std::size_t>(donor);
       const Eigen::Vector3d line = molecule.atoms()[at].position -
@@ -173,6 +173,7 @@ double sigma_overlap(const std::vector<SigmaPair>& pairs, const Shell& d_shell,
 // and no σ bonds stay within 0.07, bonding ones begin at 0.2.
 Sigma sigma_of(double overlap, double share) {
   constexpr double marked = 0.1;
+  if (share <= 0.0) return Sigma::None;  // Mulliken's may be negative
   if (overlap > marked * share) return Sigma::Bonding;
   return overlap < -marked * share ? Sigma::Antibonding : Sigma::None;
 }
@@ -280,7 +281,7 @@ std::optional<double> mean_energy(const Levels& levels, const std::vector<DConte
   double weights = 0.0, sum = 0.0;
   for (std::size_t k = 0; k < contents.size(); ++k) {
     const Level& level = levels.levels[k];
-    const double part = part_of(contents[k], irrep);
+    const double part = std::max(part_of(contents[k], irrep), 0.0);
     const bool is_chosen =
         std::find(chosen.begin(), chosen.end(), static_cast<int>(k)) != chosen.end();
     const bool joins = antibonding && contents[k].sigma == Sigma::Antibonding &&
@@ -289,7 +290,7 @@ std::optional<double> mean_energy(const Levels& levels, const std::vector<DConte
     weights += part * level.degeneracy;
     sum += part * level.degeneracy * level.energy_ev;
   }
-  if (!(weights > 0.0)) return {};  // Mulliken's shares may be negative
+  if (!(weights > 0.0)) return {};
   return sum / weights;
 }
 
@@ -336,17 +337,25 @@ void add_levels(const MolecularSymmetry& symmetry, const Basis& basis, const Lev
 // makes piano stools octahedra, as the trade counts them: opposite to the others.
 std::vector<Eigen::Vector3d> donor_directions(const std::vector<DonorSite>& sites) {
   constexpr std::size_t least_ring = 5, stool_sites = 4;
-  const auto is_ring = [&](const DonorSite& site) { return site.atoms.size() >= least_ring; };
-  const bool stool =
-      sites.size() == stool_sites && std::count_if(sites.begin(), sites.end(), is_ring) == 1;
+  constexpr double least_aside = 0.3;  // sine of the angle between a leg and the axis of the ring
+  const auto is_ring = [](const DonorSite& site) { return site.atoms.size() >= least_ring; };
   const auto ring = std::find_if(sites.begin(), sites.end(), is_ring);
   std::vector<Eigen::Vector3d> directions;
+  std::vector<Eigen::Vector3d> aside;  // from the axis, opposite to each leg
   for (const DonorSite& site : sites) {
-    if (!stool || !is_ring(site)) directions.push_back(site.direction);
-    if (!stool || is_ring(site)) continue;
-    const Eigen::Vector3d& axis = ring->direction;
-    const Eigen::Vector3d opposite = axis.dot(site.direction) * axis - site.direction;
-    directions.emplace_back((axis + std::numbers::sqrt2 * opposite.normalized()).normalized());
+    directions.push_back(site.direction);
+    if (ring == sites.end() || is_ring(site)) continue;
+    aside.push_back(ring->direction.dot(site.direction) * ring->direction - site.direction);
+  }
+  const bool stool = sites.size() == stool_sites && aside.size() + 1 == stool_sites &&
+                     std::all_of(aside.begin(), aside.end(), [](const Eigen::Vector3d& leg) {
+                       return leg.norm() > least_aside;
+                     });
+  if (!stool) return directions;
+  directions.erase(directions.begin() + (ring - sites.begin()));
+  for (const Eigen::Vector3d& leg : aside) {
+    directions.emplace_back(
+        (ring->direction + std::numbers::sqrt2 * leg.normalized()).normalized());
   }
   return directions;
 }
@@ -358,7 +367,7 @@ DBlock find_d_block(const MolecularSymmetry& symmetry, const Basis& basis, const
   DBlock block;
   block.metal = metal;
   const std::vector<Eigen::Vector3d> directions =
-      donor_directions(donor_sites(symmetry.molecule, basis, metal));
+      donor_directions(donor_sites(symmetry.molecule, metal));
   block.shape = nearest_polyhedron(directions);
   // Without a parent all d orbitals are alike, and no label is given.
   std::vector<DIrrep> irreps = {{"", Eigen::MatrixXd::Identity(5, 5), 5, false}};

@@ -45,9 +45,9 @@ struct DBlock {
 /// than d combinations.
 ///
 /// The parent is the group of the polyhedron that the donor sites are nearest to, laid over them as
-/// well as it goes; a ring with three other donors takes three places of an octahedron; a single
-/// donor makes it C∞v. The metal d part of a level, turned to the parent's frame, is projected on
-/// the parent's irreps.
+/// well as it goes; a ring with three other donors counts as three places opposite to them; a
+/// single donor makes it C∞v. The metal d part of a level, turned to the parent's frame, is
+/// projected on the parent's irreps.
 ///
 /// @param metal  has a d shell
 /// @source  derived by us; labels as in the character tables

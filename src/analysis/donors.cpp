@@ -33,11 +33,11 @@ std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis) {
   return metals;
 }
 
-std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis, int metal) {
-  const std::vector<int> metals = metal_atoms(molecule, basis);
+std::vector<DonorSite> donor_sites(const Molecule& molecule, int metal) {
+  const std::vector<int> metals = centre_atoms(molecule);
   std::vector<DonorSite> sites;
   for (int atom = 0; atom < molecule.size(); ++atom) {
-    if (atom == metal || std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
+    if (std::find(metals.begin(), metals.end(), atom) != metals.end()) continue;
     if (!are_bonded(molecule, metal, atom)) continue;
     // Joins every site that holds a neighbour.
     DonorSite site{{atom}};

@@ -24,8 +24,7 @@ struct DonorSite {
 /// Those of them with a d shell in the basis.
 [[nodiscard]] std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis);
 
-/// Bonded atoms of other kinds than metals, by covalent radii; in the order of their first atoms.
-[[nodiscard]] std::vector<DonorSite> donor_sites(const Molecule& molecule, const Basis& basis,
-                                                 int metal);
+/// Bonded atoms outside the d and f blocks, by covalent radii; in the order of their first atoms.
+[[nodiscard]] std::vector<DonorSite> donor_sites(const Molecule& molecule, int metal);
 
 }  // namespace irrepwise

@@ -100,8 +100,7 @@ MatchReference make_match_reference(const MolecularSymmetry& symmetry, const Bas
 
 Matching match_levels(const MatchReference& reference, const MolecularSymmetry& symmetry,
                       const Basis& basis, const Levels& levels) {
-  const SharedAtoms shared =
-      find_shared_atoms(reference.symmetry, reference.basis, symmetry, basis);
+  const SharedAtoms shared = find_shared_atoms(reference.symmetry, symmetry);
   const CommonSymmetry common =
       common_symmetry(reference.symmetry.group, symmetry.group, shared.turn);
   const Eigen::MatrixXd overlaps =

@@ -37,10 +37,13 @@ Kind kind_of(const Molecule& molecule, const std::vector<int>& metals, int donor
           ligand_formula(molecule, donor), n_metals > 1};
 }
 
+constexpr double rounding =
+    1e-6;  // of a cosine or a distance in Å: what lies at a limit stays there
+
 // The site most nearly across the metal.
 const DonorSite* opposite_site(const std::vector<DonorSite>& sites, const DonorSite& site) {
   const DonorSite* found = nullptr;
-  double least = std::cos(opposite_degrees * std::numbers::pi / 180.0);
+  double least = std::cos(opposite_degrees * std::numbers::pi / 180.0) + rounding;
   for (const DonorSite& other : sites) {
     const double cosine = site.direction.dot(other.direction);
     if (cosine > least) continue;
@@ -50,19 +53,21 @@ const DonorSite* opposite_site(const std::vector<DonorSite>& sites, const DonorS
   return found;
 }
 
-int first_equivalent(const MolecularSymmetry& symmetry, int atom) {
+// Among the operations that leave the metal in place: others may exchange what stands opposite.
+int first_equivalent(const MolecularSymmetry& symmetry, int metal, int atom) {
   int first = atom;
   for (const std::vector<int>& image : symmetry.images) {
+    if (image[static_cast<std::size_t>(metal)] != metal) continue;
     first = std::min(first, image[static_cast<std::size_t>(atom)]);
   }
   return first;
 }
 
-std::vector<Donor> donors_of(const MolecularSymmetry& symmetry, const Basis& basis,
-                             const Populations& populations, int metal) {
+std::vector<Donor> donors_of(const MolecularSymmetry& symmetry, const Populations& populations,
+                             int metal) {
   const Molecule& molecule = symmetry.molecule;
   const std::vector<int> metals = centre_atoms(molecule);
-  const std::vector<DonorSite> sites = donor_sites(molecule, basis, metal);
+  const std::vector<DonorSite> sites = donor_sites(molecule, metal);
   std::vector<Donor> donors;
   for (const DonorSite& site : sites) {
     const DonorSite* const across = opposite_site(sites, site);
@@ -70,11 +75,16 @@ std::vector<Donor> donors_of(const MolecularSymmetry& symmetry, const Basis& bas
       Donor donor;
       donor.bond.donor = atom;
       donor.kind = kind_of(molecule, metals, atom);
-      donor.first_equivalent = first_equivalent(symmetry, atom);
+      donor.first_equivalent = first_equivalent(symmetry, metal, atom);
       if (across) {
-        const Kind other = kind_of(molecule, metals, across->atoms.front());
-        donor.opposite = other == donor.kind ? Opposite::Like : Opposite::Other;
-        donor.opposite_element = other.element;
+        // Of a site of several elements the heaviest names it, unless it holds a like donor.
+        donor.opposite = Opposite::Other;
+        for (const int opposite : across->atoms) {
+          const Kind other = kind_of(molecule, metals, opposite);
+          if (other == donor.kind) donor.opposite = Opposite::Like;
+          donor.opposite_element = std::max(donor.opposite_element, other.element);
+        }
+        if (donor.opposite == Opposite::Like) donor.opposite_element = donor.kind.element;
       }
       for (const OverlapPopulation& pair : populations.overlap_populations) {
         if (pair.atom_a != std::min(atom, metal) || pair.atom_b != std::max(atom, metal)) continue;
@@ -106,7 +116,7 @@ std::optional<double> length_limit(const std::vector<MetalBond>& bonds) {
   double widest = length_gap_angstrom;
   for (std::size_t i = 1; i < distances.size(); ++i) {
     const double gap = distances[i] - distances[i - 1];
-    if (gap <= widest) continue;
+    if (gap <= widest + rounding) continue;
     widest = gap;
     limit = 0.5 * (distances[i] + distances[i - 1]);
   }
@@ -173,9 +183,9 @@ std::string ligand_formula(const Molecule& molecule, int donor) {
   return hill_formula(Molecule(std::move(atoms), 0));
 }
 
-std::vector<BondType> bond_types(const MolecularSymmetry& symmetry, const Basis& basis,
-                                 const Populations& populations, int metal) {
-  std::vector<Donor> left = donors_of(symmetry, basis, populations, metal);
+std::vector<BondType> bond_types(const MolecularSymmetry& symmetry, const Populations& populations,
+                                 int metal) {
+  std::vector<Donor> left = donors_of(symmetry, populations, metal);
   std::vector<BondType> types;
   while (!left.empty()) {
     const Donor first = left.front();

@@ -41,15 +41,14 @@ inline constexpr double opposite_degrees = 150.0;
 /// A gap in the distances of one type that parts long from short bonds. A choice of ours.
 inline constexpr double length_gap_angstrom = 0.05;
 
-/// Donors of one type have the element, the ligand's formula and what stands opposite in common,
-/// all or none of them bridge, and no gap parts their distances; equivalent donors therefore are of
-/// one type.
+/// Donors of one type have the element and the ligand's formula in common, and whether a like
+/// donor, another or none stands opposite; all or none of them bridge, and no gap parts their
+/// distances. Donors that are equivalent about the metal therefore are of one type.
 ///
 /// @param metal  of the d or f block, with or without a d shell
 /// @returns  in the order of their first donors
 [[nodiscard]] std::vector<BondType> bond_types(const MolecularSymmetry& symmetry,
-                                               const Basis& basis, const Populations& populations,
-                                               int metal);
+                                               const Populations& populations, int metal);
 
 /// @returns  formula of what hangs together with the donor when all metals are taken away
 [[nodiscard]] std::string ligand_formula(const Molecule& molecule, int donor);

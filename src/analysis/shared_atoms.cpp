@@ -30,14 +30,14 @@ struct Laid {
 
 constexpr std::size_t most_landmarks = 12;
 
-Laid laid_out(const Molecule& molecule, const Basis& basis, bool on_metal) {
+Laid laid_out(const Molecule& molecule, bool on_metal) {
   Laid laid;
   laid.molecule = &molecule;
   const std::vector<int> metals = on_metal ? centre_atoms(molecule) : std::vector<int>{};
   if (!metals.empty()) {
     laid.metal = metals.front();
     laid.anchor = molecule.atoms()[static_cast<std::size_t>(metals.front())].position;
-    for (const DonorSite& site : donor_sites(molecule, basis, metals.front())) {
+    for (const DonorSite& site : donor_sites(molecule, metals.front())) {
       Eigen::Vector3d centroid = Eigen::Vector3d::Zero();
       for (const int atom : site.atoms) {
         centroid += molecule.atoms()[static_cast<std::size_t>(atom)].position - laid.anchor;
@@ -230,13 +230,12 @@ Eigen::Matrix3d refined(const Laid& first, const Laid& second, const Best& best)
 
 }  // namespace
 
-SharedAtoms find_shared_atoms(const MolecularSymmetry& first, const Basis& first_basis,
-                              const MolecularSymmetry& second, const Basis& second_basis) {
+SharedAtoms find_shared_atoms(const MolecularSymmetry& first, const MolecularSymmetry& second) {
   // Where one has nothing to lay on a metal, all atoms count.
   const bool on_metals =
       !centre_atoms(first.molecule).empty() && !centre_atoms(second.molecule).empty();
-  const Laid a = laid_out(first.molecule, first_basis, on_metals);
-  const Laid b = laid_out(second.molecule, second_basis, on_metals);
+  const Laid a = laid_out(first.molecule, on_metals);
+  const Laid b = laid_out(second.molecule, on_metals);
   Best best;
   consider(a, b, first.rotation * second.rotation.transpose(), best);
   const std::size_t most = std::min(first.molecule.atoms().size(), second.molecule.atoms().size());

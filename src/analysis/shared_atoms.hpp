@@ -37,8 +37,6 @@ struct SharedAtoms {
 ///
 /// @source  derived by us
 [[nodiscard]] SharedAtoms find_shared_atoms(const MolecularSymmetry& first,
-                                            const Basis& first_basis,
-                                            const MolecularSymmetry& second,
-                                            const Basis& second_basis);
+                                            const MolecularSymmetry& second);
 
 }  // namespace irrepwise

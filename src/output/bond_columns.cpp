@@ -129,15 +129,17 @@ std::string one_opposite(const Comparison& comparison,
 
 std::string key_text(const std::string& element, const Key& key, const Differs& differs) {
   std::string text = "bond_" + element;
-  if (key.bridging) text += "_bridging";
+  if (differs.bridging) text += key.bridging ? "_bridging" : "_terminal";
   if (differs.ligand) text += "_" + key.ligand;
   if (differs.opposite) {
     text += key.opposite == Opposite::None   ? "_none"
             : key.opposite == Opposite::Like ? "_like"
                                              : "_other";
   }
-  if (key.length != BondLength::Alike) {
-    text += key.length == BondLength::Short ? "_short" : "_long";
+  if (differs.length) {
+    text += key.length == BondLength::Alike   ? "_alike"
+            : key.length == BondLength::Short ? "_short"
+                                              : "_long";
   }
   return text;
 }
@@ -151,8 +153,10 @@ std::string title_text(const std::string& element, const Key& key, const Differs
             : across.empty()               ? " trans other"
                                            : " trans " + across;
   }
-  if (key.length != BondLength::Alike) {
-    text += key.length == BondLength::Short ? ", short" : ", long";
+  if (differs.length) {
+    text += key.length == BondLength::Alike   ? ", alike"
+            : key.length == BondLength::Short ? ", short"
+                                              : ", long";
   }
   return text;
 }

@@ -27,7 +27,7 @@ enum class SummaryPart { Whole, Frontier, Metal };
 /// @throws Error  for a key that is no column, with the nearest and the list of all
 void check_columns(const Comparison& comparison, const std::vector<std::string>& keys);
 
-/// Energies in eV. Bonds are those from the metal, by the element of the donor: mean overlap
+/// Energies in eV. Bonds are those from the metal, by type (`bond_columns`): mean overlap
 /// population. Rows without a value for the column sorted by come last.
 ///
 /// @throws Error  for a key that is no column, with the nearest and the list of all

@@ -18,7 +18,7 @@ MetalFacts metal_facts(const LevelsResult& result, int metal) {
     facts.d_population +=
         result.populations.gross_by_orbital.segment(shell.first_orbital, shell.size()).sum();
   }
-  facts.bonds = bond_types(result.symmetry, result.basis, result.populations, metal);
+  facts.bonds = bond_types(result.symmetry, result.populations, metal);
   if (!facts.has_d_shell) return facts;
   facts.d_block =
       find_d_block(result.symmetry, result.basis, result.levels, result.populations, metal);

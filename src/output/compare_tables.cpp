@@ -119,7 +119,8 @@ Table d_block_table(const Comparison& comparison) {
     }
   }
   table.notes = {
-      "parent: the irrep that the metal d part has most of in the ideal polyhedron of the donor "
+      "parent: the irrep whose d orbitals the level stands for in the ideal polyhedron of the "
+      "donor "
       "atoms; d share: of the whole level, Mulliken's."};
   return table;
 }

@@ -267,7 +267,8 @@ class Layout {
   [[nodiscard]] std::string frame_words() const {
     std::string words = fmt::format(
         "Local frames: z of an atom points to {}, σ along it, π across; πy stands across "
-        "the mirror plane that holds the line, and symmetry carries it from atom to atom, sign "
+        "the mirror plane that holds the line, or the plane of the atom's bonds, and symmetry "
+        "carries it from atom to atom, sign "
         "included.",
         table_.centre_words);
     words += table_.frame_sentences;

@@ -200,7 +200,8 @@ std::vector<Table> salc_tables(const SymmetryResult& result) {
       tables.back().notes.push_back(fmt::format(
           "Orbitals of each atom's own frame: z of an atom points to {}, x and y across it; y "
           "stands "
-          "across the mirror plane that holds the line, and symmetry carries it from atom to "
+          "across the mirror plane that holds the line, or the plane of the atom's bonds, and "
+          "symmetry carries it from atom to "
           "atom.{}",
           frame_goal_words(result.symmetry.molecule, result.frames, result.central_atom),
           further_frame_sentences(result.frames)));

@@ -32,7 +32,7 @@ Bonds bonds_of(const Molecule& molecule) {
   Run r = run(molecule);
   Populations populations = mulliken_populations(r.symmetry, r.basis, r.levels);
   const int metal = metal_atoms(r.symmetry.molecule, r.basis).front();
-  std::vector<BondType> types = bond_types(r.symmetry, r.basis, populations, metal);
+  std::vector<BondType> types = bond_types(r.symmetry, populations, metal);
   return {std::move(r), std::move(populations), std::move(types)};
 }
 
@@ -118,7 +118,7 @@ TEST_CASE("equivalent donors are of one type, the types hold every donor once") 
       }
     }
     // The weighted mean of the types is the mean over the element, taken from the pairs.
-    for (const DonorSite& site : donor_sites(r.symmetry.molecule, r.basis, metals.front())) {
+    for (const DonorSite& site : donor_sites(r.symmetry.molecule, metals.front())) {
       for (const int donor : site.atoms) {
         const int first = std::min(donor, metals.front()), second = std::max(donor, metals.front());
         for (const OverlapPopulation& pair : bonds.populations.overlap_populations) {
@@ -158,5 +158,51 @@ TEST_CASE("turning and renumbering change neither types nor what they hold") {
         CHECK(std::abs(after[i].second - before[i].second) < 1e-7);
       }
     }
+  }
+}
+
+TEST_CASE("operations that exchange two metals do not mix what stands opposite at either") {
+  // trans-[Pt2Cl2(μ-Cl)2(PH3)2], C2h: each bridge is trans to Cl at one metal, to P at the other.
+  const double s = 1.63;  // Å; bonds of 2.3 Å
+  const Molecule dimer({{78, {s, 0, 0}},
+                        {78, {-s, 0, 0}},
+                        {17, {0, s, 0}},
+                        {17, {0, -s, 0}},
+                        {17, {s + s, s, 0}},
+                        {17, {-s - s, -s, 0}},
+                        {15, {s + s, -s, 0}},
+                        {15, {-s - s, s, 0}}},
+                       -4);
+  const Bonds bonds = bonds_of(dimer);
+  REQUIRE(bonds.r.symmetry.group.symbol().name() == "C2h");
+  std::map<int, std::string> opposite;
+  for (const BondType& type : bonds.types) {
+    for (const MetalBond& bond : type.bonds) opposite[bond.donor] = type.opposite_element;
+  }
+  CHECK(bonds.types.front().bonds.size() == 2);
+  CHECK(opposite[2] == "Cl, P");  // the type of both bridges
+  CHECK(opposite[3] == "Cl, P");
+  CHECK(opposite[4] == "Cl");
+  CHECK(opposite[6] == "Cl");
+}
+
+TEST_CASE("a metal without a d shell is no donor of another") {
+  const Molecule chain(
+      {{17, {0, 0, -3.4}}, {30, {0, 0, -1.2}}, {30, {0, 0, 1.2}}, {17, {0, 0, 3.4}}}, 0);
+  const Run r = run(chain);
+  const Populations populations = mulliken_populations(r.symmetry, r.basis, r.levels);
+  const std::vector<BondType> types = bond_types(r.symmetry, populations, 1);
+  CHECK(words(types) == Words{"1 Cl of Cl"});
+}
+
+TEST_CASE("a gap of the very limit is none, however the molecule lies") {
+  for (const unsigned seed : {1u, 2u, 3u, 4u}) {
+    const Molecule square({{78, {0, 0, 0}},
+                           {17, {2.20, 0, 0}},
+                           {17, {-2.20, 0, 0}},
+                           {17, {0, 2.25, 0}},
+                           {17, {0, -2.25, 0}}},
+                          -2);
+    CHECK(bonds_of(moved(square, seed).molecule).types.size() == 1);
   }
 }

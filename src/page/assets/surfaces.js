@@ -42,7 +42,8 @@ function parted({vertices, normals, triangles, colour}) {
     const rise = [0, 1, 2].reduce((sum, k) => sum + along[k] * m[k], 0);
     const fall = [0, 1, 2].reduce((sum, k) => sum - along[k] * n[k], 0);
     places.push(...[0, 1, 2].map(k => (p[k] + q[k]) / 2 - (rise * m[k] + fall * n[k]) / 8));
-    directions.push(...normalised([0, 1, 2].map(k => m[k] + n[k])));
+    const sum = [0, 1, 2].map(k => m[k] + n[k]);
+    directions.push(...(Math.hypot(...sum) > 1e-6 ? normalised(sum) : m));
     middles.set(key, places.length / 3 - 1);
     return places.length / 3 - 1;
   };
@@ -57,6 +58,6 @@ function parted({vertices, normals, triangles, colour}) {
 
 function roundedSurface(packed, colour) {
   let surface = unpackedSurface(packed, colour);
-  while (surface && 4 * surface.triangles.length / 3 <= ENOUGH_TRIANGLES) surface = parted(surface);
+  while (surface?.triangles.length && 4 * surface.triangles.length / 3 <= ENOUGH_TRIANGLES) surface = parted(surface);
   return surface;
 }
