@@ -1,7 +1,7 @@
 #!/usr/bin/python3
 """Repeats recorded runs of the program and compares what it prints.
 
-    run.py --program DIR --inputs DIR [--rewrite] TRANSCRIPT...
+    run.py --program DIR --inputs DIR [--rewrite] RECORDING...
 
 A recording is text. A line that starts with "$ " is a bash command, lines right after it that
 start with "> " go on with it, lines that start with "%%" are comment, and every other line up to
