@@ -155,7 +155,9 @@ def check_levels(driver):
         other.find_element(By.CLASS_NAME, "hit")).click().perform()
     settle(driver)
     expect(panel(driver) != before, "a click on a level does not change the panel")
-    expect(picture(driver) != seen, "a click on a level does not change the picture")
+    bare = "The page has no surface"
+    expect(picture(driver) != seen or (bare in before and bare in panel(driver)),
+           "a click on a level does not change the picture")
 
 
 def check_rounding(driver):

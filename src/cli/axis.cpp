@@ -31,11 +31,11 @@ int find_atom(const std::string& name, const Molecule& molecule) {
     if (names.back() == name) return atom;
   }
   const std::string nearest = nearest_word(name, names);
-  throw Error(
-      fmt::format("no atom is called {}{}; atoms are named by symbol and number in the "
-                  "order of the input, {} to {}",
-                  quoted(name), nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
-                  names.front(), names.back()));
+  throw Error(fmt::format(
+      "no atom is called {}{}; atoms are named by symbol and number in the "
+      "order of the input, {} to {}",
+      irrepwise::quoted(name), nearest.empty() ? "" : ", did you mean '" + nearest + "'?",
+      names.front(), names.back()));
 }
 
 }  // namespace
@@ -53,13 +53,14 @@ AxisDirection parse_axis(const std::string& text, const Molecule& molecule) {
     throw Error(
         fmt::format("{} is no axis; expected a vector such as 0,0,1 or one to three atoms "
                     "such as {}",
-                    quoted(text), atom_name(molecule, 0)));
+                    irrepwise::quoted(text), atom_name(molecule, 0)));
   }
   std::vector<int> atoms;
   for (const std::string& part : parts) {
     const int atom = find_atom(part, molecule);
     if (std::find(atoms.begin(), atoms.end(), atom) != atoms.end()) {
-      throw Error(fmt::format("{} names {} twice; give different atoms", quoted(text), part));
+      throw Error(
+          fmt::format("{} names {} twice; give different atoms", irrepwise::quoted(text), part));
     }
     atoms.push_back(atom);
   }

@@ -89,7 +89,7 @@ class Chooser {
         throw Error(
             fmt::format("{} is no choice of levels; expected frontier, or frontier+5 for "
                         "five more levels on either side",
-                        quoted(given)));
+                        irrepwise::quoted(given)));
       }
       more = std::min(*number, n_);
     }
@@ -112,22 +112,22 @@ class Chooser {
     const std::optional<double> to_ev = last.empty() ? unlimited : energy_ev(last);
     if (first.empty() && last.empty()) {
       throw Error(fmt::format("{} has neither end; write a range such as homo-2..lumo+2 or -14..-8",
-                              quoted(given)));
+                              irrepwise::quoted(given)));
     }
     if (from_ev && to_ev) return add_energies(*from_ev, *to_ev, given);
     const int from = first.empty() ? 0 : level_of(first, given);
     const int to = last.empty() ? n_ - 1 : level_of(last, given);
     if (from > to) {
-      throw Error(
-          fmt::format("{} runs downwards in energy; write the lower level first", quoted(given)));
+      throw Error(fmt::format("{} runs downwards in energy; write the lower level first",
+                              irrepwise::quoted(given)));
     }
     add_range(from, to);
   }
 
   void add_energies(double from_ev, double to_ev, const std::string& given) {
     if (from_ev > to_ev) {
-      throw Error(
-          fmt::format("{} runs downwards in energy; write the lower end first", quoted(given)));
+      throw Error(fmt::format("{} runs downwards in energy; write the lower end first",
+                              irrepwise::quoted(given)));
     }
     bool any = false;
     for (int level = 0; level < n_; ++level) {
@@ -138,7 +138,7 @@ class Chooser {
     }
     if (any) return;
     throw Error(fmt::format("{}: no level lies there; they run from {:.3f} to {:.3f} eV",
-                            quoted(given), levels_.levels.front().energy_ev,
+                            irrepwise::quoted(given), levels_.levels.front().energy_ev,
                             levels_.levels.back().energy_ev));
   }
 
@@ -154,7 +154,7 @@ class Chooser {
       throw Error(
           fmt::format("{} stands for the d block, and no atom here has a d shell; name "
                       "levels, an irrep or frontier",
-                      quoted(given)));
+                      irrepwise::quoted(given)));
     }
     std::sort(found.begin(), found.end());
     for (const int level : found) add_level(level);
@@ -165,7 +165,7 @@ class Chooser {
     const std::optional<int> partner = parse_whole_number(number);
     if (!partner || *partner < 1 || *partner > degeneracy) {
       throw Error(
-          fmt::format("{}: {} has {}; give a number from 1 to {}", quoted(given),
+          fmt::format("{}: {} has {}; give a number from 1 to {}", irrepwise::quoted(given),
                       names_[static_cast<std::size_t>(level)],
                       degeneracy == 1 ? "one partner only" : fmt::format("{} partners", degeneracy),
                       degeneracy));
@@ -192,14 +192,14 @@ class Chooser {
     throw Error(fmt::format(
         "no level is called {}{}; levels are named as `irrepwise levels` prints them (2e1g), or "
         "homo, lumo, homo-1 …; an irrep (e1g) stands for all its levels",
-        quoted(given), nearest.empty() ? "" : ", did you mean '" + nearest + "'?"));
+        irrepwise::quoted(given), nearest.empty() ? "" : ", did you mean '" + nearest + "'?"));
   }
 
   [[nodiscard]] int frontier_level(const std::string& word, const std::string& given) const {
     const bool homo = word.starts_with("homo");
     const std::optional<int> start = homo ? levels_.frontier.homo : levels_.frontier.lumo;
     if (!start) {
-      throw Error(fmt::format("{}: no level is {}; name the level itself", quoted(given),
+      throw Error(fmt::format("{}: no level is {}; name the level itself", irrepwise::quoted(given),
                               homo ? "occupied" : "empty"));
     }
     int shift = 0;
@@ -208,16 +208,17 @@ class Chooser {
       const std::optional<int> number =
           has_sign ? parse_whole_number(word.substr(4)) : std::nullopt;
       if (!number) {
-        throw Error(fmt::format("{} is no level; expected homo, homo-1, lumo+2 …", quoted(given)));
+        throw Error(fmt::format("{} is no level; expected homo, homo-1, lumo+2 …",
+                                irrepwise::quoted(given)));
       }
       shift = *number;
     }
     // Checked without adding, which could overflow.
     if (shift < -*start || shift > n_ - 1 - *start) {
-      throw Error(
-          fmt::format("{} lies beyond the levels, of which there are {}: {} below and {} "
-                      "above the {}",
-                      quoted(given), n_, *start, n_ - 1 - *start, homo ? "HOMO" : "LUMO"));
+      throw Error(fmt::format(
+          "{} lies beyond the levels, of which there are {}: {} below and {} "
+          "above the {}",
+          irrepwise::quoted(given), n_, *start, n_ - 1 - *start, homo ? "HOMO" : "LUMO"));
     }
     return *start + shift;
   }
