@@ -18,15 +18,6 @@ bool has_d_shell(const Basis& basis, int atom) {
 
 }  // namespace
 
-std::vector<int> centre_atoms(const Molecule& molecule) {
-  std::vector<int> centres;
-  for (int atom = 0; atom < molecule.size(); ++atom) {
-    const int z = molecule.atoms()[static_cast<std::size_t>(atom)].atomic_number;
-    if (is_d_or_f_block(z)) centres.push_back(atom);
-  }
-  return centres;
-}
-
 std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis) {
   std::vector<int> metals = centre_atoms(molecule);
   std::erase_if(metals, [&](int atom) { return !has_d_shell(basis, atom); });

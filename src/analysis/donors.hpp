@@ -18,10 +18,7 @@ struct DonorSite {
                                                         // centroid
 };
 
-/// Atoms of the d and f blocks, also those without a d shell in the basis, such as zinc.
-[[nodiscard]] std::vector<int> centre_atoms(const Molecule& molecule);
-
-/// Those of them with a d shell in the basis.
+/// Atoms of the d and f blocks with a d shell in the basis.
 [[nodiscard]] std::vector<int> metal_atoms(const Molecule& molecule, const Basis& basis);
 
 /// Bonded atoms outside the d and f blocks, by covalent radii; in the order of their first atoms.

@@ -8,7 +8,9 @@
 #include <utility>
 
 #include "analysis/donors.hpp"
+#include "molecule/bonded_atoms.hpp"
 #include "molecule/element.hpp"
+#include "molecule/metals.hpp"
 
 namespace irrepwise {
 namespace {
@@ -153,6 +155,30 @@ std::string elements_text(std::vector<int> elements) {
 
 }  // namespace
 
+const char* opposite_word(Opposite opposite) {
+  switch (opposite) {
+    case Opposite::None:
+      return "none";
+    case Opposite::Like:
+      return "like";
+    case Opposite::Other:
+      return "other";
+  }
+  return "";
+}
+
+const char* length_word(BondLength length) {
+  switch (length) {
+    case BondLength::Alike:
+      return "alike";
+    case BondLength::Short:
+      return "short";
+    case BondLength::Long:
+      return "long";
+  }
+  return "";
+}
+
 double BondType::overlap_population() const {
   double sum = 0.0;
   for (const MetalBond& bond : bonds) sum += bond.overlap_population;
@@ -171,9 +197,8 @@ std::string ligand_formula(const Molecule& molecule, int donor) {
   std::vector<int> reached = {donor};
   seen[static_cast<std::size_t>(donor)] = true;
   for (std::size_t next = 0; next < reached.size(); ++next) {
-    for (int atom = 0; atom < molecule.size(); ++atom) {
+    for (const int atom : bonded_atoms(molecule, reached[next])) {
       if (seen[static_cast<std::size_t>(atom)]) continue;
-      if (!are_bonded(molecule, reached[next], atom)) continue;
       seen[static_cast<std::size_t>(atom)] = true;
       reached.push_back(atom);
     }

@@ -14,6 +14,12 @@ enum class Opposite { None, Like, Other };
 /// Of donors that are otherwise of one type, the nearer and the farther ones.
 enum class BondLength { Alike, Short, Long };
 
+/// "none", "like", "other"
+[[nodiscard]] const char* opposite_word(Opposite opposite);
+
+/// "alike", "short", "long"
+[[nodiscard]] const char* length_word(BondLength length);
+
 struct MetalBond {
   int donor = 0;  // index of the atom
   double overlap_population = 0.0;

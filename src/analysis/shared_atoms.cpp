@@ -9,6 +9,8 @@
 
 #include "analysis/donors.hpp"
 #include "analysis/nearest_polyhedron.hpp"
+#include "molecule/bonded_atoms.hpp"
+#include "molecule/metals.hpp"
 
 namespace irrepwise {
 namespace {
@@ -156,12 +158,9 @@ struct Best {
 };
 
 bool is_terminal(const Laid& laid, int atom) {
-  for (int other = 0; other < laid.molecule->size(); ++other) {
-    if (other != atom && other != *laid.metal && are_bonded(*laid.molecule, atom, other)) {
-      return false;
-    }
-  }
-  return true;
+  const std::vector<int> neighbours = bonded_atoms(*laid.molecule, atom);
+  return std::all_of(neighbours.begin(), neighbours.end(),
+                     [&](int other) { return other == *laid.metal; });
 }
 
 std::vector<ReplacedDonor> donors_replaced(const Laid& first, const Laid& second,

@@ -7,6 +7,7 @@
 #include "cli/commands.hpp"
 #include "cli/compared.hpp"
 #include "cli/output_options.hpp"
+#include "core/at_place.hpp"
 #include "core/error.hpp"
 #include "output/compare_columns.hpp"
 #include "output/compare_json.hpp"
@@ -43,23 +44,14 @@ std::string written(const Comparison& comparison, const CompareOptions& options)
   return written_report(compare_report(comparison, options.parts), options.output);
 }
 
-void check_columns(const Comparison& comparison, const char* option,
-                   const std::vector<std::string>& keys) {
-  try {
-    irrepwise::check_columns(comparison, keys);
-  } catch (const Error& error) {
-    throw error_at(option, error);
-  }
-}
-
 void run(CompareOptions options) {
   options.parts.differences = !options.reference.empty();
   const Compared result =
       compared(options.files, options.reference, options.threads, options.variants);
   refuse_to_overwrite(options.output, result.files_read);
-  check_columns(result.comparison, "--columns", options.parts.summary.columns);
+  at_place("--columns", [&] { check_columns(result.comparison, options.parts.summary.columns); });
   if (const std::string& key = options.parts.summary.sort_by; !key.empty()) {
-    check_columns(result.comparison, "--sort", {key});
+    at_place("--sort", [&] { check_columns(result.comparison, {key}); });
   }
   const std::string text = written(result.comparison, options);
   print_warnings(options.output, warnings_of(result.comparison));

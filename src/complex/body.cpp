@@ -12,6 +12,7 @@
 #include <fmt/format.h>
 
 #include "core/error.hpp"
+#include "molecule/bonded_atoms.hpp"
 #include "molecule/element.hpp"
 #include "symmetry/operation.hpp"
 
@@ -146,10 +147,7 @@ double scale_for_bite(const SeatedLigand& seated, double d1, double d2, double b
 std::vector<Atom> with_angle(const Ligand& ligand, const Binding& binding, double angle_degrees) {
   const Molecule free(ligand.atoms, 0);
   const int donor = binding.teeth[0][0];
-  std::vector<int> next;
-  for (int atom = 0; atom < free.size(); ++atom) {
-    if (atom != donor && are_bonded(free, donor, atom)) next.push_back(atom);
-  }
+  const std::vector<int> next = bonded_atoms(free, donor);
   if (next.size() != 1) {
     throw Error(fmt::format("`angle` is for a ligand with one atom behind the donor; {} has {}",
                             ligand.name, next.size()));

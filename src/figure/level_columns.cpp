@@ -8,6 +8,7 @@
 #include "figure/level_lanes.hpp"
 #include "figure/level_placing.hpp"
 #include "figure/rich_text.hpp"
+#include "hueckel/occupation.hpp"
 
 namespace irrepwise {
 namespace {
@@ -149,7 +150,7 @@ double place_labels(std::vector<ColumnLevel>& levels, const Font& font) {
 }  // namespace
 
 bool is_partly_filled(const DiagramLevel& level) {
-  return level.occupation > 1e-9 && level.occupation < 2.0 * level.degeneracy - 1e-9;
+  return is_partly_filled(level.occupation, level.degeneracy);
 }
 
 RichText column_label(const DiagramLevel& level) {

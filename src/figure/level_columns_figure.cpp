@@ -69,16 +69,22 @@ Stroke link_stroke(const DiagramLink& link) {
 }
 
 // Where a link may run level through the strip of labels, or of tags: not across any of them.
+constexpr double clear_of_words = 1.0;  // px between a link and the words above or below it
+
 bool is_free_of_labels(const LevelColumn& column, double y) {
   return std::none_of(column.levels.begin(), column.levels.end(), [&](const ColumnLevel& level) {
-    return level.label_width > 0.0 && std::abs(level.label_y - y) < 0.5 * column_label_height + 1.0;
+    return level.label_width > 0.0 &&
+           std::abs(level.label_y - y) < 0.5 * column_label_height + clear_of_words;
   });
 }
+
 bool is_free_of_tags(const LevelColumn& column, double y) {
   return std::none_of(column.levels.begin(), column.levels.end(), [&](const ColumnLevel& level) {
-    return level.tag_width > 0.0 && std::abs(level.tag_y - y) < 0.5 * column_tag_height + 1.0;
+    return level.tag_width > 0.0 &&
+           std::abs(level.tag_y - y) < 0.5 * column_tag_height + clear_of_words;
   });
 }
+
 double widest_tag(const LevelColumn& column) {
   double widest = 0.0;
   for (const ColumnLevel& level : column.levels) widest = std::max(widest, level.tag_width);

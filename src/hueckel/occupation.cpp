@@ -117,6 +117,11 @@ void occupy(std::vector<Level>& levels, const PointGroup& group, int electrons,
   }
 }
 
+bool is_partly_filled(double electrons, int degeneracy) {
+  constexpr double rounding = 1e-9;  // electrons, of fractions spread over partners
+  return electrons > rounding && electrons < 2 * degeneracy - rounding;
+}
+
 Frontier find_frontier(const std::vector<Level>& levels) {
   Frontier frontier;
   for (std::size_t i = 0; i < levels.size(); ++i) {

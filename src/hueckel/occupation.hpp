@@ -19,6 +19,9 @@ namespace irrepwise {
 void occupy(std::vector<Level>& levels, const PointGroup& group, int electrons,
             const HueckelOptions& options);
 
+/// @returns  whether a level holds some electrons and could hold more
+[[nodiscard]] bool is_partly_filled(double electrons, int degeneracy);
+
 /// @param levels  occupied
 [[nodiscard]] Frontier find_frontier(const std::vector<Level>& levels);
 

@@ -22,18 +22,24 @@ std::vector<int> atoms_with(const Molecule& molecule, Accepts accepts) {
 
 }  // namespace
 
-bool is_d_or_f_block(int z) {
+bool is_d_or_f_block(int atomic_number) {
+  const int z = atomic_number;
   return (z >= 21 && z <= 30) || (z >= 39 && z <= 48) || (z >= 57 && z <= 80) ||
          (z >= 89 && z <= 112);
 }
 
-bool is_metal(int z) {
+bool is_metal(int atomic_number) {
+  const int z = atomic_number;
   return is_d_or_f_block(z) || std::find(s_block.begin(), s_block.end(), z) != s_block.end() ||
          std::find(p_block_metals.begin(), p_block_metals.end(), z) != p_block_metals.end();
 }
 
+std::vector<int> centre_atoms(const Molecule& molecule) {
+  return atoms_with(molecule, is_d_or_f_block);
+}
+
 std::vector<int> metals_of_complex(const Molecule& molecule) {
-  std::vector<int> metals = atoms_with(molecule, is_d_or_f_block);
+  std::vector<int> metals = centre_atoms(molecule);
   return metals.empty() ? atoms_with(molecule, is_metal) : metals;
 }
 

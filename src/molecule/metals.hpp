@@ -14,6 +14,10 @@ namespace irrepwise {
 /// Po, Lv of the p block. B, Si, Ge, As, Sb, Te are none.
 [[nodiscard]] bool is_metal(int atomic_number);
 
+/// Atoms of the d and f blocks, also those that have no d shell in a basis, such as zinc.
+/// @returns  ascending
+[[nodiscard]] std::vector<int> centre_atoms(const Molecule& molecule);
+
 /// The atoms around which a complex is built: those of the d and f blocks, of which a ligand may
 /// carry main-group metals; without any, all metals.
 /// @returns  ascending

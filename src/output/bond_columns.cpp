@@ -131,16 +131,8 @@ std::string key_text(const std::string& element, const Key& key, const Differs& 
   std::string text = "bond_" + element;
   if (differs.bridging) text += key.bridging ? "_bridging" : "_terminal";
   if (differs.ligand) text += "_" + key.ligand;
-  if (differs.opposite) {
-    text += key.opposite == Opposite::None   ? "_none"
-            : key.opposite == Opposite::Like ? "_like"
-                                             : "_other";
-  }
-  if (differs.length) {
-    text += key.length == BondLength::Alike   ? "_alike"
-            : key.length == BondLength::Short ? "_short"
-                                              : "_long";
-  }
+  if (differs.opposite) text += std::string("_") + opposite_word(key.opposite);
+  if (differs.length) text += std::string("_") + length_word(key.length);
   return text;
 }
 
@@ -153,11 +145,7 @@ std::string title_text(const std::string& element, const Key& key, const Differs
             : across.empty()               ? " trans other"
                                            : " trans " + across;
   }
-  if (differs.length) {
-    text += key.length == BondLength::Alike   ? ", alike"
-            : key.length == BondLength::Short ? ", short"
-                                              : ", long";
-  }
+  if (differs.length) text += std::string(", ") + length_word(key.length);
   return text;
 }
 

@@ -65,30 +65,6 @@ Json parent_json(const MetalFacts* metal) {
   return parent;
 }
 
-const char* opposite_word(Opposite opposite) {
-  switch (opposite) {
-    case Opposite::None:
-      return "none";
-    case Opposite::Like:
-      return "like";
-    case Opposite::Other:
-      return "other";
-  }
-  return "";
-}
-
-const char* length_word(BondLength length) {
-  switch (length) {
-    case BondLength::Alike:
-      return "alike";
-    case BondLength::Short:
-      return "short";
-    case BondLength::Long:
-      return "long";
-  }
-  return "";
-}
-
 Json donors_json(const VariantResult& variant, const std::vector<MetalBond>& bonds) {
   Json list = Json::array();
   for (const MetalBond& bond : bonds) {

@@ -4,6 +4,7 @@
 #include <utility>
 
 #include "analysis/donors.hpp"
+#include "molecule/metals.hpp"
 
 namespace irrepwise {
 namespace {
@@ -40,6 +41,10 @@ std::vector<MetalFacts> all_metals(const LevelsResult& result) {
 }
 
 }  // namespace
+
+const Level& level_of(const VariantResult& variant, int level) {
+  return variant.levels.levels.levels[static_cast<std::size_t>(level)];
+}
 
 std::string name_of_level(const VariantResult& variant, int level) {
   return level_name(variant.levels.symmetry.group,

@@ -45,6 +45,8 @@ struct Comparison {
 
 [[nodiscard]] VariantResult analysed(std::string name, LevelsResult levels);
 
+[[nodiscard]] const Level& level_of(const VariantResult& variant, int level);
+
 [[nodiscard]] std::string name_of_level(const VariantResult& variant, int level);
 
 }  // namespace irrepwise

@@ -15,10 +15,6 @@
 namespace irrepwise {
 namespace {
 
-const Level& level_of(const VariantResult& variant, int level) {
-  return variant.levels.levels.levels[static_cast<std::size_t>(level)];
-}
-
 Cell percent(double share) { return Number{100.0 * share, 0}; }
 
 Row flip_row(const VariantResult& variant, const char* side, const LevelFlip& flip) {

@@ -7,6 +7,8 @@
 
 #include <fmt/format.h>
 
+#include "core/text.hpp"
+
 namespace irrepwise {
 namespace {
 
@@ -14,10 +16,6 @@ constexpr double weak_match = 0.3;  // below it, "is now" would say too much
 
 const VariantResult& variant_of(const Comparison& comparison, int index) {
   return comparison.variants[static_cast<std::size_t>(index)];
-}
-
-const Level& level_of(const VariantResult& variant, int level) {
-  return variant.levels.levels.levels[static_cast<std::size_t>(level)];
 }
 
 std::optional<int> frontier_level(const VariantResult& variant, FrontierSide side) {
@@ -41,15 +39,6 @@ int orbitals_in_common(const VariantResult& reference, const VariantResult& vari
                        const LevelMatch& match) {
   return std::min(level_of(reference, match.reference).degeneracy,
                   level_of(variant, match.variant).degeneracy);
-}
-
-// Joins "a", "b" and "c" as "a, b and c".
-std::string listed(const std::vector<std::string>& items) {
-  std::string text;
-  for (std::size_t i = 0; i < items.size(); ++i) {
-    text += (i == 0 ? "" : i + 1 == items.size() ? " and " : ", ") + items[i];
-  }
-  return text;
 }
 
 // The words of one fate, all of one variant and one side.
@@ -137,8 +126,8 @@ class Teller {
       distances.push_back(both ? fmt::format("{:+.3f}", apart_ev(*part))
                                : fmt::format("{:.3f}", std::abs(apart_ev(*part))));
     }
-    return fmt::format("{} of {} splits into {}, {} eV {}", was_, reference_.name, listed(names),
-                       listed(distances),
+    return fmt::format("{} of {} splits into {}, {} eV {}", was_, reference_.name, joined(names),
+                       joined(distances),
                        both    ? "from"
                        : above ? "above"
                                : "below");
@@ -176,7 +165,7 @@ class Teller {
                  ? fmt::format("counts as the {} {}", which_, readable(other_, *fate_.now))
                  : fmt::format("{} the {}", distance(part), which_);
     }
-    return fmt::format("{} of {} share a place; {}", listed(tied), reference_.name, now);
+    return fmt::format("{} of {} share a place; {}", joined(tied), reference_.name, now);
   }
 
   const VariantResult& reference_;

@@ -10,6 +10,7 @@
 #include "analysis/donors.hpp"
 #include "core/error.hpp"
 #include "core/text.hpp"
+#include "hueckel/occupation.hpp"
 #include "output/caption_words.hpp"
 #include "output/composition.hpp"
 #include "output/equivalence.hpp"
@@ -168,8 +169,7 @@ std::string words_on_partly_filled(const LevelsResult& result) {
   for (std::size_t i = result.levels.levels.size(); i-- > 0;) {
     const Level& level = result.levels.levels[i];
     const int room = 2 * level.degeneracy;
-    constexpr double rounding = 1e-9;  // electrons
-    if (level.occupation < rounding || level.occupation > room - rounding) continue;
+    if (!is_partly_filled(level.occupation, level.degeneracy)) continue;
     const bool is_homo = homo == static_cast<int>(i);
     holds.push_back(
         fmt::format("{} holds {:g} of {} electrons",

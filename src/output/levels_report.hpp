@@ -8,14 +8,17 @@
 
 namespace irrepwise {
 
-/// Which levels to show. By default those around the frontier, with the whole d block
-/// of every metal.
+/// Whether the caption says how to see the levels left out, which only whoever types commands
+/// needs.
 enum class LevelsHint { NameAllOption, None };
+
+/// Which levels to show. By default those around the frontier, with the whole d block of every
+/// metal.
 struct LevelWindow {
   bool all = false;
   std::optional<double> from_ev = {};  // either turns the default window off
   std::optional<double> to_ev = {};
-  LevelsHint hint = LevelsHint::None;  // at a terminal, how to see what is left out
+  LevelsHint hint = LevelsHint::None;
 };
 
 /// Levels from high to low with the frontier marked; charges, gross populations and the overlap

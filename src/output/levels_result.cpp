@@ -11,6 +11,7 @@
 #include "basis/atom_kinds.hpp"
 #include "core/text.hpp"
 #include "harmonics/real_harmonics.hpp"
+#include "hueckel/occupation.hpp"
 #include "job/job.hpp"
 
 namespace irrepwise {
@@ -33,7 +34,6 @@ std::vector<std::string> spin_warnings(const HueckelOptions& stated,
                                        const MolecularSymmetry& symmetry, const Basis& basis,
                                        const Levels& levels, const Populations& populations) {
   constexpr double half = 0.5;
-  constexpr double rounding = 1e-9;  // electrons
   const bool high_spin = stated.multiplicity.value_or(1) > 1;
   if (!high_spin && stated.electrons_by_irrep.empty()) return {};
   const std::vector<int> metals = metal_atoms(symmetry.molecule, basis);
@@ -41,7 +41,7 @@ std::vector<std::string> spin_warnings(const HueckelOptions& stated,
   std::vector<std::string> outside;
   for (std::size_t i = 0; i < levels.levels.size(); ++i) {
     const Level& level = levels.levels[i];
-    if (level.occupation < rounding || level.occupation > 2 * level.degeneracy - rounding) continue;
+    if (!is_partly_filled(level.occupation, level.degeneracy)) continue;
     const double share = metal_d_share(metals, basis, populations, static_cast<Eigen::Index>(i));
     if (share >= half) continue;
     outside.push_back(

@@ -7,20 +7,14 @@
 
 #include <Eigen/Geometry>
 
+#include "molecule/bonded_atoms.hpp"
+
 namespace irrepwise {
 namespace {
 
 constexpr double radians_per_degree = std::numbers::pi / 180.0;
 
 }  // namespace
-
-std::vector<int> bonded_atoms(const Molecule& molecule, int atom) {
-  std::vector<int> bonded;
-  for (int other = 0; other < molecule.size(); ++other) {
-    if (other != atom && are_bonded(molecule, atom, other)) bonded.push_back(other);
-  }
-  return bonded;
-}
 
 bool is_straight(const Eigen::Vector3d& a, const Eigen::Vector3d& b) {
   return a.normalized().cross(b.normalized()).norm() <

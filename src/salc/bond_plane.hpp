@@ -17,9 +17,6 @@ inline constexpr double straight_within_degrees = 15.0;
 /// Bonds that rise less than this from a plane lie in it.
 inline constexpr double flat_within_degrees = 10.0;
 
-/// @returns  atoms bonded to this one
-[[nodiscard]] std::vector<int> bonded_atoms(const Molecule& molecule, int atom);
-
 /// @returns  whether two directions are the same or opposite within `straight_within_degrees`
 [[nodiscard]] bool is_straight(const Eigen::Vector3d& a, const Eigen::Vector3d& b);
 

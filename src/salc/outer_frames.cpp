@@ -6,6 +6,7 @@
 
 #include <Eigen/Geometry>
 
+#include "molecule/bonded_atoms.hpp"
 #include "molecule/metals.hpp"
 #include "salc/bond_plane.hpp"
 #include "salc/side_on.hpp"

@@ -4,6 +4,7 @@
 #include <cmath>
 #include <cstddef>
 
+#include "molecule/bonded_atoms.hpp"
 #include "salc/bond_plane.hpp"
 
 namespace irrepwise {

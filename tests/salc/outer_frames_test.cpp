@@ -8,39 +8,16 @@
 #include <doctest/doctest.h>
 #include <Eigen/Geometry>
 
+#include "molecule/bonded_atoms.hpp"
 #include "salc/bond_plane.hpp"
 #include "salc/orbital_reductions.hpp"
+#include "support/frames.hpp"
 #include "support/molecules.hpp"
 #include "support/moved.hpp"
 
 using namespace irrepwise;
 
 namespace {
-
-struct Framed {
-  MolecularSymmetry symmetry;
-  std::vector<EquivalentAtoms> sets;
-  std::vector<std::optional<LocalFrames>> frames;
-
-  [[nodiscard]] std::optional<Eigen::Matrix3d> of_atom(int atom) const {
-    for (std::size_t s = 0; s < sets.size(); ++s) {
-      const auto at = std::find(sets[s].atoms.begin(), sets[s].atoms.end(), atom);
-      if (at == sets[s].atoms.end() || !frames[s]) continue;
-      return frames[s]->frames[static_cast<std::size_t>(at - sets[s].atoms.begin())];
-    }
-    return std::nullopt;
-  }
-  [[nodiscard]] Eigen::Vector3d position(int atom) const {
-    return symmetry.molecule.atoms()[static_cast<std::size_t>(atom)].position;
-  }
-};
-
-Framed framed(const Molecule& molecule) {
-  MolecularSymmetry symmetry = find_symmetry(molecule);
-  auto sets = equivalent_atoms(symmetry);
-  auto frames = frames_of_sets(symmetry, sets);
-  return {std::move(symmetry), std::move(sets), std::move(frames)};
-}
 
 // Chromium with three straight carbonyls at no special angles: C1. The carbonyl given by atoms 1
 // and 2 bends at carbon by the angle.

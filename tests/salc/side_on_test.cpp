@@ -11,29 +11,18 @@
 #include <Eigen/Geometry>
 
 #include "basis/parameter_set.hpp"
+#include "molecule/bonded_atoms.hpp"
 #include "molecule/metals.hpp"
 #include "salc/bond_plane.hpp"
 #include "salc/orbital_reductions.hpp"
 #include "salc/salc_table.hpp"
+#include "support/frames.hpp"
 #include "support/molecules.hpp"
 #include "support/moved.hpp"
 
 using namespace irrepwise;
 
 namespace {
-
-struct Framed {
-  MolecularSymmetry symmetry;
-  std::vector<EquivalentAtoms> sets;
-  std::vector<std::optional<LocalFrames>> frames;
-};
-
-Framed framed(const Molecule& molecule) {
-  MolecularSymmetry symmetry = find_symmetry(molecule);
-  auto sets = equivalent_atoms(symmetry);
-  auto frames = frames_of_sets(symmetry, sets);
-  return {std::move(symmetry), std::move(sets), std::move(frames)};
-}
 
 Eigen::Vector3d position(const Molecule& molecule, int atom) {
   return molecule.atoms()[static_cast<std::size_t>(atom)].position;
